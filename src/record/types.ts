@@ -1,0 +1,443 @@
+/**
+ * The Record: one survey assessed, the contract between computing and writing. Field names are those of record.json.
+ * What is absent is null, never 0. Readers find everything they print here and nowhere else.
+ */
+import type { Detection } from '../measure/detection.ts';
+import type { Mark } from '../plant/policy.ts';
+import type { Problem } from '../plant/problem.ts';
+import type { Criticality, Direction, MeasuredOn, Status as TypedStatus, SurveyKind, Urgency } from '../plant/types.ts';
+import type { Facts } from '../words/facts.ts';
+
+export type { Facts };
+
+export const RECORD_FORMAT = 1;
+
+export type Zone = 'A' | 'B' | 'C' | 'D';
+export type RatioClass = 'r-A' | 'r-B' | 'r-C' | 'r-D';
+export type Condition = Zone | RatioClass | 'not assessed';
+export type Travel = 'fast' | 'rising' | 'step' | 'steady' | 'falling' | 'held';
+export type Status = TypedStatus | 'missing';
+/** Dates are `YYYY-MM-DD`. */
+export type DateText = string;
+
+
+export const DOUBT_KINDS = [
+  'unit-factor', 'impossible', 'swapped-points', 'swapped-machines', 'identical', 'near-zero', 'all-down', 'unexplained-fall',
+  'retake-differs', 'date', 'calibration', 'qualification',
+] as const;
+export type DoubtKind = (typeof DOUBT_KINDS)[number];
+
+export interface Doubt {
+  readonly kind: DoubtKind;
+  readonly message: string;
+  readonly effect: 'held' | 're-measure' | 'note';
+  readonly facts: Facts;
+}
+
+export interface Indication {
+  readonly rule: string;
+  readonly message: string;
+  readonly confirm: string;
+  readonly mark: Mark;
+  readonly facts: Facts;
+}
+
+export interface SeriesKey {
+  readonly component: string;
+  readonly point: string;
+  readonly quantity: string;
+  readonly detection: Detection | null;
+}
+
+export interface Issue {
+  readonly number: string;
+  readonly revision: number;
+  readonly issued_on: DateText;
+  readonly replaces: string | null;
+  readonly reason: string | null;
+  readonly previous_manifest: string | null;
+}
+
+/** plant.yaml as the report needs it. */
+export interface RecordPlant {
+  readonly plant: string;
+  readonly client: string | null;
+  readonly site: string | null;
+  readonly contract: string | null;
+  readonly procedure: string | null;
+  readonly contractor: {
+    readonly name: string | null;
+    readonly address: string | null;
+    readonly contact: string | null;
+    readonly logo: string | null;
+    readonly accent: string | null;
+  };
+  readonly language: 'en' | 'de' | 'es' | 'fr';
+  readonly paper: 'A4' | 'Letter';
+  readonly units: { readonly [quantity: string]: { readonly unit: string | null; readonly detection: Detection | null } };
+  readonly frequency_unit: 'Hz' | 'CPM';
+  readonly next_stops: readonly { readonly date: DateText; readonly area: string | null }[];
+  readonly retention: string | null;
+  readonly distribution: readonly string[];
+}
+
+export interface RecordPerson {
+  readonly name: string;
+  readonly role: string | null;
+  readonly category: string | null;
+  readonly certificate: string | null;
+  readonly expires: DateText | null;
+}
+
+export interface RecordInstrument {
+  readonly id: string;
+  readonly make: string | null;
+  readonly model: string | null;
+  readonly serial: string | null;
+  readonly band: string | null;
+  readonly calibrated_on: DateText | null;
+  readonly calibration_due: DateText | null;
+  readonly certificate: string | null;
+  readonly laboratory: string | null;
+}
+
+export interface RecordScope {
+  readonly all: boolean;
+  readonly areas: readonly string[];
+  readonly routes: readonly string[];
+  readonly machines: readonly string[];
+}
+
+/** The survey this record is of. */
+export interface RecordSurvey {
+  readonly id: string;
+  readonly from: DateText;
+  readonly to: DateText;
+  readonly kind: SurveyKind;
+  readonly scope: RecordScope;
+  readonly people: readonly RecordPerson[];
+  readonly instruments: readonly RecordInstrument[];
+  readonly sensors: readonly {
+    readonly id: string;
+    readonly serial: string | null;
+    readonly sensitivity: string | null;
+    readonly mounting: string | null;
+    readonly calibration_due: DateText | null;
+  }[];
+  readonly field_check: string | null;
+  readonly process: string | null;
+  readonly weather: string | null;
+  readonly remarks: string | null;
+  readonly issue_date: DateText | null;
+  readonly reviewed_by: string | null;
+  readonly approved_by: string | null;
+  readonly notified: readonly { readonly who: string; readonly when: string | null; readonly how: string | null; readonly about: string | null }[];
+  readonly photos: readonly { readonly path: string; readonly machine: string; readonly point: string | null; readonly caption: string | null }[];
+}
+
+/** Any survey up to this one; history columns are aligned to the list of them. */
+export interface SurveyLine {
+  readonly id: string;
+  readonly date: DateText;
+  readonly from: DateText;
+  readonly to: DateText;
+  readonly kind: SurveyKind;
+  readonly scope: RecordScope;
+  readonly people: readonly RecordPerson[];
+  readonly instruments: readonly RecordInstrument[];
+  /** Condition by machine id at that survey, recomputed by today's rules; a machine that was not measured is absent. */
+  readonly conditions: { readonly [machine: string]: Condition };
+}
+
+export interface PolicyLine {
+  readonly id: string;
+  readonly value: number;
+  readonly unit: string;
+  readonly mark: Mark;
+  readonly about: string;
+  /** True where plant.yaml set it. */
+  readonly overridden: boolean;
+}
+
+export interface LimitSetLine {
+  readonly id: string;
+  readonly title: string;
+  readonly basis: 'maker' | 'contract' | 'statistics' | 'owner' | 'standard';
+  readonly source: string | null;
+  readonly edition: string | null;
+  readonly table: string | null;
+  /** confirmed (two or more public sources, or arithmetic that reproduces every digit), one source, recalled (from memory), or null for the plant's own. */
+  readonly confidence: 'confirmed' | 'one source' | 'recalled' | null;
+  readonly boundaries: { readonly ab: number | null; readonly bc: number | null; readonly cd: number | null };
+  readonly quantity: string;
+  readonly unit: string;
+  readonly detection: Detection | null;
+  readonly low_hz: number | null;
+  readonly high_hz: number | null;
+  readonly valid_from: DateText | null;
+  readonly approved_by: string | null;
+  readonly approved_on: DateText | null;
+}
+
+export interface Override {
+  readonly urgency: Urgency;
+  readonly by: string;
+  readonly reason: string;
+  readonly until: DateText | null;
+  /** Lowers the level from `now`: listed on the manager's page. */
+  readonly lowers_now: boolean;
+}
+
+export interface RecordMachine {
+  readonly machine: string;
+  readonly name: string | null;
+  readonly area: string | null;
+  readonly route: string | null;
+  readonly family: string | null;
+  readonly criticality: Criticality;
+  /** False: not stated, taken as essential. */
+  readonly criticality_stated: boolean;
+  readonly condition: Condition;
+  /** [n, m]: n of m assessable points were measured. */
+  readonly measured_of: readonly [number, number];
+  readonly previous_condition: Condition | null;
+  readonly governed_by: SeriesKey | null;
+  readonly urgency: Urgency | null;
+  readonly urgency_by: SeriesKey | null;
+  readonly rule: string | null;
+  readonly reason: string;
+  readonly facts: Facts;
+  readonly computed_urgency: Urgency | null;
+  readonly override: Override | null;
+  readonly spare: { readonly machine: string; readonly proven: boolean; readonly reason: string; readonly facts: Facts } | null;
+  readonly accepted: readonly {
+    readonly point: string | null;
+    readonly quantity: string | null;
+    readonly up_to: number;
+    readonly until: DateText | null;
+    readonly by: string | null;
+    readonly reason: string | null;
+    /** False once the value or the date is past: then it accepts nothing. */
+    readonly in_force: boolean;
+  }[];
+  readonly indications: readonly Indication[];
+  readonly doubts: readonly Doubt[];
+  readonly cannot_see: readonly string[];
+  readonly events: readonly {
+    readonly date: DateText;
+    readonly component: string | null;
+    readonly point: string | null;
+    readonly quantity: string | null;
+    readonly event: string;
+    readonly new_baseline: boolean;
+    readonly serial_out: string | null;
+    readonly serial_in: string | null;
+    readonly notes: string | null;
+  }[];
+}
+
+export interface RecordComponent {
+  readonly machine: string;
+  readonly component: string;
+  /** True: stands for the whole machine, not printed as a component. */
+  readonly implicit: boolean;
+  readonly kind: string | null;
+  readonly condition: Condition;
+  readonly governed_by: SeriesKey | null;
+  readonly limit_set: string | null;
+  readonly limit_reason: string;
+  readonly power_kw: number | null;
+  readonly speed_rpm: number | null;
+}
+
+export interface Limits {
+  readonly ab: number | null;
+  readonly bc: number | null;
+  readonly cd: number | null;
+  readonly alarm: number | null;
+  readonly trip: number | null;
+  /** The set's own numbers. */
+  readonly of: { readonly ab: number | null; readonly bc: number | null; readonly cd: number | null; readonly unit: string; readonly detection: Detection | null };
+  /** exact: unit conversion only; sine: an r.m.s. set on a calculated peak. */
+  readonly by: 'exact' | 'sine';
+}
+
+export interface Change {
+  readonly absolute: number;
+  readonly percent: number | null;
+  readonly db: number | null;
+  /** Fraction of B/C, signed. */
+  readonly of_bc: number | null;
+  /** By criterion II; null where there is no B/C. */
+  readonly significant: boolean | null;
+  readonly vector: { readonly amplitude: number; readonly lag_deg: number } | null;
+}
+
+export interface Trend {
+  readonly kind: 'none' | 'small' | 'ramp' | 'plateau' | 'step';
+  readonly db_per_year: number | null;
+  readonly slope_per_year: number | null;
+  /** Ratio of the line's end to its start. */
+  readonly rise: number | null;
+  readonly p: number | null;
+  readonly n: number;
+}
+
+export type Forecast =
+  | { readonly boundary: string; readonly earliest: DateText; readonly likely: DateText | null; readonly latest: DateText | null; readonly range: number }
+  | { readonly none: string };
+
+/** Columns aligned to `surveys[]`; a null value is no number at that survey. `why` tells, by index, why a reading is not comparable or absent. */
+export interface History {
+  readonly value: readonly (number | null)[];
+  readonly typed?: readonly (string | null)[];
+  readonly why: { readonly [index: string]: string };
+  readonly line: readonly (number | null)[];
+  readonly file?: readonly (string | null)[];
+}
+
+export interface RecordMeasurement {
+  readonly machine: string;
+  readonly component: string;
+  readonly point: string;
+  readonly location: string | null;
+  readonly direction: Direction | null;
+  readonly quantity: string;
+  readonly unit: string;
+  readonly detection: Detection | null;
+  readonly measured_on: MeasuredOn | null;
+  readonly low_hz: number | null;
+  readonly high_hz: number | null;
+  readonly state: string | null;
+  readonly speed_rpm: number | null;
+  readonly load_pct: number | null;
+  readonly instrument: string | null;
+  readonly measured_by: string | null;
+  readonly taken_at: string | null;
+  readonly remark: string | null;
+  readonly phase: { readonly amplitude: number | null; readonly lag_deg: number; readonly reference: string | null } | null;
+  readonly status: Status;
+  readonly value: number | null;
+  readonly typed: string | null;
+  readonly typed_unit: string | null;
+  readonly bound: '<' | '>' | null;
+  readonly source: { readonly file: string; readonly line: number } | null;
+  readonly zone: Zone | null;
+  readonly ratio_class: RatioClass | null;
+  readonly zone_basis: 'standard' | 'own' | 'ratio' | null;
+  readonly no_zone_because: string | null;
+  /** e.g. `B/C`; null where no boundary is near. */
+  readonly near_boundary: string | null;
+  readonly held: { readonly zone: Condition; readonly date: DateText } | null;
+  readonly limit_set: string | null;
+  readonly limit_reason: string;
+  readonly limits: Limits | null;
+  readonly baseline: { readonly value: number; readonly from: string; readonly n: number; readonly provisional: boolean } | null;
+  readonly previous: { readonly value: number; readonly date: DateText } | null;
+  readonly change: Change | null;
+  readonly from_baseline: Change | null;
+  readonly travel: Travel | null;
+  readonly urgency: Urgency | null;
+  readonly rule: string | null;
+  readonly trend: Trend | null;
+  readonly forecast: Forecast | null;
+  readonly sisters: Facts | null;
+  readonly doubts: readonly Doubt[];
+  /** Remarks of the assessment that are no doubt: at most (band), background, band unknown, axial limits by our choice … sentences. */
+  readonly notes: readonly string[];
+  readonly history: History;
+}
+
+export interface RecordAction {
+  readonly rank: number;
+  readonly action: string;
+  readonly finding: string | null;
+  readonly machine: string;
+  readonly component: string | null;
+  readonly points: readonly string[];
+  readonly urgency: Urgency;
+  readonly computed_urgency: Urgency | null;
+  readonly rule: string | null;
+  readonly reason: string;
+  readonly facts: Facts;
+  readonly above_next_because: string | null;
+  readonly observation: string | null;
+  readonly recommendation: string | null;
+  readonly check_first: string | null;
+  readonly needs_stop: boolean | null;
+  readonly consequence: string | null;
+  readonly due: DateText | null;
+  readonly owner: string | null;
+  readonly work_order: string | null;
+  readonly status: 'open' | 'ordered' | 'done' | 'rejected';
+  readonly origin: 'analyst' | 'ledger' | 'drafted';
+  readonly raised: DateText | null;
+  readonly closed: DateText | null;
+  readonly closed_by: string | null;
+  readonly as_found: string | null;
+  readonly times_reported: number;
+  readonly overdue_days: number | null;
+  readonly carried_from: string | null;
+  readonly confirmed: DateText | null;
+  readonly override: Override | null;
+  readonly verification: {
+    readonly target: { readonly point: string; readonly quantity: string; readonly value: number; readonly unit: string } | null;
+    readonly before: { readonly value: number; readonly date: DateText } | null;
+    readonly after: { readonly value: number; readonly date: DateText } | null;
+    readonly result: 'verified' | 'not verified' | 'not yet measured';
+  } | null;
+  /** The reading the action is about, for the work list. */
+  readonly value: number | null;
+  readonly unit: string | null;
+  readonly limit: number | null;
+  readonly notes: string | null;
+}
+
+/** A machine of the scope, or due, that was not wholly measured, or that was: one line for each machine in service. */
+export interface CoverageLine {
+  readonly machine: string;
+  readonly due: boolean;
+  readonly in_scope: boolean;
+  readonly measured: number;
+  readonly of: number;
+  readonly status: 'measured' | 'partly measured' | 'not measured' | 'excused' | 'not due' | 'out of scope';
+  /** e.g. `no access`, `stopped`, `missing`: the commonest reason among its points. */
+  readonly why: string | null;
+  readonly misses_in_a_row: number;
+  readonly last_measured: DateText | null;
+  readonly next_due: DateText | null;
+  readonly interval_days: number | null;
+}
+
+export interface PlantOverTime {
+  readonly survey: string;
+  readonly date: DateText;
+  readonly conditions: { readonly [C in Condition]: number };
+  readonly measured: number;
+  readonly of: number;
+  readonly open_actions: number;
+  readonly closed_actions: number;
+}
+
+export interface SwayfolioRecord {
+  readonly format: number;
+  readonly tool: { readonly name: string; readonly version: string };
+  readonly issue: Issue | null;
+  readonly plant: RecordPlant;
+  readonly survey: RecordSurvey;
+  readonly surveys: readonly SurveyLine[];
+  readonly policy: readonly PolicyLine[];
+  readonly policy_hash: string;
+  readonly limit_sets: readonly LimitSetLine[];
+  readonly cautions: readonly string[];
+  readonly machines: readonly RecordMachine[];
+  readonly components: readonly RecordComponent[];
+  /** Grouped by machine in the order of `machines`, then by point. */
+  readonly measurements: readonly RecordMeasurement[];
+  /** In rank order; verified and rejected ones of this survey stand at the end with rank 0. */
+  readonly actions: readonly RecordAction[];
+  readonly coverage: readonly CoverageLine[];
+  readonly plant_over_time: readonly PlantOverTime[];
+  readonly problems: readonly Problem[];
+  readonly inputs: readonly { readonly path: string; readonly bytes: number; readonly sha256: string }[];
+}
