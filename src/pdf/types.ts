@@ -3,6 +3,7 @@
  * Out: bytes of one PDF. Never: the Record, the disk, the clock.
  */
 import type { Drawing } from '../chart/drawing.ts';
+import type { FontFiles } from '../page/assets.ts';
 
 export interface PdfSection {
   /** Name of the template the markup came from, for errors. */
@@ -43,6 +44,7 @@ export interface PdfInput {
   readonly mark: string | null;
   /** Hex colours by ink name, from brand/. */
   readonly inks: Readonly<Record<string, string>>;
+  readonly fonts: FontFiles;
   readonly tags: boolean;
   readonly profile: 'PDF/A-3b' | 'PDF/A-1b';
   readonly attachments: readonly PdfAttachment[];
