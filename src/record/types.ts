@@ -355,7 +355,8 @@ export interface RecordAction {
   readonly machine: string;
   readonly component: string | null;
   readonly points: readonly string[];
-  readonly urgency: Urgency;
+  /** null: an analyst's finding that no reading raises. */
+  readonly urgency: Urgency | null;
   readonly computed_urgency: Urgency | null;
   readonly rule: string | null;
   readonly reason: string;
