@@ -145,6 +145,8 @@ export interface SurveyLine {
   readonly scope: RecordScope;
   readonly people: readonly RecordPerson[];
   readonly instruments: readonly RecordInstrument[];
+  /** Where its readings came from; a history names its files only where they are others. */
+  readonly file: string | null;
   /** Condition by machine id at that survey, recomputed by today's rules; a machine that was not measured is absent. */
   readonly conditions: { readonly [machine: string]: Condition };
 }
@@ -293,6 +295,7 @@ export interface History {
   readonly typed?: readonly (string | null)[];
   readonly why: { readonly [index: string]: string };
   readonly line: readonly (number | null)[];
+  /** Only where a reading came from another file than its survey's. */
   readonly file?: readonly (string | null)[];
 }
 
