@@ -216,6 +216,8 @@ export interface RecordMachine {
     readonly point: string | null;
     readonly quantity: string | null;
     readonly up_to: number;
+    /** Unit and detection of up_to. */
+    readonly unit: string | null;
     readonly until: DateText | null;
     readonly by: string | null;
     readonly reason: string | null;
