@@ -368,6 +368,11 @@ export interface RecordAction {
   readonly facts: Facts;
   readonly above_next_because: string | null;
   readonly observation: string | null;
+  readonly likely_cause: string | null;
+  readonly less_likely: string | null;
+  readonly confidence: 'low' | 'medium' | 'high' | null;
+  readonly downtime_h: number | null;
+  readonly parts: string | null;
   readonly recommendation: string | null;
   readonly check_first: string | null;
   readonly needs_stop: boolean | null;
