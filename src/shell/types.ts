@@ -11,6 +11,10 @@ export interface Shell {
   /** Bytes of a file; throws a UserError with a hint when it cannot be read. */
   read(path: string): Uint8Array;
   exists(path: string): boolean;
+  /** The path from the root of the disk, `/` separated. */
+  absolute(path: string): string;
+  /** Puts right what an interrupted run left at `out`; throws a UserError where `out` is not new, empty or made by swayfolio. */
+  claimFolder(out: string): void;
   /** Replaces the folder `out` whole: written beside, old renamed aside, new renamed in. Refuses a folder swayfolio did not make. */
   replaceFolder(out: string, files: Iterable<OutputFile>): void;
   /** Writes files into a folder that must be new or empty. */
