@@ -1,0 +1,20 @@
+/**
+ * Doubts stand beside the verdict and correct nothing. In: the looks of one survey. Out: doubts added to them.
+ * Never: a changed value.
+ */
+import type { Doubt, DoubtKind, Facts } from '../../record/types.ts';
+import { type Language, say } from '../../words/say.ts';
+import { median } from '../statistics/median.ts';
+import type { Look } from '../track.ts';
+
+/** A doubt with its sentence `assess.doubt.<kind>` in the plant's language. */
+export function doubt(language: Language, kind: DoubtKind, effect: Doubt['effect'], facts: Facts, variant = ''): Doubt {
+  return { kind, effect, facts, message: say(language, `assess.doubt.${kind}${variant}`, facts) };
+}
+
+/** What "last time" means for doubts: the median of the point's earlier comparable readings where there are three, else the last. */
+export function lastTime(look: Look): number | null {
+  const values = look.comparable.map((r) => r.value as number);
+  if (values.length === 0) return null;
+  return values.length >= 3 ? median(values) : (values[values.length - 1] as number);
+}

@@ -1,0 +1,13 @@
+import type { Context } from '../track.ts';
+import { formalDoubts } from './formal.ts';
+import { allDownDoubts, nearZeroDoubts, unexplainedFalls } from './low.ts';
+import { unitFactorDoubts } from './unit-factor.ts';
+
+/** All doubts of one survey, in the order of the rules; a fall is looked at last, since another doubt explains it. */
+export function raiseDoubts(context: Context, survey: number): void {
+  unitFactorDoubts(context, survey);
+  nearZeroDoubts(context, survey);
+  allDownDoubts(context, survey);
+  unexplainedFalls(context, survey);
+  if (survey === context.current) formalDoubts(context);
+}
