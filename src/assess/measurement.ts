@@ -42,7 +42,7 @@ export function measurementOf(context: Context, book: LimitBook, verdict: Verdic
     ...judgedOf(context, track, look, reading, limits),
     held: heldFrom === null ? null : { zone: heldFrom.zone ?? heldFrom.ratioClass ?? 'not assessed', date: dayText(heldFrom.reading.day) },
     ...limitsOf(context, track, limits, shown?.baseline ?? null),
-    ...changesOf(context, verdict, look),
+    ...changesOf(verdict, look),
     urgency: level.urgency,
     rule: level.rule,
     trend: verdict.movement?.trend ?? null,
@@ -126,7 +126,7 @@ function limitsOf(context: Context, track: Track, limits: LimitsInForce, baselin
   };
 }
 
-function changesOf(context: Context, verdict: Verdict, look: Look | null): Pick<RecordMeasurement, 'previous' | 'change' | 'from_baseline' | 'travel'> {
+function changesOf(verdict: Verdict, look: Look | null): Pick<RecordMeasurement, 'previous' | 'change' | 'from_baseline' | 'travel'> {
   const { track, movement, heldFrom } = verdict;
   if (look === null || movement === null) {
     const last = heldFrom === null ? null : { value: heldFrom.value, date: dayText(heldFrom.reading.day) };

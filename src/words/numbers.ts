@@ -1,0 +1,59 @@
+/**
+ * Numbers in print (record.md, decision 13). In: a number and the limit beside it. Out: text by our own table of each
+ * language, not by the runtime's. Never: fewer digits than it takes for reading and limit to differ.
+ */
+import type { Language } from './say.ts';
+
+const DECIMAL: Readonly<Record<Language, string>> = { en: '.', de: ',', es: ',', fr: ',' };
+const GROUP: Readonly<Record<Language, string>> = { en: '\u202f', de: '\u202f', es: '\u202f', fr: '\u202f' };
+export const MINUS = '\u2212';
+export const NO_BREAK = '\u00a0';
+
+const SIGNIFICANT = 3;
+const MOST_DECIMALS = 9;
+
+export interface NumberOptions {
+  /** The boundary printed beside it: never fewer decimals than that has, and one more while the two would look equal. */
+  readonly limit?: number | null;
+  /** Fixed decimals instead of three significant digits. */
+  readonly decimals?: number;
+  /** `+` before a positive number. */
+  readonly sign?: boolean;
+}
+
+/** Decimals that three significant digits take. */
+function significantDecimals(value: number): number {
+  if (value === 0) return 0;
+  const exponent = Number(Math.abs(value).toExponential(SIGNIFICANT - 1).split('e')[1]);
+  return Math.min(MOST_DECIMALS, Math.max(0, SIGNIFICANT - 1 - exponent));
+}
+
+/** Decimals a number was given with, up to nine. */
+function ownDecimals(value: number): number {
+  for (let d = 0; d < MOST_DECIMALS; d += 1) if (Number(value.toFixed(d)) === value) return d;
+  return MOST_DECIMALS;
+}
+
+/** Decimals for a value beside a limit. */
+export function decimalsFor(value: number, limit: number | null | undefined): number {
+  let decimals = significantDecimals(value);
+  if (limit === null || limit === undefined) return decimals;
+  decimals = Math.max(decimals, Math.min(ownDecimals(limit), SIGNIFICANT));
+  while (decimals < MOST_DECIMALS && value !== limit && Number(value.toFixed(decimals)) === limit) decimals += 1;
+  return decimals;
+}
+
+export function formatNumber(language: Language, value: number, options: NumberOptions = {}): string {
+  if (!Number.isFinite(value)) return value > 0 ? '∞' : Number.isNaN(value) ? '–' : `${MINUS}∞`;
+  const fixed = Math.abs(value).toFixed(options.decimals ?? decimalsFor(value, options.limit));
+  const [whole = '0', fraction] = fixed.split('.');
+  const grouped = whole.length > 4 ? whole.replace(/\B(?=(\d{3})+$)/g, GROUP[language]) : whole;
+  const text = fraction === undefined ? grouped : `${grouped}${DECIMAL[language]}${fraction}`;
+  const isZero = Number(fixed) === 0;
+  const sign = value < 0 && !isZero ? MINUS : options.sign === true && !isZero ? '+' : '';
+  return `${sign}${text}`;
+}
+
+/** A number with its unit, glued by a no-break blank. */
+export const formatQuantity = (language: Language, value: number, unit: string, options: NumberOptions = {}): string =>
+  `${formatNumber(language, value, options)}${NO_BREAK}${unit.replaceAll(' ', NO_BREAK)}`;
