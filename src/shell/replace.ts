@@ -13,12 +13,21 @@ const MARKER_TEXT = 'Made by swayfolio, which replaces this folder whole at each
 
 /** Puts right what an interrupted run left beside `out`, and refuses an `out` that swayfolio may not replace. Returns its real path. */
 export function claimFolder(out: string): string {
-  const path = existsSync(out) ? realpathSync(out) : resolve(out);
+  try {
+    const path = existsSync(out) ? realpathSync(out) : resolve(out);
+    putRight(path);
+    refuseForeign(path, out);
+    return path;
+  } catch (error) {
+    throw asUserError(error, out);
+  }
+}
+
+function refuseForeign(path: string, out: string): void {
   if (existsSync(path) && !statSync(path).isDirectory()) {
     throw new UserError(`The output folder ${out} is a file.`, 'Name a folder that is new, empty, or made by swayfolio.', 2);
   }
-  putRight(path);
-  if (!existsSync(path) || existsSync(join(path, MARKER)) || readdirSync(path).length === 0) return path;
+  if (!existsSync(path) || existsSync(join(path, MARKER)) || readdirSync(path).length === 0) return;
   throw new UserError(`The output folder ${out} holds files that swayfolio did not make.`, 'Name one that is new, empty, or made by swayfolio; nothing was written.', 2);
 }
 
@@ -30,14 +39,14 @@ export function replaceFolder(out: string, files: Iterable<OutputFile>): void {
     mkdirSync(fresh, { recursive: true });
     writeFileSync(join(fresh, MARKER), MARKER_TEXT);
     writeInto(fresh, files);
+    if (existsSync(path)) renameSync(path, old);
+    renameSync(fresh, path);
   } catch (error) {
     rmSync(fresh, { recursive: true, force: true });
+    if (existsSync(old)) renameSync(old, path);
     throw asUserError(error, out);
   }
-  const hadOld = existsSync(path);
-  if (hadOld) renameSync(path, old);
-  renameSync(fresh, path);
-  if (hadOld) removeMade(old);
+  if (existsSync(old)) removeMade(old);
 }
 
 /** The marker goes last, so that a removal that is cut short is still known for ours. */

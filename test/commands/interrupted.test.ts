@@ -21,7 +21,7 @@ async function killed(home: string, when: () => Promise<void>): Promise<void> {
 /** Until the first file stands in the folder beside. */
 async function writingBegan(home: string): Promise<void> {
   await new Promise<void>((resolve) => {
-    const watcher = watch(home, (_, name) => {
+    const watcher = watch(home, { persistent: false }, (_, name) => {
       if (name?.startsWith('out.new-')) {
         watcher.close();
         resolve();

@@ -38,8 +38,8 @@ describe('help and version', () => {
 describe('a bug', () => {
   test('is exit 3 and told as one, with its trace', () => {
     const home = plantFolder();
-    // A Node without TextDecoder is no fault of the user's: the nearest to a bug that can be had without building one in.
-    const run = swayfolio(home, ['check', 'plant'], { node: ['--import', 'data:text/javascript,Array.prototype.sort = () => { throw new TypeError("sabotage"); };'] });
+    // The nearest to a bug that can be had without building one in: a runtime that breaks under the program.
+    const run = swayfolio(home, ['limits', '--json'], { node: ['--import', 'data:text/javascript,JSON.stringify = () => { throw new TypeError("sabotage"); };'] });
     expect(run.code).toBe(3);
     expect(run.stderr).toMatch(/bug of the program/);
     expect(run.stderr).toMatch(/sabotage/);
