@@ -18,22 +18,24 @@ export const limits: Command = {
       const near = nearestWord(id ?? '', all.map((set) => set.id));
       throw new UserError(`There is no limit set ${id}.`, near === null ? 'Run swayfolio limits for the list.' : `The nearest is ${near}.`, 2);
     }
-    shell.stdout(json ? `${JSON.stringify(id === undefined ? sets.map(asJson) : sets.map(asJson)[0], null, 2)}\n` : sets.map(asText).join('\n'));
+    shell.stdout(json ? `${JSON.stringify(sets.map(asJson), null, 2)}\n` : asText(sets));
     return 0;
   },
 };
 
-function asText(set: LimitSet): string {
+/** A set of several quantities stands under its id once. */
+function asText(sets: readonly LimitSet[]): string {
+  const heads = sets.map((set) => [set.id, `  ${set.title}`, `  ${sourceOf(set)}`].join('\n'));
+  return sets.map((set, index) => `${heads[index] === heads[index - 1] ? '' : `${index === 0 ? '' : '\n'}${heads[index]}\n`}  ${boundariesOf(set)}\n`).join('');
+}
+
+const sourceOf = (set: LimitSet): string => `${[set.source, set.edition, set.table].filter((part) => part !== null && part !== '').join(', ')}; ${set.confidence}`;
+
+function boundariesOf(set: LimitSet): string {
   const boundary = (name: string, value: number | null): string => `${name} ${value ?? '–'}`;
   const band = set.lowHz === null && set.highHz === null ? '' : `, ${set.lowHz ?? '?'}–${set.highHz ?? '?'} Hz`;
-  return [
-    set.id,
-    `  ${set.title}`,
-    `  ${set.quantity}, ${set.unit}${set.detection === null ? '' : ` ${set.detection}`}${band}${set.measuredOn === null ? '' : `, ${set.measuredOn}`}: ` +
-      `${boundary('A/B', set.ab)}, ${boundary('B/C', set.bc)}, ${boundary('C/D', set.cd)}`,
-    `  ${[set.source, set.edition, set.table].filter((part) => part !== null && part !== '').join(', ')}; ${set.confidence}`,
-    '',
-  ].join('\n');
+  const what = `${set.quantity}, ${set.unit}${set.detection === null ? '' : ` ${set.detection}`}${band}${set.measuredOn === null ? '' : `, ${set.measuredOn}`}`;
+  return `${what}: ${boundary('A/B', set.ab)}, ${boundary('B/C', set.bc)}, ${boundary('C/D', set.cd)}`;
 }
 
 /** In the names of the record's limit_sets. */
