@@ -31,7 +31,8 @@ export function allDownDoubts(context: Context, survey: number): void {
     for (const track of tracks) {
       const look = track.looks[survey];
       if (look === null || look === undefined || pointRow(track, look.reading.day).scale !== 'linear') continue;
-      const before = lastTime(look);
+      // Against the last reading or the median of those before, whichever stands higher: after a rise the fall is from the top.
+      const before = look.previous === null ? null : Math.max(lastTime(look) ?? 0, look.previous.value as number);
       if (before === null || exceeds(look.value, (1 - policy['7.all_down.share']) * before)) continue;
       down.push(look);
       points.add(track.series.point);
