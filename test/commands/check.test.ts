@@ -56,7 +56,6 @@ describe('check', () => {
 
 /** Each: what is changed in a sound plant, and where the problem must be found. */
 const BAD: readonly (readonly [string, Readonly<Record<string, string | null>>, RegExp])[] = [
-  ['no plant.yaml', { 'plant.yaml': null }, /plant\.yaml/],
   ['a missing column', { [LAST]: 'machine,quantity,detection,value,unit\nP-1,velocity,rms,1,mm/s\n' }, /readings\.csv:1.*point/],
   ['an unknown machine', { [LAST]: readings(['P-3,DE-H,velocity,rms,1,mm/s,1480']) }, /readings\.csv:2:1: .*P-3/],
   ['an unknown point', { [LAST]: readings(['P-1,DE-V,velocity,rms,1,mm/s,1480']) }, /readings\.csv:2:2: .*DE-V/],
