@@ -1,0 +1,47 @@
+/** Column widths. In: what each column needs at least and would like, the width of the table. Out: widths that fill it. */
+export type Kind = 'text' | 'number' | 'mark' | 'chart';
+
+export interface Need {
+  readonly kind: Kind;
+  /** Widest word, and widest line, points without padding. */
+  least: number;
+  natural: number;
+}
+
+/** A column of one very long word may be broken in it: it asks for no more than this share of the table. */
+const LONGEST_WORD = 0.28;
+
+export function columnWidths(needs: readonly Need[], available: number, padding: number): number[] {
+  const natural = needs.map((n) => n.natural + padding);
+  const total = natural.reduce((a, b) => a + b, 0);
+  if (total <= available) return withRest(needs, natural, available - total);
+  const least = needs.map((n) => (n.kind === 'text' ? Math.min(n.least, available * LONGEST_WORD) : n.least) + padding);
+  const sum = least.reduce((a, b) => a + b, 0);
+  if (sum >= available) return least.map((w) => (w * available) / sum);
+  return shared(natural, least, available - sum);
+}
+
+/** Room that is left goes to the text columns, by their share; a table without text stays as narrow as it is. */
+function withRest(needs: readonly Need[], natural: readonly number[], rest: number): number[] {
+  const texts = needs.reduce((sum, n, i) => sum + (n.kind === 'text' ? (natural[i] as number) : 0), 0);
+  return natural.map((w, i) => (texts > 0 && needs[i]?.kind === 'text' ? w + (rest * w) / texts : w));
+}
+
+/** Every column gets its least; what is left is shared by how much more each would like, the square root of it so that long texts do not starve short ones. */
+function shared(natural: readonly number[], least: readonly number[], rest: number): number[] {
+  const widths = [...least];
+  let left = rest;
+  for (let round = 0; round < 8 && left > 0.01; round += 1) {
+    const wants = natural.map((w, i) => Math.sqrt(Math.max(0, w - (widths[i] as number))));
+    const sum = wants.reduce((a, b) => a + b, 0);
+    if (sum === 0) break;
+    let given = 0;
+    wants.forEach((want, i) => {
+      const more = Math.min((left * want) / sum, Math.max(0, (natural[i] as number) - (widths[i] as number)));
+      widths[i] = (widths[i] as number) + more;
+      given += more;
+    });
+    left -= given;
+  }
+  return widths;
+}

@@ -1,0 +1,136 @@
+/**
+ * Type. In: text of one style. Out: glyph codes and widths, from the text face or, character by character, the fallback.
+ * Never: a missing glyph in silence; what neither face has is printed as its code point.
+ */
+import { create, type Font } from 'fontkit';
+import type { FontFiles } from '../page/assets.ts';
+import type { EmbeddedFont, PackedDocument } from './document.ts';
+
+export interface Style {
+  readonly bold: boolean;
+  readonly italic: boolean;
+}
+
+/** Glyphs of one face, ready for a TJ operator. */
+export interface Piece {
+  readonly font: EmbeddedFont;
+  readonly show: string;
+  /** Thousandths of the size. */
+  readonly width: number;
+}
+
+/** A word set: pieces in visual order. */
+export interface SetWord {
+  readonly pieces: readonly Piece[];
+  /** Thousandths of the size. */
+  readonly width: number;
+  readonly rightToLeft: boolean;
+}
+
+interface Face {
+  readonly parsed: Font;
+  readonly embedded: EmbeddedFont;
+}
+
+const RIGHT_TO_LEFT = /[\u0590-\u08ff\ufb1d-\ufdff\ufe70-\ufefc]/;
+
+export class Type {
+  readonly #faces: readonly Face[];
+  readonly #words: Map<string, SetWord>[] = [new Map(), new Map(), new Map(), new Map()];
+
+  constructor(document: PackedDocument, files: FontFiles) {
+    const order = [files.regular, files.bold, files.italic, files.boldItalic, files.fallback, files.fallbackBold];
+    this.#faces = order.map((bytes) => {
+      const parsed = parsedFont(bytes);
+      return { parsed, embedded: document.embedFont(parsed) };
+    });
+  }
+
+  set(text: string, style: Style): SetWord {
+    const index = (style.bold ? 1 : 0) + (style.italic ? 2 : 0);
+    const kept = this.#words[index]?.get(text);
+    if (kept !== undefined) return kept;
+    const word = this.#compose(text, index, style.bold);
+    this.#words[index]?.set(text, word);
+    return word;
+  }
+
+  /** Width in points at a size. */
+  width(text: string, style: Style, size: number): number {
+    return (this.set(text, style).width * size) / 1000;
+  }
+
+  #compose(text: string, index: number, bold: boolean): SetWord {
+    const pieces: Piece[] = [];
+    let run = '';
+    let face = this.#faces[index] as Face;
+    const flush = (): void => {
+      if (run !== '') pieces.push(piece(face.embedded, run));
+      run = '';
+    };
+    for (const character of text) {
+      const found = this.#faceOf(character, index, bold);
+      if (found === null) {
+        flush();
+        face = this.#faces[index] as Face;
+        run = `[U+${(character.codePointAt(0) ?? 0).toString(16).toUpperCase().padStart(4, '0')}]`;
+        flush();
+        continue;
+      }
+      if (found !== face) flush();
+      face = found;
+      run += character;
+    }
+    flush();
+    let width = 0;
+    for (const p of pieces) width += p.width;
+    const rightToLeft = RIGHT_TO_LEFT.test(text);
+    return { pieces: rightToLeft ? pieces.reverse() : pieces, width, rightToLeft };
+  }
+
+  #faceOf(character: string, index: number, bold: boolean): Face | null {
+    const code = character.codePointAt(0) ?? 0;
+    if (code < 32 || code === 127) return null;
+    const main = this.#faces[index] as Face;
+    if (main.parsed.hasGlyphForCodePoint(code)) return main;
+    const fallback = this.#faces[bold ? 5 : 4] as Face;
+    return fallback.parsed.hasGlyphForCodePoint(code) ? fallback : null;
+  }
+}
+
+/** Hex codes with kerning for TJ, and their width. */
+function piece(font: EmbeddedFont, text: string): Piece {
+  const [codes, positions] = font.encode(text);
+  let show = '<';
+  let width = 0;
+  codes.forEach((code, i) => {
+    show += code;
+    const { xAdvance, advanceWidth } = positions[i] as { xAdvance: number; advanceWidth: number };
+    width += xAdvance;
+    const kern = Math.round(advanceWidth - xAdvance);
+    if (kern !== 0 && i < codes.length - 1) show += `> ${kern} <`;
+  });
+  return { font, show: `${show}>`, width };
+}
+
+/** Fonts parsed once a process; the layout of plain strings takes glyphs one by one, which is most of the time of a table. */
+const parsedFonts = new WeakMap<Uint8Array, Font>();
+
+function parsedFont(bytes: Uint8Array): Font {
+  const kept = parsedFonts.get(bytes);
+  if (kept !== undefined) return kept;
+  const font = create(bytes as Buffer) as Font;
+  const shaped = font.layout.bind(font);
+  const layout = (text: string, ...rest: []): ReturnType<Font['layout']> => (/^[\d.,+\-\u2212\u00a0 ]*$/.test(text) && rest.length === 0 ? plainRun(font, text) : shaped(text, ...rest));
+  Object.defineProperty(font, 'layout', { value: layout });
+  parsedFonts.set(bytes, font);
+  return font;
+}
+
+/** Digits and signs have neither kerning nor ligatures in tabular figures: glyph by glyph, in fresh objects since pdfkit scales them in place. */
+function plainRun(font: Font, text: string): ReturnType<Font['layout']> {
+  const glyphs = [...text].map((c) => font.glyphForCodePoint(c.codePointAt(0) ?? 0));
+  const positions = glyphs.map((g) => ({ xAdvance: g.advanceWidth, yAdvance: 0, xOffset: 0, yOffset: 0 }));
+  const run = { glyphs, positions, get advanceWidth(): number { return positions.reduce((sum, p) => sum + p.xAdvance, 0); } };
+  return run as unknown as ReturnType<Font['layout']>;
+}
