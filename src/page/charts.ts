@@ -1,0 +1,113 @@
+/**
+ * Chart inputs from a record. In: the record. Out: drawings by kind and key, made when asked for. One drawing serves both media.
+ */
+import type { Drawing } from '../chart/drawing.ts';
+import { historyChart } from '../chart/history.ts';
+import { plantOverTime } from '../chart/over-time.ts';
+import { polarPlot } from '../chart/polar.ts';
+import { sparkline } from '../chart/sparkline.ts';
+import type { RecordMeasurement, SwayfolioRecord } from '../record/types.ts';
+import type { Format } from './format.ts';
+
+export const seriesId = (m: RecordMeasurement): string => `${m.machine}\u001f${m.point}\u001f${m.quantity}\u001f${m.detection ?? ''}`;
+
+/** Surveys before which a new baseline was set for this series, as indices into the history. */
+function newBaselines(record: SwayfolioRecord, m: RecordMeasurement): number[] {
+  const events = record.machines.find((machine) => machine.machine === m.machine)?.events ?? [];
+  const days = events.filter((e) => e.new_baseline && (e.point === null || e.point === m.point) && (e.quantity === null || e.quantity === m.quantity) && (e.component === null || e.component === m.component)).map((e) => e.date);
+  return days.map((day) => record.surveys.findIndex((s) => s.date >= day)).filter((i) => i > 0);
+}
+
+/** True for each survey whose reading takes part in the comparison with the last. */
+const comparable = (m: RecordMeasurement): boolean[] => m.history.value.map((value, i) => value !== null && m.history.why[String(i)] === undefined);
+
+export class Charts {
+  readonly #format: Format;
+  readonly #byId: ReadonlyMap<string, RecordMeasurement>;
+
+  constructor(format: Format) {
+    this.#format = format;
+    this.#byId = new Map(format.record.measurements.map((m) => [seriesId(m), m]));
+  }
+
+  /** Throws for an unknown kind or key. */
+  drawing(kind: string, key: string): Drawing {
+    if (kind === 'over-time') return this.#overTime();
+    const m = this.#byId.get(key);
+    if (m === undefined) throw new Error(`There is no series for chart ${kind} ${key}.`);
+    if (kind === 'sparkline') return this.sparkline(m);
+    if (kind === 'history') return this.#history(m);
+    if (kind === 'polar') return this.#polar(m);
+    throw new Error(`There is no chart of kind ${kind}.`);
+  }
+
+  sparkline(m: RecordMeasurement): Drawing {
+    const { record } = this.#format;
+    return sparkline({
+      values: m.history.value,
+      comparable: comparable(m),
+      held: m.travel === 'held',
+      newBaselineAt: newBaselines(record, m),
+      ab: m.limits?.ab ?? null,
+      bc: m.limits?.bc ?? null,
+      cd: m.limits?.cd ?? null,
+      alt: this.alt(m),
+    });
+  }
+
+  /** What a trend shows, in words. */
+  alt(m: RecordMeasurement): string {
+    const values = m.history.value.filter((v): v is number => v !== null);
+    const { number } = { number: (v: number) => this.#format.number(v) };
+    if (values.length === 0) return `${m.point} ${m.quantity}: no reading.`;
+    const [least, most, last] = [Math.min(...values), Math.max(...values), values[values.length - 1] as number];
+    return `${m.point} ${m.quantity}, ${values.length} readings from ${number(least)} to ${number(most)}, last ${number(last)} ${this.#format.unit(m.unit, m.detection)}.`;
+  }
+
+  #history(m: RecordMeasurement): Drawing {
+    const { record } = this.#format;
+    const events = record.machines.find((machine) => machine.machine === m.machine)?.events ?? [];
+    return historyChart({
+      dates: record.surveys.map((s) => s.date),
+      values: m.history.value,
+      comparable: comparable(m),
+      held: m.travel === 'held',
+      ab: m.limits?.ab ?? null,
+      bc: m.limits?.bc ?? null,
+      cd: m.limits?.cd ?? null,
+      alarm: m.limits?.alarm ?? null,
+      baseline: m.baseline?.value ?? null,
+      events: events.filter((e) => (e.component === null || e.component === m.component) && (e.point === null || e.point === m.point)).map((e) => ({ date: e.date, label: e.event })),
+      unit: this.#format.unit(m.unit, m.detection),
+      width: 490,
+      height: 170,
+      alt: this.alt(m),
+    });
+  }
+
+  #polar(m: RecordMeasurement): Drawing {
+    const now = m.phase === null || m.phase.amplitude === null ? null : { amplitude: m.phase.amplitude, lagDeg: m.phase.lag_deg };
+    const change = m.change?.vector ?? null;
+    const from = now === null || change === null ? null : minus(now, { amplitude: change.amplitude, lagDeg: change.lag_deg });
+    const q = m.limits?.bc == null ? null : m.limits.bc * (this.#format.record.policy.find((p) => p.id === '4.q')?.value ?? 0.25);
+    const unit = this.#format.unit(m.unit, m.detection);
+    const words = now === null ? 'no vector' : `now ${this.#format.number(now.amplitude)} ${unit} at ${this.#format.number(now.lagDeg)}° lag`;
+    return polarPlot({ from, to: now, q, unit, size: 170, alt: `${m.point}: 1× vector, ${words}${change === null ? '' : `, moved by ${this.#format.number(change.amplitude)}`}.` });
+  }
+
+  #overTime(): Drawing {
+    const { plant_over_time: lines } = this.#format.record;
+    const last = lines[lines.length - 1];
+    const words = last === undefined ? '' : Object.entries(last.conditions).filter(([, n]) => n > 0).map(([c, n]) => `${n} ${c}`).join(', ');
+    return plantOverTime({ dates: lines.map((l) => l.date), counts: lines.map((l) => l.conditions), width: 490, height: 120, alt: `Machines by condition over ${lines.length} surveys; at the last: ${words}.` });
+  }
+}
+
+/** The vector before: now less the change. */
+function minus(now: { amplitude: number; lagDeg: number }, change: { amplitude: number; lagDeg: number }): { amplitude: number; lagDeg: number } {
+  const rad = Math.PI / 180;
+  const x = now.amplitude * Math.cos(now.lagDeg * rad) - change.amplitude * Math.cos(change.lagDeg * rad);
+  const y = now.amplitude * Math.sin(now.lagDeg * rad) - change.amplitude * Math.sin(change.lagDeg * rad);
+  const deg = Math.atan2(y, x) / rad;
+  return { amplitude: Math.hypot(x, y), lagDeg: deg < 0 ? deg + 360 : deg };
+}

@@ -1,0 +1,70 @@
+/** One machine in full: readings, charts, finding, action, doubts, what the readings cannot see. Serves the PDF's exceptions and the site's pages. */
+import type { RecordMachine } from '../record/types.ts';
+import { type ActionView, actionView, overrideText } from './actions.ts';
+import { type Charts, seriesId } from './charts.ts';
+import { slugOf } from './file-name.ts';
+import type { Format } from './format.ts';
+import { governingMeasurement, type MachineView, machineView, type ReadingView, readingView } from './machines.ts';
+
+export interface ExceptionView {
+  readonly machine: MachineView;
+  readonly title: string;
+  readonly override: string;
+  readonly spare: string;
+  readonly criticality: string;
+  readonly actions: readonly ActionView[];
+  readonly hasActions: boolean;
+  readonly readings: readonly ReadingView[];
+  readonly hasReadings: boolean;
+  readonly hasHistory: boolean;
+  readonly historyKey: string;
+  readonly historyAlt: string;
+  readonly historyCaption: string;
+  readonly polars: readonly { readonly key: string; readonly alt: string; readonly caption: string }[];
+  readonly photos: readonly { readonly path: string; readonly file: string; readonly alt: string; readonly caption: string }[];
+  readonly doubts: readonly string[];
+  readonly hasDoubts: boolean;
+  readonly cannotSee: string;
+  readonly events: readonly { readonly date: string; readonly text: string }[];
+  readonly hasEvents: boolean;
+  readonly components: readonly { readonly id: string; readonly kind: string; readonly condition: ReturnType<Format['condition']>; readonly limits: string }[];
+}
+
+export function exceptionView(format: Format, charts: Charts, machine: RecordMachine): ExceptionView {
+  const measurements = format.measurementsOf(machine.machine);
+  const main = governingMeasurement(format, machine);
+  const actions = format.record.actions.filter((a) => a.machine === machine.machine).map((a) => actionView(format, a));
+  const hasHistory = main !== null && main.history.value.some((v) => v !== null);
+  const polars = measurements.filter((m) => m.phase !== null && m.phase.amplitude !== null);
+  const spoken = machine.criticality_stated ? machine.criticality : `${machine.criticality} (not stated, taken as such)`;
+  return {
+    machine: machineView(format, charts, machine),
+    title: machine.name === null ? machine.machine : `${machine.machine}, ${machine.name}`,
+    override: overrideText(format, machine),
+    spare: machine.spare?.reason ?? '',
+    criticality: spoken,
+    actions,
+    hasActions: actions.length > 0,
+    readings: measurements.map((m) => readingView(format, m)),
+    hasReadings: measurements.length > 0,
+    hasHistory,
+    historyKey: main === null ? '' : seriesId(main),
+    historyAlt: main === null ? '' : charts.alt(main),
+    historyCaption: main === null ? '' : `${main.point} ${main.quantity}, ${format.unit(main.unit, main.detection)}. ${main.limit_reason}`,
+    polars: polars.map((m) => ({ key: seriesId(m), alt: charts.drawing('polar', seriesId(m)).alt, caption: `${m.point}: 1× vector, angles as lag` })),
+    photos: format.record.survey.photos
+      .filter((p) => p.machine === machine.machine)
+      .map((p) => ({ path: p.path, file: photoFile(p.path), alt: p.caption ?? `Photo of ${machine.machine}`, caption: p.caption ?? '' })),
+    doubts: machine.doubts.map((d) => d.message),
+    hasDoubts: machine.doubts.length > 0,
+    cannotSee: machine.cannot_see.join('; '),
+    events: machine.events.map((e) => ({ date: format.date(e.date), text: `${e.event}${e.notes === null ? '' : `: ${e.notes}`}${e.new_baseline ? ' (new baseline)' : ''}` })),
+    hasEvents: machine.events.length > 0,
+    components: format.record.components
+      .filter((c) => c.machine === machine.machine && !c.implicit)
+      .map((c) => ({ id: c.component, kind: c.kind ?? '', condition: format.condition(c.condition), limits: c.limit_reason })),
+  };
+}
+
+/** Name of a photo on the site. */
+export const photoFile = (path: string): string => `${slugOf(path)}.${/\.png$/i.test(path) ? 'png' : 'jpg'}`;

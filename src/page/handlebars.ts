@@ -1,0 +1,72 @@
+/**
+ * Handlebars as it is used here: escaping always, strict, no helpers but the built-in block ones, partials by path. A
+ * plant's own template is checked on its syntax tree before it runs.
+ */
+import Handlebars from 'handlebars';
+import { UserError } from '../shell/types.ts';
+
+const HELPERS: ReadonlySet<string> = new Set(['if', 'unless', 'each', 'with']);
+
+type Render = (model: object) => string;
+
+export class Templates {
+  readonly #sources: ReadonlyMap<string, string>;
+  readonly #engine = Handlebars.create();
+  readonly #compiled = new Map<string, Render>();
+
+  constructor(sources: ReadonlyMap<string, string>) {
+    this.#sources = sources;
+    for (const [path, source] of sources) {
+      if (!path.endsWith('.hbs')) continue;
+      const name = path.replace(/\.hbs$/, '');
+      check(name, source, sources);
+      this.#engine.registerPartial(name, source);
+    }
+  }
+
+  render(name: string, model: object): string {
+    let template = this.#compiled.get(name);
+    if (template === undefined) {
+      const source = this.#sources.get(`${name}.hbs`);
+      if (source === undefined) throw new Error(`There is no template ${name}.`);
+      template = this.#engine.compile(source, { strict: true, knownHelpersOnly: true, explicitPartialContext: false }) as Render;
+      this.#compiled.set(name, template);
+    }
+    try {
+      return template(model);
+    } catch (error) {
+      throw new UserError(`Template ${name}: ${(error as Error).message}`, 'A template may print only the fields of its view.');
+    }
+  }
+
+  text(path: string): string {
+    const text = this.#sources.get(path);
+    if (text === undefined) throw new Error(`There is no file ${path} among the templates.`);
+    return text;
+  }
+}
+
+/** Refuses unescaped output, unknown helpers and partials that are not there. */
+function check(name: string, source: string, sources: ReadonlyMap<string, string>): void {
+  let tree: hbs.AST.Program;
+  try {
+    tree = Handlebars.parse(source);
+  } catch (error) {
+    throw new UserError(`Template ${name} cannot be read: ${(error as Error).message.split('\n')[0]}`, 'Mend it, or remove it from templates/ to use the built-in one.');
+  }
+  const visitor = new Handlebars.Visitor();
+  visitor.MustacheStatement = (mustache) => {
+    if (!mustache.escaped) throw new UserError(`Template ${name}, line ${mustache.loc.start.line}: output must be escaped.`, 'Write {{name}}, never {{{name}}} or {{&name}}.');
+    if (mustache.params.length > 0) throw new UserError(`Template ${name}, line ${mustache.loc.start.line}: there is no such helper.`, 'Only if, unless, each and with are known.');
+  };
+  visitor.BlockStatement = (block) => {
+    const helper = (block.path as hbs.AST.PathExpression).original;
+    if (!HELPERS.has(helper)) throw new UserError(`Template ${name}, line ${block.loc.start.line}: there is no helper "${helper}".`, 'Only if, unless, each and with are known.');
+    Handlebars.Visitor.prototype.BlockStatement.call(visitor, block);
+  };
+  visitor.PartialStatement = (partial) => {
+    const called = (partial.name as hbs.AST.PathExpression).original;
+    if (!sources.has(`${called}.hbs`)) throw new UserError(`Template ${name}, line ${partial.loc.start.line}: there is no partial "${called}".`, 'Partials are named by their path, such as shared/cautions.');
+  };
+  visitor.accept(tree);
+}

@@ -1,0 +1,125 @@
+/** The manager's page: what to do first, what is new, worse, verified, overdue, not measured. In: the record. Out: one page's view. */
+import type { Condition, RecordMachine } from '../record/types.ts';
+import { type ActionView, actionView, overrideText, rankedViews } from './actions.ts';
+import { type ConditionView, type Format } from './format.ts';
+
+export interface CountView {
+  readonly condition: ConditionView;
+  readonly label: string;
+  readonly now: string;
+  readonly before: string;
+}
+
+export interface ActionGroup {
+  readonly title: string;
+  readonly actions: readonly ActionView[];
+  readonly isEmpty: boolean;
+  readonly more: string;
+}
+
+export interface ManagerView {
+  readonly plant: string;
+  readonly survey: string;
+  readonly headline: string;
+  readonly groups: readonly ActionGroup[];
+  readonly counts: readonly CountView[];
+  readonly coverage: string;
+  readonly lines: readonly { readonly title: string; readonly text: string }[];
+  readonly hasOverrides: boolean;
+  readonly overrides: readonly { readonly machine: string; readonly text: string }[];
+}
+
+const ORDER: readonly Condition[] = ['D', 'r-D', 'C', 'r-C', 'B', 'r-B', 'A', 'r-A', 'not assessed'];
+const BAD = (condition: Condition | null): number => (condition === null || condition === 'not assessed' ? ORDER.length : ORDER.indexOf(condition));
+
+const LABELS: Readonly<Record<Condition, string>> = {
+  D: 'severe enough to cause damage', C: 'not for long-term running', B: 'acceptable for long-term running', A: 'as newly commissioned', 'r-D': 'far above its baseline, no zone',
+  'r-C': 'well above its baseline, no zone', 'r-B': 'above its baseline, no zone', 'r-A': 'about its baseline, no zone', 'not assessed': 'not measured, or nothing to judge by',
+};
+
+/** Longest lists on the page: what does not fit stands in the ranked list. */
+const MOST = { week: 6, month: 6, stop: 4 } as const;
+
+export function managerView(format: Format): ManagerView {
+  const { record } = format;
+  const views = rankedViews(format);
+  const week = views.filter((v) => v.urgency === 'Act now' || v.urgency === 'Within a week');
+  const month = views.filter((v) => v.urgency === 'Within a month');
+  const stop = views.filter((v) => v.urgency === 'Next planned stop');
+  const overrides = record.machines.filter((m) => m.override?.lowers_now === true);
+  return {
+    plant: record.plant.plant,
+    survey: record.survey.id,
+    headline: headline(week.length, month.length, stop.length),
+    groups: [group('This week', week, MOST.week), group('This month', month, MOST.month), group('At the next planned stop', stop, MOST.stop)],
+    counts: countViews(format),
+    coverage: coverageText(format),
+    lines: changedLines(format),
+    hasOverrides: overrides.length > 0,
+    overrides: overrides.map((m) => ({ machine: m.machine, text: overrideText(format, m) })),
+  };
+}
+
+const plural = (n: number, one: string, many: string): string => (n === 1 ? `1 ${one}` : `${n} ${many}`);
+
+function headline(week: number, month: number, stop: number): string {
+  if (week + month + stop === 0) return 'The rules ask for no work from the readings of this survey.';
+  const parts = [week > 0 ? `${plural(week, 'thing', 'things')} to do this week` : 'nothing to do this week', `${month} this month`, `${stop} at the next planned stop`];
+  const text = parts.join(', ');
+  return `${text.charAt(0).toUpperCase()}${text.slice(1)}.`;
+}
+
+function group(title: string, actions: readonly ActionView[], most: number): ActionGroup {
+  const left = actions.length - most;
+  return { title, actions: actions.slice(0, most), isEmpty: actions.length === 0, more: left > 0 ? `and ${left} more in the ranked list` : '' };
+}
+
+function countViews(format: Format): CountView[] {
+  const lines = format.record.plant_over_time;
+  const now = lines[lines.length - 1];
+  const before = lines[lines.length - 2];
+  return ORDER.filter((c) => (now?.conditions[c] ?? 0) + (before?.conditions[c] ?? 0) > 0).map((c) => ({
+    condition: format.condition(c),
+    label: LABELS[c],
+    now: String(now?.conditions[c] ?? 0),
+    before: before === undefined ? '–' : String(before.conditions[c]),
+  }));
+}
+
+function coverageText(format: Format): string {
+  const { coverage } = format.record;
+  const due = coverage.filter((c) => c.in_scope && c.due);
+  const whole = due.filter((c) => c.status === 'measured').length;
+  const partly = due.filter((c) => c.status === 'partly measured').length;
+  const missed = due.filter((c) => c.status === 'not measured').length;
+  const excused = due.filter((c) => c.status === 'excused').length;
+  const rest = [partly > 0 ? `${partly} in part` : '', excused > 0 ? `${excused} excused` : '', missed > 0 ? `${missed} not measured` : ''].filter((t) => t !== '');
+  return `${whole} of ${due.length} machines due were measured${rest.length === 0 ? '' : `, ${rest.join(', ')}`}.`;
+}
+
+const names = (list: readonly string[]): string => (list.length > 10 ? `${list.slice(0, 10).join(', ')} and ${list.length - 10} more` : list.join(', '));
+
+function changedLines(format: Format): { title: string; text: string }[] {
+  const { record } = format;
+  const worse = record.machines.filter((m) => m.previous_condition !== null && BAD(m.condition) < BAD(m.previous_condition) && m.measured_of[0] > 0);
+  const fresh = record.actions.filter((a) => a.rank > 0 && a.urgency !== 'watch' && a.times_reported === 1).map((a) => a.machine);
+  const verified = record.actions.filter((a) => a.verification?.result === 'verified').map((a) => a.machine);
+  const failed = record.actions.filter((a) => a.verification?.result === 'not verified').map((a) => a.machine);
+  const overdue = record.actions.filter((a) => a.overdue_days !== null).map((a) => `${a.machine} (${a.overdue_days} days)`);
+  const missed = record.coverage.filter((c) => c.status === 'not measured').map((c) => (c.misses_in_a_row > 1 ? `${c.machine} (${c.misses_in_a_row} times in a row)` : c.machine));
+  const limits = record.machines.filter((m) => m.rule === 'M3').map((m) => m.machine);
+  const step = (m: RecordMachine): string => `${m.machine} (${m.previous_condition} to ${m.condition})`;
+  const lines = [
+    ['New', names([...new Set(fresh)])],
+    ['Worse', names(worse.map(step))],
+    ['Repaired and verified', names(verified)],
+    ['Closed but not verified', names(failed)],
+    ['Overdue', names(overdue)],
+    ['Not measured', names(missed)],
+    ['Without limits or baseline', names(limits)],
+  ] as const;
+  return lines.filter(([, text]) => text !== '').map(([title, text]) => ({ title, text }));
+}
+
+/** Settled actions, after the ranked ones. */
+export const settledViews = (format: Format): ActionView[] => format.record.actions.filter((a) => a.rank === 0).map((a) => actionView(format, a));
