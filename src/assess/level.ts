@@ -39,7 +39,7 @@ export const conditionOf = (look: Look | null): Zone | RatioClass | null => (loo
 export function lastSound(track: Track, survey: number): Look | null {
   for (let s = survey - 1; s >= 0; s -= 1) {
     const look = track.looks[s] ?? null;
-    if (look !== null && !doubtedLow(look)) return look;
+    if (look !== null && !doubtedLow(look) && !isBlind(look)) return look;
   }
   return null;
 }
@@ -54,7 +54,7 @@ export function heldConditionAt(track: Track, survey: number): Zone | RatioClass
 export function verdictOf(context: Context, track: Track, standing: Standing): Verdict {
   const look = track.looks[context.current] ?? null;
   const movement = look === null ? null : movementOf(context, track, look);
-  const isHeld = look === null || doubtedLow(look);
+  const isHeld = look === null || doubtedLow(look) || isBlind(look);
   const heldFrom = isHeld ? lastSound(track, context.current) : null;
   let level = look === null || movement === null ? NO_LEVEL : withHysteresis(context, track, look, movement, standing);
   if (heldFrom !== null) {
@@ -64,6 +64,9 @@ export function verdictOf(context: Context, track: Track, standing: Standing): V
   if (level.urgency !== null && level.urgency !== 'watch' && isAccepted(context, track, look ?? heldFrom)) level = { urgency: 'watch', rule: 'K1' };
   return { track, look, movement, heldFrom, condition: conditionOf(look) ?? (look === null ? conditionOf(heldFrom) : null), level };
 }
+
+/** Read in a band that cannot tell its zone: limits are there, the verdict is not, so the last level stands. */
+const isBlind = (look: Look): boolean => look.zone === null && look.ratioClass === null && look.limits.set !== null && look.limits.bc !== null;
 
 const isAccepted = (context: Context, track: Track, look: Look | null): boolean =>
   look !== null && context.plant.accepted.some((a) => accepts(a, track, look.value, dayAt(context, context.current)));

@@ -90,7 +90,7 @@ function missLevel(misses: number, standing: Standing): Level {
 
 /** True where a machine has been measured and neither a limit nor a baseline says anything about it. */
 const nothingToJudgeBy = (verdicts: readonly Verdict[]): boolean =>
-  verdicts.some((v) => v.look !== null) && verdicts.every((v) => v.condition === null && (v.look === null || v.look.baseline === null));
+  verdicts.some((v) => v.look !== null) && verdicts.every((v) => v.condition === null && (v.look === null || (v.look.baseline === null && v.look.limits.set === null)));
 
 /** Level of a machine: the worst rule over its points, then misses, then M3. */
 export function assessMachine(context: Context, machine: Machine, verdicts: readonly Verdict[], standing: Standing, spare: RecordMachine['spare']): Assessed {
@@ -119,6 +119,8 @@ function quietReason(context: Context, verdicts: readonly Verdict[]): { reason: 
   const worst = governing(context, verdicts);
   if (worst !== null && worst.look !== null) return reasonOf(context, worst);
   const { language } = context.plant.settings;
+  const unseen = verdicts.find((v) => v.look !== null && v.look.noZone !== null)?.look?.noZone ?? null;
+  if (worst === null && unseen !== null) return { reason: say(language, unseen.key, unseen.facts), facts: unseen.facts };
   if (worst === null || worst.heldFrom === null) return { reason: say(language, 'assess.reason.none', {}), facts: {} };
   return reasonOf(context, { ...worst, level: { urgency: null, rule: 'M1' } });
 }

@@ -87,7 +87,8 @@ function heldReason(context: Context, verdict: Verdict, from: Look): Reason {
     doubt: look?.doubts.find((d) => d.effect === 'held')?.kind ?? null,
     rule: 'M1',
   };
-  return { reason: say(context.plant.settings.language, look === null ? 'assess.reason.M1' : 'assess.reason.M1.doubted', facts), facts };
+  const variant = look === null ? '' : facts['doubt'] === null ? '.unseen' : '.doubted';
+  return { reason: say(context.plant.settings.language, `assess.reason.M1${variant}`, facts), facts };
 }
 
 /** The boundary that the reading lies above, or the one ahead of it, in words. */

@@ -42,7 +42,8 @@ export function movementOf(context: Context, track: Track, look: Look): Movement
   const readings = [...look.comparable, look.reading] as (typeof look.reading & { value: number })[];
   const last3 = look.baseline === null ? null : lastThreeOverBaseline(readings, look.baseline.value, row.scale);
   const loud = floor !== null && reaches(look.value, floor);
-  const standsOff = last3 !== null && loud && reaches(last3, context.policy['5.step.median']);
+  // After work that brought the reading down, the median of the last three still speaks of what was mended.
+  const standsOff = last3 !== null && loud && look.explainedFall === null && reaches(last3, context.policy['5.step.median']);
   const trend = trendOf(readings, row.scale, floor, standsOff, context.policy);
   const done = (travel: Travel | null, by: TravelBy): Movement => ({ travel, by, trend, vector });
   if (doubtedLow(look)) return done('held', 'doubt');

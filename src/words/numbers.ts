@@ -54,6 +54,9 @@ export function formatNumber(language: Language, value: number, options: NumberO
   return `${sign}${text}`;
 }
 
+/** A number with the decimals it was given with, three at most: counts, ratings, speeds. */
+export const plainNumber = (language: Language, value: number): string => formatNumber(language, value, { decimals: Math.min(ownDecimals(value), SIGNIFICANT) });
+
 /** A number with its unit, glued by a no-break blank. */
 export const formatQuantity = (language: Language, value: number, unit: string, options: NumberOptions = {}): string =>
   `${formatNumber(language, value, options)}${NO_BREAK}${unit.replaceAll(' ', NO_BREAK)}`;

@@ -8,7 +8,7 @@ import limits from '../../templates/words/en/limits.json' with { type: 'json' };
 import page from '../../templates/words/en/page.json' with { type: 'json' };
 import units from '../../templates/words/en/units.json' with { type: 'json' };
 import type { Facts } from './facts.ts';
-import { formatNumber } from './numbers.ts';
+import { formatNumber, plainNumber } from './numbers.ts';
 
 export type Language = 'en' | 'de' | 'es' | 'fr';
 
@@ -16,11 +16,19 @@ export type Language = 'en' | 'de' | 'es' | 'fr';
 const SENTENCES: Readonly<Record<string, string>> = { ...common, ...units, ...chart, ...limits, ...assess, ...page };
 
 /** A sentence taken apart once: text, or a placeholder with its plural forms. */
-type Part = string | { readonly name: string; readonly one: readonly Part[] | null; readonly many: readonly Part[] | null };
+type Part = string | Placeholder;
+
+interface Placeholder {
+  readonly name: string;
+  /** As it was given, without three significant digits: counts, ratings, speeds. */
+  readonly plain: boolean;
+  readonly one: readonly Part[] | null;
+  readonly many: readonly Part[] | null;
+}
 
 const parsed = new Map<string, readonly Part[]>();
 
-/** `{name}` or `{name|one|many}`, where the forms may hold placeholders of their own. */
+/** `{name}`, `{name:plain}` or `{name|one|many}`, where the forms may hold placeholders of their own. */
 function parse(sentence: string): readonly Part[] {
   const parts: Part[] = [];
   let text = '';
@@ -47,10 +55,10 @@ function parse(sentence: string): readonly Part[] {
 
 function placeholder(inside: string): Part {
   const bar = inside.indexOf('|');
-  if (bar < 0) return { name: inside, one: null, many: null };
+  if (bar < 0) return { name: inside.replace(/:plain$/, ''), plain: inside.endsWith(':plain'), one: null, many: null };
   const forms = inside.slice(bar + 1);
   const second = forms.indexOf('|');
-  return { name: inside.slice(0, bar), one: parse(forms.slice(0, second)), many: parse(forms.slice(second + 1)) };
+  return { name: inside.slice(0, bar), plain: false, one: parse(forms.slice(0, second)), many: parse(forms.slice(second + 1)) };
 }
 
 export const hasSentence = (_language: Language, key: string): boolean => Object.hasOwn(SENTENCES, key);
@@ -77,7 +85,7 @@ function fill(language: Language, key: string, parts: readonly Part[], facts: Fa
     else {
       const value = facts[part.name];
       if (value === undefined) throw new Error(`The sentence "${key}" names the fact "${part.name}", which was not given.`);
-      text += part.one === null || part.many === null ? factText(language, value) : fill(language, key, value === 1 ? part.one : part.many, facts);
+      text += part.one === null || part.many === null ? (part.plain && typeof value === 'number' ? plainNumber(language, value) : factText(language, value)) : fill(language, key, value === 1 ? part.one : part.many, facts);
     }
   }
   return text;

@@ -94,7 +94,7 @@ export const PROCESS: readonly DemoMachine[] = [
     machine: 'JP-1A',
     columns: { name: 'Juice pump A', area: 'Purification', route: 'R2', criticality: 'essential', spare_group: 'JP-1', interval_days: 60 },
     components: [motor(75, 250, 1480), pump(75, 1480, 'II')],
-    series: [...train('motor', [['1H', 1.4], ['2H', 1.5]]), v('3H', [1.9, 1.9, 2.0, 2.0, 5.7, 5.9, 5.8, 6.0, 5.9, 6.0], { component: 'pump' }), v('3A', 1.4, { component: 'pump' })],
+    series: [...train('motor', [['1H', 1.4], ['2H', 1.5]]), v('3H', [5.9, 6.1, 6.0, 5.8, 6.1, 5.9, 6.0, 5.9, 6.1, 6.0], { component: 'pump' }), v('3A', 1.4, { component: 'pump' })],
   },
   {
     machine: 'JP-1B',
