@@ -96,7 +96,9 @@ export class Charts {
   }
 
   #overTime(): Drawing {
-    const { plant_over_time: lines } = this.#format.record;
+    const { record } = this.#format;
+    // A second look at a few machines is no column of the plant's.
+    const lines = record.plant_over_time.filter((_, i) => record.surveys[i]?.kind !== 're-measurement');
     const last = lines[lines.length - 1];
     const words = last === undefined ? '' : Object.entries(last.conditions).filter(([, n]) => n > 0).map(([c, n]) => `${n} ${c}`).join(', ');
     return plantOverTime({ dates: lines.map((l) => l.date), counts: lines.map((l) => l.conditions), width: 490, height: 120, alt: `Machines by condition over ${lines.length} surveys; at the last: ${words}.` });

@@ -68,6 +68,9 @@ export function peopleView(format: Format) {
 
 const CONFIDENCE: Readonly<Record<string, string>> = { confirmed: 'confirmed', 'one source': 'one source', recalled: 'recalled: check against your copy of the standard' };
 
+/** A boundary as its source prints it; one that was computed, to three digits. */
+const boundary = (format: Format, value: number | null): string => (value === null ? '–' : Math.round(value * 1000) / 1000 === value ? format.plain(value) : format.number(value));
+
 function limitView(format: Format, set: LimitSetLine) {
   const { ab, bc, cd } = set.boundaries;
   const band = set.low_hz === null && set.high_hz === null ? '' : `${set.low_hz ?? '…'} to ${set.high_hz ?? '…'} Hz`;
@@ -77,9 +80,9 @@ function limitView(format: Format, set: LimitSetLine) {
     title: set.title,
     quantity: set.quantity,
     unit: format.unit(set.unit, set.detection),
-    ab: ab === null ? '–' : format.number(ab),
-    bc: bc === null ? '–' : format.number(bc),
-    cd: cd === null ? '–' : format.number(cd),
+    ab: boundary(format, ab),
+    bc: boundary(format, bc),
+    cd: boundary(format, cd),
     band,
     basis: set.basis,
     source: [set.source, set.edition, set.table].filter((t) => t !== null).join(', '),
@@ -98,7 +101,7 @@ export function methodView(format: Format) {
   return {
     sets: record.limit_sets.map((set) => limitView(format, set)),
     hasSets: record.limit_sets.length > 0,
-    policy: record.policy.map((p) => ({ id: p.id, value: format.number(p.value), unit: p.unit, mark: p.mark, about: p.about, changed: p.overridden })),
+    policy: record.policy.map((p) => ({ id: p.id, value: format.plain(p.value), unit: p.unit, mark: p.mark, about: p.about, changed: p.overridden })),
     hash: record.policy_hash,
     problems: record.problems.filter((p) => p.severity !== 'note').map((p) => ({ place: p.line === null ? p.file : `${p.file}:${p.line}`, message: p.message })),
     hasProblems: record.problems.some((p) => p.severity !== 'note'),
@@ -142,7 +145,7 @@ export function changesView(format: Format) {
       rows.push({ what: machine.machine, text: `${format.date(event.date)} ${event.event}${where === '' ? '' : ` of ${where}`}${serial}${event.new_baseline ? '; new baseline' : ''}${event.notes === null ? '' : `: ${event.notes}`}` });
     }
   }
-  for (const p of record.policy.filter((line) => line.overridden)) rows.push({ what: `Policy ${p.id}`, text: `set to ${format.number(p.value)} ${p.unit} by this plant: ${p.about}` });
+  for (const p of record.policy.filter((line) => line.overridden)) rows.push({ what: `Policy ${p.id}`, text: `set to ${format.plain(p.value)} ${p.unit} by this plant: ${p.about}` });
   return { rows, hasRows: rows.length > 0 };
 }
 
@@ -164,7 +167,7 @@ export function noticesView(format: Format) {
 /** Machines without limits or baseline, and series that have no zone and no class. */
 export function limitsToSetView(format: Format) {
   const rows = format.record.measurements
-    .filter((m) => m.status === 'measured' && m.zone === null && m.ratio_class === null && m.baseline === null)
+    .filter((m) => m.status === 'measured' && m.zone === null && m.ratio_class === null && m.baseline === null && m.limit_set === null)
     .map((m) => ({ machine: m.machine, point: m.point, quantity: `${m.quantity}, ${format.unit(m.unit, m.detection)}`, because: m.no_zone_because ?? '' }));
   return { rows, hasRows: rows.length > 0 };
 }

@@ -50,7 +50,7 @@ export function exceptionView(format: Format, charts: Charts, machine: RecordMac
     hasHistory,
     historyKey: main === null ? '' : seriesId(main),
     historyAlt: main === null ? '' : charts.alt(main),
-    historyCaption: main === null ? '' : `${main.point} ${main.quantity}, ${format.unit(main.unit, main.detection)}. ${main.limit_reason}`,
+    historyCaption: main === null ? '' : `${main.point} ${main.quantity}, ${format.unit(main.unit, main.detection)}: ${main.limit_reason}`,
     polars: polars.map((m) => ({ key: seriesId(m), alt: charts.drawing('polar', seriesId(m)).alt, caption: `${m.point}: 1× vector, angles as lag` })),
     photos: format.record.survey.photos
       .filter((p) => p.machine === machine.machine)

@@ -4,7 +4,7 @@
  */
 import type { Detection } from '../measure/detection.ts';
 import type { Condition, RecordMachine, RecordMeasurement, SeriesKey, SwayfolioRecord } from '../record/types.ts';
-import { formatNumber, NO_BREAK } from '../words/numbers.ts';
+import { decimalsFor, formatNumber, NO_BREAK, plainNumber } from '../words/numbers.ts';
 import { type Language, say } from '../words/say.ts';
 
 /** A condition for print: its mark, letter and words. */
@@ -51,8 +51,18 @@ export class Format {
     return value === null ? '' : formatNumber(this.language, value, { limit });
   }
 
-  signed(value: number | null, limit: number | null = null): string {
-    return value === null ? '' : formatNumber(this.language, value, { limit, sign: true });
+  /** A count, a rating, a published boundary: the decimals it was given with. */
+  plain(value: number | null): string {
+    return value === null ? '' : plainNumber(this.language, value);
+  }
+
+  /** A difference, with the decimals of the reading it belongs to. */
+  difference(value: number, reading: number): string {
+    return formatNumber(this.language, value, { decimals: decimalsFor(reading, null), sign: true });
+  }
+
+  signedPercent(value: number): string {
+    return `${formatNumber(this.language, value, { decimals: 0, sign: true })}${NO_BREAK}%`;
   }
 
   /** The boundary that a reading is printed beside: the nearest one, so that the two can be told apart. */

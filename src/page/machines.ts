@@ -39,8 +39,8 @@ export function governingMeasurement(format: Format, machine: RecordMachine): Re
 export function changeText(format: Format, m: RecordMeasurement): string {
   const { change } = m;
   if (change === null) return '';
-  const percent = change.percent === null ? '' : ` (${format.signed(Math.round(change.percent))} %)`;
-  return `${format.signed(change.absolute)}${percent}`;
+  const percent = change.percent === null ? '' : ` (${format.signedPercent(change.percent)})`;
+  return `${format.difference(change.absolute, m.value ?? 0)}${percent}`;
 }
 
 export function machineView(format: Format, charts: Charts, machine: RecordMachine): MachineView {

@@ -75,9 +75,9 @@ function group(title: string, actions: readonly ActionView[], most: number): Act
 }
 
 function countViews(format: Format): CountView[] {
-  const lines = format.record.plant_over_time;
+  const { plant_over_time: lines, surveys } = format.record;
   const now = lines[lines.length - 1];
-  const before = lines[lines.length - 2];
+  const before = lines.slice(0, -1).filter((_, i) => surveys[i]?.kind !== 're-measurement').pop();
   return ORDER.filter((c) => (now?.conditions[c] ?? 0) + (before?.conditions[c] ?? 0) > 0).map((c) => ({
     condition: format.condition(c),
     label: LABELS[c],

@@ -10,12 +10,14 @@ export interface Need {
 
 /** A column of one very long word may be broken in it: it asks for no more than this share of the table. */
 const LONGEST_WORD = 0.28;
+/** Marks and numbers stay on one line up to this width, points. */
+const UNBROKEN = 70;
 
 export function columnWidths(needs: readonly Need[], available: number, padding: number): number[] {
   const natural = needs.map((n) => n.natural + padding);
   const total = natural.reduce((a, b) => a + b, 0);
   if (total <= available) return withRest(needs, natural, available - total);
-  const least = needs.map((n) => (n.kind === 'text' ? Math.min(n.least, available * LONGEST_WORD) : n.least) + padding);
+  const least = needs.map((n) => (n.kind === 'text' ? Math.min(n.least, available * LONGEST_WORD) : Math.max(n.least, Math.min(n.natural, UNBROKEN))) + padding);
   const sum = least.reduce((a, b) => a + b, 0);
   if (sum >= available) return least.map((w) => (w * available) / sum);
   return shared(natural, least, available - sum);
@@ -27,12 +29,12 @@ function withRest(needs: readonly Need[], natural: readonly number[], rest: numb
   return natural.map((w, i) => (texts > 0 && needs[i]?.kind === 'text' ? w + (rest * w) / texts : w));
 }
 
-/** Every column gets its least; what is left is shared by how much more each would like, the square root of it so that long texts do not starve short ones. */
+/** Every column gets its least; what is left is shared by how much more each would like. */
 function shared(natural: readonly number[], least: readonly number[], rest: number): number[] {
   const widths = [...least];
   let left = rest;
   for (let round = 0; round < 8 && left > 0.01; round += 1) {
-    const wants = natural.map((w, i) => Math.sqrt(Math.max(0, w - (widths[i] as number))));
+    const wants = natural.map((w, i) => Math.max(0, w - (widths[i] as number)));
     const sum = wants.reduce((a, b) => a + b, 0);
     if (sum === 0) break;
     let given = 0;

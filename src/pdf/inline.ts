@@ -36,6 +36,8 @@ export interface PageNumber extends Placed {
   readonly kind: 'page';
   readonly target: string;
   readonly like: Word;
+  /** In a table the number stands at the right of its room. */
+  readonly atRight: boolean;
 }
 export type Token = Word | Space | Mark | PageNumber | { readonly kind: 'break'; readonly width: 0; readonly node: null };
 
@@ -91,8 +93,8 @@ function addSpan(context: InlineContext, element: Element, now: Current, tokens:
     const drawing = zoneMark(mark, now.size * 0.86);
     tokens.push({ kind: 'mark', drawing, width: drawing.width + 2.2, node: now.node });
   } else if (target !== undefined) {
-    const like = wordOf(context, '000', now);
-    tokens.push({ kind: 'page', target, like, width: like.width, node: now.node });
+    const like = wordOf(context, '00', now);
+    tokens.push({ kind: 'page', target, like, width: like.width, node: now.node, atRight: now.node?.role === 'TD' });
   }
   collect(context, element.children, now, tokens);
 }

@@ -7,7 +7,7 @@ import { toPdfOperators } from '../chart/operators.ts';
 import type { EmbeddedFont } from './document.ts';
 import type { SetWord, Type } from './face.ts';
 import type { PdfImage } from './image.ts';
-import type { Line, Token, Word } from './inline.ts';
+import type { Line, PageNumber, Token, Word } from './inline.ts';
 import type { Node, Structure } from './tags.ts';
 
 export interface PageLink {
@@ -106,7 +106,7 @@ export class Pen {
         else if (run.kind === 'mark') {
           const { drawing } = run.token;
           content += `q 1 0 0 1 ${n(at)} ${n(y - drawing.height * 0.88)} cm ${toPdfOperators(drawing, this.#inks)} Q\n`;
-        } else this.#pageNumber(node, run.token.target, run.token.like, at, y);
+        } else this.#pageNumber(node, run.token, at, y);
         at += run.width;
       }
       if (content !== '') this.marked(node, content);
@@ -118,8 +118,8 @@ export class Pen {
     }
   }
 
-  /** A page number, right-aligned in the room left for it; known when all pages are. */
-  #pageNumber(node: Node | null, target: string, like: Word, x: number, y: number): void {
+  /** A page number in the room left for it; known when all pages are. */
+  #pageNumber(node: Node | null, { target, like, atRight }: PageNumber, x: number, y: number): void {
     this.wanted.add(target);
     const { page } = this;
     // The digits' glyphs are asked for now, so that the font holds them whatever the number is.
@@ -127,7 +127,7 @@ export class Pen {
     this.marked(node, () => {
       const text = String((this.targets.get(target)?.page ?? 0) + 1);
       const set = this.#type.set(text, like.style);
-      return this.#show([{ ...like, text, set }], x + like.width - (set.width * like.size) / 1000, y, page);
+      return this.#show([{ ...like, text, set }], atRight ? x + like.width - (set.width * like.size) / 1000 : x, y, page);
     });
   }
 

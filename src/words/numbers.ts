@@ -38,7 +38,7 @@ function ownDecimals(value: number): number {
 export function decimalsFor(value: number, limit: number | null | undefined): number {
   let decimals = significantDecimals(value);
   if (limit === null || limit === undefined) return decimals;
-  decimals = Math.max(decimals, Math.min(ownDecimals(limit), SIGNIFICANT));
+  decimals = Math.max(decimals, Math.min(ownDecimals(limit), significantDecimals(limit)));
   while (decimals < MOST_DECIMALS && value !== limit && Number(value.toFixed(decimals)) === limit) decimals += 1;
   return decimals;
 }
