@@ -64,7 +64,7 @@ export function machineView(format: Format, charts: Charts, machine: RecordMachi
     reason: machine.reason,
     governing: m === null ? '' : `${m.point} ${m.quantity}`,
     value: m === null ? '' : format.reading(m),
-    unit: m === null ? '' : format.unit(m.unit, m.detection),
+    unit: m === null || format.reading(m) === '' ? '' : format.unit(m.unit, m.detection),
     change: m === null ? '' : changeText(format, m),
     travel: m?.travel ?? '',
     hasChart,
