@@ -117,7 +117,7 @@ function isAtWork(pid: number, leftOver: string): boolean {
 const DISK_TROUBLE: Readonly<Record<string, string>> = {
   EACCES: 'the folder may not be written to', EPERM: 'the folder may not be written to', EROFS: 'the disk is read-only',
   ENOSPC: 'the disk is full', EDQUOT: 'the disk quota is used up', ENAMETOOLONG: 'the name is too long', ENOTDIR: 'a part of the path is a file',
-  EEXIST: 'a part of the path is a file',
+  EEXIST: 'a part of the path is a file', ENOTEMPTY: 'another run wrote it meanwhile', ENOENT: 'another run took it away meanwhile',
 };
 
 function asUserError(error: unknown, out: string): unknown {

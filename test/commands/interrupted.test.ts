@@ -54,3 +54,14 @@ test('killed at nine moments between start and end, and twice while writing: eac
   expect(readdirSync(home).sort()).toEqual(['fresh', 'out', 'plant']);
   expect([old, fresh]).toContainEqual(contents(join(home, 'out')));
 });
+
+test('two at once: each ends well or says that the other is at work, and the folder is whole', async () => {
+  const home = plantFolder();
+  expect(swayfolio(home, ['report', 'plant', '--out', 'alone']).code).toBe(0);
+  const both = [1, 2].map(() => spawn(process.execPath, [MAIN, 'report', 'plant', '--out', 'out'], { cwd: home, stdio: 'ignore' }));
+  const codes = (await Promise.all(both.map((child) => once(child, 'exit')))).map(([code]) => code);
+  expect(codes).toContain(0);
+  for (const code of codes) expect([0, 1]).toContain(code);
+  expect(contents(join(home, 'out'))).toEqual(contents(join(home, 'alone')));
+  expect(readdirSync(home).sort()).toEqual(['alone', 'out', 'plant']);
+});
