@@ -8,7 +8,7 @@ export const RATING_LADDER = [2, 3.15, 5, 8, 12.5, 20, 31.5, 50, 80, 125, 200, 3
 
 /** The rungs about a rating; null for a number that is no rating, or has no rung below or above it. */
 function rungs(rating: number): readonly [number, number, number] | null {
-  const i = RATING_LADDER.findIndex((rung) => rung === rating);
+  const i = (RATING_LADDER as readonly number[]).indexOf(rating);
   const [below, above] = [RATING_LADDER[i - 1], RATING_LADDER[i + 1]];
   return i < 1 || below === undefined || above === undefined ? null : [below, rating, above];
 }

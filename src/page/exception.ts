@@ -34,8 +34,8 @@ export function exceptionView(format: Format, charts: Charts, machine: RecordMac
   const measurements = format.measurementsOf(machine.machine);
   const main = governingMeasurement(format, machine);
   const actions = format.record.actions.filter((a) => a.machine === machine.machine).map((a) => actionView(format, a));
-  const hasHistory = main !== null && main.history.value.some((v) => v !== null);
-  const polars = measurements.filter((m) => m.phase !== null && m.phase.amplitude !== null);
+  const hasHistory = main?.history.value.some((v) => v !== null) === true;
+  const polars = measurements.filter((m) => (m.phase?.amplitude ?? null) !== null);
   const spoken = machine.criticality_stated ? machine.criticality : `${machine.criticality} (not stated, taken as such)`;
   return {
     machine: machineView(format, charts, machine),

@@ -45,7 +45,7 @@ export function changeText(format: Format, m: RecordMeasurement): string {
 
 export function machineView(format: Format, charts: Charts, machine: RecordMachine): MachineView {
   const m = governingMeasurement(format, machine);
-  const hasChart = m !== null && m.history.value.some((v) => v !== null);
+  const hasChart = m?.history.value.some((v) => v !== null) === true;
   const doubts = machine.doubts.length === 0 ? '' : 'doubt';
   const held = m !== null && m.travel === 'held' ? 'held' : '';
   const [measured] = machine.measured_of;

@@ -1,7 +1,7 @@
 /** The manager's page: what to do first, what is new, worse, verified, overdue, not measured. In: the record. Out: one page's view. */
 import type { Condition, RecordMachine } from '../record/types.ts';
 import { type ActionView, actionView, overrideText, rankedViews } from './actions.ts';
-import { type ConditionView, type Format } from './format.ts';
+import type { ConditionView, Format } from './format.ts';
 
 export interface CountView {
   readonly condition: ConditionView;

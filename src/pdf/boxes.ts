@@ -2,39 +2,13 @@
  * Blocks as boxes to stack. In: elements of a section. Out: boxes of known height that can draw themselves. Never: a
  * block drawn while it is laid out.
  */
-import type { Drawing } from '../chart/drawing.ts';
-import { type InlineContext, linesOf, plainText, tokensOf } from './inline.ts';
-import type { PdfImage } from './image.ts';
+import { altOf, type BlockContext, type Box, pictureOf } from './block.ts';
+import { linesOf, plainText, tokensOf } from './inline.ts';
 import type { Element } from './markup.ts';
-import type { OutlineEntry, Pen } from './pen.ts';
+import type { Pen } from './pen.ts';
 import { STYLES, type TextStyle } from './sheet.ts';
 import { tableBoxes } from './table.ts';
 import type { Node } from './tags.ts';
-
-export interface Box {
-  readonly height: number;
-  /** Blank above, dropped at the top of a page. */
-  readonly before: number;
-  /** Stays on one page with the next box. */
-  keepNext: boolean;
-  /** Repeated at the top of each further page while its table goes on. */
-  readonly header?: { readonly height: number; draw(pen: Pen, x: number, y: number): void } | null;
-  /** Begins a page. */
-  newPage?: boolean;
-  anchor?: string | null;
-  readonly heading?: Omit<OutlineEntry, 'page' | 'y'>;
-  draw(pen: Pen, x: number, y: number): void;
-  /** The part that fits into `room` and the rest; null when nothing sensible fits. */
-  split?(room: number): readonly [Box, Box] | null;
-}
-
-export interface BlockContext extends InlineContext {
-  readonly width: number;
-  readonly pageHeight: number;
-  readonly template: string;
-  readonly chart: (kind: string, key: string) => Drawing;
-  readonly picture: (kind: 'photo' | 'logo', key: string) => PdfImage;
-}
 
 /** Boxes of a section; its own id anchors the first of them. */
 export function sectionBoxes(context: BlockContext, section: Element, parent: Node): Box[] {
@@ -145,33 +119,6 @@ function listBoxes(context: BlockContext, element: Element, parent: Node): Box[]
     };
     return [labelled, ...rest];
   });
-}
-
-/** The drawing or picture of a figure: its size and how it is drawn under a node. */
-export interface Picture {
-  readonly width: number;
-  readonly height: number;
-  draw(pen: Pen, node: Node, x: number, y: number): void;
-}
-
-const PHOTO_HEIGHT = 190;
-const LOGO_HEIGHT = 40;
-
-export function pictureOf(context: BlockContext, figure: Element, width: number): Picture {
-  const { 'data-chart': chart, 'data-photo': photo, 'data-logo': logo, 'data-key': key = '' } = figure.attributes;
-  if (chart !== undefined) {
-    const drawing = context.chart(chart, key);
-    const scale = Math.min(1, width / drawing.width);
-    return { width: drawing.width * scale, height: drawing.height * scale, draw: (pen, node, x, y) => pen.drawing(node, drawing, x, y, scale) };
-  }
-  const image = context.picture(photo !== undefined ? 'photo' : 'logo', photo ?? logo ?? key);
-  const scale = Math.min(width / image.width, (photo !== undefined ? PHOTO_HEIGHT : LOGO_HEIGHT) / image.height);
-  return { width: image.width * scale, height: image.height * scale, draw: (pen, node, x, y) => pen.image(node, image, x, y, image.width * scale, image.height * scale) };
-}
-
-export function altOf(context: BlockContext, figure: Element): string {
-  const { 'data-alt': alt, 'data-chart': chart, 'data-key': key = '' } = figure.attributes;
-  return alt !== undefined && alt !== '' ? alt : chart !== undefined ? context.chart(chart, key).alt : plainText(figure);
 }
 
 function figureBoxes(context: BlockContext, figure: Element, parent: Node): Box[] {

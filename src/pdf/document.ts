@@ -231,6 +231,7 @@ export class PackedDocument extends BaseDocument {
 }
 
 /** pdfkit asks for a Date object; this one is made from the survey's day, never from the clock. */
+// biome-ignore lint/style/noRestrictedGlobals: the type and the constructor with an argument, which no clock answers.
 export const dateOf = (text: string): Date => new Date(`${text}T00:00:00Z`);
 
 function joined(chunks: readonly Uint8Array[]): Uint8Array {

@@ -2,7 +2,7 @@
  * Stacking boxes onto pages. In: boxes in order. Out: pages drawn through the pen. Never: an orphan heading, a header row
  * without a row under it, a box cut off at the foot.
  */
-import type { Box } from './boxes.ts';
+import type { Box } from './block.ts';
 import type { Pen } from './pen.ts';
 import { MARGIN, PAPER } from './sheet.ts';
 

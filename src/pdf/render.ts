@@ -2,7 +2,8 @@
  * A whole PDF. In: sections of markup, drawings, pictures, a brand. Out: its bytes. Two passes: all is laid out first, so
  * that page numbers are known, then pages are written one by one.
  */
-import { type BlockContext, sectionBoxes } from './boxes.ts';
+import type { BlockContext } from './block.ts';
+import { sectionBoxes } from './boxes.ts';
 import { dateOf, PackedDocument, type Outline, pdfText, type Reference } from './document.ts';
 import { Type } from './face.ts';
 import { Flow } from './flow.ts';

@@ -2,7 +2,7 @@
  * Tables. In: a table element. Out: a box a row: columns sized to their contents, numerals aligned on the decimal point,
  * the header repeated on each page, tall rows split. Never: a cell cut off.
  */
-import { altOf, type BlockContext, type Box, type Picture, pictureOf } from './boxes.ts';
+import { altOf, type BlockContext, type Box, type Picture, pictureOf } from './block.ts';
 import { columnWidths, type Kind, type Need } from './columns.ts';
 import { type Line, linesOf, measure, type Token, tokensOf } from './inline.ts';
 import type { Element } from './markup.ts';

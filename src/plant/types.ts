@@ -7,38 +7,11 @@ import type { Detection } from '../measure/detection.ts';
 import type { Day } from './day.ts';
 import type { Policy } from './policy.ts';
 import type { Place, Problem } from './problem.ts';
+import type { Phase, Survey } from './survey.ts';
+import type { Criticality, Direction, EventKind, Kind, MeasuredOn, Status, Support } from './words.ts';
 
-export const CRITICALITIES = ['critical', 'essential', 'general'] as const;
-export type Criticality = (typeof CRITICALITIES)[number];
-
-export const KINDS = [
-  'motor', 'generator', 'fan', 'pump', 'displacement pump', 'compressor', 'screw compressor', 'lobe blower', 'vacuum pump',
-  'reciprocating', 'gearbox', 'steam turbine', 'gas turbine', 'hydro turbine', 'mixer', 'roll', 'screen', 'other',
-] as const;
-export type Kind = (typeof KINDS)[number];
-
-export const MEASURED_ON = ['bearing housing', 'shaft relative', 'shaft absolute', 'structure', 'pipe'] as const;
-export type MeasuredOn = (typeof MEASURED_ON)[number];
-
-export const DIRECTIONS = ['horizontal', 'vertical', 'axial', 'radial'] as const;
-export type Direction = (typeof DIRECTIONS)[number];
-
-/** `missing` is never typed: it is what coverage calls a reading that was due and is not there. */
-export const STATUSES = [
-  'measured', 'stopped', 'no access', 'unsafe', 'guard fitted', 'under work', 'locked out', 'not due', 'faulty', 'over range',
-] as const;
-export type Status = (typeof STATUSES)[number];
-
-export const SURVEY_KINDS = ['routine', 're-measurement', 'after repair', 'acceptance', 'start-up'] as const;
-export type SurveyKind = (typeof SURVEY_KINDS)[number];
-
-export const EVENTS = ['repair', 'overhaul', 'balance', 'alignment', 'greasing', 'exchanged', 'sensor moved', 'other'] as const;
-export type EventKind = (typeof EVENTS)[number];
-
-export const URGENCIES = ['now', 'within a week', 'within a month', 'next planned stop', 'watch'] as const;
-export type Urgency = (typeof URGENCIES)[number];
-
-export type Support = 'rigid' | 'flexible';
+export * from './survey.ts';
+export * from './words.ts';
 
 /** A row that is in force from a day on; the last with validFrom ≤ the reading's day judges it (null = always). */
 export interface Dated {
@@ -165,120 +138,6 @@ export interface Reading {
   readonly place: Place;
   /** Earlier takes of the same key, oldest first; null when there is none (the common case). */
   readonly retakes: readonly Reading[] | null;
-}
-
-/** A 1× vector: amplitude in the series' unit and detection, angle as a lag in degrees after conversion from the stated convention. */
-export interface Phase {
-  readonly amplitude: number | null;
-  readonly lagDeg: number;
-  readonly reference: string | null;
-}
-
-export interface Person {
-  readonly name: string;
-  readonly role: string | null;
-  /** e.g. `ISO 18436-2 category II`; as typed. */
-  readonly category: string | null;
-  readonly certificate: string | null;
-  readonly expires: Day | null;
-}
-
-export interface Instrument {
-  readonly id: string;
-  readonly make: string | null;
-  readonly model: string | null;
-  readonly serial: string | null;
-  readonly band: string | null;
-  readonly calibratedOn: Day | null;
-  readonly calibrationDue: Day | null;
-  readonly certificate: string | null;
-  readonly laboratory: string | null;
-}
-
-export interface Sensor {
-  readonly id: string;
-  readonly serial: string | null;
-  readonly sensitivity: string | null;
-  readonly mounting: string | null;
-  readonly calibrationDue: Day | null;
-}
-
-export interface Notice {
-  readonly who: string;
-  readonly when: string | null;
-  readonly how: string | null;
-  readonly about: string | null;
-}
-
-/** What a survey set out to measure; `all` or the named parts. */
-export interface Scope {
-  readonly all: boolean;
-  readonly areas: readonly string[];
-  readonly routes: readonly string[];
-  readonly machines: readonly string[];
-}
-
-export interface Survey {
-  /** The folder's name or the survey_date as typed. */
-  readonly id: string;
-  /** The survey's date: from its id, else its last day. */
-  readonly day: Day;
-  readonly from: Day;
-  readonly to: Day;
-  readonly kind: SurveyKind;
-  readonly scope: Scope;
-  readonly people: readonly Person[];
-  readonly instruments: readonly Instrument[];
-  readonly sensors: readonly Sensor[];
-  readonly fieldCheck: string | null;
-  readonly process: string | null;
-  readonly weather: string | null;
-  readonly remarks: string | null;
-  readonly issueDate: Day | null;
-  readonly reviewedBy: string | null;
-  readonly approvedBy: string | null;
-  readonly notified: readonly Notice[];
-  readonly findings: readonly Finding[];
-  readonly photos: readonly Photo[];
-  /** Where its readings came from; null when there are none. */
-  readonly place: Place | null;
-}
-
-export interface Finding {
-  readonly id: string;
-  readonly machine: string;
-  readonly component: string | null;
-  readonly points: readonly string[];
-  readonly finding: string | null;
-  readonly likelyCause: string | null;
-  readonly lessLikely: string | null;
-  readonly confidence: 'low' | 'medium' | 'high' | null;
-  readonly recommendation: string | null;
-  readonly needsStop: boolean | null;
-  readonly checkFirst: string | null;
-  readonly consequence: string | null;
-  readonly downtimeH: number | null;
-  readonly parts: string | null;
-  readonly due: Day | null;
-  readonly owner: string | null;
-  readonly urgency: Urgency | null;
-  readonly overrideBy: string | null;
-  readonly overrideReason: string | null;
-  readonly overrideUntil: Day | null;
-  readonly verifyPoint: string | null;
-  readonly verifyBelow: number | null;
-  readonly carriedFrom: string | null;
-  readonly confirmed: Day | null;
-  readonly closed: Day | null;
-  readonly place: Place;
-}
-
-export interface Photo {
-  /** Relative to the plant folder. */
-  readonly path: string;
-  readonly machine: string;
-  readonly point: string | null;
-  readonly caption: string | null;
 }
 
 export interface PlantEvent {

@@ -5,49 +5,18 @@
 import type { Detection } from '../measure/detection.ts';
 import type { Mark } from '../plant/policy.ts';
 import type { Problem } from '../plant/problem.ts';
-import type { Criticality, Direction, MeasuredOn, Status as TypedStatus, SurveyKind, Urgency } from '../plant/types.ts';
+import type { Criticality, SurveyKind, Urgency } from '../plant/types.ts';
 import type { Facts } from '../words/facts.ts';
+import type { RecordAction } from './action.ts';
+import type { RecordMeasurement } from './measurement.ts';
+import type { Condition, DateText, Doubt, Indication, Override, SeriesKey } from './terms.ts';
 
 export type { Facts };
+export * from './action.ts';
+export * from './measurement.ts';
+export * from './terms.ts';
 
 export const RECORD_FORMAT = 1;
-
-export type Zone = 'A' | 'B' | 'C' | 'D';
-export type RatioClass = 'r-A' | 'r-B' | 'r-C' | 'r-D';
-export type Condition = Zone | RatioClass | 'not assessed';
-export type Travel = 'fast' | 'rising' | 'step' | 'steady' | 'falling' | 'held';
-export type Status = TypedStatus | 'missing';
-/** Dates are `YYYY-MM-DD`. */
-export type DateText = string;
-
-
-export const DOUBT_KINDS = [
-  'unit-factor', 'impossible', 'swapped-points', 'swapped-machines', 'identical', 'near-zero', 'all-down', 'unexplained-fall',
-  'retake-differs', 'date', 'calibration', 'qualification',
-] as const;
-export type DoubtKind = (typeof DOUBT_KINDS)[number];
-
-export interface Doubt {
-  readonly kind: DoubtKind;
-  readonly message: string;
-  readonly effect: 'held' | 're-measure' | 'note';
-  readonly facts: Facts;
-}
-
-export interface Indication {
-  readonly rule: string;
-  readonly message: string;
-  readonly confirm: string;
-  readonly mark: Mark;
-  readonly facts: Facts;
-}
-
-export interface SeriesKey {
-  readonly component: string;
-  readonly point: string;
-  readonly quantity: string;
-  readonly detection: Detection | null;
-}
 
 export interface Issue {
   readonly number: string;
@@ -181,15 +150,6 @@ export interface LimitSetLine {
   readonly approved_on: DateText | null;
 }
 
-export interface Override {
-  readonly urgency: Urgency;
-  readonly by: string;
-  readonly reason: string;
-  readonly until: DateText | null;
-  /** Lowers the level from `now`: listed on the manager's page. */
-  readonly lowers_now: boolean;
-}
-
 export interface RecordMachine {
   readonly machine: string;
   readonly name: string | null;
@@ -252,156 +212,6 @@ export interface RecordComponent {
   readonly limit_reason: string;
   readonly power_kw: number | null;
   readonly speed_rpm: number | null;
-}
-
-export interface Limits {
-  readonly ab: number | null;
-  readonly bc: number | null;
-  readonly cd: number | null;
-  readonly alarm: number | null;
-  readonly trip: number | null;
-  /** The set's own numbers. */
-  readonly of: { readonly ab: number | null; readonly bc: number | null; readonly cd: number | null; readonly unit: string; readonly detection: Detection | null };
-  /** exact: unit conversion only; sine: an r.m.s. set on a calculated peak. */
-  readonly by: 'exact' | 'sine';
-}
-
-export interface Change {
-  readonly absolute: number;
-  readonly percent: number | null;
-  readonly db: number | null;
-  /** Fraction of B/C, signed. */
-  readonly of_bc: number | null;
-  /** By criterion II; null where there is no B/C. */
-  readonly significant: boolean | null;
-  readonly vector: { readonly amplitude: number; readonly lag_deg: number } | null;
-}
-
-export interface Trend {
-  readonly kind: 'none' | 'small' | 'ramp' | 'plateau' | 'step';
-  readonly db_per_year: number | null;
-  readonly slope_per_year: number | null;
-  /** Ratio of the line's end to its start. */
-  readonly rise: number | null;
-  readonly p: number | null;
-  readonly n: number;
-}
-
-export type Forecast =
-  | { readonly boundary: string; readonly earliest: DateText; readonly likely: DateText | null; readonly latest: DateText | null; readonly range: number }
-  | { readonly none: string };
-
-/** Columns aligned to `surveys[]`; a null value is no number at that survey. `why` tells, by index, why a reading is not comparable or absent. */
-export interface History {
-  readonly value: readonly (number | null)[];
-  readonly typed?: readonly (string | null)[];
-  readonly why: { readonly [index: string]: string };
-  readonly line: readonly (number | null)[];
-  /** Only where a reading came from another file than its survey's. */
-  readonly file?: readonly (string | null)[];
-}
-
-export interface RecordMeasurement {
-  readonly machine: string;
-  readonly component: string;
-  readonly point: string;
-  readonly location: string | null;
-  readonly direction: Direction | null;
-  readonly quantity: string;
-  readonly unit: string;
-  readonly detection: Detection | null;
-  readonly measured_on: MeasuredOn | null;
-  readonly low_hz: number | null;
-  readonly high_hz: number | null;
-  readonly state: string | null;
-  readonly speed_rpm: number | null;
-  readonly load_pct: number | null;
-  readonly instrument: string | null;
-  readonly measured_by: string | null;
-  readonly taken_at: string | null;
-  readonly remark: string | null;
-  readonly phase: { readonly amplitude: number | null; readonly lag_deg: number; readonly reference: string | null } | null;
-  readonly status: Status;
-  readonly value: number | null;
-  readonly typed: string | null;
-  readonly typed_unit: string | null;
-  readonly bound: '<' | '>' | null;
-  readonly source: { readonly file: string; readonly line: number } | null;
-  readonly zone: Zone | null;
-  readonly ratio_class: RatioClass | null;
-  readonly zone_basis: 'standard' | 'own' | 'ratio' | null;
-  readonly no_zone_because: string | null;
-  /** e.g. `B/C`; null where no boundary is near. */
-  readonly near_boundary: string | null;
-  readonly held: { readonly zone: Condition; readonly date: DateText } | null;
-  readonly limit_set: string | null;
-  readonly limit_reason: string;
-  readonly limits: Limits | null;
-  readonly baseline: { readonly value: number; readonly from: string; readonly n: number; readonly provisional: boolean } | null;
-  readonly previous: { readonly value: number; readonly date: DateText } | null;
-  readonly change: Change | null;
-  readonly from_baseline: Change | null;
-  readonly travel: Travel | null;
-  readonly urgency: Urgency | null;
-  readonly rule: string | null;
-  readonly trend: Trend | null;
-  readonly forecast: Forecast | null;
-  readonly sisters: Facts | null;
-  readonly doubts: readonly Doubt[];
-  /** Remarks of the assessment that are no doubt: at most (band), background, band unknown, axial limits by our choice … sentences. */
-  readonly notes: readonly string[];
-  readonly history: History;
-}
-
-export interface RecordAction {
-  readonly rank: number;
-  readonly action: string;
-  readonly finding: string | null;
-  readonly machine: string;
-  readonly component: string | null;
-  readonly points: readonly string[];
-  /** null: an analyst's finding that no reading raises. */
-  readonly urgency: Urgency | null;
-  readonly computed_urgency: Urgency | null;
-  readonly rule: string | null;
-  readonly reason: string;
-  readonly facts: Facts;
-  readonly above_next_because: string | null;
-  readonly observation: string | null;
-  readonly likely_cause: string | null;
-  readonly less_likely: string | null;
-  readonly confidence: 'low' | 'medium' | 'high' | null;
-  readonly downtime_h: number | null;
-  readonly parts: string | null;
-  readonly recommendation: string | null;
-  readonly check_first: string | null;
-  readonly needs_stop: boolean | null;
-  readonly consequence: string | null;
-  readonly due: DateText | null;
-  readonly owner: string | null;
-  readonly work_order: string | null;
-  readonly status: 'open' | 'ordered' | 'done' | 'rejected';
-  readonly origin: 'analyst' | 'ledger' | 'drafted';
-  readonly raised: DateText | null;
-  readonly closed: DateText | null;
-  readonly closed_by: string | null;
-  readonly as_found: string | null;
-  readonly times_reported: number;
-  readonly overdue_days: number | null;
-  readonly carried_from: string | null;
-  readonly confirmed: DateText | null;
-  readonly override: Override | null;
-  readonly verification: {
-    readonly target: { readonly point: string; readonly quantity: string; readonly value: number; readonly unit: string } | null;
-    readonly before: { readonly value: number; readonly date: DateText } | null;
-    readonly after: { readonly value: number; readonly date: DateText } | null;
-    readonly result: 'verified' | 'not verified' | 'not yet measured';
-  } | null;
-  /** The reading the action is about, for the work list. */
-  readonly value: number | null;
-  readonly unit: string | null;
-  readonly limit: number | null;
-  readonly notes: string | null;
 }
 
 /** A machine of the scope, or due, that was not wholly measured, or that was: one line for each machine in service. */

@@ -59,7 +59,7 @@ function entryOf(cells: Cells, survey: string | null, peakMeans: PeakMeans, colu
   const detection = detectionOf(cells, 'detection', quantity ?? '', peakMeans);
   const point = cells.text('point');
   const typed = cells.text('value');
-  const value = typed === null ? null : valueOf(cells, typed, quantity);
+  const value = typed === null ? null : typedValue(cells, typed, quantity);
   if (point === null && status === 'measured' && machine !== null) {
     cells.error('blank', 'point', '"point" is blank.', 'Only a row with a status other than measured may speak for the whole machine.');
     return null;
@@ -95,7 +95,7 @@ interface Typed {
 }
 
 /** A number or a bound; undefined with the problem told. `<0.2` is no number, `>50` is at least 50. */
-function valueOf(cells: Cells, typed: string, quantity: string | null): Typed | undefined {
+function typedValue(cells: Cells, typed: string, quantity: string | null): Typed | undefined {
   const sign = typed[0];
   const bound = sign === '<' || sign === '>' ? sign : null;
   const digits = bound === null ? typed : typed.slice(1).trim();
