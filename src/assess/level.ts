@@ -79,7 +79,9 @@ export function plainLevel(context: Context, track: Track, look: Look, movement:
 function levelOf(context: Context, track: Track, look: Look, condition: Zone | RatioClass | null, movement: Movement, standing: Standing): Level {
   if (condition === null || movement.travel === null) return NO_LEVEL;
   const level = tableLevel(condition, movement.travel, standing.criticality, standing.spare);
-  if (condition !== 'r-D' || weight(level.urgency) <= weight('within a week') || isSupported(context, track, look)) return level;
+  // The rules name r-D alone; held there it would let an unsupported r-C of a critical machine stand above an r-D, so both are held.
+  const byRatioAlone = condition === 'r-D' || condition === 'r-C';
+  if (!byRatioAlone || weight(level.urgency) <= weight('within a week') || isSupported(context, track, look)) return level;
   return { urgency: 'within a week', rule: 'R1' };
 }
 

@@ -47,7 +47,8 @@ export function readTable(
 
 function recordsOf(file: string, text: string, problems: Problems): string[][] | null {
   try {
-    return parse(text, { relax_column_count: true, skip_empty_lines: false }) as string[][];
+    // A quote inside a field that does not begin with one is an inch sign or a second of arc, not a fault.
+    return parse(text, { relax_column_count: true, relax_quotes: true, skip_empty_lines: false }) as string[][];
   } catch (error) {
     if (!(error instanceof CsvError)) throw error;
     const line = typeof error['lines'] === 'number' ? error['lines'] : null;
