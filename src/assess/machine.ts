@@ -9,7 +9,7 @@ import { say } from '../words/say.ts';
 import { concernsSeries } from './accepted.ts';
 import { cannotSee } from './cannot-see.ts';
 import { closenessOf } from './closeness.ts';
-import { measuredOf, missesInARow } from './coverage.ts';
+import { measuredOf, missesInARow, whyNot } from './coverage.ts';
 import { dateOrNull } from './cut.ts';
 import { exceeds } from './exceeds.ts';
 import { heldConditionAt, type Standing, type Verdict } from './level.ts';
@@ -121,7 +121,10 @@ function quietReason(context: Context, verdicts: readonly Verdict[]): { reason: 
   const { language } = context.plant.settings;
   const unseen = verdicts.find((v) => v.look !== null && v.look.noZone !== null)?.look?.noZone ?? null;
   if (worst === null && unseen !== null) return { reason: say(language, unseen.key, unseen.facts), facts: unseen.facts };
-  if (worst === null || worst.heldFrom === null) return { reason: say(language, 'assess.reason.none', {}), facts: {} };
+  if (worst === null || worst.heldFrom === null) {
+    const status = whyNot(verdicts.map((v) => v.track), context.current);
+    return { reason: say(language, status === null ? 'assess.reason.none' : 'assess.reason.not_measured', { status }), facts: { status } };
+  }
   return reasonOf(context, { ...worst, level: { urgency: null, rule: 'M1' } });
 }
 

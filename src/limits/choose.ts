@@ -25,7 +25,7 @@ export function chooseLimits(q: LimitQuestion): LimitChoice {
   }
   const applied = byApplication(q, point, component.kind);
   if (applied !== null) return applied;
-  if (point.limitSet !== null || component.limitSet !== null) {
+  if (point.limitSet !== null || (component.limitSet !== null && point.measuredOn !== 'pipe' && point.measuredOn !== 'structure')) {
     return { set: null, rule: 'limits.none.named', facts: { limit_set: point.limitSet ?? component.limitSet, quantity: q.series.quantity }, conflict: null, byOurChoice: false };
   }
   return byRule(q, point);
@@ -36,7 +36,7 @@ function byName(q: LimitQuestion, point: PointRow, name: string, by: 'point' | '
   const own = q.own.byName.get(name) ?? [];
   const published = own.length > 0 ? [] : builtIn(q, name);
   if (own.length === 0 && published.length === 0) return conflictOf(`no limit set is called "${name}"`);
-  const found = inForceFor(own.length > 0 ? own : published, q.series, point.measuredOn, q.day);
+  const found = inForceFor(own.length > 0 ? own : published, q.series, point.measuredOn, q.day, by === 'point');
   if (found === null) return null;
   if ('conflict' in found) return conflictOf(found.conflict);
   return { set: found.set, rule: `limits.named.${by}`, facts: { limit_set: name, title: found.set.title, basis: found.set.basis }, conflict: null, byOurChoice: false };
@@ -60,7 +60,7 @@ function byApplication(q: LimitQuestion, point: PointRow, kind: string | null): 
   const fitting = q.own.applied.filter(speaks);
   for (const rank of RANKS) {
     const sets = fitting.filter((a) => RANKS.find((r) => a[r] !== null) === rank).map((a) => a.set);
-    const found = inForceFor(sets, q.series, point.measuredOn, q.day);
+    const found = inForceFor(sets, q.series, point.measuredOn, q.day, rank === 'point');
     if (found === null) continue;
     if ('conflict' in found) return conflictOf(found.conflict);
     return { set: found.set, rule: `limits.own.${rank}`, facts: { limit_set: found.set.id, title: found.set.title, basis: found.set.basis }, conflict: null, byOurChoice: false };

@@ -31,12 +31,16 @@ export class Joiner {
   readonly #byPoint = new Map<string, OpenSeries[]>();
   readonly #units = new Map<string, string>();
   readonly #whole: { readonly machine: string; readonly survey: number; readonly reading: Reading }[] = [];
+  readonly #faulty = new Set<string>();
   readonly #pointsDeclared: boolean;
+  readonly #pointsBroken: boolean;
   readonly #problems: Problems;
   convention: 'lag' | 'lead' | null = null;
 
-  constructor(pointsDeclared: boolean, problems: Problems) {
+  /** `pointsBroken`: points.csv is there and could not be read, so its readings tell nothing new. */
+  constructor(pointsDeclared: boolean, pointsBroken: boolean, problems: Problems) {
     this.#pointsDeclared = pointsDeclared;
+    this.#pointsBroken = pointsBroken;
     this.#problems = problems;
   }
 
@@ -59,6 +63,14 @@ export class Joiner {
 
   pointsOf(machine: string): string[] {
     return [...new Set((this.#byMachine.get(machine) ?? []).map((s) => s.point))];
+  }
+
+  markFaulty(machine: string, point: string): void {
+    this.#faulty.add(`${machine}\u0000${point}`);
+  }
+
+  isFaulty(machine: string, point: string): boolean {
+    return this.#faulty.has(`${machine}\u0000${point}`) && !this.#byPoint.has(`${machine}\u0000${point}`);
   }
 
   /** True where readings may stand at this point: declared, or no points.csv to declare it. */
@@ -113,6 +125,7 @@ export class Joiner {
 
   /** A series that points.csv does not declare since there is none: what its readings tell is all that is known. */
   #bring(entry: ReadingEntry, cells: Cells, machine: string, point: string, component: string): OpenSeries | null {
+    if (this.#pointsBroken) return null;
     const { quantity, detection, unitText } = entry;
     if (quantity === null) {
       cells.error('blank', 'quantity', '"quantity" is blank and no points.csv says what is measured here.', 'Give velocity, displacement, acceleration or your own word.');

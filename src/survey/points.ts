@@ -26,14 +26,22 @@ export interface PointEntry {
 
 export const seriesKey = (machine: string, point: string, quantity: string, detection: string | null): string => `${machine}\u0000${point}\u0000${quantity}\u0000${detection ?? ''}`;
 
-export function pointEntries(table: Table, peakMeans: PeakMeans, problems: Problems): PointEntry[] {
+export interface PointEntries {
+  readonly entries: readonly PointEntry[];
+  /** Points whose row has a problem of its own: their readings are not told as unknown too. */
+  readonly faulty: readonly { readonly machine: string; readonly point: string }[];
+}
+
+export function pointEntries(table: Table, peakMeans: PeakMeans, problems: Problems): PointEntries {
   const cells = new Cells(table, problems);
   const entries: PointEntry[] = [];
+  const faulty: { machine: string; point: string }[] = [];
   while (cells.next()) {
     const entry = pointEntry(cells, peakMeans);
     if (entry !== null) entries.push(entry);
+    else faulty.push({ machine: cells.text('machine') ?? '', point: cells.text('point') ?? '' });
   }
-  return entries;
+  return { entries, faulty };
 }
 
 function pointEntry(cells: Cells, peakMeans: PeakMeans): PointEntry | null {

@@ -70,7 +70,7 @@ export function readPlant(shell: ReadingShell, folder: string): { readonly plant
   const { settings, policy } = readSettings(found, reader);
   const tables = Object.fromEntries(PLANT_TABLES.map((name) => [name, found.tables.has(name) ? reader.table(name, COLUMNS[name].known, COLUMNS[name].required) : null])) as unknown as Tables;
   const names = new Names(rowsOf(tables['renames.csv'], problems, renameRow));
-  const register = registerOf(found, tables, settings.peakMeans, names, problems);
+  const register = registerOf(found.tables.has('points.csv'), tables, settings.peakMeans, names, problems);
   const surveys = surveysOf(found, reader, register, settings.peakMeans, names);
   const ledgers = {
     limits: rowsOf(tables['limits.csv'], problems, limitRow(settings.peakMeans)),

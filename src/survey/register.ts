@@ -4,7 +4,6 @@
  */
 import type { Component, ComponentRow, Machine, MachineRow } from '../plant/types.ts';
 import { Cells } from './cells.ts';
-import type { Found } from './find.ts';
 import { componentRow, implicitComponent, inOrder, machineRow, NO_MACHINE_ROW } from './machines.ts';
 import { Joiner } from './merge.ts';
 import { type Names, tellCaseTwins, tellUnknown } from './names.ts';
@@ -25,9 +24,9 @@ export class Register {
   readonly machinesDeclared: boolean;
   readonly #problems: Problems;
 
-  constructor(machinesDeclared: boolean, pointsDeclared: boolean, problems: Problems) {
+  constructor(machinesDeclared: boolean, points: 'declared' | 'broken' | 'absent', problems: Problems) {
     this.machinesDeclared = machinesDeclared;
-    this.joiner = new Joiner(pointsDeclared, problems);
+    this.joiner = new Joiner(points === 'declared', points === 'broken', problems);
     this.#problems = problems;
   }
 
@@ -68,8 +67,9 @@ export class Register {
   }
 }
 
-export function registerOf(found: Found, tables: Tables, peakMeans: PeakMeans, names: Names, problems: Problems): Register {
-  const register = new Register(found.tables.has('machines.csv'), found.tables.has('points.csv'), problems);
+/** A table that could not be read declares nothing: its own problem is told, not one for each id it would have held. */
+export function registerOf(hasPoints: boolean, tables: Tables, peakMeans: PeakMeans, names: Names, problems: Problems): Register {
+  const register = new Register(tables['machines.csv'] !== null, tables['points.csv'] !== null ? 'declared' : hasPoints ? 'broken' : 'absent', problems);
   readMachines(register, tables, problems);
   readComponents(register, tables, problems);
   readPoints(register, tables, peakMeans, names, problems);
@@ -108,7 +108,9 @@ function readPoints(register: Register, tables: Tables, peakMeans: PeakMeans, na
   const table = tables['points.csv'];
   if (table === null) return;
   const points = new Set<string>();
-  for (const entry of pointEntries(table, peakMeans, problems)) {
+  const { entries, faulty } = pointEntries(table, peakMeans, problems);
+  for (const { machine, point } of faulty) register.joiner.markFaulty(machine, point);
+  for (const entry of entries) {
     const place = { ...entry.cells, column: table.column('machine') + 1 };
     const machine = names.machine(entry.machine, null, () => true);
     if (register.machine(machine) === null) {
@@ -116,7 +118,10 @@ function readPoints(register: Register, tables: Tables, peakMeans: PeakMeans, na
       continue;
     }
     const component = componentFor(register, machine, entry.component, { ...place, column: table.column('component') + 1 || null }, problems);
-    if (component === null) continue;
+    if (component === null) {
+      register.joiner.markFaulty(machine, entry.point);
+      continue;
+    }
     const point = names.inner('point', machine, entry.point, null, () => true);
     points.add(`${machine} ${point}`);
     register.joiner.declare({ ...entry, machine, point }, component);

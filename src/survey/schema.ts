@@ -25,7 +25,7 @@ const number = z.string().transform((v, ctx): number => {
   return 0;
 });
 const texts = z.preprocess((v) => (v === '' || v === null || v === undefined ? [] : typeof v === 'string' ? [v] : v), z.array(z.string())).transform((list) => list.map((v) => v.normalize('NFC').trim()).filter((v) => v !== '')).default([]);
-const wordOf = <const W extends readonly [string, ...string[]]>(words: W) => z.preprocess(blankToNull, z.union([z.enum(words), z.null()])).default(null);
+const wordOf = <const W extends readonly [string, ...string[]]>(words: W) => z.preprocess(blankToNull, z.union([z.enum(words), z.null()], { error: `is none of: ${words.join(', ')}` })).default(null);
 
 const contractor = z.object({ name: text, address: text, contact: text, logo: text, accent: text });
 const displayUnit = z.union([z.string().transform((unit) => ({ unit, detection: null as string | null })), z.object({ unit: text, detection: text })]);

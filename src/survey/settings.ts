@@ -35,7 +35,7 @@ type Issues = { readonly issues: readonly { readonly path: readonly PropertyKey[
 function tell(yaml: YamlFile, error: Issues, problems: Problems): void {
   for (const issue of error.issues) {
     const path = issue.path.map((p) => (typeof p === 'symbol' ? String(p) : p));
-    problems.error('bad-value', yaml.place(path), `"${path.join('.')}": ${issue.message}.`, HINT);
+    problems.error('bad-value', yaml.place(path), `"${path.join('.')}"${issue.message.startsWith('is ') ? '' : ':'} ${issue.message}.`, HINT);
   }
 }
 

@@ -32,23 +32,18 @@ export function surveysOf(found: Found, reader: Folder, register: Register, peak
   for (const file of found.histories) readHistory(file, reader, heads, sources);
   const surveys = [...heads.values()].sort((a, b) => a.day - b.day || (a.id < b.id ? -1 : 1));
   const index = new Map(surveys.map((survey, i) => [survey.id, i]));
-  const counts = surveys.map(() => 0);
   const rounds = new Map<string, string>();
   for (const source of sources) {
     readingEntries(source.table, source.survey, peakMeans, problems, (entry, cells) => {
       const at = index.get(entry.survey);
       if (at === undefined) return;
       const survey = surveys[at] as Survey;
-      counts[at] = (counts[at] as number) + 1;
       const joined = idsOf(register, names, entry.machine, entry.point, survey.day, cells, problems);
       if (joined === null || !isOneRound(rounds, joined.machine, survey, cells)) return;
       register.joiner.join(entry, cells, joined.machine, joined.point, at, survey.day, register.componentIds(joined.machine)[0] as string);
     });
   }
   register.joiner.spread();
-  surveys.forEach((survey, i) => {
-    if (counts[i] === 0) problems.error('survey-without-readings', survey.place === null ? { file: `surveys/${survey.id}`, line: null } : { ...survey.place, line: null }, `The survey ${survey.id} has no readings.`, 'Fill in its readings.csv, or remove the folder.');
-  });
   return surveys;
 }
 
@@ -65,6 +60,10 @@ function readFolder(folder: FoundSurvey, reader: Folder, heads: Map<string, Surv
   const findings = folder.findings === null ? null : reader.table(folder.findings, FINDINGS_COLUMNS, ['finding', 'machine'], findingsHeader);
   const table = folder.readings === null ? null : reader.table(folder.readings, READINGS_COLUMNS, ['machine', 'point', 'value']);
   if (table !== null) sources.push({ table, survey: folder.id });
+  if (folder.readings === null || table?.rows.length === 0) {
+    const place = { file: folder.readings ?? folder.yaml ?? `surveys/${folder.id}`, line: null };
+    problems.error('survey-without-readings', place, `The survey ${folder.id} has no readings.`, 'Fill in its readings.csv, or remove the folder.');
+  }
   const captions = folder.captions === null ? null : reader.table(folder.captions, ['photo', 'caption'], ['photo', 'caption']);
   for (const path of folder.photos) reader.bytes(path);
   const photos: Photo[] = folder.photos.map((path) => ({ path, machine: '', point: null, caption: captionOf(captions, path, problems) }));
@@ -100,6 +99,7 @@ function idsOf(register: Register, names: Names, typedMachine: string, typedPoin
     return null;
   }
   if (typedPoint === null) return { machine, point: null };
+  if (register.joiner.isFaulty(machine, typedPoint)) return null;
   const declared = cells.table.column('point') + 1;
   const point = names.any ? names.inner('point', machine, typedPoint, day, (id) => register.joiner.pointsOf(machine).includes(id)) : typedPoint;
   if (register.joiner.knowsPoint(machine, point)) return { machine, point };
