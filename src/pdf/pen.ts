@@ -106,7 +106,11 @@ export class Pen {
         else if (run.kind === 'mark') {
           const { drawing } = run.token;
           content += `q 1 0 0 1 ${n(at)} ${n(y - drawing.height * 0.88)} cm ${toPdfOperators(drawing, this.#inks)} Q\n`;
-        } else this.#pageNumber(node, run.token, at, y);
+        } else {
+          if (content !== '') this.marked(node, content);
+          content = '';
+          this.#pageNumber(node, run.token, at, y);
+        }
         at += run.width;
       }
       if (content !== '') this.marked(node, content);
