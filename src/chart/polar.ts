@@ -24,7 +24,8 @@ export function polarPlot(input: PolarInput): Drawing {
   const { from, to, q, size } = input;
   const middle = size / 2;
   const radius = middle - 20;
-  const most = Math.max(from?.amplitude ?? 0, to?.amplitude ?? 0, q ?? 0) * 1.15 || 1;
+  // The circle of q about the vector before stays inside the plot.
+  const most = Math.max((from?.amplitude ?? 0) + (from === null ? 0 : (q ?? 0)), to?.amplitude ?? 0) * 1.1 || 1;
   const place = (v: Vector): { x: number; y: number } => {
     const angle = (v.lagDeg * Math.PI) / 180;
     const r = (v.amplitude / most) * radius;
