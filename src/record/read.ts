@@ -3,15 +3,13 @@
  * future ones refused with a hint.
  */
 import { UserError } from '../shell/types.ts';
-import { RECORD } from './order.ts';
+import { recordFault } from './check.ts';
 import { RECORD_FORMAT, type SwayfolioRecord } from './types.ts';
 
 type Upgrade = (record: Record<string, unknown>) => Record<string, unknown>;
 
 /** Step n makes format n + 2 of format n + 1; none yet, since format 1 is the first. */
 const UPGRADES: readonly Upgrade[] = [];
-
-const LISTS = ['surveys', 'policy', 'limit_sets', 'cautions', 'machines', 'components', 'measurements', 'actions', 'coverage', 'plant_over_time', 'problems', 'inputs'];
 
 /** Throws UserError for what is no record of swayfolio, or one of a later format. */
 export function readRecord(text: string): SwayfolioRecord {
@@ -21,10 +19,8 @@ export function readRecord(text: string): SwayfolioRecord {
   if (format > RECORD_FORMAT) throw new UserError(`The record has format ${format}; this swayfolio reads up to ${RECORD_FORMAT}.`, 'Use the version of swayfolio that wrote it, or a later one.');
   let record = value;
   for (const upgrade of UPGRADES.slice(format - 1)) record = upgrade(record);
-  const missing = RECORD.find((key) => !(key in record));
-  if (missing !== undefined) throw new UserError(`The record lacks "${missing}".`, 'The file may be cut off; take it from the archive again.');
-  const broken = LISTS.find((key) => !Array.isArray(record[key]));
-  if (broken !== undefined) throw new UserError(`The record's "${broken}" is no list.`, 'The file may have been edited; take it from the archive again.');
+  const fault = recordFault(record);
+  if (fault !== null) throw new UserError(`The record is not whole: ${fault}.`, 'The file may be cut off or edited; take it from the archive again.');
   if ((record['cautions'] as unknown[]).length === 0) throw new UserError('The record has no cautions; no report is made without them.', 'Take the record from the archive again.');
   return record as unknown as SwayfolioRecord;
 }

@@ -1,146 +1,66 @@
 /**
- * JSON Schema (draft 2020-12) of record.json, published with the package. Each object is told in a line of `name:type`
- * pairs: s text, n number, i whole number, b yes or no, S list of texts, d date, w:… a word of a closed list, o:… an object,
- * l:… a list of objects; `?` also null, `*` may be absent.
+ * JSON Schema (draft 2020-12) of record.json, published with the package. In: the table of fields. Out: the schema. Never:
+ * a field of its own.
  */
-import { KINDS, MEASURED_ON, STATUSES, SURVEY_KINDS, URGENCIES } from '../plant/types.ts';
-import { DETECTIONS } from '../measure/detection.ts';
-import { ORDERS, RECORD } from './order.ts';
-import { DOUBT_KINDS, RECORD_FORMAT } from './types.ts';
-
-const WORDS: Readonly<Record<string, readonly string[]>> = {
-  urgency: URGENCIES,
-  condition: ['A', 'B', 'C', 'D', 'r-A', 'r-B', 'r-C', 'r-D', 'not assessed'],
-  zone: ['A', 'B', 'C', 'D'],
-  ratio: ['r-A', 'r-B', 'r-C', 'r-D'],
-  basis: ['standard', 'own', 'ratio'],
-  setbasis: ['maker', 'contract', 'statistics', 'owner', 'standard'],
-  confidence: ['confirmed', 'one source', 'recalled'],
-  sure: ['low', 'medium', 'high'],
-  travel: ['fast', 'rising', 'step', 'steady', 'falling', 'held'],
-  status: [...STATUSES, 'missing'],
-  doubt: DOUBT_KINDS,
-  effect: ['held', 're-measure', 'note'],
-  detection: DETECTIONS,
-  on: MEASURED_ON,
-  direction: ['horizontal', 'vertical', 'axial', 'radial'],
-  bound: ['<', '>'],
-  by: ['exact', 'sine'],
-  trend: ['none', 'small', 'ramp', 'plateau', 'step'],
-  criticality: ['critical', 'essential', 'general'],
-  ledger: ['open', 'ordered', 'done', 'rejected'],
-  origin: ['analyst', 'ledger', 'drafted'],
-  result: ['verified', 'not verified', 'not yet measured'],
-  covered: ['measured', 'partly measured', 'not measured', 'excused', 'not due', 'out of scope'],
-  survey: SURVEY_KINDS,
-  kind: KINDS,
-  mark: ['std', 'common practice', 'own', 'recalled'],
-  severity: ['error', 'warning', 'note'],
-  language: ['en', 'de', 'es', 'fr'],
-  paper: ['A4', 'Letter'],
-  frequency: ['Hz', 'CPM'],
-};
-
-const FIELDS: Readonly<Record<string, string>> = {
-  tool: 'name:s version:s',
-  issue: 'number:s revision:i issued_on:d replaces:s? reason:s? previous_manifest:s?',
-  plant: 'plant:s client:s? site:s? contract:s? procedure:s? contractor:o:contractor language:w:language paper:w:paper units:m frequency_unit:w:frequency next_stops:l:next_stops retention:s? distribution:S',
-  contractor: 'name:s? address:s? contact:s? logo:s? accent:s?',
-  next_stops: 'date:d area:s?',
-  survey: 'id:s from:d to:d kind:w:survey scope:o:scope people:l:people instruments:l:instruments sensors:l:sensors field_check:s? process:s? weather:s? remarks:s? issue_date:d? reviewed_by:s? approved_by:s? notified:l:notified photos:l:photos',
-  surveys: 'id:s date:d from:d to:d kind:w:survey scope:o:scope people:l:people instruments:l:instruments file:s? conditions:m',
-  scope: 'all:b areas:S routes:S machines:S',
-  people: 'name:s role:s? category:s? certificate:s? expires:d?',
-  instruments: 'id:s make:s? model:s? serial:s? band:s? calibrated_on:d? calibration_due:d? certificate:s? laboratory:s?',
-  sensors: 'id:s serial:s? sensitivity:s? mounting:s? calibration_due:d?',
-  notified: 'who:s when:s? how:s? about:s?',
-  photos: 'path:s machine:s point:s? caption:s?',
-  policy: 'id:s value:n unit:s mark:w:mark about:s overridden:b',
-  limit_sets: 'id:s title:s basis:w:setbasis source:s? edition:s? table:s? confidence:w?:confidence boundaries:o:boundaries quantity:s unit:s detection:w?:detection low_hz:n? high_hz:n? valid_from:d? approved_by:s? approved_on:d?',
-  boundaries: 'ab:n? bc:n? cd:n?',
-  machines: 'machine:s name:s? area:s? route:s? family:s? criticality:w:criticality criticality_stated:b condition:w:condition measured_of:N previous_condition:w?:condition governed_by:o?:governed_by urgency:w?:urgency urgency_by:o?:urgency_by rule:s? reason:s facts:m computed_urgency:w?:urgency override:o?:override spare:o?:spare accepted:l:accepted indications:l:indications doubts:l:doubts cannot_see:S events:l:events',
-  governed_by: 'component:s point:s quantity:s detection:w?:detection',
-  urgency_by: 'component:s point:s quantity:s detection:w?:detection',
-  override: 'urgency:w:urgency by:s reason:s until:d? lowers_now:b',
-  spare: 'machine:s proven:b reason:s facts:m',
-  accepted: 'point:s? quantity:s? up_to:n unit:s? until:d? by:s? reason:s? in_force:b',
-  indications: 'rule:s message:s confirm:s mark:w:mark facts:m',
-  doubts: 'kind:w:doubt message:s effect:w:effect facts:m',
-  events: 'date:d component:s? point:s? quantity:s? event:s new_baseline:b serial_out:s? serial_in:s? notes:s?',
-  components: 'machine:s component:s implicit:b kind:w?:kind condition:w:condition governed_by:o?:governed_by limit_set:s? limit_reason:s power_kw:n? speed_rpm:n?',
-  measurements: 'machine:s component:s point:s location:s? direction:w?:direction quantity:s unit:s detection:w?:detection measured_on:w?:on low_hz:n? high_hz:n? state:s? speed_rpm:n? load_pct:n? instrument:s? measured_by:s? taken_at:s? remark:s? phase:o?:phase status:w:status value:n? typed:s? typed_unit:s? bound:w?:bound source:o?:source zone:w?:zone ratio_class:w?:ratio zone_basis:w?:basis no_zone_because:s? near_boundary:s? held:o?:held limit_set:s? limit_reason:s limits:o?:limits baseline:o?:baseline previous:o?:previous change:o?:change from_baseline:o?:from_baseline travel:w?:travel urgency:w?:urgency rule:s? trend:o?:trend forecast:m? sisters:m? doubts:l:doubts notes:S history:o:history',
-  phase: 'amplitude:n? lag_deg:n reference:s?',
-  source: 'file:s line:i',
-  held: 'zone:w:condition date:d',
-  limits: 'ab:n? bc:n? cd:n? alarm:n? trip:n? of:o:of by:w:by',
-  of: 'ab:n? bc:n? cd:n? unit:s detection:w?:detection',
-  baseline: 'value:n from:s n:i provisional:b',
-  previous: 'value:n date:d',
-  change: 'absolute:n percent:n? db:n? of_bc:n? significant:b? vector:o?:vector',
-  from_baseline: 'absolute:n percent:n? db:n? of_bc:n? significant:b? vector:o?:vector',
-  vector: 'amplitude:n lag_deg:n',
-  trend: 'kind:w:trend db_per_year:n? slope_per_year:n? rise:n? p:n? n:i',
-  history: 'value:V typed:T* why:m line:V file:T*',
-  actions: 'rank:i action:s finding:s? machine:s component:s? points:S urgency:w?:urgency computed_urgency:w?:urgency rule:s? reason:s facts:m above_next_because:s? observation:s? likely_cause:s? less_likely:s? confidence:w?:sure downtime_h:n? parts:s? recommendation:s? check_first:s? needs_stop:b? consequence:s? due:d? owner:s? work_order:s? status:w:ledger origin:w:origin raised:d? closed:d? closed_by:s? as_found:s? times_reported:i overdue_days:i? carried_from:s? confirmed:d? override:o?:override verification:o?:verification value:n? unit:s? limit:n? notes:s?',
-  verification: 'target:o?:target before:o?:before after:o?:after result:w:result',
-  target: 'point:s quantity:s value:n unit:s',
-  before: 'value:n date:d',
-  after: 'value:n date:d',
-  coverage: 'machine:s due:b in_scope:b measured:i of:i status:w:covered why:s? misses_in_a_row:i last_measured:d? next_due:d? interval_days:n?',
-  plant_over_time: 'survey:s date:d conditions:m measured:i of:i open_actions:i closed_actions:i',
-  problems: 'code:s severity:w:severity file:s line:i? column:i? message:s hint:s?',
-  inputs: 'path:s bytes:i sha256:s',
-};
+import { type Field, OBJECTS, RECORD_FIELDS, WORDS } from './fields.ts';
+import { UNIT_FIELDS } from './order.ts';
+import { RECORD_FORMAT } from './types.ts';
 
 type Schema = Readonly<Record<string, unknown>>;
 
-const DATE: Schema = { type: 'string', pattern: '^\\d{4}-\\d{2}-\\d{2}$' };
+const TEXT: Schema = { type: 'string' };
+const FACT: Schema = { type: ['string', 'number', 'boolean', 'null', 'array'], items: { type: ['string', 'number'] } };
+const mapOf = (values: Schema): Schema => ({ type: 'object', additionalProperties: values });
+
 const PLAIN: Readonly<Record<string, Schema>> = {
-  s: { type: 'string' }, n: { type: 'number' }, i: { type: 'integer' }, b: { type: 'boolean' }, d: DATE, m: { type: 'object' }, S: { type: 'array', items: { type: 'string' } },
-  N: { type: 'array', items: { type: 'integer' }, minItems: 2, maxItems: 2 }, V: { type: 'array', items: { type: ['number', 'null'] } }, T: { type: 'array', items: { type: ['string', 'null'] } },
+  s: TEXT, n: { type: 'number' }, i: { type: 'integer' }, b: { type: 'boolean' },
+  d: { type: 'string', pattern: '^\\d{4}-\\d{2}-\\d{2}$' },
+  S: { type: 'array', items: TEXT },
+  V: { type: 'array', items: { type: ['number', 'null'] } },
+  T: { type: 'array', items: { type: ['string', 'null'] } },
+  P: { type: 'array', items: { type: 'integer' }, minItems: 2, maxItems: 2 },
+  F: mapOf(FACT), C: mapOf({ enum: WORDS['condition'] }), W: mapOf(TEXT),
+  I: { type: 'object', propertyNames: { enum: WORDS['condition'] }, additionalProperties: { type: 'integer' } },
 };
 
-function typeSchema(type: string): Schema {
-  const [sign = '', name = ''] = type.split(':');
-  const isNull = sign.endsWith('?');
-  const kind = sign.replace(/[?*]$/, '');
-  const reference = { $ref: `#/$defs/${name}` };
-  const schema: Schema = kind === 'w' ? { enum: WORDS[name] } : kind === 'o' ? reference : kind === 'l' ? { type: 'array', items: reference } : (PLAIN[kind] as Schema);
-  return isNull ? { anyOf: [schema, { type: 'null' }] } : schema;
+function fieldSchema(field: Field): Schema {
+  const reference = { $ref: `#/$defs/${field.of}` };
+  const byKind: Readonly<Record<string, Schema>> = {
+    w: { enum: WORDS[field.of] }, o: reference, l: { type: 'array', items: reference }, U: mapOf(objectSchema(UNIT_FIELDS)),
+  };
+  const schema = field.kind === 'U' || field.of !== '' ? byKind[field.kind] : PLAIN[field.kind];
+  if (schema === undefined) throw new Error(`The table of fields has no kind "${field.kind}".`);
+  return field.orNull ? { anyOf: [schema, { type: 'null' }] } : schema;
 }
 
-function objectSchema(fields: string): Schema {
-  const pairs = fields.split(' ').map((field) => [field.slice(0, field.indexOf(':')), field.slice(field.indexOf(':') + 1)] as const);
+function objectSchema(fields: readonly Field[]): Schema {
   return {
     type: 'object',
-    properties: Object.fromEntries(pairs.map(([name, type]) => [name, typeSchema(type)])),
-    required: pairs.filter(([, type]) => !type.endsWith('*')).map(([name]) => name),
+    properties: Object.fromEntries(fields.map((field) => [field.name, fieldSchema(field)])),
+    required: fields.filter((field) => !field.orAbsent).map((field) => field.name),
     additionalProperties: false,
   };
 }
 
-const ONE: ReadonlySet<string> = new Set(['tool', 'plant', 'survey']);
+/** A forecast is dates or the reason why there are none. */
+const FORECAST: Schema = { anyOf: [{ required: ['boundary', 'earliest', 'likely', 'latest', 'range'] }, { required: ['none'], maxProperties: 1 }] };
 
-function topSchema(key: string): Schema {
-  if (key === 'format') return { const: RECORD_FORMAT };
-  if (key === 'policy_hash') return { type: 'string', pattern: '^[0-9a-f]{64}$' };
-  if (key === 'cautions') return { type: 'array', items: { type: 'string' }, minItems: 1 };
-  if (key === 'issue') return typeSchema('o?:issue');
-  return typeSchema(ONE.has(key) ? `o:${key}` : `l:${key}`);
-}
+/** What the table cannot say of the keys at the top. */
+const AT_TOP: Readonly<Record<string, Schema>> = {
+  format: { const: RECORD_FORMAT },
+  policy_hash: { type: 'string', pattern: '^[0-9a-f]{64}$' },
+  cautions: { type: 'array', items: TEXT, minItems: 1 },
+};
 
 export function recordJsonSchema(): Schema {
+  const top = objectSchema(RECORD_FIELDS);
   return {
     $schema: 'https://json-schema.org/draft/2020-12/schema',
     title: 'record.json of a swayfolio report',
-    type: 'object',
-    properties: Object.fromEntries(RECORD.map((key) => [key, topSchema(key)])),
-    required: [...RECORD],
-    additionalProperties: false,
-    $defs: Object.fromEntries(Object.entries(FIELDS).map(([name, fields]) => [name, objectSchema(fields)])),
+    ...top,
+    properties: { ...(top['properties'] as Schema), ...AT_TOP },
+    $defs: Object.fromEntries(
+      Object.entries(OBJECTS).map(([name, fields]) => [name, name === 'forecast' ? { ...objectSchema(fields), ...FORECAST } : objectSchema(fields)]),
+    ),
   };
 }
-
-/** Names of fields by object, for the test that schema and key order agree. */
-export const schemaFields = (name: string): string[] => (FIELDS[name] ?? '').split(' ').map((f) => f.slice(0, f.indexOf(':')));
-export const orderedObjects = (): string[] => Object.keys(ORDERS);

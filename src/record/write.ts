@@ -24,14 +24,14 @@ function topText(key: string, value: unknown): string {
 
 function text(value: unknown, key: string, path: string): string {
   if (value === null || value === undefined) return 'null';
-  if (typeof value === 'number') return numberText(value, path);
+  if (typeof value === 'number') return numberText(value, path, key);
   if (typeof value !== 'object') return JSON.stringify(value);
   if (Array.isArray(value)) return `[${value.map((item) => text(item, key, path)).join(',')}]`;
   return MAPS.has(key) ? mapText(value as Fields, key, path) : objectText(value as Fields, key, path);
 }
 
-function numberText(value: number, path: string): string {
-  if (!Number.isFinite(value)) throw new Error(`${path} is ${value}, which no record can hold.`);
+function numberText(value: number, path: string, key: string): string {
+  if (!Number.isFinite(value)) throw new Error(`${path === key ? path : `${path} ${key}`} is ${value}, which no record can hold.`);
   if (Number.isInteger(value)) return String(value);
   return String(Number(value.toPrecision(SIGNIFICANT)));
 }
@@ -57,7 +57,7 @@ function fieldsText(value: Fields, order: Order, path: string): string {
     const field = value[key];
     if (field === undefined) continue;
     known += 1;
-    parts.push(`"${key}":${text(field, key, path)}`);
+    parts.push(`"${key}":${text(field, key, typeof field === 'object' ? `${path}.${key}` : path)}`);
   }
   if (known !== Object.keys(value).length) checkKeys(value, order, path);
   return `{${parts.join(',')}}`;
