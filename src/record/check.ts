@@ -32,6 +32,11 @@ const PLAIN: Readonly<Record<string, readonly [(v: unknown) => boolean, string]>
   W: [isMapOf(isText), 'texts'],
 };
 
+/** A forecast is dates, all of them, or the reason why there are none. */
+const FORECAST = (OBJECTS['forecast'] ?? []).map((field) => ({ ...field, orAbsent: false }));
+const FORECAST_DATES = FORECAST.filter((field) => field.name !== 'none');
+const FORECAST_NONE = FORECAST.filter((field) => field.name === 'none');
+
 /** E.g. `machines[2].condition is "E"; expected A, B …`; null where the record has its shape. */
 export const recordFault = (record: Fields): string | null => objectFault(record, RECORD_FIELDS, '');
 
@@ -55,6 +60,7 @@ function fieldFault(value: unknown, field: Field, parent: string): string | null
     const words = WORDS[field.of] ?? [];
     return words.includes(value as string) ? null : told(value, field, parent, words.join(', '));
   }
+  if (field.name === 'forecast' && isObject(value)) return objectFault(value, value['none'] === undefined ? FORECAST_DATES : FORECAST_NONE, path);
   if (field.kind === 'o') return value === undefined ? told(value, field, parent, 'an object') : objectFault(value, OBJECTS[field.of] ?? [], path);
   if (field.kind === 'U') return isObject(value) ? firstFault(Object.entries(value), UNIT_FIELDS, path) : told(value, field, parent, 'units by quantity');
   if (!Array.isArray(value)) return told(value, field, parent, 'a list');

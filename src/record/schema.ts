@@ -23,15 +23,16 @@ const PLAIN: Readonly<Record<string, Schema>> = {
   I: { type: 'object', propertyNames: { enum: WORDS['condition'] }, additionalProperties: { type: 'integer' } },
 };
 
-function fieldSchema(field: Field): Schema {
+function kindSchema(field: Field): Schema {
+  const plain = PLAIN[field.kind];
+  if (plain !== undefined) return plain;
+  if (field.kind === 'w') return { enum: WORDS[field.of] };
+  if (field.kind === 'U') return mapOf(objectSchema(UNIT_FIELDS));
   const reference = { $ref: `#/$defs/${field.of}` };
-  const byKind: Readonly<Record<string, Schema>> = {
-    w: { enum: WORDS[field.of] }, o: reference, l: { type: 'array', items: reference }, U: mapOf(objectSchema(UNIT_FIELDS)),
-  };
-  const schema = field.kind === 'U' || field.of !== '' ? byKind[field.kind] : PLAIN[field.kind];
-  if (schema === undefined) throw new Error(`The table of fields has no kind "${field.kind}".`);
-  return field.orNull ? { anyOf: [schema, { type: 'null' }] } : schema;
+  return field.kind === 'o' ? reference : { type: 'array', items: reference };
 }
+
+const fieldSchema = (field: Field): Schema => (field.orNull ? { anyOf: [kindSchema(field), { type: 'null' }] } : kindSchema(field));
 
 function objectSchema(fields: readonly Field[]): Schema {
   return {
@@ -42,8 +43,11 @@ function objectSchema(fields: readonly Field[]): Schema {
   };
 }
 
-/** A forecast is dates or the reason why there are none. */
-const FORECAST: Schema = { anyOf: [{ required: ['boundary', 'earliest', 'likely', 'latest', 'range'] }, { required: ['none'], maxProperties: 1 }] };
+/** A forecast is dates, all of them, or the reason why there are none. */
+function forecastSchema(fields: readonly Field[]): Schema {
+  const whole = fields.map((field) => ({ ...field, orAbsent: false }));
+  return { anyOf: [objectSchema(whole.filter((field) => field.name !== 'none')), objectSchema(whole.filter((field) => field.name === 'none'))] };
+}
 
 /** What the table cannot say of the keys at the top. */
 const AT_TOP: Readonly<Record<string, Schema>> = {
@@ -59,8 +63,6 @@ export function recordJsonSchema(): Schema {
     title: 'record.json of a swayfolio report',
     ...top,
     properties: { ...(top['properties'] as Schema), ...AT_TOP },
-    $defs: Object.fromEntries(
-      Object.entries(OBJECTS).map(([name, fields]) => [name, name === 'forecast' ? { ...objectSchema(fields), ...FORECAST } : objectSchema(fields)]),
-    ),
+    $defs: Object.fromEntries(Object.entries(OBJECTS).map(([name, fields]) => [name, name === 'forecast' ? forecastSchema(fields) : objectSchema(fields)])),
   };
 }
