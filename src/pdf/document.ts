@@ -1,10 +1,10 @@
 /**
  * One PDF file over pdfkit. In: options of the report. Out: pages, fonts, bookmarks, attachments; small objects packed into
- * object streams with a cross-reference stream, deflated by pure JavaScript so that the same input gives the same bytes.
+ * object streams with a cross-reference stream. Deflated by Node's zlib: the same bytes on one Node major and CPU family.
  * Rests on members of pdfkit 0.20.2 that are not published (ref, _write, _refEnd, _finalize): the version is pinned, a test asserts them.
  */
+import { deflateSync } from 'node:zlib';
 import type { Font } from 'fontkit';
-import { zlibSync } from 'fflate';
 import PDFDocument from 'pdfkit';
 
 /** What pdfkit makes of a font; widths in thousandths. */
@@ -44,7 +44,7 @@ interface Base {
   addPage(): Base;
   addContent(text: string): Base;
   addNamedDestination(name: string, ...args: readonly unknown[]): void;
-  file(bytes: Uint8Array, options: Readonly<Record<string, unknown>>): Reference;
+  addNamedEmbeddedFile(name: string, ref: Reference): void;
   push(chunk: unknown): boolean;
   on(event: 'data', listener: (chunk: Uint8Array) => void): Base;
   on(event: 'end', listener: () => void): Base;
@@ -68,8 +68,7 @@ export interface DocumentOptions {
 }
 
 const POOL = 200;
-/** Same bytes on every CPU; level 6 as measured. */
-const deflate = (bytes: Uint8Array): Uint8Array => zlibSync(bytes, { level: 6 });
+const deflate = (bytes: Uint8Array): Uint8Array => deflateSync(bytes);
 
 /** pdfkit writes titles into the XMP unescaped: its own text form is escaped, its value is not. */
 class XmpText extends String {
@@ -189,6 +188,18 @@ export class PackedDocument extends BaseDocument {
     super._write(bytes);
     super._write('\nendstream');
     super._write('endobj');
+  }
+
+  /** An attached file as PDF/A-3 has it: an associated file of the document, with its day and size. */
+  attach(file: { readonly name: string; readonly mime: string; readonly description: string; readonly bytes: Uint8Array }, date: string): void {
+    const made = dateOf(date);
+    const stream = this.ref({ Type: 'EmbeddedFile', Subtype: file.mime.replace('/', '#2F'), Filter: 'FlateDecode', Params: { Size: file.bytes.length, CreationDate: made, ModDate: made } });
+    stream.end(deflate(file.bytes));
+    const [name, description] = [new String(file.name), new String(file.description)];
+    const spec = this.ref({ Type: 'Filespec', AFRelationship: 'Data', F: name, UF: name, Desc: description, EF: { F: stream } });
+    spec.end();
+    this.addNamedEmbeddedFile(file.name, spec);
+    this.catalogue['AF'] = [...((this.catalogue['AF'] as Reference[] | undefined) ?? []), spec];
   }
 
   override endMetadata(): void {

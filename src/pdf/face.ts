@@ -34,6 +34,16 @@ interface Face {
 
 const RIGHT_TO_LEFT = /[\u0590-\u08ff\ufb1d-\ufdff\ufe70-\ufefc]/;
 
+const glyphs = new WeakMap<Font, Map<string, ReturnType<Font['glyphForCodePoint']>>>();
+
+function glyphOf(font: Font, character: string): ReturnType<Font['glyphForCodePoint']> {
+  const kept = glyphs.get(font) ?? new Map();
+  glyphs.set(font, kept);
+  const found = kept.get(character) ?? font.glyphForCodePoint(character.codePointAt(0) ?? 0);
+  kept.set(character, found);
+  return found;
+}
+
 export class Type {
   readonly #faces: readonly Face[];
   readonly #words: Map<string, SetWord>[] = [new Map(), new Map(), new Map(), new Map()];
@@ -121,15 +131,21 @@ function parsedFont(bytes: Uint8Array): Font {
   if (kept !== undefined) return kept;
   const font = create(bytes as Buffer) as Font;
   const shaped = font.layout.bind(font);
-  const layout = (text: string, ...rest: []): ReturnType<Font['layout']> => (/^[\d.,+\-\u2212\u00a0 ]*$/.test(text) && rest.length === 0 ? plainRun(font, text) : shaped(text, ...rest));
+  const layout: Font['layout'] = (text, features, ...rest) => (isPlain(text) && features === undefined ? plainRun(font, text) : shaped(text, features, ...rest));
   Object.defineProperty(font, 'layout', { value: layout });
   parsedFonts.set(bytes, font);
   return font;
 }
 
-/** Digits and signs have neither kerning nor ligatures in tabular figures: glyph by glyph, in fresh objects since pdfkit scales them in place. */
+/**
+ * Numbers, and what has a digit in it (ids, dates, file names with lines), mostly stands once in a report: shaping each for its
+ * kerning would be half of the whole time. Tabular figures have none.
+ */
+const isPlain = (text: string): boolean => /^[\x20-\x7e\u2011\u2212\u00a0\u202f]*$/.test(text) && /\d|^[^A-Za-z]*$/.test(text);
+
+/** Glyph by glyph, in fresh objects since pdfkit scales them in place. */
 function plainRun(font: Font, text: string): ReturnType<Font['layout']> {
-  const glyphs = [...text].map((c) => font.glyphForCodePoint(c.codePointAt(0) ?? 0));
+  const glyphs = [...text].map((c) => glyphOf(font, c));
   const positions = glyphs.map((g) => ({ xAdvance: g.advanceWidth, yAdvance: 0, xOffset: 0, yOffset: 0 }));
   const run = { glyphs, positions, get advanceWidth(): number { return positions.reduce((sum, p) => sum + p.xAdvance, 0); } };
   return run as unknown as ReturnType<Font['layout']>;

@@ -2,7 +2,7 @@
  * Photos and logos. In: JPEG or PNG bytes. Out: an image XObject. JPEG data go in as they are, without their metadata (a
  * photo knows where it was taken) and turned upright; PNG pixels are packed anew. Never: an image that is decoded in part.
  */
-import { unzlibSync, zlibSync } from 'fflate';
+import { deflateSync, inflateSync } from 'node:zlib';
 import type { PackedDocument, Reference } from './document.ts';
 
 export interface PdfImage {
@@ -137,7 +137,7 @@ function pngImage(bytes: Uint8Array, name: string): PdfImage {
     width,
     height,
     matrix: (x, y, w, h) => turned(1, x, y, w, h),
-    write: (document) => imageObject(document, width, height, 'DeviceRGB', 'FlateDecode', zlibSync(pngPixels(bytes, view, width, height, colour), { level: 6 })),
+    write: (document) => imageObject(document, width, height, 'DeviceRGB', 'FlateDecode', deflateSync(pngPixels(bytes, view, width, height, colour))),
   };
 }
 
@@ -159,7 +159,7 @@ function pngPixels(bytes: Uint8Array, view: DataView, width: number, height: num
     to += part.length;
   }
   const channels = CHANNELS[colour] as number;
-  const rows = unfiltered(unzlibSync(packed), width * channels, height, channels);
+  const rows = unfiltered(inflateSync(packed), width * channels, height, channels);
   const rgb = new Uint8Array(width * height * 3);
   for (let i = 0; i < width * height; i += 1) {
     const at = i * channels;

@@ -4,7 +4,7 @@
  */
 import type { BlockContext } from './block.ts';
 import { sectionBoxes } from './boxes.ts';
-import { dateOf, PackedDocument, type Outline, pdfText, type Reference } from './document.ts';
+import { type Outline, PackedDocument, pdfText, type Reference } from './document.ts';
 import { Type } from './face.ts';
 import { Flow } from './flow.ts';
 import { imageOf, type PdfImage } from './image.ts';
@@ -25,8 +25,7 @@ export async function renderPdf(input: PdfInput): Promise<PdfOutput> {
   writeOutline(document, job.pen);
   for (const file of input.attachments) {
     if (input.profile === 'PDF/A-1b') break;
-    const made = dateOf(input.date);
-    document.file(file.bytes, { name: file.name, type: file.mime, description: file.description, relationship: 'Data', creationDate: made, modifiedDate: made });
+    document.attach(file, input.date);
   }
   document.end();
   await ended;
