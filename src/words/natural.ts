@@ -22,7 +22,7 @@ export function naturalOrder(a: string, b: string): number {
       j += 1;
     }
   }
-  return a.length - i - (b.length - j) || (a < b ? -1 : a > b ? 1 : 0);
+  return a.length - i - (b.length - j) || a.length - b.length || (a < b ? -1 : a > b ? 1 : 0);
 }
 
 function runAt(text: string, from: number): string {

@@ -28,8 +28,9 @@ function significantDecimals(value: number): number {
   return Math.min(MOST_DECIMALS, Math.max(0, SIGNIFICANT - 1 - exponent));
 }
 
-/** Decimals a number was given with, up to nine. */
-function ownDecimals(value: number): number {
+/** Decimals a number was given with, up to nine; what lies beyond twelve digits is the computer's, not the giver's. */
+function ownDecimals(number: number): number {
+  const value = Number(number.toPrecision(12));
   for (let d = 0; d < MOST_DECIMALS; d += 1) if (Number(value.toFixed(d)) === value) return d;
   return MOST_DECIMALS;
 }
