@@ -14,6 +14,8 @@ export interface Box {
   readonly before: number;
   /** Stays on one page with the next box. */
   keepNext: boolean;
+  /** Stays with the next box where the whole section fits on a page. */
+  keepInSection?: boolean;
   /** Repeated at the top of each further page while its table goes on. */
   readonly header?: { readonly height: number; draw(pen: Pen, x: number, y: number): void } | null;
   /** Begins a page. */
@@ -21,6 +23,8 @@ export interface Box {
   anchor?: string | null;
   readonly heading?: Omit<OutlineEntry, 'page' | 'y'>;
   draw(pen: Pen, x: number, y: number): void;
+  /** Height of the least first part of a box that may be split at the foot of a page. */
+  readonly least?: number;
   /** The part that fits into `room` and the rest; null when nothing sensible fits. */
   split?(room: number): readonly [Box, Box] | null;
 }
@@ -40,6 +44,8 @@ export interface Picture {
   draw(pen: Pen, node: Node, x: number, y: number): void;
 }
 
+/** Room left on a page for the caption and heading of a figure as tall as it may be, points. */
+const CAPTION_ROOM = 60;
 const PHOTO_HEIGHT = 190;
 const LOGO_HEIGHT = 40;
 
@@ -47,7 +53,7 @@ export function pictureOf(context: BlockContext, figure: Element, width: number)
   const { 'data-chart': chart, 'data-photo': photo, 'data-logo': logo, 'data-key': key = '' } = figure.attributes;
   if (chart !== undefined) {
     const drawing = context.chart(chart, key);
-    const scale = Math.min(1, width / drawing.width);
+    const scale = Math.min(1, width / drawing.width, (context.pageHeight - CAPTION_ROOM) / drawing.height);
     return { width: drawing.width * scale, height: drawing.height * scale, draw: (pen, node, x, y) => pen.drawing(node, drawing, x, y, scale) };
   }
   const image = context.picture(photo !== undefined ? 'photo' : 'logo', photo ?? logo ?? key);

@@ -36,7 +36,7 @@ const anchorBox = (anchor: string): Box => ({ height: 0, before: 0, keepNext: tr
 function keepTogether(boxes: readonly Box[], pageHeight: number): void {
   const height = boxes.reduce((sum, b) => sum + b.height + b.before, 0);
   if (height > pageHeight) return;
-  for (const box of boxes.slice(0, -1)) box.keepNext = true;
+  for (const box of boxes.slice(0, -1)) box.keepInSection = true;
 }
 
 function blockBoxes(context: BlockContext, element: Element, parent: Node): Box[] {

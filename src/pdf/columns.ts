@@ -12,6 +12,8 @@ export interface Need {
 const LONGEST_WORD = 0.28;
 /** Marks and numbers stay on one line up to this width, points. */
 const UNBROKEN = 70;
+/** A text column in a crowded table keeps room for a few letters, points. */
+const NARROWEST = 30;
 
 export function columnWidths(needs: readonly Need[], available: number, padding: number): number[] {
   const natural = needs.map((n) => n.natural + padding);
@@ -19,8 +21,20 @@ export function columnWidths(needs: readonly Need[], available: number, padding:
   if (total <= available) return withRest(needs, natural, available - total);
   const least = needs.map((n) => (n.kind === 'text' ? Math.min(n.least, available * LONGEST_WORD) : Math.max(n.least, Math.min(n.natural, UNBROKEN))) + padding);
   const sum = least.reduce((a, b) => a + b, 0);
-  if (sum >= available) return least.map((w) => (w * available) / sum);
+  if (sum >= available) return shrunk(needs, least, sum - available);
   return shared(natural, least, available - sum);
+}
+
+/** Text columns give way first, down to a few letters; then all. */
+function shrunk(needs: readonly Need[], least: readonly number[], excess: number): number[] {
+  const spare = least.map((w, i) => (needs[i]?.kind === 'text' ? Math.max(0, w - NARROWEST) : 0));
+  const total = spare.reduce((a, b) => a + b, 0);
+  const share = total === 0 ? 0 : Math.min(1, excess / total);
+  const widths = least.map((w, i) => w - (spare[i] as number) * share);
+  const left = excess - total * share;
+  if (left <= 0.001) return widths;
+  const sum = widths.reduce((a, b) => a + b, 0);
+  return widths.map((w) => (w * (sum - left)) / sum);
 }
 
 /** Room that is left goes to the text columns, by their share; a table without text stays as narrow as it is. */

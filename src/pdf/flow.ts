@@ -28,18 +28,20 @@ export class Flow {
   }
 
   add(boxes: readonly Box[]): void {
+    /** Sections kept together that are more than a page with what leads to them are let go up to here. */
+    let loose = 0;
     for (let i = 0; i < boxes.length; i += 1) {
       const box = boxes[i] as Box;
       if (this.#pen.pages.length === 0 || (box.newPage === true && !this.#fresh)) this.#newPage();
-      const chain = chainHeight(boxes, i);
-      const room = this.#bottom - this.#y - (this.#fresh ? 0 : box.before);
-      if (chain > room && !this.#fresh && (chain <= this.pageHeight || box.height > room)) {
-        if (box.split === undefined || !this.#placeSplit(box, room)) {
-          this.#newPage();
-          this.#repeatHeader(box);
-          this.#placeTall(box);
-        }
-      } else this.#placeTall(box);
+      const whole = chainOf(boxes, i, true);
+      if (whole.height > this.pageHeight) loose = Math.max(loose, whole.end);
+      const need = i < loose ? chainOf(boxes, i, false).height : whole.height;
+      const room = this.#bottom - this.#y - box.before;
+      if (!this.#fresh && need > room + 0.01 && (need <= this.pageHeight || leastOf(box) > room)) {
+        this.#newPage();
+        this.#repeatHeader(box);
+      }
+      this.#placeTall(box);
     }
   }
 
@@ -59,20 +61,8 @@ export class Flow {
     this.#place(rest);
   }
 
-  /** Splits a row at the foot of a page only when it is too tall for most of a page: short rows move on whole. */
-  #placeSplit(box: Box, room: number): boolean {
-    if (box.height < this.pageHeight * 0.5) return false;
-    const parts = box.split?.(room) ?? null;
-    if (parts === null) return false;
-    this.#place({ ...parts[0], anchor: box.anchor ?? null });
-    this.#newPage();
-    this.#repeatHeader(box);
-    this.#placeTall(parts[1]);
-    return true;
-  }
-
   #repeatHeader(box: Box): void {
-    if (box.header == null) return;
+    if (box.header == null || box.header.height > this.pageHeight / 3) return;
     box.header.draw(this.#pen, MARGIN.left, this.#y);
     this.#y += box.header.height;
   }
@@ -88,13 +78,18 @@ export class Flow {
   }
 }
 
-/** Height of a box and those it must stay with. */
-function chainHeight(boxes: readonly Box[], from: number): number {
+/** What must fit where a box begins: a tall one may be split after its least part. */
+const leastOf = (box: Box): number => Math.min(box.height, box.least ?? box.height);
+
+/** Height of a box and those it must stay with, and the index after them. */
+function chainOf(boxes: readonly Box[], from: number, withSections: boolean): { readonly height: number; readonly end: number } {
   let height = 0;
-  for (let i = from; i < boxes.length; i += 1) {
-    const box = boxes[i] as Box;
-    height += box.height + (i === from ? 0 : box.before);
-    if (!box.keepNext) break;
+  let end = from;
+  for (; end < boxes.length; end += 1) {
+    const box = boxes[end] as Box;
+    const goesOn = end + 1 < boxes.length && (box.keepNext || (withSections && box.keepInSection === true));
+    height += (goesOn ? box.height : leastOf(box)) + (end === from ? 0 : box.before);
+    if (!goesOn) break;
   }
-  return height;
+  return { height, end: end + 1 };
 }

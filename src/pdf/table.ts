@@ -11,13 +11,19 @@ import { STYLES } from './sheet.ts';
 import type { Node } from './tags.ts';
 
 const PAD = { x: 4, y: 2.6 } as const;
+/** A figure in a cell is at most this wide, and as narrow as its column, points. */
+const WIDEST_FIGURE = 200;
+/** A row taller than this share of the page is split where the page ends; shorter ones move on whole. */
+const SPLIT_FROM = 0.5;
+/** No part of a split row is shorter, in lines. */
+const LEAST_LINES = 2;
 
 interface Cell {
   readonly tokens: readonly Token[];
   readonly node: Node | null;
   readonly column: number;
   readonly span: number;
-  readonly figure: { readonly picture: Picture; readonly node: Node | null } | null;
+  readonly figure: { readonly element: Element; readonly picture: Picture; readonly node: Node | null } | null;
   /** Width before and after the decimal point, for numbers. */
   readonly point: { readonly before: number; readonly after: number } | null;
   readonly isHead: boolean;
@@ -45,15 +51,16 @@ export function tableBoxes(context: BlockContext, table: Element, parent: Node):
   const node = context.structure.node('Table', parent);
   const head = elements(table, 'thead').flatMap((part) => rowsOf(context, part, context.structure.node('THead', node), kinds, true));
   const body = elements(table, 'tbody').flatMap((part) => rowsOf(context, part, context.structure.node('TBody', node), kinds, false));
-  const columns = Math.max(kinds.length, ...[...head, ...body].map((r) => r.cells.reduce((sum, c) => sum + c.span, 0)));
+  const columns = [...head, ...body].reduce((most, r) => Math.max(most, r.cells.reduce((sum, c) => sum + c.span, 0)), kinds.length);
   const all = Array.from({ length: columns }, (_, i) => kinds[i] ?? 'text');
   const grid = gridOf(context, all, [...head, ...body]);
   const headRows = head.map((row) => laidRow(context, grid, row));
+  const splitFrom = context.pageHeight * SPLIT_FROM;
   const headHeight = headRows.reduce((sum, r) => sum + r.height, 0);
   const repeat = headRows.length === 0 ? null : { height: headHeight, draw: (pen: Pen, x: number, y: number) => drawRows(pen, headRows, x, y, true) };
-  const boxes: Box[] = headRows.map((row, i) => rowBox(row, i === 0 ? 8 : 0, true, null));
+  const boxes: Box[] = headRows.map((row, i) => rowBox(row, i === 0 ? 8 : 0, splitFrom, null));
   body.forEach((row, i) => {
-    const box = rowBox(laidRow(context, grid, row), boxes.length === 0 ? 8 : 0, false, repeat);
+    const box = rowBox(laidRow(context, grid, row), boxes.length === 0 ? 8 : 0, splitFrom, repeat);
     box.anchor = row.anchor;
     box.keepNext = body.length > 1 && i === body.length - 2;
     boxes.push(box);
@@ -82,22 +89,33 @@ function cellOf(context: BlockContext, cell: Element, row: Node, column: number,
   const figure = cell.children.find((c): c is Element => typeof c !== 'string' && c.tag === 'figure');
   if (figure !== undefined) {
     const figureNode = context.structure.node('Figure', node, { alt: altOf(context, figure) });
-    return { tokens: [], node, column, span, figure: { picture: pictureOf(context, figure, 200), node: figureNode }, point: null, isHead };
+    return { tokens: [], node, column, span, figure: { element: figure, picture: pictureOf(context, figure, WIDEST_FIGURE), node: figureNode }, point: null, isHead };
   }
   const style = isHead ? STYLES.th : isTh ? { ...STYLES.td, bold: true } : STYLES.td;
   const tokens = tokensOf(context, cell.children, style, node);
   return { tokens, node, column, span, figure: null, point: kind === 'number' && !isHead && span === 1 ? decimalParts(context, tokens) : null, isHead };
 }
 
-/** Where the decimal point of a number lies in a cell's first word: the width up to it and from it on. */
+/** Signs before a number and its digits before the decimal point, thousands apart by a narrow or no-break blank. */
+const WHOLE = /^[<>≤≥±≈]?[\u00a0\u202f]?[+±\u2212-]?(?:\d+(?:[\u00a0\u202f]\d{3}(?!\d))*)?(?=$|\D)/;
+const IS_NUMBER = /^[<>≤≥±≈]?[\u00a0\u202f]?[+±\u2212-]?[.,]?\d/;
+const IS_SIGN = /^[<>≤≥±≈+\u2212-]$/;
+
+/** Where the decimal point of a cell that begins with a number lies: the width up to it and from it on. */
 function decimalParts(context: BlockContext, tokens: readonly Token[]): Cell['point'] {
+  if (tokens.some((t) => t.kind === 'break')) return null;
   const width = tokens.reduce((sum, t) => sum + t.width, 0);
-  const word = tokens.find((t) => t.kind === 'word');
-  if (word === undefined || tokens.some((t) => t.kind === 'break')) return null;
-  const whole = /^[<>]?[\s\u00a0]?[+\u2212-]?[\d\u202f]+/.exec(word.text)?.[0];
-  if (whole === undefined) return null;
-  const before = (context.type.set(whole, word.style).width * word.size) / 1000;
-  return { before, after: width - before };
+  let before = 0;
+  for (const token of tokens) {
+    if (token.kind === 'word' && IS_NUMBER.test(token.text)) {
+      const whole = WHOLE.exec(token.text)?.[0] ?? '';
+      before += (context.type.set(whole, token.style).width * token.size) / 1000;
+      return { before, after: width - before };
+    }
+    if (token.kind !== 'space' && !(token.kind === 'word' && IS_SIGN.test(token.text))) return null;
+    before += token.width;
+  }
+  return null;
 }
 
 function gridOf(context: BlockContext, kinds: readonly Kind[], rows: readonly Row[]): Grid {
@@ -121,6 +139,7 @@ function gridOf(context: BlockContext, kinds: readonly Kind[], rows: readonly Ro
       need.natural = Math.max(need.natural, cell.point === null ? size.natural : aligned);
     }
   }
+  for (const row of rows) for (const cell of row.cells) if (cell.span > 1) widenFor(needs, cell);
   const widths = columnWidths(needs, context.width, PAD.x * 2);
   const lefts: number[] = [];
   widths.reduce((left, width, i) => {
@@ -128,6 +147,17 @@ function gridOf(context: BlockContext, kinds: readonly Kind[], rows: readonly Ro
     return left + width;
   }, 0);
   return { kinds, widths, lefts, points, afters };
+}
+
+/** A second pass: the last column under a spanning cell makes room for its longest word or figure. */
+function widenFor(needs: readonly Need[], cell: Cell): void {
+  const under = needs.slice(cell.column, cell.column + cell.span);
+  const wanted = cell.figure?.picture.width ?? measure(cell.tokens).least;
+  const lack = wanted - under.reduce((sum, n) => sum + n.least, 0) - (cell.span - 1) * PAD.x * 2;
+  const last = under.findLast((n) => n.kind === 'text') ?? under[under.length - 1];
+  if (last === undefined || lack <= 0) return;
+  last.least += lack;
+  last.natural = Math.max(last.natural, last.least);
 }
 
 interface LaidCell {
@@ -155,9 +185,11 @@ function laidRow(context: BlockContext, grid: Grid, row: Row): LaidRow {
     const x = grid.lefts[cell.column] as number;
     const kind = cell.span > 1 ? 'text' : (grid.kinds[cell.column] as Kind);
     const align = kind === 'number' ? (cell.point === null ? 'right' : 'point') : 'left';
-    const lines = cell.figure === null ? linesOf(context, cell.tokens, width - PAD.x * 2) : [];
+    const room = width - PAD.x * 2;
+    const lines = cell.figure === null ? linesOf(context, cell.tokens, room) : [];
+    const figure = cell.figure !== null && cell.figure.picture.width > room ? { ...cell.figure, picture: pictureOf(context, cell.figure.element, room) } : cell.figure;
     const pointX = x + width - PAD.x - (grid.afters[cell.column] as number);
-    return { cell, x, width, lines, align: lines.length > 1 && align === 'point' ? 'right' : align, pointX };
+    return { cell: figure === cell.figure ? cell : { ...cell, figure }, x, width, lines, align: lines.length > 1 && align === 'point' ? 'right' : align, pointX };
   });
   const width = grid.widths.reduce((a, b) => a + b, 0);
   return { cells, isHead: row.isHead, leading, width, height: heightOf(cells, leading) };
@@ -166,22 +198,25 @@ function laidRow(context: BlockContext, grid: Grid, row: Row): LaidRow {
 const heightOf = (cells: readonly LaidCell[], leading: number): number =>
   Math.max(leading, ...cells.map((c) => (c.cell.figure === null ? c.lines.length * leading : c.cell.figure.picture.height))) + PAD.y * 2;
 
-function rowBox(row: LaidRow, before: number, isHead: boolean, header: Box['header']): Box {
+function rowBox(row: LaidRow, before: number, splitFrom: number, header: Box['header']): Box {
+  const tallest = row.cells.reduce((most, c) => Math.max(most, c.lines.length), 0);
+  const figures = row.cells.reduce((most, c) => Math.max(most, c.cell.figure?.picture.height ?? 0), 0);
+  const least = Math.max(figures, LEAST_LINES * row.leading) + PAD.y * 2;
   return {
     height: row.height,
     before,
-    keepNext: isHead,
+    keepNext: row.isHead,
     header: header ?? null,
+    ...(row.height > splitFrom ? { least } : {}),
     draw: (pen, x, y) => drawRows(pen, [row], x, y, false),
     split(room) {
-      const count = Math.floor((room - PAD.y * 2) / row.leading);
-      const tallest = Math.max(...row.cells.map((c) => c.lines.length));
-      if (isHead || count < 2 || tallest - count < 2) return null;
-      const part = (from: number, to: number, figures: boolean): LaidRow => {
-        const cells = row.cells.map((c) => ({ ...c, lines: c.lines.slice(from, to), cell: figures ? c.cell : { ...c.cell, figure: null } }));
+      const count = Math.min(Math.floor((room - PAD.y * 2 + 0.01) / row.leading), tallest - LEAST_LINES);
+      if (count < LEAST_LINES || least > room + 0.01) return null;
+      const part = (from: number, to: number, withFigures: boolean): LaidRow => {
+        const cells = row.cells.map((c) => ({ ...c, lines: c.lines.slice(from, to), cell: withFigures ? c.cell : { ...c.cell, figure: null } }));
         return { ...row, cells, height: heightOf(cells, row.leading) };
       };
-      return [rowBox(part(0, count, true), before, false, header), rowBox(part(count, tallest, false), 0, false, header)];
+      return [rowBox(part(0, count, true), before, splitFrom, header), rowBox(part(count, tallest, false), 0, splitFrom, header)];
     },
   };
 }
