@@ -1,18 +1,17 @@
 /**
  * The demo plant folder as files. In: machines and their stories. Out: every file of demo-survey/, the same bytes each time.
  */
-import { MACHINES } from './machines.ts';
-import { noise } from './noise.ts';
+import { FINDING_COLUMNS, FINDINGS } from './findings.ts';
+import { ANNEX, MACHINES, ROUND } from './machines.ts';
+import { ACCEPTED, ACTIONS, EVENTS, LIMITS, PLANT_YAML, RENAMES, surveyYaml } from './papers.ts';
 import { couplingPicture, wheelPicture } from './png.ts';
-import { ACTIONS, ACCEPTED, EVENTS, FINDINGS, LIMITS, PLANT_YAML, RENAMES, surveyYaml } from './papers.ts';
+import { notedValue, retakes, takenAt } from './slips.ts';
 import { type DemoMachine, type DemoSeries, LAST, REPEAT, type Row, SURVEYS } from './types.ts';
 
 export interface DemoFile {
   readonly path: string;
   readonly bytes: Uint8Array | string;
 }
-
-const SCATTER = 0.05;
 
 const cell = (value: string | number | undefined): string => {
   const text = value === undefined ? '' : String(value);
@@ -26,27 +25,17 @@ function csv(columns: readonly string[], rows: readonly Row[]): string {
 /** A value to three significant digits, at least one decimal. */
 const shown = (value: number): string => (value >= 10 ? value.toFixed(1) : value >= 1 ? value.toFixed(2) : value.toFixed(3));
 
-/** The rms values of this file were labelled calculated peak, so all of them are low by √2: a slip of the annex's crew. */
-const SLIPPED = { survey: 8, area: 'Packing annex' } as const;
-
-function valueAt(machine: DemoMachine, series: DemoSeries, survey: number): number | string | null {
-  if (series.values !== undefined) return series.values[survey] ?? null;
-  const level = series.level ?? 1;
-  const value = level * (1 + SCATTER * noise(`${machine.machine} ${series.point} ${series.quantity ?? 'velocity'} ${survey}`));
-  return machine.columns['area'] === SLIPPED.area && survey === SLIPPED.survey ? value / Math.SQRT2 : value;
-}
-
 const READINGS = [
   'machine', 'point', 'quantity', 'detection', 'value', 'unit', 'low_hz', 'high_hz', 'speed_rpm', 'state', 'status', 'phase_deg', 'amplitude_1x', 'phase_ref', 'phase_convention', 'taken_at', 'instrument',
   'measured_by', 'retake', 'remark',
 ] as const;
 
 function readingRow(machine: DemoMachine, series: DemoSeries, survey: number, date: string): Row | null {
-  const value = valueAt(machine, series, survey);
+  const value = notedValue(machine, series, survey, MACHINES);
   if (value === null) return null;
   const row = {
     machine: machine.machine, point: pointName(machine, series, survey), quantity: series.quantity ?? 'velocity', detection: series.detection ?? 'rms', unit: series.unit ?? 'mm/s',
-    instrument: 'VM-1', measured_by: 'Signe Brødholt', taken_at: date,
+    instrument: 'VM-1', measured_by: 'Signe Brødholt', taken_at: takenAt(machine.machine, series.point, survey, date),
   };
   if (typeof value === 'string') return { ...row, status: value, taken_at: '' };
   return { ...row, value: shown(value), ...series.taken?.(survey) };
@@ -55,17 +44,14 @@ function readingRow(machine: DemoMachine, series: DemoSeries, survey: number, da
 /** The point was called DE until it was renamed. */
 const pointName = (machine: DemoMachine, series: DemoSeries, survey: number): string => (machine.machine === 'KB-01' && series.point === '4H' && survey < 5 ? 'DE' : series.point);
 
-function readingsOf(survey: number, machines: readonly DemoMachine[] = MACHINES): Row[] {
+function readingsOf(survey: number, machines: readonly DemoMachine[]): Row[] {
   const date = SURVEYS[survey] as string;
-  const rows = machines.flatMap((machine) => machine.series.map((series) => readingRow(machine, series, survey, date))).filter((row): row is Row => row !== null);
-  return survey === LAST ? [...rows, ...extras(date)] : rows;
+  return machines.flatMap((machine) => machine.series.map((series) => readingRow(machine, series, survey, date))).filter((row): row is Row => row !== null);
 }
 
-/** Retakes that differ, and a reading dated outside its survey. */
-function extras(date: string): Row[] {
-  const retake = { machine: 'GP-01', point: '2H', quantity: 'velocity', detection: 'rms', unit: 'mm/s', instrument: 'VM-1', measured_by: 'Signe Brødholt' };
-  return [{ ...retake, value: '2.7', retake: 'yes', taken_at: date, remark: 'magnet slipped at the first take' }];
-}
+/** Long form: rows that name their survey. */
+const long = (surveys: readonly number[], machines: readonly DemoMachine[]): string =>
+  csv(['survey_date', ...READINGS], surveys.flatMap((s) => readingsOf(s, machines).map((row) => ({ survey_date: SURVEYS[s] as string, ...row }))));
 
 function machineTables(): DemoFile[] {
   const machineColumns = ['machine', 'name', 'area', 'route', 'criticality', 'spare_group', 'interval_days', 'in_service_from', 'removed_on', 'family', 'kind', 'power_kw', 'speed_rpm', 'drive', 'support', 'shaft_height_mm', 'bearings', 'pump_category', 'limit_set'];
@@ -82,10 +68,34 @@ function machineTables(): DemoFile[] {
 /** Old surveys stand in one long file, the last four in folders of their own. */
 const HISTORY = 6;
 
-export function demoFiles(): DemoFile[] {
-  const history = Array.from({ length: HISTORY }, (_, s) => readingsOf(s).map((row) => ({ survey_date: SURVEYS[s] as string, ...row }))).flat();
+/** The annex's crew sends a file of its own; the one of 2025-11-19 is the one with the slip. */
+const ANNEX_FILES = [8, LAST] as const;
+
+function annexFiles(): DemoFile[] {
+  const older = SURVEYS.map((_, s) => s).filter((s) => !ANNEX_FILES.some((f) => f === s));
+  return [
+    { path: 'surveys/packing-annex.csv', bytes: long(older, ANNEX) },
+    ...ANNEX_FILES.map((s) => ({ path: `surveys/packing-annex-${SURVEYS[s]}.csv`, bytes: long([s], ANNEX) })),
+  ];
+}
+
+function surveyFiles(): DemoFile[] {
   const folders = SURVEYS.map((date, s) => ({ date, s })).slice(HISTORY);
   const repeat = MACHINES.filter((m) => m.machine === 'ID-01');
+  return [
+    { path: 'surveys/history.csv', bytes: long(Array.from({ length: HISTORY }, (_, s) => s), ROUND) },
+    ...folders.flatMap(({ date, s }) => [
+      { path: `surveys/${date}/survey.yaml`, bytes: surveyYaml(date, s === LAST) },
+      { path: `surveys/${date}/readings.csv`, bytes: csv(READINGS, [...readingsOf(s, ROUND), ...retakes(s, date)]) },
+    ]),
+    { path: `surveys/${REPEAT}/survey.yaml`, bytes: surveyYaml(REPEAT, false, 'kind: re-measurement\nscope: { machines: [ID-01] }') },
+    { path: `surveys/${REPEAT}/readings.csv`, bytes: csv(READINGS, readingsOf(8, repeat).map((row) => ({ ...row, taken_at: REPEAT, ...(row['point'] === '3H' && row['quantity'] === 'velocity' ? { value: '7.80' } : {}) }))) },
+    ...Object.entries(FINDINGS).map(([date, rows]) => ({ path: `surveys/${date}/findings.csv`, bytes: findingsCsv(rows) })),
+  ];
+}
+
+export function demoFiles(): DemoFile[] {
+  const photos = `surveys/${SURVEYS[LAST]}/photos`;
   return [
     { path: 'plant.yaml', bytes: PLANT_YAML },
     ...machineTables(),
@@ -94,22 +104,15 @@ export function demoFiles(): DemoFile[] {
     { path: 'actions.csv', bytes: csv(ACTIONS.columns, ACTIONS.rows) },
     { path: 'accepted.csv', bytes: csv(ACCEPTED.columns, ACCEPTED.rows) },
     { path: 'renames.csv', bytes: csv(RENAMES.columns, RENAMES.rows) },
-    { path: 'surveys/history.csv', bytes: csv(['survey_date', ...READINGS], history) },
-    ...folders.flatMap(({ date, s }) => [
-      { path: `surveys/${date}/survey.yaml`, bytes: surveyYaml(date, s === LAST) },
-      { path: `surveys/${date}/readings.csv`, bytes: csv(READINGS, readingsOf(s)) },
-    ]),
-    { path: `surveys/${REPEAT}/survey.yaml`, bytes: surveyYaml(REPEAT, false, 'kind: re-measurement\nscope: { machines: [ID-01] }') },
-    { path: `surveys/${REPEAT}/readings.csv`, bytes: csv(READINGS, readingsOf(8, repeat).map((row) => ({ ...row, taken_at: REPEAT, ...(row['point'] === '3H' ? { value: '7.8' } : {}) }))) },
-    { path: `surveys/${SURVEYS[8]}/findings.csv`, bytes: findingsCsv(FINDINGS.earlier) },
-    { path: `surveys/${SURVEYS[LAST]}/findings.csv`, bytes: findingsCsv(FINDINGS.current) },
-    { path: `surveys/${SURVEYS[LAST]}/photos/CR-01-2A-1.png`, bytes: couplingPicture() },
-    { path: `surveys/${SURVEYS[LAST]}/photos/ID-01-1.png`, bytes: wheelPicture() },
-    { path: `surveys/${SURVEYS[LAST]}/photos/captions.csv`, bytes: csv(['photo', 'caption'], [{ photo: 'CR-01-2A-1.png', caption: 'Coupling, seen from the walkway (drawn)' }, { photo: 'ID-01-1.png', caption: 'Wheel before cleaning (drawn)' }]) },
+    ...surveyFiles(),
+    ...annexFiles(),
+    { path: `${photos}/CR-01-2A-1.png`, bytes: couplingPicture() },
+    { path: `${photos}/ID-01-1.png`, bytes: wheelPicture() },
+    { path: `${photos}/captions.csv`, bytes: csv(['photo', 'caption'], [{ photo: 'CR-01-2A-1.png', caption: 'Coupling, seen from the walkway (drawn)' }, { photo: 'ID-01-1.png', caption: 'Wheel before cleaning (drawn)' }]) },
   ];
 }
 
 /** The column `finding` stands twice: id, then text. */
 function findingsCsv(rows: readonly Row[]): string {
-  return csv(FINDINGS.columns, rows).replace('finding_text', 'finding');
+  return csv(FINDING_COLUMNS, rows).replace('finding_text', 'finding');
 }

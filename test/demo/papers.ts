@@ -67,6 +67,7 @@ export const RENAMES = table(['kind', 'machine', 'old', 'new', 'since'], [{ kind
 
 export const ACCEPTED = table(['machine', 'point', 'quantity', 'up_to', 'until', 'by', 'reason'], [
   { machine: 'AF-03', point: '1H', quantity: 'velocity', up_to: 6.5, until: '2026-12-31', by: 'H. Ωverby', reason: 'duct to be replaced in the 2026 stop; reading has stood still for two campaigns' },
+  { machine: 'AF-03', point: '1H', quantity: 'displacement', up_to: 70, until: '2026-12-31', by: 'H. Ωverby', reason: 'the same deviation told in displacement' },
 ]);
 
 export const ACTIONS = table(
@@ -77,35 +78,3 @@ export const ACTIONS = table(
     { action: 'SB-02/2025-10-15/1', machine: 'SB-02', raised: '2025-10-15', recommendation: 'Find the cause at the drive end before the campaign ends', due: '2025-12-15', owner: 'Slicing', status: 'rejected', verify_point: '1H', notes: 'rejected by the works: no window before the stop of 2026-03-02' },
   ],
 );
-
-const FINDING_COLUMNS = [
-  'finding', 'machine', 'component', 'points', 'finding_text', 'likely_cause', 'less_likely', 'confidence', 'recommendation', 'needs_stop', 'check_first', 'consequence', 'downtime_h', 'parts', 'due', 'owner',
-  'urgency', 'override_by', 'override_reason', 'override_until', 'verify_point', 'verify_below', 'carried_from', 'confirmed', 'closed',
-];
-
-const CR01: Row = {
-  finding: 'F-29', machine: 'CR-01', component: 'pump', points: '2A', finding_text: 'Axial level trebled since the coupling was changed, radial level unchanged.', likely_cause: 'misalignment at the coupling',
-  less_likely: 'a bent shaft, a cocked bearing', confidence: 'low', needs_stop: 'yes', check_first: 'Axial phase across the coupling, soft foot', consequence: 'Coupling and seal wear early', downtime_h: 6, owner: 'Evaporation', verify_point: '2A',
-};
-
-export const FINDINGS = {
-  columns: FINDING_COLUMNS,
-  earlier: [
-    { finding: 'F-31', machine: 'ID-01', component: 'fan', points: '3H', finding_text: 'Level rose from 4.6 to 7.9 in five weeks, radial, at running speed by ear and strobe.', likely_cause: 'unbalance from deposits', confidence: 'medium', recommendation: 'Clean the wheel and balance it', needs_stop: 'yes', owner: 'Boiler house', confirmed: '2025-11-19' },
-    { ...CR01, recommendation: 'Check alignment and coupling', confirmed: '2025-11-19' },
-  ] as readonly Row[],
-  current: [
-    { finding: 'F-31', machine: 'ID-01', component: 'fan', points: '3H', finding_text: 'Cleaned and balanced on 2025-12-03; level back at 1.9.', recommendation: 'None further', carried_from: '2025-11-19', confirmed: '2026-01-14', closed: '2026-01-14' },
-    { ...CR01, recommendation: 'Align pump and motor, check the coupling and the foot', carried_from: '2025-11-19', confirmed: '2026-01-14' },
-    {
-      finding: 'F-33', machine: 'BFP-A', component: 'pump', points: '4H', finding_text: 'Acceleration at the outboard bearing has risen three and a half times since the campaign began; velocity has not moved.',
-      likely_cause: 'early bearing damage or poor lubrication', less_likely: 'flow noise, a rub', confidence: 'medium', recommendation: 'Plan a change of the outboard bearing; bring BFP-B into service before', needs_stop: 'yes',
-      check_first: 'Repeat with the same mount; spectrum; grease by amount and re-measure', consequence: 'Loss of the feed pump with no proven spare', downtime_h: 14, parts: 'outboard bearing set', due: '2026-01-21', owner: 'Boiler house', confirmed: '2026-01-14',
-    },
-    {
-      finding: 'F-34', machine: 'JP-1C', component: 'pump', points: '3H; 3A', finding_text: 'Pump drive end jumped from 2.1 to 9.1 mm/s between two surveys, axial with it; told to the works manager before leaving site.',
-      likely_cause: 'a loose or broken part, or an obstruction', less_likely: 'unbalance', confidence: 'low', recommendation: 'Change over to JP-1B and open the pump', needs_stop: 'yes', check_first: 'Repeat the reading with a second instrument; look at feet and pipe supports',
-      consequence: 'Secondary damage to seal and bearings', due: '2026-01-14', owner: 'Purification', confirmed: '2026-01-14',
-    },
-  ] as readonly Row[],
-};

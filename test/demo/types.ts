@@ -1,6 +1,9 @@
 /** One row of the plant's tables by column name. */
 export type Row = Readonly<Record<string, string | number>>;
 
+/** A number in the series' unit, a status, or null where there is no row. */
+export type Told = number | string | null;
+
 /** A series and what it read: a level that scatters, or a value (or status) for each of the ten surveys. */
 export interface DemoSeries {
   readonly component?: string;
@@ -10,8 +13,8 @@ export interface DemoSeries {
   readonly unit?: string;
   readonly detection?: string;
   readonly level?: number;
-  readonly values?: readonly (number | string | null)[];
-  /** Columns of its readings, by survey index, or for all of them. */
+  readonly values?: readonly Told[];
+  /** Columns of its readings, by survey index. */
   readonly taken?: (survey: number) => Row;
 }
 
