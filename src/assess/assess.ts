@@ -17,6 +17,7 @@ import { lookAt } from './look.ts';
 import { type Assessed, assessMachine, componentLines, conditionAt, machineLine } from './machine.ts';
 import { measurementOf } from './measurement.ts';
 import { rankedActions } from './rank.ts';
+import { sistersOf } from './sisters.ts';
 import { spareOf } from './spare.ts';
 import { type Context, dayAt, machineRow, type Track, tracksOf } from './track.ts';
 import { verifiedNow } from './verification.ts';
@@ -35,6 +36,7 @@ export function assess(plant: Plant, options: AssessOptions): SwayfolioRecord {
     lookAt(context, book, survey);
     raiseDoubts(context, survey);
   }
+  for (const [track, among] of sistersOf(context)) context.sisters.set(track, among);
   const machines = context.plant.machines.filter((m) => inService(m, dayAt(context, context.current)));
   const assessed = machines.map((machine) => judge(context, machine));
   return recordOf(context, book, assessed, options.toolVersion);
@@ -51,6 +53,7 @@ function contextOf(plant: Plant): Context {
     tracks,
     byMachine,
     closedActions: closedActions(plant.actions),
+    sisters: new Map(),
     usualIntervalDays: usualIntervalDays(plant.surveys),
   };
 }

@@ -61,6 +61,7 @@ export function verdictOf(context: Context, track: Track, standing: Standing): V
     const held = plainLevel(context, track, heldFrom, movementOf(context, track, heldFrom), standing);
     if (weight(held.urgency) > weight(level.urgency) || (held.urgency !== null && look === null)) level = { urgency: held.urgency, rule: 'M1' };
   }
+  if (level.urgency === null && look !== null && context.sisters.get(track)?.outlier === true) level = { urgency: 'watch', rule: 'S1' };
   if (level.urgency !== null && level.urgency !== 'watch' && isAccepted(context, track, look ?? heldFrom)) level = { urgency: 'watch', rule: 'K1' };
   return { track, look, movement, heldFrom, condition: conditionOf(look) ?? (look === null ? conditionOf(heldFrom) : null), level };
 }
@@ -78,11 +79,21 @@ export function plainLevel(context: Context, track: Track, look: Look, movement:
 
 function levelOf(context: Context, track: Track, look: Look, condition: Zone | RatioClass | null, movement: Movement, standing: Standing): Level {
   if (condition === null || movement.travel === null) return NO_LEVEL;
-  const level = tableLevel(condition, movement.travel, standing.criticality, standing.spare);
+  const level = byForecast(condition, movement, standing) ?? tableLevel(condition, movement.travel, standing.criticality, standing.spare);
   // The rules name r-D alone; held there it would let an unsupported r-C of a critical machine stand above an r-D, so both are held.
   const byRatioAlone = condition === 'r-D' || condition === 'r-C';
   if (!byRatioAlone || weight(level.urgency) <= weight('within a week') || isSupported(context, track, look)) return level;
   return { urgency: 'within a week', rule: 'R1' };
+}
+
+/** F1: a forecast may make travel fast, never lower it, and from A or B never by itself above "within a month". */
+function byForecast(condition: Zone | RatioClass, movement: Movement, standing: Standing): Level | null {
+  if (movement.by !== 'forecast' || movement.without === null) return null;
+  const plain = tableLevel(condition, movement.without, standing.criticality, standing.spare);
+  const fast = tableLevel(condition, 'fast', standing.criticality, standing.spare);
+  const inAOrB = condition.endsWith('A') || condition.endsWith('B');
+  const capped = inAOrB ? milder(fast, { urgency: 'within a month', rule: 'F1' }) : fast;
+  return worse(plain, capped) === plain ? plain : { urgency: capped.urgency, rule: 'F1' };
 }
 
 /**

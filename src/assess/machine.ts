@@ -12,6 +12,7 @@ import { closenessOf } from './closeness.ts';
 import { measuredOf, missesInARow, whyNot } from './coverage.ts';
 import { dateOrNull } from './cut.ts';
 import { exceeds } from './exceeds.ts';
+import { indicationsOf } from './indications.ts';
 import { heldConditionAt, type Standing, type Verdict } from './level.ts';
 import { unitWords } from './reason.ts';
 import { reasonOf } from './reason.ts';
@@ -177,7 +178,7 @@ export function machineLine(context: Context, assessed: Assessed, previous: Cond
     override: assessed.override,
     spare: assessed.spare,
     accepted: acceptedLines(context, machine, verdicts),
-    indications: [],
+    indications: indicationsOf(context, verdicts, assessed.urgency !== null),
     doubts: distinctDoubts(verdicts),
     cannot_see: cannotSee(context, tracks),
     events: context.plant.events

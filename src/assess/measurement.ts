@@ -10,6 +10,7 @@ import { boundNumber } from './bound.ts';
 import { changeOf } from './change.ts';
 import { bandOf, whyNotComparable } from './comparable.ts';
 import { inScope } from './coverage.ts';
+import { forecastLine } from './forecast.ts';
 import type { Verdict } from './level.ts';
 import type { LimitBook, LimitsInForce } from './limits-in-force.ts';
 import { notesOf } from './notes.ts';
@@ -46,12 +47,17 @@ export function measurementOf(context: Context, book: LimitBook, verdict: Verdic
     urgency: level.urgency,
     rule: level.rule,
     trend: verdict.movement?.trend ?? null,
-    forecast: null,
-    sisters: null,
+    forecast: forecastLine(context, verdict.movement?.outlook ?? null),
+    sisters: sistersLine(context, track),
     doubts: look?.doubts ?? [],
     notes: notesOf(context, track, look, limits),
     history: historyOf(context, track, reading ?? heldFrom?.reading ?? null),
   };
+}
+
+function sistersLine(context: Context, track: Track): RecordMeasurement['sisters'] {
+  const among = context.sisters.get(track);
+  return among === undefined ? null : { n: among.n, place: among.place, db_above_median: among.dbAboveMedian, outlier: among.outlier };
 }
 
 type Taken = Pick<

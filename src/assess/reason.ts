@@ -49,6 +49,8 @@ export function factsOf(context: Context, track: Track, look: Look, movement: Mo
     db_per_year: movement.trend?.db_per_year ?? null,
     readings: movement.trend?.n ?? null,
     closing: closing?.what ?? null,
+    likely: movement.outlook === null || 'none' in movement.outlook || movement.outlook.likely === null ? null : dayText(movement.outlook.likely),
+    boundary: movement.outlook === null || 'none' in movement.outlook ? null : movement.outlook.boundary,
   };
 }
 
@@ -68,7 +70,9 @@ export function reasonOf(context: Context, verdict: Verdict): Reason {
   const facts: Facts = { ...factsOf(context, track, look, verdict.movement), rule: level.rule };
   const kind = look.zone !== null ? 'zone' : look.ratioClass !== null ? 'class' : 'shown';
   const parts = [say(language, `assess.reason.${kind}`, { ...facts, travel_words: travelWords(context, facts), limit_words: limitWords(context, facts) })];
-  if (level.rule === 'R1' || level.rule === 'H1' || level.rule === 'K1') parts.push(say(language, `assess.reason.${level.rule}`, facts));
+  if (level.rule === 'R1' || level.rule === 'H1' || level.rule === 'K1' || level.rule === 'F1') parts.push(say(language, `assess.reason.${level.rule}`, facts));
+  const among = context.sisters.get(track);
+  if (among?.outlier === true) parts.push(say(language, 'assess.reason.S1', { n: among.n, db: among.dbAboveMedian }));
   if (doubtedHigh(look)) parts.push(say(language, 'assess.reason.M4', facts));
   return { reason: parts.join(' '), facts };
 }

@@ -7,6 +7,7 @@ import type { Policy } from '../plant/policy.ts';
 import { type Component, type ComponentRow, inForce, type LedgerAction, type Machine, type MachineRow, type Plant, type PlantEvent, type PointRow, type Reading, type Series } from '../plant/types.ts';
 import type { Doubt, Facts, RatioClass, Zone } from '../record/types.ts';
 import type { LimitsInForce } from './limits-in-force.ts';
+import type { Sisterhood } from './sisterhood.ts';
 
 export interface Baseline {
   /** In the unit and detection of the series. */
@@ -63,6 +64,8 @@ export interface Context {
   readonly byMachine: ReadonlyMap<string, readonly Track[]>;
   /** Ledger actions done, by machine. */
   readonly closedActions: ReadonlyMap<string, readonly LedgerAction[]>;
+  /** How each current reading stands among its sisters; filled once all are looked at. */
+  readonly sisters: Map<Track, Sisterhood>;
   /** Median gap of the last routine surveys; null with one survey. */
   readonly usualIntervalDays: number | null;
 }

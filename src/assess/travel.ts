@@ -7,18 +7,22 @@ import { carriesRatio } from './baseline.ts';
 import { vectorSince } from './change.ts';
 import { exceeds, reaches, risesBy } from './exceeds.ts';
 import { floorFor } from './floor.ts';
+import { crossesSoon, type Outlook, outlookOf } from './forecast.ts';
 import { ratio, ratioOfDb, type Scale } from './rise.ts';
 import { type Context, doubtedLow, type Look, pointRow, type Track } from './track.ts';
 import { lastThreeOverBaseline, trendOf } from './trend.ts';
 
 /** What decided: the last part of the sentence `assess.travel.<travel>.<by>`. */
-export type TravelBy = 'change' | 'ratio' | 'trend' | 'baseline' | 'baseline ratio' | 'last three' | 'vector' | 'event' | 'second reading' | 'doubt' | 'first' | 'none';
+export type TravelBy = 'forecast' | 'change' | 'ratio' | 'trend' | 'baseline' | 'baseline ratio' | 'last three' | 'vector' | 'event' | 'second reading' | 'doubt' | 'first' | 'none';
 
 export interface Movement {
   readonly travel: Travel | null;
   readonly by: TravelBy;
   readonly trend: Trend | null;
   readonly vector: Change['vector'];
+  readonly outlook: Outlook | null;
+  /** Travel without the forecast, where that made it fast (rule F1). */
+  readonly without: Travel | null;
 }
 
 interface Compared {
@@ -45,7 +49,8 @@ export function movementOf(context: Context, track: Track, look: Look): Movement
   // After work that brought the reading down, the median of the last three still speaks of what was mended.
   const standsOff = last3 !== null && loud && look.explainedFall === null && reaches(last3, context.policy['5.step.median']);
   const trend = trendOf(readings, row.scale, floor, standsOff, context.policy);
-  const done = (travel: Travel | null, by: TravelBy): Movement => ({ travel, by, trend, vector });
+  const outlook = doubtedLow(look) ? null : outlookOf(context, track, look, trend);
+  const done = (travel: Travel | null, by: TravelBy): Movement => ({ travel, by, trend, vector, outlook, without: travel });
   if (doubtedLow(look)) return done('held', 'doubt');
   if (look.zone === null && look.ratioClass === null && (floor === null || row.scale === 'none') && look.limits.q === null) return done(null, 'none');
   if (look.previous === null) return done(isBad(look) ? 'step' : 'steady', 'first');
@@ -59,8 +64,9 @@ export function movementOf(context: Context, track: Track, look: Look): Movement
     ratios: row.scale !== 'none' && carriesRatio(look.baseline),
   };
   const up = fast(context, c) ?? rising(context, c, trend) ?? step(context, c, look, standsOff, vector);
-  if (up !== null) return done(up.travel, up.by);
-  return look.explainedFall === null ? done('steady', 'none') : done('falling', look.explainedFall);
+  const plain = up !== null ? done(up.travel, up.by) : look.explainedFall === null ? done('steady', 'none') : done('falling', look.explainedFall);
+  const isNear = plain.travel !== 'fast' && outlook !== null && crossesSoon(context, track, look, outlook);
+  return isNear ? { ...plain, travel: 'fast', by: 'forecast' } : plain;
 }
 
 const isBad = (look: Look): boolean => look.zone === 'C' || look.zone === 'D' || look.ratioClass === 'r-C' || look.ratioClass === 'r-D';
