@@ -1,5 +1,5 @@
 /** One machine in full: readings, charts, finding, action, doubts, what the readings cannot see. Serves the PDF's exceptions and the site's pages. */
-import type { RecordMachine } from '../record/types.ts';
+import type { RecordMachine, RecordMeasurement } from '../record/types.ts';
 import { type ActionView, actionView, overrideText } from './actions.ts';
 import { type Charts, seriesId } from './charts.ts';
 import { slugOf } from './file-name.ts';
@@ -24,6 +24,9 @@ export interface ExceptionView {
   readonly photos: readonly { readonly path: string; readonly file: string; readonly alt: string; readonly caption: string }[];
   readonly doubts: readonly string[];
   readonly hasDoubts: boolean;
+  readonly indications: readonly { readonly rule: string; readonly message: string; readonly confirm: string }[];
+  readonly hasIndications: boolean;
+  readonly forecast: string;
   readonly cannotSee: string;
   readonly events: readonly { readonly date: string; readonly text: string }[];
   readonly hasEvents: boolean;
@@ -57,6 +60,9 @@ export function exceptionView(format: Format, charts: Charts, machine: RecordMac
       .map((p) => ({ path: p.path, file: photoFile(p.path), alt: p.caption ?? `Photo of ${machine.machine}`, caption: p.caption ?? '' })),
     doubts: machine.doubts.map((d) => d.message),
     hasDoubts: machine.doubts.length > 0,
+    indications: machine.indications.map((i) => ({ rule: i.rule, message: i.message, confirm: i.confirm })),
+    hasIndications: machine.indications.length > 0,
+    forecast: main === null ? '' : forecastText(format, main),
     cannotSee: machine.cannot_see.join('; '),
     events: machine.events.map((e) => ({ date: format.date(e.date), text: `${e.event}${e.notes === null ? '' : `: ${e.notes}`}${e.new_baseline ? ' (new baseline)' : ''}` })),
     hasEvents: machine.events.length > 0,
@@ -64,6 +70,15 @@ export function exceptionView(format: Format, charts: Charts, machine: RecordMac
       .filter((c) => c.machine === machine.machine && !c.implicit)
       .map((c) => ({ id: c.component, kind: c.kind ?? '', condition: format.condition(c.condition), limits: c.limit_reason })),
   };
+}
+
+/** The forecast of the governing reading in words; nothing where there is no real trend to speak of. */
+function forecastText(format: Format, m: RecordMeasurement): string {
+  const { forecast } = m;
+  if (forecast === null || 'none' in forecast) return forecast === null || m.trend === null || m.trend.kind !== 'ramp' ? '' : `No forecast for ${m.point} ${m.quantity}: ${forecast.none}.`;
+  const likely = forecast.likely === null ? 'beyond what it may look ahead' : format.date(forecast.likely);
+  const latest = forecast.latest === null ? 'open' : format.date(forecast.latest);
+  return `${m.point} ${m.quantity} is likely to cross ${forecast.boundary} on ${likely} (80 % range ${format.date(forecast.earliest)} to ${latest}; Theil–Sen on logarithms, residuals left out one by one, widened by Student's t). A crossing is not a failure.`;
 }
 
 /** Name of a photo on the site. */
