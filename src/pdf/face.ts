@@ -32,7 +32,19 @@ interface Face {
   readonly embedded: EmbeddedFont;
 }
 
-const RIGHT_TO_LEFT = /[\u0590-\u08ff\ufb1d-\ufdff\ufe70-\ufefc]/;
+/** Hebrew, Arabic and their kin; the digits of Arabic run left to right. */
+const RTL = '\\u0590-\\u065f\\u066a-\\u06ef\\u06fa-\\u08ff\\ufb1d-\\ufdff\\ufe70-\\ufefc';
+const RIGHT_TO_LEFT = new RegExp(`[${RTL}]`);
+/** Runs of a right-to-left word: its letters; words and numbers of the other direction; single signs. */
+const RUNS = new RegExp(`[${RTL}\\u200c\\u200d]+|(?![${RTL}])[\\p{L}\\p{N}](?:(?![${RTL}])[\\p{L}\\p{M}\\p{N}.,:])*(?<![.,:])|.`, 'gsu');
+const MIRRORED: Readonly<Record<string, string>> = { '(': ')', ')': '(', '[': ']', ']': '[', '{': '}', '}': '{', '<': '>', '>': '<', '«': '»', '»': '«' };
+/** Characters without a form of their own (soft hyphen, zero-width and direction marks, variation selectors): not printed, so they cannot turn a text round. */
+// biome-ignore lint/suspicious/noMisleadingCharacterClass: each is meant alone.
+const UNSEEN = /[\u00ad\u034f\u061c\u180b-\u180f\u200b\u200e\u200f\u202a-\u202e\u2060-\u206f\ufe00-\ufe0f\ufeff]|(?:\udb40[\udc00-\uddef])/g;
+const JOINERS = /[\u200c\u200d]/g;
+
+/** Visual order of a right-to-left word; brackets mirrored. A simple form of Unicode's rules: no nested directions, no marks of direction. */
+const inVisualRuns = (text: string): string[] => (text.match(RUNS) ?? []).reverse().map((run) => MIRRORED[run] ?? run);
 
 const glyphs = new WeakMap<Font, Map<string, ReturnType<Font['glyphForCodePoint']>>>();
 
@@ -60,7 +72,7 @@ export class Type {
     const index = (style.bold ? 1 : 0) + (style.italic ? 2 : 0);
     const kept = this.#words[index]?.get(text);
     if (kept !== undefined) return kept;
-    const word = this.#compose(text, index, style.bold);
+    const word = this.#word(text.replace(UNSEEN, ''), index, style.bold);
     this.#words[index]?.set(text, word);
     return word;
   }
@@ -70,7 +82,15 @@ export class Type {
     return (this.set(text, style).width * size) / 1000;
   }
 
-  #compose(text: string, index: number, bold: boolean): SetWord {
+  #word(text: string, index: number, bold: boolean): SetWord {
+    const rightToLeft = RIGHT_TO_LEFT.test(text);
+    const pieces = rightToLeft ? inVisualRuns(text).flatMap((run) => this.#pieces(run, index, bold)) : this.#pieces(text.replace(JOINERS, ''), index, bold);
+    let width = 0;
+    for (const p of pieces) width += p.width;
+    return { pieces, width, rightToLeft };
+  }
+
+  #pieces(text: string, index: number, bold: boolean): Piece[] {
     const pieces: Piece[] = [];
     let run = '';
     let face = this.#faces[index] as Face;
@@ -92,10 +112,7 @@ export class Type {
       run += character;
     }
     flush();
-    let width = 0;
-    for (const p of pieces) width += p.width;
-    const rightToLeft = RIGHT_TO_LEFT.test(text);
-    return { pieces: rightToLeft ? pieces.reverse() : pieces, width, rightToLeft };
+    return pieces;
   }
 
   #faceOf(character: string, index: number, bold: boolean): Face | null {

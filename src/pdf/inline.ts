@@ -90,13 +90,23 @@ function addLink(context: InlineContext, element: Element, now: Current, tokens:
 function addSpan(context: InlineContext, element: Element, now: Current, tokens: Token[]): void {
   const { 'data-mark': mark, 'data-page': target } = element.attributes;
   if (mark !== undefined) {
-    const drawing = zoneMark(mark, now.size * 0.86);
+    const drawing = markOf(mark, now.size * 0.86);
     tokens.push({ kind: 'mark', drawing, width: drawing.width + 2.2, node: now.node });
   } else if (target !== undefined) {
-    const like = wordOf(context, '00', now);
+    const like = wordOf(context, '000', now);
     tokens.push({ kind: 'page', target, like, width: like.width, node: now.node, atRight: now.node?.role === 'TD' });
   }
   collect(context, element.children, now, tokens);
+}
+
+/** Marks are few and drawn often: one drawing each. */
+const marks = new Map<string, Drawing>();
+
+function markOf(condition: string, size: number): Drawing {
+  const key = `${condition} ${size}`;
+  const kept = marks.get(key) ?? zoneMark(condition, size);
+  marks.set(key, kept);
+  return kept;
 }
 
 export function plainText(element: Element): string {
@@ -223,20 +233,25 @@ function brokenWord(context: InlineContext, word: Word, width: number, first: nu
   return pieces;
 }
 
-/** Neighbouring right-to-left words of a line stand in reverse order, blanks between them included. */
+const isNumber = (text: string): boolean => /^[+\u2212-]?[\d\u0660-\u0669\u06f0-\u06f9][\d\u0660-\u0669\u06f0-\u06f9.,:%]*$/.test(text);
+const isSigns = (text: string): boolean => !/[\p{L}\p{N}]/u.test(text);
+
+/** Neighbouring right-to-left words of a line stand in reverse order, with the blanks, signs and numbers between and numbers after them. */
 function inVisualOrder(tokens: readonly Token[]): Token[] {
   if (!tokens.some((t) => t.kind === 'word' && t.set.rightToLeft)) return [...tokens];
   const ordered: Token[] = [];
   let run: Token[] = [];
   const isRtl = (t: Token): boolean => t.kind === 'word' && t.set.rightToLeft;
+  const ends = (t: Token): boolean => t.kind === 'word' && (t.set.rightToLeft || isNumber(t.text));
+  const goesOn = (t: Token): boolean => t.kind === 'space' || (t.kind === 'word' && (isNumber(t.text) || isSigns(t.text)));
   const flush = (): void => {
     const tail: Token[] = [];
-    while (run.length > 0 && !isRtl(run[run.length - 1] as Token)) tail.unshift(run.pop() as Token);
+    while (run.length > 0 && !ends(run[run.length - 1] as Token)) tail.unshift(run.pop() as Token);
     ordered.push(...run.reverse(), ...tail);
     run = [];
   };
   for (const token of tokens) {
-    if (isRtl(token) || (run.length > 0 && token.kind === 'space')) run.push(token);
+    if (isRtl(token) || (run.length > 0 && goesOn(token))) run.push(token);
     else {
       flush();
       ordered.push(token);

@@ -11,8 +11,8 @@ import type { Line, PageNumber, Token, Word } from './inline.ts';
 import type { Node, Structure } from './tags.ts';
 
 export interface PageLink {
-  /** Left, top, right, bottom, y down. */
-  readonly box: readonly [number, number, number, number];
+  /** Left, top, right, bottom, y down; known when all page numbers are. */
+  box(): readonly [number, number, number, number];
   readonly target: string;
   readonly node: Node | null;
 }
@@ -36,7 +36,13 @@ export interface OutlineEntry {
   readonly y: number;
 }
 
-const n = (value: number): string => String(Math.round(value * 100) / 100);
+const n = (value: number): string => {
+  if (!Number.isFinite(value)) throw new Error('A place on the page is not a number.');
+  return String(Math.round(value * 100) / 100);
+};
+
+/** By how much words stand aside because page numbers before them in the line are wider or narrower than their room. */
+type Shift = () => number;
 
 export class Pen {
   readonly pages: PageDraft[] = [];
@@ -47,8 +53,11 @@ export class Pen {
   readonly #inks: Readonly<Record<string, string>>;
   readonly #tags: boolean;
   readonly #colours = new Map<string, string>();
-  /** Pages a number is asked for that has no target: checked at the end. */
-  readonly wanted = new Set<string>();
+  /** Template that asked for each target: checked at the end. */
+  readonly wanted = new Map<string, string>();
+  /** Name of the template that is being laid out. */
+  template = '';
+  readonly #marks = new WeakMap<Drawing, string>();
 
   constructor(type: Type, structure: Structure, inks: Readonly<Record<string, string>>, tags: boolean) {
     this.#type = type;
@@ -62,6 +71,8 @@ export class Pen {
   }
 
   newPage(): void {
+    const last = this.pages[this.page];
+    if (last !== undefined) joinPieces(last.pieces);
     this.pages.push({ pieces: [], fonts: new Set(), images: new Set(), links: [] });
   }
 
@@ -97,42 +108,67 @@ export class Pen {
   /** A line of tokens with its baseline at y. */
   line(line: Line, x: number, y: number, artifact = false): void {
     let at = x;
+    let shift: Shift | null = null;
     for (const group of groupsOf(line.tokens)) {
       const node = artifact ? null : group.node;
-      let content = '';
       const start = at;
+      const startShift: Shift | null = shift;
+      let content = '';
+      const flush = (): void => {
+        if (content !== '') this.marked(node, content);
+        content = '';
+      };
       for (const run of runsOf(group.tokens)) {
-        if (run.kind === 'words') content += `${this.#show(run.words, at, y)}\n`;
-        else if (run.kind === 'mark') {
-          const { drawing } = run.token;
-          content += `q 1 0 0 1 ${n(at)} ${n(y - drawing.height * 0.88)} cm ${toPdfOperators(drawing, this.#inks)} Q\n`;
-        } else {
-          if (content !== '') this.marked(node, content);
-          content = '';
-          this.#pageNumber(node, run.token, at, y);
-        }
+        if (run.kind === 'page') {
+          flush();
+          shift = this.#pageNumber(node, run.token, at, y, shift);
+        } else if (shift === null) content += this.#run(run, at, y, this.page);
+        else this.#shifted(node, run, at, y, shift);
         at += run.width;
       }
-      if (content !== '') this.marked(node, content);
-      const link = group.tokens.find((t): t is Word => t.kind === 'word' && t.link !== null);
-      if (link !== undefined && !artifact) {
-        this.wanted.add(link.link as string);
-        this.#draft(this.page).links.push({ box: [start, y - link.size * 0.85, at, y + link.size * 0.3], target: link.link as string, node: group.node });
-      }
+      flush();
+      if (!artifact) this.#link(group, y, start, startShift, at, shift);
     }
   }
 
+  #run(run: Exclude<Run, { kind: 'page' }>, x: number, y: number, page: number): string {
+    if (run.kind === 'words') return `${this.#show(run.words, x, y, page)}\n`;
+    const { drawing } = run.token;
+    const operators = this.#marks.get(drawing) ?? toPdfOperators(drawing, this.#inks);
+    this.#marks.set(drawing, operators);
+    return `q 1 0 0 1 ${n(x)} ${n(y - drawing.height * 0.88)} cm ${operators} Q\n`;
+  }
+
+  /** What follows a page number in its line is placed when the number is known; its fonts are asked for now. */
+  #shifted(node: Node | null, run: Exclude<Run, { kind: 'page' }>, x: number, y: number, shift: Shift): void {
+    const { page } = this;
+    this.#run(run, x, y, page);
+    this.marked(node, () => this.#run(run, x + shift(), y, page));
+  }
+
+  #link(group: { readonly node: Node | null; readonly tokens: readonly Token[] }, y: number, left: number, leftShift: Shift | null, right: number, rightShift: Shift | null): void {
+    const word = group.tokens.find((t): t is Word => t.kind === 'word' && t.link !== null);
+    if (word === undefined) return;
+    const target = word.link as string;
+    this.#want(target);
+    const [top, bottom] = [y - word.size * 0.85, y + word.size * 0.3];
+    this.#draft(this.page).links.push({ box: () => [left + (leftShift?.() ?? 0), top, right + (rightShift?.() ?? 0), bottom], target, node: group.node });
+  }
+
+  #want(target: string): void {
+    if (!this.wanted.has(target)) this.wanted.set(target, this.template);
+  }
+
   /** A page number in the room left for it; known when all pages are. */
-  #pageNumber(node: Node | null, { target, like, atRight }: PageNumber, x: number, y: number): void {
-    this.wanted.add(target);
+  #pageNumber(node: Node | null, { target, like, atRight }: PageNumber, x: number, y: number, before: Shift | null): Shift {
+    this.#want(target);
     const { page } = this;
     // The digits' glyphs are asked for now, so that the font holds them whatever the number is.
     this.#show([{ ...like, set: this.#type.set('0123456789', like.style) }], x, y);
-    this.marked(node, () => {
-      const text = String((this.targets.get(target)?.page ?? 0) + 1);
-      const set = this.#type.set(text, like.style);
-      return this.#show([{ ...like, text, set }], atRight ? x + like.width - (set.width * like.size) / 1000 : x, y, page);
-    });
+    const set = (): SetWord => this.#type.set(String((this.targets.get(target)?.page ?? 0) + 1), like.style);
+    const lack = (): number => (set().width * like.size) / 1000 - like.width;
+    this.marked(node, () => this.#show([{ ...like, set: set() }], x + (before?.() ?? 0) - (atRight ? lack() : 0), y, page));
+    return () => (before?.() ?? 0) + (atRight ? 0 : lack());
   }
 
   /** Words of one line, grouped by font. */
@@ -156,6 +192,15 @@ export class Pen {
       at += (word.set.width * word.size) / 1000;
     }
     return `${content} ET`;
+  }
+
+  /** A text cut to a width, with the sign of omission. */
+  fitted(text: string, size: number, width: number): string {
+    const isFit = (t: string): boolean => this.#type.width(t, { bold: false, italic: false }, size) <= width;
+    if (isFit(text)) return text;
+    const characters = [...text];
+    while (characters.length > 0 && !isFit(`${characters.join('').trimEnd()}…`)) characters.pop();
+    return `${characters.join('').trimEnd()}…`;
   }
 
   /** Plain text at a baseline, for headers, footers and labels of drawings. */
@@ -182,6 +227,25 @@ export class Pen {
     this.#draft(this.page).images.add(image);
     this.marked(node, `q ${image.matrix(x, y, width, height)} cm /${image.name} Do Q`);
   }
+}
+
+/** Texts of a finished page in one flat string, which takes a fraction of the room; what is not known yet stays apart. */
+function joinPieces(pieces: (string | (() => string))[]): void {
+  const joined: typeof pieces = [];
+  let texts: string[] = [];
+  const flush = (): void => {
+    if (texts.length > 0) joined.push(texts.join('\n'));
+    texts = [];
+  };
+  for (const piece of pieces) {
+    if (typeof piece === 'string') texts.push(piece);
+    else {
+      flush();
+      joined.push(piece);
+    }
+  }
+  flush();
+  pieces.splice(0, pieces.length, ...joined);
 }
 
 /** Neighbouring tokens of one node. */

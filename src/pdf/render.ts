@@ -7,7 +7,8 @@ import { sectionBoxes } from './boxes.ts';
 import { type Outline, PackedDocument, pdfText, type Reference } from './document.ts';
 import { Type } from './face.ts';
 import { Flow } from './flow.ts';
-import { imageOf, type PdfImage } from './image.ts';
+import { UserError } from '../shell/types.ts';
+import { ImageError, imageOf, type PdfImage } from './image.ts';
 import { parseMarkup } from './markup.ts';
 import { Pen, type PageLink } from './pen.ts';
 import { MARGIN, PAPER, STYLES } from './sheet.ts';
@@ -47,18 +48,29 @@ async function layOut(input: PdfInput, document: PackedDocument): Promise<Job> {
   const picture = (kind: 'photo' | 'logo', key: string): PdfImage => {
     const kept = images.get(key);
     if (kept !== undefined) return kept;
-    const image = imageOf(input.picture(kind, key), `I${images.size + 1}`);
+    const image = readImage(input.picture(kind, key), key, `I${images.size + 1}`);
     images.set(key, image);
     return image;
   };
   for (const { template, html } of input.sections) {
+    pen.template = template;
     const context: BlockContext = { type, structure, tagged: input.tags, width: flow.width, pageHeight: flow.pageHeight, template, chart: input.chart, picture };
     for (const section of parseMarkup(template, html)) flow.add(sectionBoxes(context, section, structure.root));
     await turn();
   }
-  for (const id of pen.wanted) if (!pen.targets.has(id)) throw new Error(`A link leads to "${id}", which is nowhere in the document.`);
+  for (const [id, template] of pen.wanted) if (!pen.targets.has(id)) throw new Error(`Template ${template}: a link leads to "${id}", which is nowhere in the document.`);
   structure.reservePages(pen.pages.length);
   return { pen, structure, images };
+}
+
+/** Throws a UserError that names the picture. */
+function readImage(bytes: Uint8Array, key: string, name: string): PdfImage {
+  try {
+    return imageOf(bytes, name);
+  } catch (error) {
+    if (!(error instanceof ImageError)) throw error;
+    throw new UserError(`The picture ${key} cannot be printed: ${error.message}.`, 'Save it anew as JPEG in colour or grey, or as PNG without interlacing.');
+  }
 }
 
 /** pdfkit's stream is drained between pages. */
@@ -115,7 +127,7 @@ function writeLinks(document: PackedDocument, links: readonly PageLink[], names:
   const annotations: { toString(): string }[] = [];
   for (const link of links) {
     const id = document.allocate();
-    const [left, top, right, bottom] = link.box;
+    const [left, top, right, bottom] = link.box();
     const rect = [left, height - bottom, right, height - top].map((v) => v.toFixed(2)).join(' ');
     const key = tags && link.node !== null ? ` /StructParent ${structure.link(link.node, page, id)}` : '';
     const contents = link.node?.alt == null ? '' : ` /Contents ${pdfText(link.node.alt)}`;
@@ -132,10 +144,12 @@ function furniture(input: PdfInput, pen: Pen, page: number): void {
   const right = width - MARGIN.right;
   const top = 38;
   const foot = height - 32;
-  pen.text(null, input.runningLeft, MARGIN.left, top, size, ink, false, 'start', page);
-  pen.text(null, input.runningRight, right, top, size, ink, false, 'end', page);
+  const room = right - MARGIN.left;
+  const atRight = pen.fitted(input.runningRight, size, room * 0.45);
+  pen.text(null, pen.fitted(input.runningLeft, size, room * 0.53), MARGIN.left, top, size, ink, false, 'start', page);
+  pen.text(null, atRight, right, top, size, ink, false, 'end', page);
   pen.marked(null, `${pen.colour('rule', 'RG')} 0.5 w ${MARGIN.left} ${top + 7} m ${right} ${top + 7} l S`, page);
-  pen.text(null, input.footerLeft, MARGIN.left, foot, size, ink, false, 'start', page);
+  pen.text(null, pen.fitted(input.footerLeft, size, room * 0.8), MARGIN.left, foot, size, ink, false, 'start', page);
   pen.text(null, input.pageOf(page + 1, pen.pages.length), right, foot, size, ink, false, 'end', page);
   if (input.mark === null) return;
   const operators = pen.textOperators(input.mark, 0, 0, 13, 'quiet', true, 'middle', page);
