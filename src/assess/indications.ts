@@ -28,7 +28,7 @@ interface Read {
 
 type Hit = { readonly rule: string; readonly facts: Facts };
 
-/** All indications of a machine; `isException`: it has a level, so that rules of frequency alone are worth print. */
+/** All indications of a machine; `isException`: it has a level, or stands in B or worse: on a smooth machine the rules of frequency alone are not worth print. */
 export function indicationsOf(context: Context, verdicts: readonly Verdict[], isException: boolean): Indication[] {
   if (!isDiagnosed(context)) return [];
   const reads: Read[] = verdicts.flatMap((verdict) => {
@@ -118,8 +118,8 @@ function stiffness(reads: readonly Read[]): Hit[] {
     const [h, v] = [group.find((r) => directionOf(r) === 'horizontal'), group.find((r) => directionOf(r) === 'vertical')];
     if (h === undefined || v === undefined) continue;
     const facts = { bearing, vertical: v.look.value, horizontal: h.look.value, unit: v.track.series.unit };
-    const earlier = [v.look.previous?.value ?? null, h.look.previous?.value ?? null];
-    const wasLower = earlier[0] !== null && earlier[1] !== null && reaches(earlier[1] as number, earlier[0] as number);
+    const earlier = [[v.look.previous?.value, h.look.previous?.value], [v.look.baseline?.value, h.look.baseline?.value]];
+    const wasLower = earlier.some(([below, above]) => typeof below === 'number' && typeof above === 'number' && reaches(above, below));
     const lies = componentRow(v.track, v.look.reading.day).orientation !== 'vertical';
     if (lies && exceeds(v.look.value, 1.2 * h.look.value) && hasRisen(v) && wasLower) hits.push({ rule: 'I6', facts });
     const [low, high] = [Math.min(h.look.value, v.look.value), Math.max(h.look.value, v.look.value)];

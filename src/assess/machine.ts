@@ -178,7 +178,7 @@ export function machineLine(context: Context, assessed: Assessed, previous: Cond
     override: assessed.override,
     spare: assessed.spare,
     accepted: acceptedLines(context, machine, verdicts),
-    indications: indicationsOf(context, verdicts, assessed.urgency !== null),
+    indications: indicationsOf(context, verdicts, assessed.urgency !== null || badness(worst?.condition ?? null) >= badness('B')),
     doubts: distinctDoubts(verdicts),
     cannot_see: cannotSee(context, tracks),
     events: context.plant.events
