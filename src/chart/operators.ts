@@ -21,12 +21,27 @@ const rgb = (hex: string): string => `${component(hex, 1)} ${component(hex, 3)} 
 
 const paint = (shape: PathShape): string => (shape.fill !== null && shape.stroke !== null ? 'B' : shape.fill !== null ? 'f' : 'S');
 
+/** Colour, width and dash are set where they change; the caller has saved the state and restores it. Throws for an ink without a colour. */
 export function toPdfOperators(drawing: Drawing, inks: Readonly<Record<string, string>>): string {
   let out = '';
+  let [fillSet, strokeSet] = ['', ''];
+  const colour = (ink: string): string => {
+    const hex = inks[ink];
+    if (hex === undefined) throw new Error(`The palette has no ink "${ink}".`);
+    return rgb(hex);
+  };
   for (const shape of drawing.shapes) {
     if (shape.kind !== 'path' || (shape.fill === null && shape.stroke === null) || shape.d === '') continue;
-    if (shape.fill !== null) out += `${rgb(inks[shape.fill] ?? '#000000')} rg `;
-    if (shape.stroke !== null) out += `${rgb(inks[shape.stroke] ?? '#000000')} RG ${Math.round(shape.strokeWidth * 100) / 100} w [${shape.dash.join(' ')}] 0 d `;
+    if (shape.fill !== null) {
+      const set = `${colour(shape.fill)} rg `;
+      if (set !== fillSet) out += set;
+      fillSet = set;
+    }
+    if (shape.stroke !== null) {
+      const set = `${colour(shape.stroke)} RG ${Math.round(shape.strokeWidth * 100) / 100} w [${shape.dash.join(' ')}] 0 d `;
+      if (set !== strokeSet) out += set;
+      strokeSet = set;
+    }
     out += `${pathOperators(shape.d)}${paint(shape)}\n`;
   }
   return out;

@@ -1,4 +1,10 @@
-/** 1× vectors: before and now, angles as lag in degrees, and a circle of q about the one before. */
+/**
+ * 1× vectors of a point. In: the vector before and now, amplitude and phase lag in degrees. Out: both from the centre, 0° up
+ * and lag clockwise, the way from one to the other, and the circle of q about the one before. Never: a cause.
+ */
+import { scaleLinear } from 'd3-scale';
+import { plainNumber } from '../words/numbers.ts';
+import { type Language, say } from '../words/say.ts';
 import type { Drawing, Shape } from './drawing.ts';
 import { circle, line, PathPen, round } from './path.ts';
 import { fill, label, stroke } from './shapes.ts';
@@ -14,43 +20,75 @@ export interface PolarInput {
   /** A quarter of B/C in the unit of the vectors; null without limits. */
   readonly q: number | null;
   readonly unit: string;
+  readonly language?: Language;
   readonly size: number;
   readonly alt: string;
 }
 
 const TEXT = 7;
+/** Room for degrees above and below, and for the line of words at the foot. */
+const MARGIN = 24;
+const DEGREES = Math.PI / 180;
+
+interface Plane {
+  readonly middle: number;
+  readonly radius: number;
+  /** Amplitude of the outer ring. */
+  readonly most: number;
+}
 
 export function polarPlot(input: PolarInput): Drawing {
   const { from, to, q, size } = input;
-  const middle = size / 2;
-  const radius = middle - 20;
-  // The circle of q about the vector before stays inside the plot.
-  const most = Math.max((from?.amplitude ?? 0) + (from === null ? 0 : (q ?? 0)), to?.amplitude ?? 0) * 1.1 || 1;
+  const reach = Math.max(from?.amplitude ?? 0, to?.amplitude ?? 0, (from?.amplitude ?? 0) + (q ?? 0) * 0.9);
+  const plane: Plane = { middle: size / 2, radius: size / 2 - MARGIN, most: ringValue(reach) };
   const place = (v: Vector): { x: number; y: number } => {
-    const angle = (v.lagDeg * Math.PI) / 180;
-    const r = (v.amplitude / most) * radius;
-    return { x: middle + r * Math.sin(angle), y: middle - r * Math.cos(angle) };
+    const r = (v.amplitude / plane.most) * plane.radius;
+    return { x: plane.middle + r * Math.sin(v.lagDeg * DEGREES), y: plane.middle - r * Math.cos(v.lagDeg * DEGREES) };
   };
-  const shapes: Shape[] = [stroke(circle(middle, middle, radius), 'rule', 0.6), stroke(circle(middle, middle, radius / 2), 'rule', 0.4)];
-  shapes.push(stroke(line(middle - radius, middle, middle + radius, middle), 'rule', 0.4), stroke(line(middle, middle - radius, middle, middle + radius), 'rule', 0.4));
-  shapes.push(label(middle, 14, '0°', TEXT, 'middle'), label(size - 16, middle + 2.5, '90°', TEXT), label(middle, size - 8, '180°', TEXT, 'middle'), label(16, middle + 2.5, '270°', TEXT, 'end'));
-  const scale = `${round(most)} ${input.unit}`;
-  shapes.push(label(size - 2, size - 2, scale, TEXT - 0.5, 'end'));
+  const shapes = grid(input, plane);
   const start = from === null ? null : place(from);
-  if (start !== null && q !== null) shapes.push(stroke(circle(start.x, start.y, (q / most) * radius), 'quiet', 0.6, [2, 2]));
-  if (start !== null) shapes.push(stroke(line(middle, middle, start.x, start.y), 'quiet', 0.9), stroke(circle(start.x, start.y, 2), 'quiet', 0.9));
+  if (start !== null && q !== null && q > 0) shapes.push(stroke(circle(start.x, start.y, Math.min((q / plane.most) * plane.radius, reachOf(start, size))), 'quiet', 0.6, [2, 2]));
+  if (start !== null) shapes.push(stroke(line(plane.middle, plane.middle, start.x, start.y), 'quiet', 0.9), fill(circle(start.x, start.y, 2), 'paper'), stroke(circle(start.x, start.y, 2), 'quiet', 0.9));
   if (to !== null) {
     const end = place(to);
-    shapes.push(stroke(line(middle, middle, end.x, end.y), 'ink', 1.1), fill(circle(end.x, end.y, 2.6), 'teal'));
+    shapes.push(stroke(line(plane.middle, plane.middle, end.x, end.y), 'ink', 1.1));
     if (start !== null) shapes.push(...arrow(start.x, start.y, end.x, end.y));
+    shapes.push(fill(circle(end.x, end.y, 2.6), 'teal'));
   }
   return { width: round(size), height: round(size), alt: input.alt, shapes };
+}
+
+/** A round number over the largest amplitude. */
+export function ringValue(reach: number): number {
+  if (!Number.isFinite(reach) || reach <= 0) return 1;
+  return scaleLinear().domain([0, reach * 1.06]).nice(4).domain()[1] ?? reach;
+}
+
+/** The largest circle about a place that stays on the sheet. */
+const reachOf = (at: { x: number; y: number }, size: number): number => Math.max(0, Math.min(at.x, at.y, size - at.x, size - at.y) - 0.5);
+
+function grid(input: PolarInput, { middle, radius, most }: Plane): Shape[] {
+  const language = input.language ?? 'en';
+  const { size } = input;
+  const ring = say(language, 'chart.ring', { value: plainNumber(language, most), unit: input.unit });
+  return [
+    stroke(circle(middle, middle, radius), 'rule', 0.6),
+    stroke(circle(middle, middle, radius / 2), 'rule', 0.4),
+    stroke(line(middle - radius, middle, middle + radius, middle), 'rule', 0.4),
+    stroke(line(middle, middle - radius, middle, middle + radius), 'rule', 0.4),
+    label(middle, middle - radius - 4, '0°', TEXT, 'middle'),
+    label(middle + radius + 4, middle + TEXT * 0.35, '90°', TEXT),
+    label(middle, middle + radius + TEXT + 2, '180°', TEXT, 'middle'),
+    label(middle - radius - 4, middle + TEXT * 0.35, '270°', TEXT, 'end'),
+    label(0, size - 2, say(language, 'chart.lag'), TEXT - 0.5),
+    label(size, size - 2, ring, TEXT - 0.5, 'end'),
+  ];
 }
 
 /** From the one before to the one now, with a small head. */
 function arrow(x1: number, y1: number, x2: number, y2: number): Shape[] {
   const length = Math.hypot(x2 - x1, y2 - y1);
-  if (length < 6) return [];
+  if (length < 9) return [];
   const [ux, uy] = [(x2 - x1) / length, (y2 - y1) / length];
   const [tipX, tipY] = [x2 - ux * 3.4, y2 - uy * 3.4];
   const pen = new PathPen();

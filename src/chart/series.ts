@@ -4,6 +4,7 @@
  */
 import { scaleLinear } from 'd3-scale';
 import { line as d3line } from 'd3-shape';
+import type { Language } from '../words/say.ts';
 import type { Shape } from './drawing.ts';
 import { circle, PathPen, rectangle } from './path.ts';
 import { fill, stroke } from './shapes.ts';
@@ -20,6 +21,22 @@ export interface SeriesInput {
   readonly ab: number | null;
   readonly bc: number | null;
   readonly cd: number | null;
+}
+
+export interface HistoryInput extends Omit<SeriesInput, 'newBaselineAt'> {
+  /** `YYYY-MM-DD` by survey, ascending. */
+  readonly dates: readonly string[];
+  readonly alarm: number | null;
+  readonly baseline: number | null;
+  readonly events: readonly { readonly date: string; readonly label: string; readonly newBaseline?: boolean }[];
+  /** When the line is likely to reach `value`, which the boundary names; a null end is beyond the horizon. */
+  readonly forecast?: { readonly boundary: string; readonly value: number; readonly earliest: string; readonly latest: string | null } | null;
+  readonly unit: string;
+  readonly language?: Language;
+  readonly width: number;
+  readonly height: number;
+  /** What series it is; the drawing adds what lines it shows. */
+  readonly alt: string;
 }
 
 export interface Point {
@@ -66,8 +83,14 @@ export function bands(input: SeriesInput, y: (value: number) => number, frame: F
   return shapes;
 }
 
+export interface Runs {
+  readonly runs: Point[][];
+  readonly hollow: Point[];
+  readonly last: Point | null;
+}
+
 /** Runs of comparable readings, parted at new baselines; and the readings that stand apart. */
-export function runsOf(input: SeriesInput, x: (index: number) => number, y: (value: number) => number): { readonly runs: Point[][]; readonly hollow: Point[]; readonly last: Point | null } {
+export function runsOf(input: SeriesInput, x: (index: number) => number, y: (value: number) => number): Runs {
   const runs: Point[][] = [];
   const hollow: Point[] = [];
   let run: Point[] = [];
