@@ -23,7 +23,7 @@ const n = (value: number): string => String(Math.round(value * 1000) / 1000);
 export function imageOf(bytes: Uint8Array, name: string): PdfImage {
   if (bytes[0] === 0xff && bytes[1] === 0xd8) return jpegImage(bytes, name);
   if (bytes[0] === 0x89 && bytes[1] === 0x50) return pngImage(bytes, name);
-  throw new ImageError('neither JPEG nor PNG');
+  throw new ImageError('it is neither JPEG nor PNG');
 }
 
 interface Jpeg {
@@ -43,9 +43,14 @@ function readJpeg(bytes: Uint8Array): Jpeg {
   let orientation = 1;
   let at = 2;
   while (at + 4 <= bytes.length) {
-    if (bytes[at] !== 0xff) throw new ImageError('broken JPEG');
+    if (bytes[at] !== 0xff) throw new ImageError('the JPEG is broken');
+    if (bytes[at + 1] === 0xff) {
+      at += 1;
+      continue;
+    }
     const marker = bytes[at + 1] as number;
     const length = word(bytes, at + 2);
+    if (length < 2) throw new ImageError('the JPEG is broken');
     const segment = bytes.subarray(at, at + 2 + length);
     if (marker === 0xda) {
       kept.push(bytes.subarray(at));
@@ -59,21 +64,16 @@ function readJpeg(bytes: Uint8Array): Jpeg {
     if (!isMetadata) kept.push(segment);
     at += 2 + length;
   }
-  if (frame === null) throw new ImageError('JPEG without a frame');
-  const stripped = new Uint8Array(kept.reduce((sum, k) => sum + k.length, 0));
-  let to = 0;
-  for (const part of kept) {
-    stripped.set(part, to);
-    to += part.length;
-  }
+  if (frame === null || frame.width === 0 || frame.height === 0) throw new ImageError('the JPEG has no size');
+  if (frame.components !== 1 && frame.components !== 3) throw new ImageError('the JPEG is in four colours, for a printing press');
+  const stripped = concatenated(kept);
   return { ...frame, orientation, stripped };
 }
 
 /** Orientation tag (0x0112) of an Exif segment, 1 to 8. */
 function exifOrientation(segment: Uint8Array): number | null {
-  if (String.fromCharCode(...segment.subarray(4, 8)) !== 'Exif') return null;
+  if (segment.length < 18 || String.fromCharCode(...segment.subarray(4, 8)) !== 'Exif') return null;
   const view = new DataView(segment.buffer, segment.byteOffset + 10, segment.length - 10);
-  if (view.byteLength < 8) return null;
   const little = view.getUint16(0) === 0x4949;
   const start = view.getUint32(4, little);
   if (start + 2 > view.byteLength) return null;
@@ -96,10 +96,10 @@ function turned(orientation: number, x: number, y: number, w: number, h: number)
     2: [-w, 0, 0, -h, x + w, y + h],
     3: [-w, 0, 0, h, x + w, y],
     4: [w, 0, 0, h, x, y],
-    5: [0, h, w, 0, x, y],
-    6: [0, h, -w, 0, x + w, y],
-    7: [0, -h, -w, 0, x + w, y + h],
-    8: [0, -h, w, 0, x, y + h],
+    5: [0, h, -w, 0, x + w, y],
+    6: [0, h, w, 0, x, y],
+    7: [0, -h, w, 0, x, y + h],
+    8: [0, -h, -w, 0, x + w, y + h],
   };
   return (matrices[orientation] ?? (matrices[1] as readonly number[])).map(n).join(' ');
 }
@@ -113,9 +113,7 @@ function jpegImage(bytes: Uint8Array, name: string): PdfImage {
     height: swapped ? jpeg.width : jpeg.height,
     matrix: (x, y, width, height) => turned(jpeg.orientation, x, y, width, height),
     write(document) {
-      const space = jpeg.components === 1 ? 'DeviceGray' : jpeg.components === 4 ? 'DeviceCMYK' : 'DeviceRGB';
-      if (space === 'DeviceCMYK') throw new ImageError('a JPEG in four colours');
-      return imageObject(document, jpeg.width, jpeg.height, space, 'DCTDecode', jpeg.stripped);
+      return imageObject(document, jpeg.width, jpeg.height, jpeg.components === 1 ? 'DeviceGray' : 'DeviceRGB', 'DCTDecode', jpeg.stripped);
     },
   };
 }
@@ -126,50 +124,117 @@ function imageObject(document: PackedDocument, width: number, height: number, sp
   return ref;
 }
 
+/** Channels and bits a channel of each colour type (PNG specification, third edition, table 11.1). */
 const CHANNELS: Readonly<Record<number, number>> = { 0: 1, 2: 3, 3: 1, 4: 2, 6: 4 };
+const DEPTHS: Readonly<Record<number, readonly number[]>> = { 0: [1, 2, 4, 8, 16], 2: [8, 16], 3: [1, 2, 4, 8], 4: [8, 16], 6: [8, 16] };
 
-function pngImage(bytes: Uint8Array, name: string): PdfImage {
-  const view = new DataView(bytes.buffer, bytes.byteOffset, bytes.length);
-  const [width, height, depth, colour, interlace] = [view.getUint32(16), view.getUint32(20), bytes[24], bytes[25] as number, bytes[28]];
-  if (depth !== 8 || interlace !== 0 || CHANNELS[colour] === undefined) throw new ImageError('a PNG that is not of 8 bits a channel, or interlaced');
-  return {
-    name,
-    width,
-    height,
-    matrix: (x, y, w, h) => turned(1, x, y, w, h),
-    write: (document) => imageObject(document, width, height, 'DeviceRGB', 'FlateDecode', deflateSync(pngPixels(bytes, view, width, height, colour))),
-  };
+interface Png {
+  readonly width: number;
+  readonly height: number;
+  readonly depth: number;
+  readonly colour: number;
+  readonly palette: Uint8Array;
+  /** Opacity of palette entries, or the colour that is clear. */
+  readonly clear: Uint8Array;
+  readonly data: Uint8Array;
 }
 
-/** Red, green, blue of each pixel, transparency laid on white. */
-function pngPixels(bytes: Uint8Array, view: DataView, width: number, height: number, colour: number): Uint8Array {
+function readPng(bytes: Uint8Array): Png {
+  if (bytes.length < 33) throw new ImageError('the PNG is broken');
+  const view = new DataView(bytes.buffer, bytes.byteOffset, bytes.length);
+  const [width, height, depth, colour, interlace] = [view.getUint32(16), view.getUint32(20), bytes[24] as number, bytes[25] as number, bytes[28]];
+  if (DEPTHS[colour]?.includes(depth) !== true || width === 0 || height === 0) throw new ImageError('the PNG is broken');
+  if (interlace !== 0) throw new ImageError('the PNG is interlaced');
   const data: Uint8Array[] = [];
   let palette = new Uint8Array();
+  let clear = new Uint8Array();
   for (let at = 8; at + 8 <= bytes.length; ) {
     const length = view.getUint32(at);
     const kind = String.fromCharCode(...bytes.subarray(at + 4, at + 8));
     if (kind === 'IDAT') data.push(bytes.subarray(at + 8, at + 8 + length));
     if (kind === 'PLTE') palette = bytes.slice(at + 8, at + 8 + length);
+    if (kind === 'tRNS') clear = bytes.slice(at + 8, at + 8 + length);
     at += 12 + length;
   }
-  const packed = new Uint8Array(data.reduce((sum, d) => sum + d.length, 0));
-  let to = 0;
-  for (const part of data) {
-    packed.set(part, to);
-    to += part.length;
-  }
+  return { width, height, depth, colour, palette, clear, data: concatenated(data) };
+}
+
+function pngImage(bytes: Uint8Array, name: string): PdfImage {
+  const png = readPng(bytes);
+  // Unpacked at once, so that a broken file is told by its name.
+  const packed = deflateSync(pngPixels(png), { level: 6 });
+  return {
+    name,
+    width: png.width,
+    height: png.height,
+    matrix: (x, y, w, h) => turned(1, x, y, w, h),
+    write: (document) => imageObject(document, png.width, png.height, 'DeviceRGB', 'FlateDecode', packed),
+  };
+}
+
+/** Red, green, blue of each pixel, transparency laid on white. */
+function pngPixels(png: Png): Uint8Array {
+  const { width, height, depth, colour } = png;
   const channels = CHANNELS[colour] as number;
-  const rows = unfiltered(inflateSync(packed), width * channels, height, channels);
+  const stride = Math.ceil((width * channels * depth) / 8);
+  const raw = inflated(png.data);
+  if (raw.length < (stride + 1) * height) throw new ImageError('the PNG is cut short');
+  const rows = unfiltered(raw, stride, height, Math.max(1, (channels * depth) / 8));
   const rgb = new Uint8Array(width * height * 3);
-  for (let i = 0; i < width * height; i += 1) {
-    const at = i * channels;
-    const alpha = colour === 4 ? (rows[at + 1] as number) : colour === 6 ? (rows[at + 3] as number) : 255;
-    for (let c = 0; c < 3; c += 1) {
-      const value = colour === 3 ? (palette[(rows[at] as number) * 3 + c] ?? 0) : (rows[at + (channels >= 3 ? c : 0)] as number);
-      rgb[i * 3 + c] = Math.round((value * alpha + 255 * (255 - alpha)) / 255);
+  for (let y = 0; y < height; y += 1) {
+    for (let x = 0; x < width; x += 1) {
+      const [red, green, blue, alpha] = pixelOf(png, sampleOf(rows, y * stride, x * channels, depth), colour, depth);
+      const at = (y * width + x) * 3;
+      rgb[at] = onWhite(red, alpha);
+      rgb[at + 1] = onWhite(green, alpha);
+      rgb[at + 2] = onWhite(blue, alpha);
     }
   }
   return rgb;
+}
+
+const onWhite = (value: number, alpha: number): number => (alpha === 255 ? value : Math.round((value * alpha + 255 * (255 - alpha)) / 255));
+
+/** Sample number `channel` from the first of a pixel; of 16 bits the upper eight. */
+function sampleOf(rows: Uint8Array, row: number, first: number, depth: number): (channel: number) => number {
+  if (depth === 8) return (channel) => rows[row + first + channel] as number;
+  if (depth === 16) return (channel) => rows[row + (first + channel) * 2] as number;
+  return () => {
+    const bit = first * depth;
+    return ((rows[row + (bit >> 3)] as number) >> (8 - depth - (bit & 7))) & ((1 << depth) - 1);
+  };
+}
+
+function pixelOf({ palette, clear }: Png, sample: (channel: number) => number, colour: number, depth: number): readonly [number, number, number, number] {
+  const first = sample(0);
+  if (colour === 3) return [palette[first * 3] ?? 0, palette[first * 3 + 1] ?? 0, palette[first * 3 + 2] ?? 0, clear[first] ?? 255];
+  // tRNS holds 16 bits a channel; of those of 16 bits the upper eight are compared, as they are all that is kept.
+  const key = (channel: number): number => clear[channel * 2 + (depth === 16 ? 0 : 1)] ?? -1;
+  if (colour === 0 || colour === 4) {
+    const grey = depth < 8 ? Math.round((first * 255) / ((1 << depth) - 1)) : first;
+    return [grey, grey, grey, colour === 4 ? sample(1) : first === key(0) ? 0 : 255];
+  }
+  const [green, blue] = [sample(1), sample(2)];
+  const isClear = colour === 2 && first === key(0) && green === key(1) && blue === key(2);
+  return [first, green, blue, colour === 6 ? sample(3) : isClear ? 0 : 255];
+}
+
+function inflated(data: Uint8Array): Uint8Array {
+  try {
+    return inflateSync(data);
+  } catch {
+    throw new ImageError('the PNG is broken');
+  }
+}
+
+function concatenated(parts: readonly Uint8Array[]): Uint8Array {
+  const all = new Uint8Array(parts.reduce((sum, p) => sum + p.length, 0));
+  let at = 0;
+  for (const part of parts) {
+    all.set(part, at);
+    at += part.length;
+  }
+  return all;
 }
 
 /** Undoes the row filters of PNG. */

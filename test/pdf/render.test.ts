@@ -24,7 +24,7 @@ describe('a document of several pages', () => {
   });
 
   it('prints page x of y on each page', () => {
-    pages.forEach((page, i) => expect(page.text).toContain(`Page ${i + 1} of ${pages.length}`));
+    for (const [i, page] of pages.entries()) expect(page.text).toContain(`Page ${i + 1} of ${pages.length}`);
     expect(pages.length).toBeGreaterThan(2);
   });
 
@@ -104,7 +104,7 @@ describe('nothing is lost', () => {
   });
 
   it('a word wider than its column is broken, not cut', async () => {
-    const long = 'A'.repeat(60) + '-' + 'B'.repeat(60);
+    const long = `${'A'.repeat(60)}-${'B'.repeat(60)}`;
     const { bytes } = await pdf(`<section><table><col class="text"><col class="text"><col class="text"><tbody><tr><td>${long}</td><td>${long}</td><td>x</td></tr></tbody></table></section>`);
     expect(letters(body(await read(bytes)))).toContain('B'.repeat(20));
     expect([...body(await read(bytes))].filter((c) => c === 'B').length).toBe(120);
