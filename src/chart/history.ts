@@ -66,16 +66,19 @@ function readings({ runs, hollow, last }: Runs, held: boolean, frame: Frame): Sh
   return shapes;
 }
 
-/** A to D at the left, at the foot of their bands, where a letter has room; a boundary that is not stated leaves none to name. */
+/** A to D at the left, at the foot of their bands if no line crosses there, where a letter has room; a boundary that is not stated leaves none to name. */
 function zoneLetters(input: HistoryInput, y: Scale, frame: Frame, top: number): Shape[] {
   const edges = [0, input.ab, input.bc, input.cd, Number.POSITIVE_INFINITY];
+  const crossing = [input.alarm, input.baseline].flatMap((v) => (v === null ? [] : [y(v)]));
   const shapes: Shape[] = [];
   ['A', 'B', 'C', 'D'].forEach((letter, i) => {
     const [from, to] = [edges[i], edges[i + 1]];
     if (from === null || from === undefined || to === null || to === undefined || from >= top) return;
     if (i === 0 && !Number.isFinite(to)) return;
     const [low, high] = [y(from), y(Math.min(to, top))];
-    if (low - high >= SIZE + 2) shapes.push(label(frame.left + 3.5, low - 2.5, letter, SIZE, 'start', 'quiet', true));
+    const places = [low - 2.5, (low + high) / 2 + SIZE * 0.35, high + SIZE].filter((at) => at <= low - 1 && at >= high + SIZE - 0.5);
+    const at = places.find((place) => crossing.every((line) => line < place - SIZE || line > place + 1)) ?? places[0];
+    if (at !== undefined) shapes.push(label(frame.left + 3.5, at, letter, SIZE, 'start', 'quiet', true));
   });
   return shapes;
 }
