@@ -16,6 +16,8 @@ export interface PathShape {
   readonly strokeWidth: number;
   /** Lengths of dash and gap; empty = solid. */
   readonly dash: readonly number[];
+  /** Centre and radius where the path is a circle: SVG has a shorter way to say so. */
+  readonly circle?: readonly [cx: number, cy: number, r: number];
 }
 
 export interface TextShape {

@@ -1,9 +1,9 @@
 /** A series in one line of a table: faint zone bands, a thin line, the last reading marked. */
 import { scaleLinear } from 'd3-scale';
 import type { Drawing, Shape } from './drawing.ts';
-import { circle, line, round } from './path.ts';
+import { line, round } from './path.ts';
 import { bands, runShapes, runsOf, type SeriesInput, topValue, valueScale } from './series.ts';
-import { fill, stroke } from './shapes.ts';
+import { dot, ring, stroke } from './shapes.ts';
 
 export interface SparklineInput extends SeriesInput {
   readonly width?: number;
@@ -24,11 +24,11 @@ export function sparkline(input: SparklineInput): Drawing {
   const x = scaleLinear().domain([0, Math.max(1, count - 1)]).range([INSET, right]);
   const { runs, hollow, last } = runsOf(input, (i) => (count === 1 ? width / 2 : x(i)), inner);
   const shapes: Shape[] = [...bands(input, valueScale(top, frame), frame, top), ...runShapes(runs, 0.8, 0.9)];
-  for (const point of hollow) if (point !== last) shapes.push(stroke(circle(point.x, point.y, 1.1), 'quiet', 0.6));
+  for (const point of hollow) if (point !== last) shapes.push(ring(point.x, point.y, 1.1, 'quiet', 0.6));
   if (last !== null) {
     const isHollow = hollow.includes(last) && !input.held;
-    if (input.held) shapes.push(stroke(line(last.x, last.y, Math.min(width - 0.5, last.x + TAIL), last.y), 'quiet', 0.7, [1.4, 1.4]), stroke(circle(last.x, last.y, 1.5), 'teal', 0.8));
-    else shapes.push(isHollow ? stroke(circle(last.x, last.y, 1.5), 'teal', 0.8) : fill(circle(last.x, last.y, 1.7), 'teal'));
+    if (input.held) shapes.push(stroke(line(last.x, last.y, Math.min(width - 0.5, last.x + TAIL), last.y), 'quiet', 0.7, [1.4, 1.4]), ring(last.x, last.y, 1.5, 'teal', 0.8));
+    else shapes.push(isHollow ? ring(last.x, last.y, 1.5, 'teal', 0.8) : dot(last.x, last.y, 1.7, 'teal'));
   }
   return { width: round(width), height: round(height), alt, shapes };
 }

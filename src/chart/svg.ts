@@ -16,6 +16,8 @@ function shapeText(shape: Shape): string {
   const strokeClass = shape.stroke === null ? '' : ` s-${shape.stroke}`;
   const width = shape.stroke === null ? '' : ` stroke-width="${Math.round(shape.strokeWidth * 100) / 100}"`;
   const dash = shape.dash.length === 0 ? '' : ` stroke-dasharray="${shape.dash.join(' ')}"`;
+  const { circle } = shape;
+  if (circle !== undefined) return `<circle class="${fillClass}${strokeClass}"${width} cx="${circle[0]}" cy="${circle[1]}" r="${circle[2]}"/>`;
   return `<path class="${fillClass}${strokeClass}"${width}${dash} d="${shape.d}"/>`;
 }
 
@@ -23,5 +25,7 @@ function shapeText(shape: Shape): string {
 export function toSvg(drawing: Drawing, options: { readonly decorative?: boolean; readonly className?: string } = {}): string {
   const name = options.decorative === true ? 'aria-hidden="true"' : `role="img" aria-label="${escaped(drawing.alt)}"`;
   const className = options.className === undefined ? '' : ` class="${options.className}"`;
-  return `<svg${className} viewBox="0 0 ${drawing.width} ${drawing.height}" width="${drawing.width}" height="${drawing.height}" ${name}>${drawing.shapes.map(shapeText).join('')}</svg>`;
+  // A class of its own sizes it by the style sheet.
+  const size = options.className === undefined ? ` width="${drawing.width}" height="${drawing.height}"` : '';
+  return `<svg${className} viewBox="0 0 ${drawing.width} ${drawing.height}"${size} ${name}>${drawing.shapes.map(shapeText).join('')}</svg>`;
 }

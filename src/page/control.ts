@@ -126,7 +126,8 @@ export function coverageView(format: Format) {
     interval: c.interval_days === null ? '' : String(Math.round(c.interval_days)),
   });
   const byDue = [...coverage].filter((c) => c.next_due !== null).sort((a, b) => ((a.next_due as string) < (b.next_due as string) ? -1 : a.next_due === b.next_due ? 0 : 1));
-  return { missed: missed.map(view), hasMissed: missed.length > 0, all: coverage.map(view), due: byDue.map(view), hasDue: byDue.length > 0 };
+  const open = coverage.filter((c) => c.status !== 'measured');
+  return { missed: missed.map(view), hasMissed: missed.length > 0, open: open.map(view), hasOpen: open.length > 0, due: byDue.map(view), hasDue: byDue.length > 0 };
 }
 
 /** What changed since the survey before: limits, baselines, points. */

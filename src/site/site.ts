@@ -113,7 +113,7 @@ function machineList(format: Format, charts: Charts): object {
   const machines = record.machines.map((machine) => {
     const view = machineView(format, charts, machine);
     const m = governingMeasurement(format, machine);
-    return { ...view, svg: view.hasChart && m !== null ? svgOf(charts, 'sparkline', m) : '' };
+    return { ...view, svg: view.hasChart && m !== null ? svgOf(charts, 'sparkline', m, true) : '' };
   });
   const areas = [...new Set(machines.map((m) => m.area).filter((a) => a !== ''))].sort();
   const order = ['D', 'r-D', 'C', 'r-C', 'B', 'r-B', 'A', 'r-A', 'none'];
