@@ -55,7 +55,7 @@ const long = (surveys: readonly number[], machines: readonly DemoMachine[]): str
 
 function machineTables(): DemoFile[] {
   const machineColumns = ['machine', 'name', 'area', 'route', 'criticality', 'spare_group', 'interval_days', 'in_service_from', 'removed_on', 'family', 'kind', 'power_kw', 'speed_rpm', 'drive', 'support', 'shaft_height_mm', 'bearings', 'pump_category', 'limit_set'];
-  const componentColumns = ['machine', 'component', 'kind', 'power_kw', 'speed_rpm', 'speed_ratio', 'speed_min', 'speed_max', 'drive', 'support', 'shaft_height_mm', 'bearings', 'rotor', 'pump_category', 'fan_category', 'gear_rating', 'limit_set', 'serial'];
+  const componentColumns = ['machine', 'component', 'kind', 'power_kw', 'speed_rpm', 'speed_ratio', 'speed_min', 'speed_max', 'drive', 'support', 'shaft_height_mm', 'bearings', 'orientation', 'rotor', 'pump_category', 'fan_category', 'gear_rating', 'limit_set', 'serial'];
   const pointColumns = ['machine', 'component', 'point', 'location', 'direction', 'measured_on', 'quantity', 'unit', 'detection', 'low_hz', 'high_hz', 'limit_set'];
   const points = MACHINES.flatMap((m) => m.series.map((s) => ({ machine: m.machine, component: s.component ?? '', point: s.point, quantity: s.quantity ?? 'velocity', unit: s.unit ?? 'mm/s', detection: s.detection ?? 'rms', ...s.columns })));
   return [

@@ -53,7 +53,7 @@ export function oneFrequency(component: string, point: string, velocity: readonl
 }
 
 type Component = Row & { readonly component: string };
-const base = (component: string, kind: string, kw: number, rpm: number): Component => ({ component, kind, power_kw: kw, speed_rpm: rpm, drive: 'fixed', support: 'rigid', bearings: 'rolling' });
+const base = (component: string, kind: string, kw: number, rpm: number): Component => ({ component, kind, power_kw: kw, speed_rpm: rpm, drive: 'fixed', support: 'rigid', bearings: 'rolling', orientation: 'horizontal' });
 export const motor = (kw: number, shaftHeight: number, rpm: number, more: Row = {}): Component => ({ ...base('motor', 'motor', kw, rpm), shaft_height_mm: shaftHeight, ...more });
 export const pump = (kw: number, rpm: number, category: string, more: Row = {}): Component => ({ ...base('pump', 'pump', kw, rpm), pump_category: category, ...more });
 export const fan = (kw: number, rpm: number, more: Row = {}): Component => ({ ...base('fan', 'fan', kw, rpm), ...more });

@@ -26,10 +26,10 @@ const CAMPAIGNS = [1, 1.03, 0.98, 1.02, 0.99, 1.04, 1.01, 0.97, 1.02, 1];
 
 export const PROCESS: readonly DemoMachine[] = [
   // In C, steady, with B a proven spare: the next planned stop does.
-  juicePump('A', v('pump', '3H', [5.9, 6.1, 6.0, 5.8, 6.1, 5.9, 6.0, 5.9, 6.1, 6.0])),
+  juicePump('A', v('pump', '3H', [5.9, 6.1, 6.0, 5.8, 6.1, 5.9, 6.0, 5.9, 6.1, 6.0]), v('pump', '3V', 4.1)),
   juicePump('B'),
   // Jumped into D between two surveys: told before leaving site.
-  juicePump('C', v('pump', '3H', [1.8, 1.8, 1.9, 1.8, 1.9, 1.9, 1.8, 1.9, 2.1, 9.1]), v('pump', '3A', [1.1, 1.2, 1.1, 1.1, 1.2, 1.2, 1.1, 1.2, 1.2, 3.4])),
+  juicePump('C', v('pump', '3H', [1.8, 1.8, 1.9, 1.8, 1.9, 1.9, 1.8, 1.9, 2.1, 9.1]), v('pump', '3V', [1.4, 1.5, 1.4, 1.5, 1.4, 1.4, 1.5, 1.4, 1.6, 5.9]), v('pump', '3A', [0.8, 0.8, 0.7, 0.8, 0.7, 0.8, 0.8, 0.8, 0.9, 3.4])),
   {
     // Its pump rose into C, and every point of the train rose by much the same ratio.
     machine: 'PW-02',

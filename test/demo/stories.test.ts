@@ -7,7 +7,7 @@ import type { Doubt, RecordMeasurement, SwayfolioRecord } from '../../src/record
 import { realShell } from '../../src/shell/shell.ts';
 import { readPlant } from '../../src/survey/read.ts';
 import { demoFiles } from './folder.ts';
-import { STORIES, type Story } from './stories.ts';
+import { INDICATIONS, QUIET, STORIES, type Story } from './stories.ts';
 
 const folder = new URL('../../demo-survey', import.meta.url).pathname;
 const { plant, problems } = readPlant(realShell, folder);
@@ -36,7 +36,7 @@ const committed = (below: string): string[] =>
     return statSync(join(folder, path)).isDirectory() ? committed(path) : [path];
   });
 
-const pairs = (doubts: readonly Doubt[]): string[] => doubts.map((d) => `${d.kind} ${d.effect}`);
+const bears = (doubts: readonly Doubt[], kind: string, effect: string | undefined): boolean => doubts.some((d) => d.kind === kind && (effect === undefined || d.effect === effect));
 
 describe('the folder', () => {
   it('is byte for byte what its maker makes', () => {
@@ -86,8 +86,8 @@ describe('each story', () => {
       const reading = readingOf(record, story);
       if (story.reading !== undefined) expect(reading).toMatchObject(story.reading);
       for (const [name, value] of Object.entries(story.boundaries ?? {})) expect(reading?.limits?.[name as 'bc'], name).toBeCloseTo(value, 2);
-      const said = pairs(reading?.doubts ?? record.measurements.filter((m) => m.machine === story.machine).flatMap((m) => m.doubts).concat(machine?.doubts ?? []));
-      for (const [kind, effect] of story.doubts ?? []) expect(said).toContain(`${kind} ${effect}`);
+      const said = reading?.doubts ?? record.measurements.filter((m) => m.machine === story.machine).flatMap((m) => m.doubts);
+      for (const [kind, effect] of story.doubts ?? []) expect(bears(said, kind, effect), `${kind} among ${said.map((d) => d.kind).join(', ')}`).toBe(true);
       for (const [survey, word] of Object.entries(story.hollow ?? {})) {
         expect(reading?.history.why[String(record.surveys.findIndex((s) => s.id === survey))], survey).toContain(word);
       }
@@ -99,4 +99,17 @@ describe('each story', () => {
       }
     });
   }
+});
+
+describe('indications', () => {
+  for (const { rule, machine, survey } of INDICATIONS) {
+    it(`${rule} at ${machine}${survey === undefined ? '' : ` of ${survey}`}`, () => {
+      const found = recordOf(survey).machines.find((m) => m.machine === machine);
+      expect(found?.indications.map((i) => i.rule)).toContain(rule);
+    });
+  }
+
+  it('leave quiet machines alone', () => {
+    for (const machine of QUIET) expect(recordOf(undefined).machines.find((m) => m.machine === machine)?.indications, machine).toEqual([]);
+  });
 });

@@ -9,7 +9,7 @@ export const YARD: readonly DemoMachine[] = [
     // The fan at 165 r/min needs a band from 2 Hz; its instrument starts at 10 Hz.
     machine: 'CT-01',
     columns: about('Cooling tower fan', 'Utilities', 'R3', 'general'),
-    components: [motor(30, 200, 1470), part('gear', 'gearbox', 30, 1470, { gear_rating: 8 }), fan(30, 165, { support: 'flexible' })],
+    components: [motor(30, 200, 1470), part('gear', 'gearbox', 30, 1470, { gear_rating: 8 }), fan(30, 165, { support: 'flexible', orientation: 'vertical' })],
     series: [...bearing('motor', 1, 1.2), ...bearing('gear', 2, 2.2), ...bearing('fan', 3, 2.1)],
   },
   {
