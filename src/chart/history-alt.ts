@@ -1,5 +1,5 @@
 /** What a history chart shows beyond its readings, in words: its lines, what stands hollow, gaps, the forecast. */
-import { formatNumber, plainNumber } from '../words/numbers.ts';
+import { formatNumber, limitNumber } from '../words/numbers.ts';
 import { listText, say } from '../words/say.ts';
 import type { HistoryInput } from './series.ts';
 
@@ -8,7 +8,7 @@ export function historyAlt(input: HistoryInput, newBaselineAt: readonly number[]
   const named: readonly (readonly [string, number | null])[] = [
     ['A/B', input.ab], ['B/C', input.bc], ['C/D', input.cd], [say(language, 'chart.alarm'), input.alarm],
   ];
-  const lines = named.flatMap(([name, value]) => (value === null ? [] : [`${name} ${plainNumber(language, value)}`]));
+  const lines = named.flatMap(([name, value]) => (value === null ? [] : [`${name} ${limitNumber(language, value)}`]));
   if (input.baseline !== null) lines.push(`${say(language, 'chart.baseline')} ${formatNumber(language, input.baseline)}`);
   const hollow = input.values.filter((value, i) => value !== null && input.comparable[i] !== true).length;
   const parts = [input.alt];

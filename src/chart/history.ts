@@ -4,7 +4,7 @@
  */
 import { scaleLinear } from 'd3-scale';
 import { dayText, parseDay } from '../plant/day.ts';
-import { formatNumber, plainNumber } from '../words/numbers.ts';
+import { formatNumber, limitNumber, plainNumber } from '../words/numbers.ts';
 import { say } from '../words/say.ts';
 import type { Drawing, Ink, Shape } from './drawing.ts';
 import { historyAlt } from './history-alt.ts';
@@ -105,7 +105,7 @@ function limitLines(input: HistoryInput, top: number): LimitLine[] {
     { text: say(language, 'chart.baseline'), value: input.baseline, dash: [0.8, 1.8], ink: 'quiet', width: 0.7 },
   ];
   return marks
-    .flatMap((m) => (m.value === null || m.value > top ? [] : [{ ...m, value: m.value, text: `${m.text} ${m.ink === 'quiet' ? formatNumber(language, m.value) : plainNumber(language, m.value)}` }]))
+    .flatMap((m) => (m.value === null || m.value > top ? [] : [{ ...m, value: m.value, text: `${m.text} ${m.ink === 'quiet' ? formatNumber(language, m.value) : limitNumber(language, m.value)}` }]))
     .sort((a, b) => a.value - b.value);
 }
 

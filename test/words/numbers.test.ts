@@ -1,6 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { formatNumber, formatQuantity, MINUS, plainNumber } from '../../src/words/numbers.ts';
+import { formatNumber, formatQuantity, limitNumber, MINUS, plainNumber } from '../../src/words/numbers.ts';
 
 const NARROW = '\u202f';
 
@@ -47,6 +47,10 @@ describe('numbers in print', () => {
 
   it('plain numbers keep the decimals they were given with', () => {
     expect([8, 1.5, 0.25, 2970, 0.12345, 0.1 + 0.2].map((v) => plainNumber('en', v))).toEqual(['8', '1.5', '0.25', '2970', '0.123', '0.3']);
+  });
+
+  it('boundaries print as they were set, three digits at most', () => {
+    expect([4.5, 90, 3.075, 0.17716535, 6.3750001, 8].map((v) => limitNumber('en', v))).toEqual(['4.5', '90', '3.08', '0.177', '6.38', '8']);
   });
 
   /** `Number.prototype.toPrecision` of the language is the outside check of three significant digits. */
