@@ -8,9 +8,9 @@ import { formatNumber, limitNumber, plainNumber } from '../words/numbers.ts';
 import { say } from '../words/say.ts';
 import type { Drawing, Ink, Shape } from './drawing.ts';
 import { historyAlt } from './history-alt.ts';
-import { circle, line, rectangle, round } from './path.ts';
+import { line, rectangle, round } from './path.ts';
 import { bands, type Frame, type HistoryInput, type Runs, runShapes, runsOf, topValue, valueScale } from './series.ts';
-import { fill, label, stroke } from './shapes.ts';
+import { dot, fill, label, ring, stroke } from './shapes.ts';
 
 export type { HistoryInput };
 
@@ -31,8 +31,8 @@ export function historyChart(input: HistoryInput): Drawing {
   const frame: Frame = {
     left: Math.max(30, roomOf(ticks.map((t) => t.text)) + 9), top: 22, right: width - Math.max(46, roomOf(lines.map((l) => l.text)) + 6), bottom: height - 18,
   };
-  const first = Math.min(...days);
-  const last = Math.max(...days, forecastEnd(input) ?? first);
+  const first = days[0] ?? 0;
+  const last = Math.max(days[days.length - 1] ?? first, forecastEnd(input) ?? first);
   const time = scaleLinear().domain([first, Math.max(last, first + 1)]).range([frame.left + 16, frame.right - 8]);
   const x: Scale = (index) => (first === last ? (frame.left + frame.right) / 2 : time(days[index] ?? first));
   const y = valueScale(top, frame);
@@ -56,13 +56,13 @@ const roomOf = (texts: readonly string[]): number => Math.max(0, ...texts.map((t
 
 function readings({ runs, hollow, last }: Runs, held: boolean, frame: Frame): Shape[] {
   const shapes = runShapes(runs, 1.1, 1.5);
-  for (const run of runs) if (run.length > 1) for (const p of run) if (p !== last) shapes.push(fill(circle(p.x, p.y, 1.5), 'ink'));
-  for (const p of hollow) if (p !== last) shapes.push(fill(circle(p.x, p.y, 1.9), 'paper'), stroke(circle(p.x, p.y, 1.9), 'quiet', 0.8));
+  for (const run of runs) if (run.length > 1) for (const p of run) if (p !== last) shapes.push(dot(p.x, p.y, 1.5, 'ink'));
+  for (const p of hollow) if (p !== last) shapes.push(dot(p.x, p.y, 1.9, 'paper'), ring(p.x, p.y, 1.9, 'quiet', 0.8));
   if (last === null) return shapes;
   if (held) shapes.push(stroke(line(last.x, last.y, Math.min(frame.right, last.x + 24), last.y), 'quiet', 0.9, [2, 2]));
   const open = held || hollow.includes(last);
-  shapes.push(fill(circle(last.x, last.y, 2.7), open ? 'paper' : 'teal'));
-  if (open) shapes.push(stroke(circle(last.x, last.y, 2.6), 'teal', 1.1));
+  shapes.push(dot(last.x, last.y, 2.7, open ? 'paper' : 'teal'));
+  if (open) shapes.push(ring(last.x, last.y, 2.6, 'teal', 1.1));
   return shapes;
 }
 
@@ -77,7 +77,7 @@ function zoneLetters(input: HistoryInput, y: Scale, frame: Frame, top: number): 
     if (i === 0 && !Number.isFinite(to)) return;
     const [low, high] = [y(from), y(Math.min(to, top))];
     const places = [low - 2.5, (low + high) / 2 + SIZE * 0.35, high + SIZE].filter((at) => at <= low - 1 && at >= high + SIZE - 0.5);
-    const at = places.find((place) => crossing.every((line) => line < place - SIZE || line > place + 1)) ?? places[0];
+    const at = places.find((place) => crossing.every((level) => level < place - SIZE || level > place + 1)) ?? places[0];
     if (at !== undefined) shapes.push(label(frame.left + 3.5, at, letter, SIZE, 'start', 'quiet', true));
   });
   return shapes;

@@ -7,7 +7,7 @@ import { plainNumber } from '../words/numbers.ts';
 import { type Language, say } from '../words/say.ts';
 import type { Drawing, Shape } from './drawing.ts';
 import { circle, line, PathPen, round } from './path.ts';
-import { fill, label, stroke } from './shapes.ts';
+import { dot, fill, label, ring, stroke } from './shapes.ts';
 
 interface Vector {
   readonly amplitude: number;
@@ -47,13 +47,13 @@ export function polarPlot(input: PolarInput): Drawing {
   };
   const shapes = grid(input, plane);
   const start = from === null ? null : place(from);
-  if (start !== null && q !== null && q > 0) shapes.push(stroke(circle(start.x, start.y, Math.min((q / plane.most) * plane.radius, reachOf(start, size))), 'quiet', 0.6, [2, 2]));
-  if (start !== null) shapes.push(stroke(line(plane.middle, plane.middle, start.x, start.y), 'quiet', 0.9), fill(circle(start.x, start.y, 2), 'paper'), stroke(circle(start.x, start.y, 2), 'quiet', 0.9));
+  if (start !== null && q !== null && q > 0) shapes.push(stroke(circle(start.x, start.y, (q / plane.most) * plane.radius), 'quiet', 0.6, [2, 2]));
+  if (start !== null) shapes.push(stroke(line(plane.middle, plane.middle, start.x, start.y), 'quiet', 0.9), dot(start.x, start.y, 2, 'paper'), ring(start.x, start.y, 2, 'quiet', 0.9));
   if (to !== null) {
     const end = place(to);
     shapes.push(stroke(line(plane.middle, plane.middle, end.x, end.y), 'ink', 1.1));
     if (start !== null) shapes.push(...arrow(start.x, start.y, end.x, end.y));
-    shapes.push(fill(circle(end.x, end.y, 2.6), 'teal'));
+    shapes.push(dot(end.x, end.y, 2.6, 'teal'));
   }
   return { width: round(size), height: round(size), alt: input.alt, shapes };
 }
@@ -64,16 +64,13 @@ export function ringValue(reach: number): number {
   return scaleLinear().domain([0, reach * 1.06]).nice(4).domain()[1] ?? reach;
 }
 
-/** The largest circle about a place that stays on the sheet. */
-const reachOf = (at: { x: number; y: number }, size: number): number => Math.max(0, Math.min(at.x, at.y, size - at.x, size - at.y) - 0.5);
-
 function grid(input: PolarInput, { middle, radius, most }: Plane): Shape[] {
   const language = input.language ?? 'en';
   const { size } = input;
-  const ring = say(language, 'chart.ring', { value: plainNumber(language, most), unit: input.unit });
+  const scale = say(language, 'chart.ring', { value: plainNumber(language, most), unit: input.unit });
   return [
-    stroke(circle(middle, middle, radius), 'rule', 0.6),
-    stroke(circle(middle, middle, radius / 2), 'rule', 0.4),
+    ring(middle, middle, radius, 'rule', 0.6),
+    ring(middle, middle, radius / 2, 'rule', 0.4),
     stroke(line(middle - radius, middle, middle + radius, middle), 'rule', 0.4),
     stroke(line(middle, middle - radius, middle, middle + radius), 'rule', 0.4),
     label(middle, middle - radius - 4, '0°', TEXT, 'middle'),
@@ -81,7 +78,7 @@ function grid(input: PolarInput, { middle, radius, most }: Plane): Shape[] {
     label(middle, middle + radius + TEXT + 2, '180°', TEXT, 'middle'),
     label(middle - radius - 4, middle + TEXT * 0.35, '270°', TEXT, 'end'),
     label(0, size - 2, say(language, 'chart.lag'), TEXT - 0.5),
-    label(size, size - 2, ring, TEXT - 0.5, 'end'),
+    label(size, size - 2, scale, TEXT - 0.5, 'end'),
   ];
 }
 

@@ -6,8 +6,8 @@ import { scaleLinear } from 'd3-scale';
 import { line as d3line } from 'd3-shape';
 import type { Language } from '../words/say.ts';
 import type { Shape } from './drawing.ts';
-import { circle, PathPen, rectangle } from './path.ts';
-import { fill, stroke } from './shapes.ts';
+import { PathPen, rectangle } from './path.ts';
+import { dot, fill, stroke } from './shapes.ts';
 
 export interface SeriesInput {
   /** By survey, in the unit of the series; null where there is none. */
@@ -113,10 +113,10 @@ export function runsOf(input: SeriesInput, x: (index: number) => number, y: (val
 const path = d3line<Point>().x((p) => p.x).y((p) => p.y);
 
 /** The line of each run; a run of one is a dot. */
-export function runShapes(runs: readonly (readonly Point[])[], width: number, dot: number): Shape[] {
+export function runShapes(runs: readonly (readonly Point[])[], width: number, radius: number): Shape[] {
   return runs.map((run) => {
     const only = run[0];
-    if (run.length === 1 && only !== undefined) return fill(circle(only.x, only.y, dot), 'ink');
+    if (run.length === 1 && only !== undefined) return dot(only.x, only.y, radius, 'ink');
     const pen = new PathPen();
     path.context(pen as unknown as CanvasRenderingContext2D)([...run]);
     return stroke(pen.toString(), 'ink', width);

@@ -25,10 +25,10 @@ export const history = (change: Partial<HistoryInput> = {}): Drawing => {
   });
 };
 
-const polar = (from: [number, number] | null, to: [number, number] | null, q: number | null): Drawing =>
+export const polar = (from: [number, number] | null, to: [number, number] | null, q: number | null): Drawing =>
   polarPlot({ from: from && { amplitude: from[0], lagDeg: from[1] }, to: to && { amplitude: to[0], lagDeg: to[1] }, q, unit: 'mm/s r.m.s.', size: 170, alt: '1× vector' });
 
-const columns = (counts: readonly Readonly<Record<string, number>>[]): Drawing =>
+export const columns = (counts: readonly Readonly<Record<string, number>>[]): Drawing =>
   plantOverTime({ dates: counts.map((_, i) => DATES[i % 12] as string), counts, width: 490, height: 120, alt: 'Machines by condition' });
 
 const NOWHERE = { ab: null, bc: null, cd: null };

@@ -10,7 +10,7 @@ import { toPdfOperators } from '../../src/chart/operators.ts';
 import { ringValue } from '../../src/chart/polar.ts';
 import { toSvg } from '../../src/chart/svg.ts';
 import { zoneMark } from '../../src/chart/zone-mark.ts';
-import { all, CASES, DATES, history, spark } from './cases.ts';
+import { all, CASES, columns, DATES, history, polar, spark } from './cases.ts';
 
 const names = Object.keys(CASES);
 /** Drawings kept as text: one of each kind. */
@@ -43,6 +43,11 @@ function expectSound(drawing: Drawing, slack = 0.01): void {
       expect(n).toBeGreaterThanOrEqual(-slack);
       expect(n).toBeLessThanOrEqual((i % 2 === 0 ? drawing.width : drawing.height) + slack);
     });
+    if (shape.circle !== undefined) {
+      const [cx, cy, r] = shape.circle;
+      expect(Math.max(...numbers.filter((_, i) => i % 2 === 0))).toBeCloseTo(cx + r, 1);
+      expect(Math.min(...numbers.filter((_, i) => i % 2 === 1))).toBeCloseTo(cy - r, 1);
+    }
     for (const ink of [shape.fill, shape.stroke]) if (ink !== null) expect(palette).toContain(ink);
   }
 }
@@ -67,8 +72,15 @@ describe('drawings', () => {
     fc.assert(fc.property(rows, fc.boolean(), limits, (pairs, held, change) => {
       const input = { values: pairs.map(([v]) => v), comparable: pairs.map(([, c]) => c), held, ...change };
       expectSound(spark({ ...input, newBaselineAt: [3] }));
-      expectSound(history({ ...input, dates: DATES.slice(0, pairs.length) }));
+      expectSound(history({ ...input, dates: DATES.slice(0, pairs.length), forecast: { boundary: 'C/D', value: 4.5, earliest: '2026-02-01', latest: null } }));
     }));
+  });
+
+  it('property: any vectors and any counts give a sound plot', () => {
+    const vector = fc.option(fc.tuple(fc.double({ min: 0, max: 1e4, noNaN: true }), fc.double({ min: 0, max: 360, noNaN: true })));
+    fc.assert(fc.property(vector, vector, fc.option(fc.double({ min: 0, max: 1e4, noNaN: true })), (from, to, q) => expectSound(polar(from, to, q))));
+    const count = fc.nat(3000);
+    fc.assert(fc.property(fc.array(fc.record({ A: count, 'r-B': count, C: count, D: count, 'not assessed': count }), { maxLength: 50 }), (counts) => expectSound(columns(counts))), { numRuns: 40 });
   });
 
   it('property: readings that rise are a line that rises', () => {
