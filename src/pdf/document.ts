@@ -97,6 +97,8 @@ export class PackedDocument extends BaseDocument {
       margin: 0,
       autoFirstPage: false,
       font: null,
+      // Words are kept once, by Type.
+      fontLayoutCache: false,
       pdfVersion: isFirst ? '1.4' : '1.7',
       subset: profile === 'PDF/A-1b' ? 'PDF/A-1b' : 'PDF/A-3b',
       lang: language,
@@ -196,7 +198,7 @@ export class PackedDocument extends BaseDocument {
     const stream = this.ref({ Type: 'EmbeddedFile', Subtype: file.mime.replace('/', '#2F'), Filter: 'FlateDecode', Params: { Size: file.bytes.length, CreationDate: made, ModDate: made } });
     stream.end(deflate(file.bytes));
     const [name, description] = [new String(file.name), new String(file.description)];
-    const spec = this.ref({ Type: 'Filespec', AFRelationship: 'Data', F: name, UF: name, Desc: description, EF: { F: stream } });
+    const spec = this.ref({ Type: 'Filespec', AFRelationship: file.name === 'record.json' ? 'Source' : 'Data', F: name, UF: name, Desc: description, EF: { F: stream } });
     spec.end();
     this.addNamedEmbeddedFile(file.name, spec);
     this.catalogue['AF'] = [...((this.catalogue['AF'] as Reference[] | undefined) ?? []), spec];

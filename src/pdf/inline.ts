@@ -36,7 +36,7 @@ export interface PageNumber extends Placed {
   readonly kind: 'page';
   readonly target: string;
   readonly like: Word;
-  /** In a table the number stands at the right of its room. */
+  /** Alone in a cell of a table the number stands at the right of its room. */
   readonly atRight: boolean;
 }
 export type Token = Word | Space | Mark | PageNumber | { readonly kind: 'break'; readonly width: 0; readonly node: null };
@@ -62,6 +62,9 @@ interface Current extends TextStyle {
 export function tokensOf(context: InlineContext, children: Element['children'], base: TextStyle, node: Node | null): Token[] {
   const tokens: Token[] = [];
   collect(context, children, { ...base, rise: 0, link: null, node }, tokens);
+  const only = tokens.filter((t) => t.kind !== 'space');
+  const [page] = only;
+  if (only.length === 1 && page?.kind === 'page' && node?.role === 'TD') return [{ ...page, atRight: true }];
   return tokens;
 }
 
@@ -94,7 +97,7 @@ function addSpan(context: InlineContext, element: Element, now: Current, tokens:
     tokens.push({ kind: 'mark', drawing, width: drawing.width + 2.2, node: now.node });
   } else if (target !== undefined) {
     const like = wordOf(context, '000', now);
-    tokens.push({ kind: 'page', target, like, width: like.width, node: now.node, atRight: now.node?.role === 'TD' });
+    tokens.push({ kind: 'page', target, like, width: like.width, node: now.node, atRight: false });
   }
   collect(context, element.children, now, tokens);
 }

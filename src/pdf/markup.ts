@@ -58,7 +58,7 @@ export function parseMarkup(template: string, html: string): Element[] {
       },
       ontext(text) {
         const parent = open[open.length - 1] as Element;
-        if (WITH_INLINE.has(parent.tag)) parent.children.push(text);
+        if (WITH_INLINE.has(parent.tag)) addText(parent, text);
         else if (/[^ \t\r\n\f]/.test(text)) fail(`text may not stand in <${parent.tag}>: ${text.trim().slice(0, 40)}`);
       },
       onclosetag(tag, implied) {
@@ -90,6 +90,13 @@ function checkFigures(element: Element, fail: (what: string) => never): void {
   if (figure === undefined) return;
   if (element.children.some((c) => c !== figure && (typeof c !== 'string' || /[^ \t\r\n\f]/.test(c)))) fail('<figure> stands with something else in a <td>');
   if (figure.children.length > 0) fail('<figcaption> may not stand in a <td>');
+}
+
+/** The parser tells a text in parts, at each entity: they are one text, since a no-break blank belongs to its word. */
+function addText(parent: Element, text: string): void {
+  const last = parent.children[parent.children.length - 1];
+  if (typeof last === 'string') parent.children[parent.children.length - 1] = last + text;
+  else parent.children.push(text);
 }
 
 function checkAttributes(tag: string, attributes: Readonly<Record<string, string>>, fail: (what: string) => never): void {

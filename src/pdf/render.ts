@@ -152,8 +152,8 @@ function furniture(input: PdfInput, pen: Pen, page: number): void {
   pen.text(null, pen.fitted(input.footerLeft, size, room * 0.8), MARGIN.left, foot, size, ink, false, 'start', page);
   pen.text(null, input.pageOf(page + 1, pen.pages.length), right, foot, size, ink, false, 'end', page);
   if (input.mark === null) return;
-  const operators = pen.textOperators(input.mark, 0, 0, 13, 'quiet', true, 'middle', page);
-  pen.marked(null, `q 0 -1 1 0 24 ${height / 2} cm ${operators} Q`, page);
+  const operators = pen.textOperators(input.mark, 0, 0, 26, 'rule', true, 'middle', page);
+  pen.marked(null, `q 0 -1 1 0 33 ${height / 2} cm ${operators} Q`, page);
 }
 
 function writeOutline(document: PackedDocument, pen: Pen): void {

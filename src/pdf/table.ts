@@ -18,14 +18,20 @@ const SPLIT_FROM = 0.5;
 /** No part of a split row is shorter, in lines. */
 const LEAST_LINES = 2;
 
+/** Widths of a cell that begins with a number: before the decimal point, the digits after it, all after it. */
+interface Point {
+  readonly before: number;
+  readonly digits: number;
+  readonly after: number;
+}
+
 interface Cell {
   readonly tokens: readonly Token[];
   readonly node: Node | null;
   readonly column: number;
   readonly span: number;
   readonly figure: { readonly element: Element; readonly picture: Picture; readonly node: Node | null } | null;
-  /** Width before and after the decimal point, for numbers. */
-  readonly point: { readonly before: number; readonly after: number } | null;
+  readonly point: Point | null;
   readonly isHead: boolean;
 }
 
@@ -42,6 +48,7 @@ interface Grid {
   /** Widest part before the decimal point by column. */
   readonly points: readonly number[];
   readonly afters: readonly number[];
+  readonly digits: readonly number[];
 }
 
 const elements = (parent: Element, tag: string): Element[] => parent.children.filter((c): c is Element => typeof c !== 'string' && c.tag === tag);
@@ -102,15 +109,17 @@ const IS_NUMBER = /^[<>≤≥±≈]?[\u00a0\u202f]?[+±\u2212-]?[.,]?\d/;
 const IS_SIGN = /^[<>≤≥±≈+\u2212-]$/;
 
 /** Where the decimal point of a cell that begins with a number lies: the width up to it and from it on. */
-function decimalParts(context: BlockContext, tokens: readonly Token[]): Cell['point'] {
+function decimalParts(context: BlockContext, tokens: readonly Token[]): Point | null {
   if (tokens.some((t) => t.kind === 'break')) return null;
   const width = tokens.reduce((sum, t) => sum + t.width, 0);
   let before = 0;
   for (const token of tokens) {
     if (token.kind === 'word' && IS_NUMBER.test(token.text)) {
       const whole = WHOLE.exec(token.text)?.[0] ?? '';
-      before += (context.type.set(whole, token.style).width * token.size) / 1000;
-      return { before, after: width - before };
+      const digits = /^[.,]\d+/.exec(token.text.slice(whole.length))?.[0] ?? '';
+      const points = (text: string): number => (context.type.set(text, token.style).width * token.size) / 1000;
+      before += points(whole);
+      return { before, digits: points(digits), after: width - before };
     }
     if (token.kind !== 'space' && !(token.kind === 'word' && IS_SIGN.test(token.text))) return null;
     before += token.width;
@@ -122,11 +131,13 @@ function gridOf(context: BlockContext, kinds: readonly Kind[], rows: readonly Ro
   const needs: Need[] = kinds.map((kind) => ({ kind, least: 0, natural: 0 }));
   const points = kinds.map(() => 0);
   const afters = kinds.map(() => 0);
+  const digits = kinds.map(() => 0);
   for (const row of rows) {
     for (const cell of row.cells) {
       if (cell.point === null) continue;
       points[cell.column] = Math.max(points[cell.column] as number, cell.point.before);
       afters[cell.column] = Math.max(afters[cell.column] as number, cell.point.after);
+      digits[cell.column] = Math.max(digits[cell.column] as number, cell.point.digits);
     }
   }
   for (const row of rows) {
@@ -146,7 +157,7 @@ function gridOf(context: BlockContext, kinds: readonly Kind[], rows: readonly Ro
     lefts[i] = left;
     return left + width;
   }, 0);
-  return { kinds, widths, lefts, points, afters };
+  return { kinds, widths, lefts, points, afters, digits };
 }
 
 /** A second pass: the last column under a spanning cell makes room for its longest word or figure. */
@@ -167,6 +178,8 @@ interface LaidCell {
   readonly lines: readonly Line[];
   readonly align: 'left' | 'right' | 'point';
   readonly pointX: number;
+  /** Where the numerals of the column end: its heading ends there too. */
+  readonly numeralsEnd: number;
 }
 
 interface LaidRow {
@@ -189,7 +202,8 @@ function laidRow(context: BlockContext, grid: Grid, row: Row): LaidRow {
     const lines = cell.figure === null ? linesOf(context, cell.tokens, room) : [];
     const figure = cell.figure !== null && cell.figure.picture.width > room ? { ...cell.figure, picture: pictureOf(context, cell.figure.element, room) } : cell.figure;
     const pointX = x + width - PAD.x - (grid.afters[cell.column] as number);
-    return { cell: figure === cell.figure ? cell : { ...cell, figure }, x, width, lines, align: lines.length > 1 && align === 'point' ? 'right' : align, pointX };
+    const numeralsEnd = pointX + (grid.digits[cell.column] as number);
+    return { cell: figure === cell.figure ? cell : { ...cell, figure }, x, width, lines, align: lines.length > 1 && align === 'point' ? 'right' : align, pointX, numeralsEnd };
   });
   const width = grid.widths.reduce((a, b) => a + b, 0);
   return { cells, isHead: row.isHead, leading, width, height: heightOf(cells, leading) };
@@ -243,8 +257,13 @@ function drawCell(pen: Pen, laid: LaidCell, row: LaidRow, x: number, top: number
   }
   const drop = row.isHead ? row.height - PAD.y * 2 - lines.length * row.leading : 0;
   lines.forEach((line, i) => {
-    const left =
-      laid.align === 'left' ? laid.x + PAD.x : laid.align === 'right' || cell.point === null ? laid.x + laid.width - PAD.x - line.width : laid.pointX - cell.point.before;
-    pen.line(line, x + left, top + PAD.y + drop + i * row.leading + row.leading * 0.76, artifact);
+    pen.line(line, x + leftOf(laid, row, line), top + PAD.y + drop + i * row.leading + row.leading * 0.76, artifact);
   });
+}
+
+function leftOf(laid: LaidCell, row: LaidRow, line: Line): number {
+  const [least, most] = [laid.x + PAD.x, laid.x + laid.width - PAD.x - line.width];
+  if (laid.align === 'left') return least;
+  if (laid.align === 'point' && laid.cell.point !== null) return laid.pointX - laid.cell.point.before;
+  return row.isHead ? Math.min(most, Math.max(least, laid.numeralsEnd - line.width)) : most;
 }
