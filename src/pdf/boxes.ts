@@ -16,7 +16,10 @@ export function sectionBoxes(context: BlockContext, section: Element, parent: No
   const boxes: Box[] = [];
   for (const child of section.children) {
     if (typeof child === 'string') continue;
-    boxes.push(...blockBoxes(context, child, node));
+    // A note belongs to what stands above it: it does not begin a page by itself.
+    const above = boxes[boxes.length - 1];
+    if (child.tag === 'p' && child.attributes['class'] === 'note' && above !== undefined) above.keepNext = true;
+    for (const box of blockBoxes(context, child, node)) boxes.push(box);
   }
   const first = boxes[0];
   if (first === undefined) return boxes;

@@ -69,6 +69,14 @@ describe('what stays together', () => {
     }
   });
 
+  it('a note is not alone on a page after its table', async () => {
+    const rows = words(12, 'cell').map((w) => row(w)).join('');
+    for (let before = 26; before < 42; before += 1) {
+      const pages = await read((await pdf(`<section>${fill(before)}${table(['text'], rows)}<p class="note">Anote</p></section>`)).bytes);
+      expect(pages.find((p) => p.text.includes('Anote'))?.text, `${before}`).toContain('cell11');
+    }
+  });
+
   it('a paragraph leaves neither its first nor its last line alone', async () => {
     for (let before = 36; before < 46; before += 1) {
       const pages = await read((await pdf(`<section>${fill(before)}<p>${words(100).join(' ')}</p></section>`, { mark: null })).bytes);
