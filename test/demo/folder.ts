@@ -5,7 +5,7 @@ import { FINDING_COLUMNS, FINDINGS } from './findings.ts';
 import { ANNEX, MACHINES, ROUND } from './machines.ts';
 import { ACCEPTED, ACTIONS, EVENTS, LIMITS, PLANT_YAML, RENAMES, surveyYaml } from './papers.ts';
 import { couplingPicture, wheelPicture } from './png.ts';
-import { notedValue, retakes, takenAt } from './slips.ts';
+import { notedValue, readAgain, retakes, takenAt } from './slips.ts';
 import { type DemoMachine, type DemoSeries, LAST, REPEAT, type Row, SURVEYS } from './types.ts';
 
 export interface DemoFile {
@@ -89,7 +89,7 @@ function surveyFiles(): DemoFile[] {
       { path: `surveys/${date}/readings.csv`, bytes: csv(READINGS, [...readingsOf(s, ROUND), ...retakes(s, date)]) },
     ]),
     { path: `surveys/${REPEAT}/survey.yaml`, bytes: surveyYaml(REPEAT, false, 'kind: re-measurement\nscope: { machines: [ID-01] }') },
-    { path: `surveys/${REPEAT}/readings.csv`, bytes: csv(READINGS, readingsOf(8, repeat).map((row) => ({ ...row, taken_at: REPEAT, ...(row['point'] === '3H' && row['quantity'] === 'velocity' ? { value: '7.80' } : {}) }))) },
+    { path: `surveys/${REPEAT}/readings.csv`, bytes: csv(READINGS, readingsOf(8, repeat).map((row) => ({ ...row, taken_at: REPEAT, value: row['point'] === '3H' && row['quantity'] === 'velocity' ? '7.80' : shown(readAgain(Number(row['value']), `${row['point']} ${row['quantity']}`)) }))) },
     ...Object.entries(FINDINGS).map(([date, rows]) => ({ path: `surveys/${date}/findings.csv`, bytes: findingsCsv(rows) })),
   ];
 }

@@ -5,12 +5,12 @@
 import { noise } from './noise.ts';
 import { type DemoMachine, type DemoSeries, LAST, type Row, SURVEYS, type Told } from './types.ts';
 
-const SCATTER = 0.08;
+const SCATTER = 0.14;
 
 const quantityOf = (series: DemoSeries): string => series.quantity ?? 'velocity';
 const at = (survey: string): number => SURVEYS.indexOf(survey as (typeof SURVEYS)[number]);
 
-/** What the machine did: told, or its level with up to 8 % of scatter to either side. */
+/** What the machine did: told, or its level with scatter of 8 % (one standard deviation; even from −14 to +14 %). */
 function trueValue(machine: DemoMachine, series: DemoSeries, survey: number): Told {
   const scattered = 1 + SCATTER * noise(`${machine.machine} ${series.point} ${quantityOf(series)} ${survey}`);
   const value = series.values === undefined ? (series.level ?? 1) * scattered : (series.values[survey] ?? null);
@@ -33,9 +33,9 @@ function slip(machine: DemoMachine, series: DemoSeries, survey: number): number 
   // r.m.s. values labelled calculated peak: the whole file of the annex is low by √2.
   if (series.unit === 'in/s' && survey === at('2025-11-19')) return 1 / Math.SQRT2;
   // It stood still while it was read, and nobody noted the speed.
-  if (machine.machine === 'KB-01' && survey === at('2024-11-20')) return 0.011;
+  if (machine.machine === 'KB-01' && survey === at('2024-11-20')) return 0.009;
   // A loose plug while running.
-  if (machine.machine === 'SF-01' && series.point === '2H' && survey === at('2025-01-15')) return 0.011;
+  if (machine.machine === 'SF-01' && series.point === '2H' && survey === at('2025-01-15')) return 0.009;
   // Displacement noted at half its size: with velocity and acceleration it cannot be.
   if (machine.machine === 'CW-1' && series.quantity === 'displacement' && survey === at('2025-02-19')) return 0.5;
   return 1;
@@ -45,6 +45,9 @@ export function notedValue(machine: DemoMachine, series: DemoSeries, survey: num
   const value = trueValue(...source(machine, series, survey, all));
   return typeof value === 'number' ? value * slip(machine, series, survey) : value;
 }
+
+/** A second look a week later reads much the same, never the very same. */
+export const readAgain = (value: number, point: string): number => value * (1 + 0.03 * noise(`again ${point}`));
 
 /** A reading dated two days before its survey. */
 export const takenAt = (machine: string, point: string, survey: number, date: string): string => (machine === 'CR-01' && point === '1V' && survey === LAST ? '2026-01-12' : date);

@@ -83,7 +83,7 @@ const SISTERS: readonly Story[] = [
 
 /** Slips of earlier surveys: each a case of a doubt of section 7. */
 const SLIPS: readonly Story[] = [
-  ...['PK-F1', 'PK-P1', 'PK-C1'].map((machine): Story => ({ machine, survey: '2025-11-19', at: { point: '2H' }, doubts: [['unit-factor', 'held']], reading: { travel: 'held' }, because: 'the whole file is low by √2: more than 8 readings on 2 machines within 15 % of one another' })),
+  ...[['PK-F1', '2H'], ['PK-P1', '1V'], ['PK-C1', '2H']].map(([machine = '', point = '']): Story => ({ machine, survey: '2025-11-19', at: { point }, doubts: [['unit-factor', 'held']], reading: { travel: 'held' }, because: 'the whole file is low by √2: more than 8 readings on 2 machines within 15 % of one another' })),
   { machine: 'KB-01', survey: '2024-11-20', at: { point: '3H' }, doubts: [['all-down', 'held']], reading: { travel: 'held' }, says: { urgency: null }, because: '99 % down at every point: stopped, not improved; no level to hold' },
   { machine: 'SF-01', survey: '2025-01-15', at: { point: '2H' }, doubts: [['near-zero', 'held']], because: 'about a hundredth of its baseline, speed unknown counts as running' },
   { machine: 'CF-4', survey: '2024-11-20', at: { point: '1H' }, doubts: [['unexplained-fall', 'held'], ['swapped-machines']], because: 'CF-2 and CF-4 changed places: exchanged they save about 8 dB each' },
