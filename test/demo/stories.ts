@@ -97,7 +97,7 @@ export const STORIES: readonly Story[] = [...POWER, ...PROCESS, ...YARD, ...SIST
 /** Indications of section 10: one case of each, by machine; survey blank: the last. The numbers behind them stand in cases.test.ts. */
 export const INDICATIONS: readonly { readonly rule: string; readonly machine: string; readonly survey?: string }[] = [
   { rule: 'I1', machine: 'LK-01' }, { rule: 'I2', machine: 'CW-1' }, { rule: 'I3', machine: 'AF-03' }, { rule: 'I4', machine: 'BFP-A' }, { rule: 'I5', machine: 'CR-01' },
-  { rule: 'I6', machine: 'DR-01', survey: '2025-11-19' }, { rule: 'I7', machine: 'MA-01' }, { rule: 'I8', machine: 'PW-02' }, { rule: 'I9', machine: 'LK-01' }, { rule: 'I10', machine: 'TG-01' }, { rule: 'I11', machine: 'GP-01' },
+  { rule: 'I6', machine: 'DR-01', survey: '2025-11-19' }, { rule: 'I6', machine: 'DR-01' }, { rule: 'I7', machine: 'MA-01' }, { rule: 'I8', machine: 'PW-02' }, { rule: 'I9', machine: 'LK-01' }, { rule: 'I10', machine: 'TG-01' }, { rule: 'I11', machine: 'GP-01' },
 ];
 
 /** Nothing is wrong with these, and the record must leave them alone. */
