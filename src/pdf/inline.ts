@@ -62,9 +62,8 @@ interface Current extends TextStyle {
 export function tokensOf(context: InlineContext, children: Element['children'], base: TextStyle, node: Node | null): Token[] {
   const tokens: Token[] = [];
   collect(context, children, { ...base, rise: 0, link: null, node }, tokens);
-  const only = tokens.filter((t) => t.kind !== 'space');
-  const [page] = only;
-  if (only.length === 1 && page?.kind === 'page' && node?.role === 'TD') return [{ ...page, atRight: true }];
+  const [page] = tokens;
+  if (tokens.length === 1 && page?.kind === 'page' && node?.role === 'TD') return [{ ...page, atRight: true }];
   return tokens;
 }
 

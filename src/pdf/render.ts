@@ -10,7 +10,7 @@ import { Flow } from './flow.ts';
 import { UserError } from '../shell/types.ts';
 import { ImageError, imageOf, type PdfImage } from './image.ts';
 import { parseMarkup } from './markup.ts';
-import { Pen, type PageLink } from './pen.ts';
+import { Pen, type PageLink, type Target } from './pen.ts';
 import { MARGIN, PAPER, STYLES } from './sheet.ts';
 import { Structure } from './tags.ts';
 import type { PdfInput, PdfOutput } from './types.ts';
@@ -79,6 +79,8 @@ const turn = (): Promise<void> => new Promise((resolve) => setImmediate(resolve)
 async function writePages(input: PdfInput, document: PackedDocument, job: Job): Promise<void> {
   const { pen, structure } = job;
   const names = destinationNames(pen);
+  const targets = pen.pages.map((): (readonly [string, Target])[] => []);
+  for (const [id, target] of pen.targets) targets[target.page]?.push([id, target]);
   const written = new Map<PdfImage, Reference>();
   const pages: Reference[] = [];
   const { height } = PAPER[input.paper];
@@ -94,9 +96,10 @@ async function writePages(input: PdfInput, document: PackedDocument, job: Job): 
       document.page.xobjects[image.name] = ref;
     }
     document.addContent(draft.pieces.map((piece) => (typeof piece === 'string' ? piece : piece())).join('\n'));
+    draft.pieces.length = 0;
     if (input.tags) document.page.dictionary.data['StructParents'] = page;
     if (input.tags) document.page.dictionary.data['Tabs'] = 'S';
-    for (const [id, target] of pen.targets) if (target.page === page) document.addNamedDestination(names.get(id) as string, 'XYZ', 0, Math.max(0, target.y - 8), null);
+    for (const [id, target] of targets[page] ?? []) document.addNamedDestination(names.get(id) as string, 'XYZ', 0, Math.max(0, target.y - 8), null);
     writeLinks(document, draft.links, names, structure, page, height, input.tags);
     await turn();
   }
