@@ -12,7 +12,7 @@ import type { LimitsInForce } from './limits-in-force.ts';
 import { conditionAt } from './machine.ts';
 import type { Context } from './track.ts';
 
-export function plantLine({ settings }: Plant): RecordPlant {
+export function plantLine({ settings, renames }: Plant): RecordPlant {
   const { contractor } = settings;
   return {
     plant: settings.plant,
@@ -26,6 +26,7 @@ export function plantLine({ settings }: Plant): RecordPlant {
     units: settings.units,
     frequency_unit: settings.frequencyUnit,
     next_stops: settings.nextStops.map((s) => ({ date: dayText(s.day), area: s.area })),
+    renames: renames.map((r) => ({ kind: r.kind, machine: r.machine, old: r.old, new: r.new, since: dateOrNull(r.since) })),
     retention: settings.retention,
     distribution: settings.distribution,
   };

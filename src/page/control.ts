@@ -146,8 +146,17 @@ export function changesView(format: Format) {
       rows.push({ what: machine.machine, text: `${format.date(event.date)} ${event.event}${where === '' ? '' : ` of ${where}`}${serial}${event.new_baseline ? '; new baseline' : ''}${event.notes === null ? '' : `: ${event.notes}`}` });
     }
   }
+  for (const r of record.plant.renames ?? []) {
+    if (r.since !== null && r.since > before && r.since <= record.survey.to) rows.push({ what: r.machine ?? r.old, text: `${r.kind} ${r.old} is called ${r.new} since ${format.date(r.since)}` });
+  }
+  rows.push(...unitChanges(format));
   for (const p of record.policy.filter((line) => line.overridden)) rows.push({ what: `Policy ${p.id}`, text: `set to ${format.plain(p.value)} ${p.unit} by this plant: ${p.about}` });
   return { rows, hasRows: rows.length > 0 };
+}
+
+/** Readings typed in another unit than their point's. */
+function unitChanges(format: Format): { what: string; text: string }[] {
+  return format.record.measurements.flatMap((m) => (m.typed_unit === null ? [] : [{ what: m.machine, text: `${m.point} ${m.quantity} was typed as ${m.typed} ${m.typed_unit} and converted to ${format.unit(m.unit, m.detection)}` }]));
 }
 
 export function acceptedView(format: Format) {

@@ -110,7 +110,7 @@ function* bodySections(format: Format, charts: Charts, render: Render, exception
   yield render('machines', { machines, overTimeAlt: charts.drawing('over-time', 'all').alt });
   let first = true;
   for (const machine of exceptions) {
-    const section = render('exception', { ...exceptionView(format, charts, machine), startsPage: true });
+    const section = render('exception', { ...exceptionView(format, charts, machine), startsPage: first });
     yield first ? { ...section, html: section.html.replace('<h2', '<h1 id="exceptions">Machines with findings</h1><h2') } : section;
     first = false;
   }

@@ -48,9 +48,10 @@ export const FIELDS: Readonly<Record<string, string>> = {
   tool: 'name:s version:s',
   issue: 'number:s revision:i issued_on:d replaces:s? reason:s? previous_manifest:s?',
   plant: `plant:s client:s? site:s? contract:s? procedure:s? contractor:o:contractor language:w:language paper:w:paper units:U
-    frequency_unit:w:frequency next_stops:l:next_stops retention:s? distribution:S`,
+    frequency_unit:w:frequency next_stops:l:next_stops renames:l:renames* retention:s? distribution:S`,
   contractor: 'name:s? address:s? contact:s? logo:s? accent:s?',
   next_stops: 'date:d area:s?',
+  renames: 'kind:s machine:s? old:s new:s since:d?',
   survey: `id:s from:d to:d kind:w:survey scope:o:scope people:l:people instruments:l:instruments sensors:l:sensors field_check:s? process:s?
     weather:s? remarks:s? issue_date:d? reviewed_by:s? approved_by:s? notified:l:notified photos:l:photos`,
   surveys: 'id:s date:d from:d to:d kind:w:survey scope:o:scope people:l:people instruments:l:instruments file:s? conditions:C',

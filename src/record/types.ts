@@ -46,6 +46,8 @@ export interface RecordPlant {
   readonly units: { readonly [quantity: string]: { readonly unit: string | null; readonly detection: Detection | null } };
   readonly frequency_unit: 'Hz' | 'CPM';
   readonly next_stops: readonly { readonly date: DateText; readonly area: string | null }[];
+  /** Ids that were changed, and since when; absent in early records. */
+  readonly renames?: readonly { readonly kind: 'machine' | 'component' | 'point'; readonly machine: string | null; readonly old: string; readonly new: string; readonly since: DateText | null }[];
   readonly retention: string | null;
   readonly distribution: readonly string[];
 }
