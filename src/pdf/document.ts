@@ -70,10 +70,14 @@ export interface DocumentOptions {
 const POOL = 200;
 const deflate = (bytes: Uint8Array): Uint8Array => deflateSync(bytes);
 
+/** What XML 1.0 (section 2.2) has no place for. */
+// biome-ignore lint/suspicious/noControlCharactersInRegex: they are what is taken out.
+const NOT_XML = /[\x00-\x08\x0b\x0c\x0e-\x1f\ufffe\uffff]|[\ud800-\udbff](?![\udc00-\udfff])|(?<![\ud800-\udbff])[\udc00-\udfff]/g;
+
 /** pdfkit writes titles into the XMP unescaped: its own text form is escaped, its value is not. */
 class XmpText extends String {
   override toString(): string {
-    return this.valueOf().replaceAll('&', '&amp;').replaceAll('<', '&lt;').replaceAll('>', '&gt;');
+    return this.valueOf().replace(NOT_XML, '').replaceAll('&', '&amp;').replaceAll('<', '&lt;').replaceAll('>', '&gt;');
   }
 }
 
