@@ -13,7 +13,7 @@ import { closenessOf } from './closeness.ts';
 import { dateOrNull } from './cut.ts';
 import { dueOf } from './due.ts';
 import { reasonOf, unitWords } from './reason.ts';
-import { type Context, dayAt, doubtedHigh } from './track.ts';
+import { type Context, dayAt, doubtedHigh, type Look } from './track.ts';
 import { weight } from './urgency-table.ts';
 import { targetOf } from './verification.ts';
 
@@ -56,8 +56,23 @@ const urgencyOf = (draft: DraftAction): RecordAction['urgency'] => draft.overrid
 
 const statedDue = (draft: DraftAction): Day | null => draft.ledger?.due ?? draft.finding?.due ?? null;
 
+/**
+ * Day an action is due: as stated, else by its level from the reading, or from the day it was first raised where that is
+ * earlier: an action carried from survey to survey does not win a new month each time. A held reading counts from today.
+ */
+function dueDay(context: Context, draft: DraftAction): Day | null {
+  const stated = statedDue(draft);
+  const urgency = urgencyOf(draft);
+  if (stated !== null || urgency === null || draft.status === 'done') return stated;
+  const today = dayAt(context, context.current);
+  const { machine } = draft.assessed;
+  const fresh = dueOf(context, machine, urgency, draft.verdict?.look?.reading.day ?? today);
+  if (fresh === null || urgency === 'watch' || draft.raised >= today) return fresh;
+  return Math.min(fresh, dueOf(context, machine, urgency, draft.raised) ?? fresh);
+}
+
 function overdueDays(context: Context, draft: DraftAction): number | null {
-  const due = statedDue(draft);
+  const due = dueDay(context, draft);
   const days = due === null ? 0 : dayAt(context, context.current) - due;
   return days > 0 && (draft.status === 'open' || draft.status === 'ordered') ? days : null;
 }
@@ -85,8 +100,7 @@ function actionLine(context: Context, draft: DraftAction, rank: number, above: s
   const { finding, ledger, assessed, verdict } = draft;
   const urgency = urgencyOf(draft);
   const told = verdict === null || (draft.computed.rule === 'M2' && assessed.urgencyBy === null) ? { reason: assessed.reason, facts: assessed.facts } : reasonOf(context, verdict);
-  const look = verdict?.look ?? verdict?.heldFrom ?? null;
-  const due = statedDue(draft) ?? (urgency === null || draft.status === 'done' ? null : dueOf(context, assessed.machine, urgency, look?.reading.day ?? dayAt(context, context.current)));
+  const due = dueDay(context, draft);
   return {
     rank,
     action: draft.id,
@@ -131,17 +145,23 @@ function actionLine(context: Context, draft: DraftAction, rank: number, above: s
 }
 
 function readingOf(context: Context, draft: DraftAction): Pick<RecordAction, 'value' | 'unit' | 'limit'> {
-  const look = draft.verdict?.look ?? draft.verdict?.heldFrom ?? null;
+  const look = tellingLook(draft);
   if (look === null || draft.verdict === null) return { value: null, unit: null, limit: null };
   const { limits, zone } = look;
   const limit = zone === 'D' ? (limits.cd ?? limits.bc) : zone === 'C' ? limits.bc : alarmTrip(limits, look.baseline, context.policy).alarm;
   return { value: look.value, unit: unitWords(draft.verdict.track), limit };
 }
 
+/** The reading an action speaks of: the one whose level it bears, which for a held point is the last sound one. */
+function tellingLook({ verdict, computed }: DraftAction): Look | null {
+  if (verdict === null) return null;
+  return computed.rule === 'M1' ? (verdict.heldFrom ?? verdict.look) : (verdict.look ?? verdict.heldFrom);
+}
+
 /** The target that a new action is to be held to, fixed by today's reading. */
 function verificationToCome(context: Context, draft: DraftAction): RecordAction['verification'] {
   const { verdict } = draft;
-  const look = verdict?.look ?? verdict?.heldFrom ?? null;
+  const look = tellingLook(draft);
   if (verdict === null || look === null || draft.computed.urgency === 'watch') return null;
   const value = targetOf(context, look);
   if (value === null) return null;
@@ -162,6 +182,7 @@ function draftedWork(context: Context, draft: DraftAction): string {
   const point = draft.verdict?.track.series.point ?? '';
   const alarm = draft.verdict?.look == null ? null : alarmTrip(draft.verdict.look.limits, draft.verdict.look.baseline, context.policy).alarm;
   const unit = draft.verdict === null ? '' : unitWords(draft.verdict.track);
+  if (rule === 'M1' && draft.verdict?.look != null) return say(language, 'assess.work.repeat', { point });
   if (rule === 'M2' || rule === 'M1') return say(language, 'assess.work.measure', {});
   if (rule === 'M3') return say(language, 'assess.work.limits', {});
   if (draft.computed.urgency === 'watch') return alarm === null ? say(language, 'assess.work.watch', { point }) : say(language, 'assess.work.watch.alarm', { point, alarm, unit });

@@ -2,7 +2,7 @@
  * Chart inputs from a record. In: the record. Out: drawings by kind and key, made when asked for. One drawing serves both media.
  */
 import type { Drawing } from '../chart/drawing.ts';
-import { historyChart } from '../chart/history.ts';
+import { historyChart, type HistoryInput } from '../chart/history.ts';
 import { plantOverTime } from '../chart/over-time.ts';
 import { polarPlot } from '../chart/polar.ts';
 import { sparkline } from '../chart/sparkline.ts';
@@ -18,8 +18,17 @@ function newBaselines(record: SwayfolioRecord, m: RecordMeasurement): number[] {
   return days.map((day) => record.surveys.findIndex((s) => s.date >= day)).filter((i) => i > 0);
 }
 
-/** True for each survey whose reading takes part in the comparison with the last. */
-const comparable = (m: RecordMeasurement): boolean[] => m.history.value.map((value, i) => value !== null && m.history.why[String(i)] === undefined);
+/**
+ * True for each survey whose reading compares with those beside it: with the last, or with its own kind before a new
+ * baseline, where the line is parted.
+ */
+function comparable(format: Format, m: RecordMeasurement): boolean[] {
+  const beforeNewBaseline = format.say('assess.why.before_new_baseline');
+  return m.history.value.map((value, i) => {
+    const why = m.history.why[String(i)];
+    return value !== null && (why === undefined || why === beforeNewBaseline);
+  });
+}
 
 export class Charts {
   readonly #format: Format;
@@ -45,7 +54,7 @@ export class Charts {
     const { record } = this.#format;
     return sparkline({
       values: m.history.value,
-      comparable: comparable(m),
+      comparable: comparable(this.#format, m),
       held: m.travel === 'held',
       newBaselineAt: newBaselines(record, m),
       ab: m.limits?.ab ?? null,
@@ -70,14 +79,16 @@ export class Charts {
     return historyChart({
       dates: record.surveys.map((s) => s.date),
       values: m.history.value,
-      comparable: comparable(m),
+      comparable: comparable(this.#format, m),
       held: m.travel === 'held',
       ab: m.limits?.ab ?? null,
       bc: m.limits?.bc ?? null,
       cd: m.limits?.cd ?? null,
       alarm: m.limits?.alarm ?? null,
       baseline: m.baseline?.value ?? null,
-      events: events.filter((e) => (e.component === null || e.component === m.component) && (e.point === null || e.point === m.point)).map((e) => ({ date: e.date, label: e.event })),
+      events: events.filter((e) => (e.component === null || e.component === m.component) && (e.point === null || e.point === m.point)).map((e) => ({ date: e.date, label: e.event, newBaseline: e.new_baseline })),
+      language: record.plant.language,
+      forecast: forecastOf(record, m) ?? null,
       unit: this.#format.unit(m.unit, m.detection),
       width: 490,
       height: 170,
@@ -92,7 +103,7 @@ export class Charts {
     const q = m.limits?.bc == null ? null : m.limits.bc * (this.#format.record.policy.find((p) => p.id === '4.q')?.value ?? 0.25);
     const unit = this.#format.unit(m.unit, m.detection);
     const words = now === null ? 'no vector' : `now ${this.#format.number(now.amplitude)} ${unit} at ${this.#format.number(now.lagDeg)}° lag`;
-    return polarPlot({ from, to: now, q, unit, size: 170, alt: `${m.point}: 1× vector, ${words}${change === null ? '' : `, moved by ${this.#format.number(change.amplitude)}`}.` });
+    return polarPlot({ from, to: now, q, unit, size: 170, language: this.#format.language, alt: `${m.point}: 1× vector, ${words}${change === null ? '' : `, moved by ${this.#format.number(change.amplitude)}`}.` });
   }
 
   #overTime(): Drawing {
@@ -103,6 +114,15 @@ export class Charts {
     const words = last === undefined ? '' : Object.entries(last.conditions).filter(([, n]) => n > 0).map(([c, n]) => `${n} ${c}`).join(', ');
     return plantOverTime({ dates: lines.map((l) => l.date), counts: lines.map((l) => l.conditions), width: 490, height: 120, alt: `Machines by condition over ${lines.length} surveys; at the last: ${words}.` });
   }
+}
+
+/** The forecast as the chart draws it: the boundary's value and the range of dates; null where there is none. */
+function forecastOf(record: SwayfolioRecord, m: RecordMeasurement): HistoryInput['forecast'] {
+  if (m.forecast === null || 'none' in m.forecast) return null;
+  const step = (id: string): number | null => (m.baseline === null ? null : m.baseline.value * (record.policy.find((p) => p.id === id)?.value ?? Number.NaN));
+  const values: Readonly<Record<string, number | null>> = { 'B/C': m.limits?.bc ?? null, 'C/D': m.limits?.cd ?? null, 'r-B/r-C': step('2.ratio.c'), 'r-C/r-D': step('2.ratio.d') };
+  const value = values[m.forecast.boundary] ?? null;
+  return value === null ? null : { boundary: m.forecast.boundary, value, earliest: m.forecast.earliest, latest: m.forecast.latest };
 }
 
 /** The vector before: now less the change. */

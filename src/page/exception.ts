@@ -52,7 +52,7 @@ export function exceptionView(format: Format, charts: Charts, machine: RecordMac
     hasReadings: measurements.length > 0,
     hasHistory,
     historyKey: main === null ? '' : seriesId(main),
-    historyAlt: main === null ? '' : charts.alt(main),
+    historyAlt: main === null || !hasHistory ? '' : charts.drawing('history', seriesId(main)).alt,
     historyCaption: main === null ? '' : `${main.point} ${main.quantity}, ${format.unit(main.unit, main.detection)}: ${main.limit_reason}`,
     polars: polars.map((m) => ({ key: seriesId(m), alt: charts.drawing('polar', seriesId(m)).alt, caption: `${m.point}: 1× vector, angles as lag` })),
     photos: format.record.survey.photos

@@ -1,4 +1,5 @@
 /** The manager's page: what to do first, what is new, worse, verified, overdue, not measured. In: the record. Out: one page's view. */
+import { URGENCIES, type Urgency } from '../plant/types.ts';
 import type { Condition, RecordMachine } from '../record/types.ts';
 import { type ActionView, actionView, overrideText, rankedViews } from './actions.ts';
 import type { ConditionView, Format } from './format.ts';
@@ -37,6 +38,8 @@ const LABELS: Readonly<Record<Condition, string>> = {
   'r-C': 'well above its baseline, no zone', 'r-B': 'above its baseline, no zone', 'r-A': 'about its baseline, no zone', 'not assessed': 'not measured, or nothing to judge by',
 };
 
+const place = (urgency: Urgency | null): number => (urgency === null ? URGENCIES.length : URGENCIES.indexOf(urgency));
+
 /** Longest lists on the page: what does not fit stands in the ranked list. */
 const MOST = { week: 6, month: 6, stop: 4 } as const;
 
@@ -46,7 +49,7 @@ export function managerView(format: Format): ManagerView {
   const week = views.filter((v) => v.urgency === 'Act now' || v.urgency === 'Within a week');
   const month = views.filter((v) => v.urgency === 'Within a month');
   const stop = views.filter((v) => v.urgency === 'Next planned stop');
-  const overrides = record.machines.filter((m) => m.override?.lowers_now === true);
+  const overrides = record.machines.filter((m) => m.override !== null && place(m.override.urgency) > place(m.computed_urgency));
   return {
     plant: record.plant.plant,
     survey: record.survey.id,

@@ -86,7 +86,7 @@ describe('each kind of page', () => {
   it('shows everything without JavaScript, the cautions too', async () => {
     for (const path of kinds()) {
       const { page } = await visit(path, { javaScriptEnabled: false });
-      const text = await page.locator('body').innerText();
+      const text = (await page.locator('body').textContent()) ?? '';
       expect(text, path).toContain('This is screening by overall values, not a diagnosis.');
       if (path === 'machines.html') expect(await page.locator('#machines tbody tr').count()).toBe(record.machines.length);
       await page.context().close();
@@ -121,7 +121,7 @@ describe('the list of machines', () => {
     const wanted = record.machines.find((m) => /\p{Script=Cyrillic}/u.test(m.name ?? ''));
     await page.fill('#f-search', (wanted?.name ?? 'no such name').toUpperCase());
     expect(await firstIds(page)).toEqual([wanted?.machine]);
-    expect(await page.locator('#f-count').innerText()).toBe(`1 of ${record.machines.length}`);
+    expect(await page.locator('#f-count').textContent()).toBe(`1 of ${record.machines.length}`);
     await page.context().close();
   });
 

