@@ -86,7 +86,7 @@ export function overrideText(format: Format, action: { readonly override: Record
   const o = action.override;
   if (o === null) return '';
   const until = o.until === null ? 'no expiry given' : `until ${format.date(o.until)}`;
-  return `Set to “${urgencyShort(o.urgency)}” by ${o.by} (${until}): ${o.reason} The rules say “${urgencyShort(action.computed_urgency)}”.`;
+  return `Set to “${urgencyShort(o.urgency)}” by ${o.by} (${until}): ${o.reason}${/[.!?]$/.test(o.reason) ? '' : '.'} The rules say “${urgencyShort(action.computed_urgency)}”.`;
 }
 
 const RESULT = { verified: 'Verified', 'not verified': 'Not verified, open again', 'not yet measured': 'To verify' } as const;

@@ -1,6 +1,6 @@
 /** What the writers need from the package and the plant, read once by shell/ and handed on: templates, fonts, pictures. */
 
-/** TrueType files. A character that the text faces lack is set in the fallback; one that neither has is an error that names it. */
+/** TrueType files. A character that the text faces lack is set in the fallback; one that neither has is printed as its code, such as [U+1FAE0]. */
 export interface FontFiles {
   readonly regular: Uint8Array;
   readonly bold: Uint8Array;

@@ -103,7 +103,7 @@ export class Charts {
     const q = m.limits?.bc == null ? null : m.limits.bc * (this.#format.record.policy.find((p) => p.id === '4.q')?.value ?? 0.25);
     const unit = this.#format.unit(m.unit, m.detection);
     const words = now === null ? 'no vector' : `now ${this.#format.number(now.amplitude)} ${unit} at ${this.#format.number(now.lagDeg)}° lag`;
-    return polarPlot({ from, to: now, q, unit, size: 170, language: this.#format.language, alt: `${m.point}: 1× vector, ${words}${change === null ? '' : `, moved by ${this.#format.number(change.amplitude)}`}.` });
+    return polarPlot({ from, to: now, q, unit, size: 140, language: this.#format.language, alt: `${m.point}: 1× vector, ${words}${change === null ? '' : `, moved by ${this.#format.number(change.amplitude)}`}.` });
   }
 
   #overTime(): Drawing {

@@ -4,11 +4,16 @@ import type { Condition, RecordMachine } from '../record/types.ts';
 import { type ActionView, actionView, overrideText, rankedViews } from './actions.ts';
 import type { ConditionView, Format } from './format.ts';
 
+/** Machines in one zone, and in the class by ratio beside it; now and at the survey before. */
 export interface CountView {
   readonly condition: ConditionView;
   readonly label: string;
   readonly now: string;
   readonly before: string;
+  readonly hasClass: boolean;
+  readonly classed: ConditionView;
+  readonly classNow: string;
+  readonly classBefore: string;
 }
 
 export interface ActionGroup {
@@ -26,22 +31,22 @@ export interface ManagerView {
   readonly counts: readonly CountView[];
   readonly coverage: string;
   readonly lines: readonly { readonly title: string; readonly text: string }[];
-  readonly hasOverrides: boolean;
-  readonly overrides: readonly { readonly machine: string; readonly text: string }[];
 }
 
 const ORDER: readonly Condition[] = ['D', 'r-D', 'C', 'r-C', 'B', 'r-B', 'A', 'r-A', 'not assessed'];
 const BAD = (condition: Condition | null): number => (condition === null || condition === 'not assessed' ? ORDER.length : ORDER.indexOf(condition));
 
-const LABELS: Readonly<Record<Condition, string>> = {
-  D: 'severe enough to cause damage', C: 'not for long-term running', B: 'acceptable for long-term running', A: 'as newly commissioned', 'r-D': 'far above its baseline, no zone',
-  'r-C': 'well above its baseline, no zone', 'r-B': 'above its baseline, no zone', 'r-A': 'about its baseline, no zone', 'not assessed': 'not measured, or nothing to judge by',
-};
+const LABELS = {
+  D: 'severe enough to cause damage · far above its baseline', C: 'not for long-term running · well above its baseline', B: 'acceptable for long-term running · above its baseline', A: 'as newly commissioned · about its baseline',
+  'not assessed': 'not measured, or nothing to judge by',
+} as const;
+
+const MOST_NAMES = 6;
 
 const place = (urgency: Urgency | null): number => (urgency === null ? URGENCIES.length : URGENCIES.indexOf(urgency));
 
 /** Longest lists on the page: what does not fit stands in the ranked list. */
-const MOST = { week: 6, month: 6, stop: 4 } as const;
+const MOST = { week: 6, month: 4, stop: 2 } as const;
 
 export function managerView(format: Format): ManagerView {
   const { record } = format;
@@ -57,9 +62,7 @@ export function managerView(format: Format): ManagerView {
     groups: [group('This week', week, MOST.week), group('This month', month, MOST.month), group('At the next planned stop', stop, MOST.stop)],
     counts: countViews(format),
     coverage: coverageText(format),
-    lines: changedLines(format),
-    hasOverrides: overrides.length > 0,
-    overrides: overrides.map((m) => ({ machine: m.machine, text: overrideText(format, m) })),
+    lines: changedLines(format, overrides),
   };
 }
 
@@ -81,12 +84,15 @@ function countViews(format: Format): CountView[] {
   const { plant_over_time: lines, surveys } = format.record;
   const now = lines[lines.length - 1];
   const before = lines.slice(0, -1).filter((_, i) => surveys[i]?.kind !== 're-measurement').pop();
-  return ORDER.filter((c) => (now?.conditions[c] ?? 0) + (before?.conditions[c] ?? 0) > 0).map((c) => ({
-    condition: format.condition(c),
-    label: LABELS[c],
-    now: String(now?.conditions[c] ?? 0),
-    before: before === undefined ? '–' : String(before.conditions[c]),
-  }));
+  const count = (line: typeof now, condition: Condition): string => (line === undefined ? '–' : String(line.conditions[condition]));
+  return (['D', 'C', 'B', 'A', 'not assessed'] as const).map((zone) => {
+    const ratio = zone === 'not assessed' ? zone : (`r-${zone}` as const);
+    const hasClass = ratio !== zone;
+    return {
+      condition: format.condition(zone), label: LABELS[zone], now: count(now, zone), before: count(before, zone), hasClass, classed: format.condition(ratio), classNow: hasClass ? count(now, ratio) : '',
+      classBefore: hasClass ? count(before, ratio) : '',
+    };
+  });
 }
 
 function coverageText(format: Format): string {
@@ -100,9 +106,9 @@ function coverageText(format: Format): string {
   return `${whole} of ${due.length} machines due were measured${rest.length === 0 ? '' : `, ${rest.join(', ')}`}.`;
 }
 
-const names = (list: readonly string[]): string => (list.length > 10 ? `${list.slice(0, 10).join(', ')} and ${list.length - 10} more` : list.join(', '));
+const names = (list: readonly string[]): string => (list.length > MOST_NAMES ? `${list.slice(0, MOST_NAMES).join(', ')} and ${list.length - MOST_NAMES} more` : list.join(', '));
 
-function changedLines(format: Format): { title: string; text: string }[] {
+function changedLines(format: Format, overrides: readonly RecordMachine[]): { title: string; text: string }[] {
   const { record } = format;
   const worse = record.machines.filter((m) => m.previous_condition !== null && BAD(m.condition) < BAD(m.previous_condition) && m.measured_of[0] > 0);
   const fresh = record.actions.filter((a) => a.rank > 0 && a.urgency !== 'watch' && a.times_reported === 1).map((a) => a.machine);
@@ -120,6 +126,7 @@ function changedLines(format: Format): { title: string; text: string }[] {
     ['Overdue', names(overdue)],
     ['Not measured', names(missed)],
     ['Without limits or baseline', names(limits)],
+    ['Set lower by hand', overrides.map((m) => `${m.machine}: ${overrideText(format, m)}`).join(' ')],
   ] as const;
   return lines.filter(([, text]) => text !== '').map(([title, text]) => ({ title, text }));
 }

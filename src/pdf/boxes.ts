@@ -36,9 +36,13 @@ export function sectionBoxes(context: BlockContext, section: Element, parent: No
 
 const anchorBox = (anchor: string): Box => ({ height: 0, before: 0, keepNext: true, anchor, draw: () => undefined });
 
+/** What fits a page stays together; what does not begins one, so that as little of it as can be is turned over. */
 function keepTogether(boxes: readonly Box[], pageHeight: number): void {
   const height = boxes.reduce((sum, b) => sum + b.height + b.before, 0);
-  if (height > pageHeight) return;
+  if (height > pageHeight) {
+    (boxes[0] as Box).newPage = true;
+    return;
+  }
   for (const box of boxes.slice(0, -1)) box.keepInSection = true;
 }
 
