@@ -58,6 +58,11 @@ function check(name: string, source: string, sources: ReadonlyMap<string, string
   visitor.MustacheStatement = (mustache) => {
     if (!mustache.escaped) throw new UserError(`Template ${name}, line ${mustache.loc.start.line}: output must be escaped.`, 'Write {{name}}, never {{{name}}} or {{&name}}.');
     if (mustache.params.length > 0) throw new UserError(`Template ${name}, line ${mustache.loc.start.line}: there is no such helper.`, 'Only if, unless, each and with are known.');
+    Handlebars.Visitor.prototype.MustacheStatement.call(visitor, mustache);
+  };
+  visitor.PathExpression = (path) => {
+    const foreign = path.parts.find((part) => part in Object.prototype);
+    if (foreign !== undefined) throw new UserError(`Template ${name}, line ${path.loc.start.line}: "${foreign}" is no field.`, 'A template may print only the fields of its view.');
   };
   visitor.BlockStatement = (block) => {
     const helper = (block.path as hbs.AST.PathExpression).original;
@@ -67,6 +72,19 @@ function check(name: string, source: string, sources: ReadonlyMap<string, string
   visitor.PartialStatement = (partial) => {
     const called = (partial.name as hbs.AST.PathExpression).original;
     if (!sources.has(`${called}.hbs`)) throw new UserError(`Template ${name}, line ${partial.loc.start.line}: there is no partial "${called}".`, 'Partials are named by their path, such as shared/cautions.');
+  };
+  // Cautions inside a comment would be in the page and yet not be seen.
+  visitor.ContentStatement = (content) => {
+    if (content.value.includes('<!--')) throw new UserError(`Template ${name}, line ${content.loc.start.line}: HTML comments are not allowed.`, 'Write {{! … }}, which is not printed.');
+  };
+  visitor.SubExpression = (call) => {
+    throw new UserError(`Template ${name}, line ${call.loc.start.line}: nothing may be called in brackets.`, 'Print the fields of the view as they are.');
+  };
+  visitor.PartialBlockStatement = (partial) => {
+    throw new UserError(`Template ${name}, line ${partial.loc.start.line}: a partial takes no block.`, 'Write {{> shared/cautions}}.');
+  };
+  visitor.DecoratorBlock = (decorator) => {
+    throw new UserError(`Template ${name}, line ${decorator.loc.start.line}: no partial may be made inside a template.`, 'Put it into a file of its own in templates/.');
   };
   visitor.accept(tree);
 }
