@@ -14,6 +14,7 @@ export interface ActionView {
   readonly urgency: string;
   readonly urgencyFull: string;
   readonly isNow: boolean;
+  readonly isRejected: boolean;
   readonly due: string;
   readonly overdue: string;
   readonly work: string;
@@ -52,6 +53,7 @@ export function actionView(format: Format, action: RecordAction): ActionView {
     urgency: urgencyShort(action.urgency),
     urgencyFull: urgencyText(action.urgency),
     isNow: action.urgency === 'now',
+    isRejected: action.status === 'rejected',
     due: format.date(action.due),
     overdue: action.overdue_days === null ? '' : `overdue by ${action.overdue_days} ${action.overdue_days === 1 ? 'day' : 'days'}`,
     work: action.recommendation ?? '',

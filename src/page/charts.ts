@@ -86,7 +86,7 @@ export class Charts {
       cd: m.limits?.cd ?? null,
       alarm: m.limits?.alarm ?? null,
       baseline: m.baseline?.value ?? null,
-      events: events.filter((e) => (e.component === null || e.component === m.component) && (e.point === null || e.point === m.point)).map((e) => ({ date: e.date, label: e.event, newBaseline: e.new_baseline })),
+      events: events.filter((e) => (e.component === null || e.component === m.component) && (e.point === null || e.point === m.point)).map((e) => ({ date: e.date, label: e.event === 'other' && e.notes !== null ? shortened(e.notes) : e.event, newBaseline: e.new_baseline })),
       language: record.plant.language,
       forecast: forecastOf(record, m) ?? null,
       unit: this.#format.unit(m.unit, m.detection),
@@ -124,6 +124,11 @@ function forecastOf(record: SwayfolioRecord, m: RecordMeasurement): HistoryInput
   const value = values[m.forecast.boundary] ?? null;
   return value === null ? null : { boundary: m.forecast.boundary, value, earliest: m.forecast.earliest, latest: m.forecast.latest };
 }
+
+const LONGEST_LABEL = 28;
+
+/** The first words of a note, for a label. */
+const shortened = (note: string): string => (note.length <= LONGEST_LABEL ? note : `${note.slice(0, LONGEST_LABEL - 1).replace(/\s+\S*$/, '')}…`);
 
 /** The vector before: now less the change. */
 function minus(now: { amplitude: number; lagDeg: number }, change: { amplitude: number; lagDeg: number }): { amplitude: number; lagDeg: number } {

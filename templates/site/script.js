@@ -18,7 +18,7 @@
     var shown = 0;
     rows.forEach(function (row, i) {
       var fits = (!wanted[0] || text[i].indexOf(wanted[0].toLowerCase()) >= 0) &&
-        (!wanted[1] || row.cells[1].textContent === wanted[1]) &&
+        (!wanted[1] || row.cells[3].textContent === wanted[1]) &&
         (!wanted[2] || row.getAttribute('data-c') === wanted[2]) &&
         (!wanted[3] || row.getAttribute('data-u') === wanted[3]) &&
         (!wanted[4] || row.cells[4].textContent === wanted[4]);
@@ -34,8 +34,8 @@
   var CONDITIONS = ['D', 'r-D', 'C', 'r-C', 'B', 'r-B', 'A', 'r-A', 'none'];
   var URGENCIES = ['Act now', 'Within a week', 'Within a month', 'Next planned stop', 'Watch', '\u2013'];
   function key(row, column) {
-    if (column === 2) return CONDITIONS.indexOf(row.getAttribute('data-c'));
-    if (column === 3) return URGENCIES.indexOf(row.getAttribute('data-u'));
+    if (column === 1) return CONDITIONS.indexOf(row.getAttribute('data-c'));
+    if (column === 2) return URGENCIES.indexOf(row.getAttribute('data-u'));
     var content = row.cells[column].textContent.trim();
     if (column === 6 || column === 7) {
       var number = parseFloat(content.replace('\u2212', '-').replace(/[^\d.+-]/, ''));
