@@ -51,7 +51,7 @@ export function bandOf(track: Track, reading: Reading): { readonly lowHz: number
  */
 export function standsDoubted(context: Context, track: Track, earlier: Reading, current: Reading): boolean {
   const look = track.looks[earlier.survey];
-  if (look === null || look === undefined || !doubtedLow(look)) return false;
+  if (look === null || look === undefined || look.doubts.length === 0 || !doubtedLow(look)) return false;
   const lifted = track.lifted[earlier.survey] ?? null;
   if (lifted !== null && current.survey >= lifted) return false;
   return !isOnlyUnexplained(look) || closingBetween(context, track, earlier.day, current.day) === null;
@@ -114,7 +114,9 @@ export function comparableBefore(context: Context, track: Track, current: Readin
   const found: (Reading & { value: number })[] = [];
   for (const reading of track.series.readings) {
     if (reading.survey >= current.survey) break;
-    if (isMeasured(reading) && whyNotComparable(context, track, reading, current, options) === null) found.push(reading);
+    if (!isMeasured(reading)) continue;
+    const compares = track.uniform ? !standsDoubted(context, track, reading, current) : whyNotComparable(context, track, reading, current, options) === null;
+    if (compares) found.push(reading);
   }
   return found;
 }

@@ -38,6 +38,8 @@ export class LimitBook {
   readonly #own: OwnLimits;
   readonly #limitDays: readonly Day[];
   readonly #kept = new Map<Track, Map<string, LimitsInForce>>();
+  readonly #constant = new Map<Track, LimitsInForce>();
+  readonly #acceptance = new Map<Track, LimitsInForce>();
 
   constructor(context: Context) {
     this.#context = context;
@@ -46,6 +48,20 @@ export class LimitBook {
   }
 
   at(track: Track, day: Day, kind: SurveyKind): LimitsInForce {
+    if (!this.#neverChanges(track)) return this.#atStretch(track, day, kind);
+    const kept = (kind === 'acceptance' ? this.#acceptance : this.#constant).get(track);
+    if (kept !== undefined) return kept;
+    const found = this.#choose(track, day, kind);
+    (kind === 'acceptance' ? this.#acceptance : this.#constant).set(track, found);
+    return found;
+  }
+
+  /** No dated row bears on it, so one choice serves all its days. */
+  #neverChanges({ series, component, machine }: Track): boolean {
+    return this.#limitDays.length <= 1 && series.rows.length === 1 && component.rows.length === 1 && machine.rows.length === 1;
+  }
+
+  #atStretch(track: Track, day: Day, kind: SurveyKind): LimitsInForce {
     let kept = this.#kept.get(track);
     if (kept === undefined) {
       kept = new Map();

@@ -39,6 +39,7 @@ function lookOf(context: Context, book: LimitBook, track: Track, reading: Readin
     noZone: judged.noZone,
     ratioClass: judged.zone === null && judged.byRatio ? ratioClassFor(context, track, reading.value, reading, baseline) : null,
     doubts: [],
+    lastTime: undefined,
     explainedFall: null,
   };
 }

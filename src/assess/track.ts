@@ -36,6 +36,8 @@ export interface Look {
   readonly ratioClass: RatioClass | null;
   /** Added by the doubts' step. */
   readonly doubts: Doubt[];
+  /** What "last time" means for doubts, once it has been asked for. */
+  lastTime: number | null | undefined;
   /** A fall by the factor of the rules that a closing event or a second low reading explains. */
   explainedFall: 'event' | 'second reading' | null;
 }
@@ -50,6 +52,8 @@ export interface Track {
   readonly looks: (Look | null)[];
   /** Events that concern this series, by day. */
   readonly events: readonly PlantEvent[];
+  /** Every reading was taken alike, so that all measured ones compare unless one is doubted. */
+  readonly uniform: boolean;
   /** Survey from which on the reading of a survey is no longer doubted low, by survey. */
   readonly lifted: (number | null)[];
 }
@@ -92,6 +96,26 @@ function concerns(event: PlantEvent, component: string, series: Series): boolean
   );
 }
 
+/**
+ * Whether every reading of a series was taken alike: one band, state, sensor and place, speeds and loads as near as the rules
+ * ask of any two. Most series of a plant are so, and none of their readings need be held against each other.
+ */
+function isUniform(series: Series, component: Component, policy: Policy): boolean {
+  const [first] = series.readings;
+  if (first === undefined || series.rows.length > 1 || component.rows.length > 1) return false;
+  const highHz = series.rows[0]?.highHz ?? null;
+  const drive = component.rows[0]?.drive ?? null;
+  const seesMounting = highHz === null || highHz > policy['3.mounting.above'];
+  let [slowest, fastest, least, most] = [Number.POSITIVE_INFINITY, 0, Number.POSITIVE_INFINITY, 0];
+  for (const r of series.readings) {
+    if (r.lowHz !== null || r.highHz !== null || r.sensor !== null || r.state !== first.state || (r.instrument !== null && seesMounting)) return false;
+    if (r.speedRpm === null && drive === 'variable') return false;
+    if (r.speedRpm !== null) [slowest, fastest] = [Math.min(slowest, r.speedRpm), Math.max(fastest, r.speedRpm)];
+    if (r.loadPct !== null) [least, most] = [Math.min(least, r.loadPct), Math.max(most, r.loadPct)];
+  }
+  return (fastest === 0 || fastest - slowest <= policy['3.speed.overall'] * slowest) && most - least <= policy['3.load'];
+}
+
 /** Tracks of all series in the order of machines and series; readings are spread over the surveys. */
 export function tracksOf(plant: Plant): Track[] {
   const events = new Map<string, PlantEvent[]>();
@@ -115,6 +139,7 @@ export function tracksOf(plant: Plant): Track[] {
         readings,
         looks: new Array<Look | null>(plant.surveys.length).fill(null),
         events: own.length === 0 ? own : own.filter((e) => concerns(e, component.id, series)).sort((a, b) => a.day - b.day),
+        uniform: isUniform(series, component, plant.policy) && !own.some((e) => concerns(e, component.id, series)),
         lifted: new Array<number | null>(plant.surveys.length).fill(null),
       });
     }

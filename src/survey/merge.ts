@@ -151,14 +151,12 @@ export class Joiner {
     const { phase } = reading;
     if (phase !== null && !this.#oneConvention(entry, cells)) return null;
     const lagDeg = phase === null ? 0 : turn(entry.convention === 'lead' ? -phase.lagDeg : phase.lagDeg);
-    return {
-      ...reading,
-      survey,
-      day,
-      value: reading.value === null ? null : reading.value * factor,
-      typedUnit: factor === 1 && (unitText === null || typedUnit === series.unit) ? null : unitText,
-      phase: phase === null ? null : { amplitude: phase.amplitude === null ? null : phase.amplitude * factor, lagDeg, reference: phase.reference },
-    };
+    reading.survey = survey;
+    reading.day = day;
+    if (factor !== 1 && reading.value !== null) reading.value *= factor;
+    reading.typedUnit = factor === 1 && (unitText === null || typedUnit === series.unit) ? null : unitText;
+    if (phase !== null) reading.phase = { amplitude: phase.amplitude === null ? null : phase.amplitude * factor, lagDeg, reference: phase.reference };
+    return reading;
   }
 
   #unit(cells: Cells, text: string, series: OpenSeries): string | null {

@@ -25,7 +25,8 @@ export interface ReadingEntry {
   readonly detection: Detection | null;
   readonly unitText: string | null;
   readonly retake: number;
-  readonly reading: Omit<Reading, 'survey' | 'day'>;
+  /** Open until it is joined: its survey, day and unit are set then, in place, for there are many. */
+  readonly reading: { -readonly [Field in keyof Reading]: Reading[Field] };
   /** Day of taken_at, else null: then the survey's. */
   readonly takenOn: Day | null;
   readonly convention: 'lag' | 'lead';
@@ -132,6 +133,8 @@ function retakeOf(cells: Cells): number {
 function readingOf(cells: Cells, status: Status, typed: string | null, value: Typed | null, columns: Columns, takenAt: string | null): ReadingEntry['reading'] {
   const lagDeg = columns.phase ? cells.number('phase_deg') : null;
   return {
+    survey: -1,
+    day: 0,
     status,
     value: value?.number ?? null,
     bound: value?.bound ?? null,

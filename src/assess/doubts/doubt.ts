@@ -14,7 +14,12 @@ export function doubt(language: Language, kind: DoubtKind, effect: Doubt['effect
 
 /** What "last time" means for doubts: the median of the point's earlier comparable readings where there are three, else the last. */
 export function lastTime(look: Look): number | null {
-  const values = look.comparable.map((r) => r.value as number);
-  if (values.length === 0) return null;
-  return values.length >= 3 ? median(values) : (values[values.length - 1] as number);
+  if (look.lastTime === undefined) look.lastTime = lastTimeOf(look);
+  return look.lastTime;
+}
+
+function lastTimeOf(look: Look): number | null {
+  const { comparable, previous } = look;
+  if (previous === null) return null;
+  return comparable.length >= 3 ? median(comparable.map((r) => r.value as number)) : previous.value;
 }

@@ -26,18 +26,18 @@ export function nearZeroDoubts(context: Context, survey: number): void {
 export function allDownDoubts(context: Context, survey: number): void {
   const { policy, plant } = context;
   for (const tracks of context.byMachine.values()) {
-    const down: Look[] = [];
-    const points = new Set<string>();
+    let down: Look[] | null = null;
+    let points: Set<string> | null = null;
     for (const track of tracks) {
       const look = track.looks[survey];
       if (look === null || look === undefined || pointRow(track, look.reading.day).scale !== 'linear') continue;
       // Against the last reading or the median of those before, whichever stands higher: after a rise the fall is from the top.
       const before = look.previous === null ? null : Math.max(lastTime(look) ?? 0, look.previous.value as number);
       if (before === null || exceeds(look.value, (1 - policy['7.all_down.share']) * before)) continue;
-      down.push(look);
-      points.add(track.series.point);
+      down = [...(down ?? []), look];
+      points = (points ?? new Set()).add(track.series.point);
     }
-    if (points.size < policy['7.all_down.points']) continue;
+    if (down === null || points === null || points.size < policy['7.all_down.points']) continue;
     for (const look of down) look.doubts.push(doubt(plant.settings.language, 'all-down', 'held', { points: points.size, percent: 100 * policy['7.all_down.share'] }));
   }
 }

@@ -19,21 +19,44 @@ type Scope = 'machine' | 'instrument' | 'file';
 /** Marks readings of one survey whose ratio to last time is a factor between units (section 7, unit-factor). */
 export function unitFactorDoubts(context: Context, survey: number): void {
   const suspects = suspectsAt(context, survey);
-  const groups = new Map<string, { readonly scope: Scope; readonly name: string; readonly members: Suspect[] }>();
-  const join = (scope: Scope, name: string, suspect: Suspect): void => {
-    const unit = suspect.look.reading.typedUnit ?? suspect.track.series.unit;
-    const key = `${scope}\u0000${name}\u0000${unit}`;
-    const group = groups.get(key);
-    if (group === undefined) groups.set(key, { scope, name, members: [suspect] });
-    else group.members.push(suspect);
+  const far = suspects.filter((s) => s.ratio > FAR || s.ratio < 1 / FAR);
+  if (far.length === 0) return;
+  if (far.length * 2 >= context.policy['7.unit.points']) for (const group of groupsOf(suspects, far)) judgeGroup(context, group.scope, group.name, group.members);
+  for (const suspect of far) judgeAlone(context, suspect);
+}
+
+/** No factor, nor half of a group's members about one, lies nearer to 1 than this: √2 less 5 %, less the group's own 15 %. */
+const FAR = 1.1;
+
+interface Group {
+  readonly scope: Scope;
+  readonly name: string;
+  readonly members: Suspect[];
+}
+
+const unitTyped = ({ look, track }: Suspect): string => look.reading.typedUnit ?? track.series.unit;
+
+const scopesOf = ({ track, look }: Suspect): (readonly [Scope, string | null])[] => [['machine', track.machine.id], ['instrument', look.reading.instrument], ['file', look.reading.place.file]];
+
+/** Readings of one unit on one machine, by one instrument, in one file; only where at least half of them are far from last time. */
+function groupsOf(suspects: readonly Suspect[], far: readonly Suspect[]): Group[] {
+  const tally = (list: readonly Suspect[]): Map<string, number> => {
+    const counts = new Map<string, number>();
+    for (const suspect of list) for (const [scope, name] of scopesOf(suspect)) if (name !== null) counts.set(`${scope} ${name}`, (counts.get(`${scope} ${name}`) ?? 0) + 1);
+    return counts;
   };
+  const farIn = tally(far);
+  const groups = new Map<string, Group>();
   for (const suspect of suspects) {
-    join('machine', suspect.track.machine.id, suspect);
-    if (suspect.look.reading.instrument !== null) join('instrument', suspect.look.reading.instrument, suspect);
-    join('file', suspect.look.reading.place.file, suspect);
+    for (const [scope, name] of scopesOf(suspect)) {
+      if (name === null || (farIn.get(`${scope} ${name}`) ?? 0) < 2) continue;
+      const key = `${scope}\u0000${name}\u0000${unitTyped(suspect)}`;
+      const group = groups.get(key);
+      if (group === undefined) groups.set(key, { scope, name, members: [suspect] });
+      else group.members.push(suspect);
+    }
   }
-  for (const group of groups.values()) judgeGroup(context, group.scope, group.name, group.members);
-  for (const suspect of suspects) judgeAlone(context, suspect);
+  return [...groups.values()].filter((g) => g.members.filter((m) => m.ratio > FAR || m.ratio < 1 / FAR).length * 2 >= g.members.length);
 }
 
 function suspectsAt(context: Context, survey: number): Suspect[] {
