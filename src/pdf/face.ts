@@ -46,16 +46,6 @@ const JOINERS = /[\u200c\u200d]/g;
 /** Visual order of a right-to-left word; brackets mirrored. A simple form of Unicode's rules: no nested directions, no marks of direction. */
 const inVisualRuns = (text: string): string[] => (text.match(RUNS) ?? []).reverse().map((run) => MIRRORED[run] ?? run);
 
-const glyphs = new WeakMap<Font, Map<string, ReturnType<Font['glyphForCodePoint']>>>();
-
-function glyphOf(font: Font, character: string): ReturnType<Font['glyphForCodePoint']> {
-  const kept = glyphs.get(font) ?? new Map();
-  glyphs.set(font, kept);
-  const found = kept.get(character) ?? font.glyphForCodePoint(character.codePointAt(0) ?? 0);
-  kept.set(character, found);
-  return found;
-}
-
 export class Type {
   readonly #faces: readonly Face[];
   readonly #words: Map<string, SetWord>[] = [new Map(), new Map(), new Map(), new Map()];
@@ -127,6 +117,10 @@ export class Type {
 
 /** Hex codes with kerning for TJ, and their width. */
 function piece(font: EmbeddedFont, text: string): Piece {
+  return isPlain(text) ? plainPiece(font, text) : shapedPiece(font, text);
+}
+
+function shapedPiece(font: EmbeddedFont, text: string): Piece {
   const [codes, positions] = font.encode(text);
   let show = '<';
   let width = 0;
@@ -140,30 +134,46 @@ function piece(font: EmbeddedFont, text: string): Piece {
   return { font, show: `${show}>`, width };
 }
 
-/** Fonts parsed once a process; the layout of plain strings takes glyphs one by one, which is most of the time of a table. */
-const parsedFonts = new WeakMap<Uint8Array, Font>();
-
-function parsedFont(bytes: Uint8Array): Font {
-  const kept = parsedFonts.get(bytes);
-  if (kept !== undefined) return kept;
-  const font = create(bytes as Buffer) as Font;
-  const shaped = font.layout.bind(font);
-  const layout: Font['layout'] = (text, features, ...rest) => (isPlain(text) && features === undefined ? plainRun(font, text) : shaped(text, features, ...rest));
-  Object.defineProperty(font, 'layout', { value: layout });
-  parsedFonts.set(bytes, font);
-  return font;
-}
-
 /**
  * Numbers, and what has a digit in it (ids, dates, file names with lines), mostly stands once in a report: shaping each for its
  * kerning would be half of the whole time. Tabular figures have none.
  */
 const isPlain = (text: string): boolean => /^[\x20-\x7e\u2011\u2212\u00a0\u202f]*$/.test(text) && /\d|^[^A-Za-z]*$/.test(text);
 
-/** Glyph by glyph, in fresh objects since pdfkit scales them in place. */
-function plainRun(font: Font, text: string): ReturnType<Font['layout']> {
-  const glyphs = [...text].map((c) => glyphOf(font, c));
-  const positions = glyphs.map((g) => ({ xAdvance: g.advanceWidth, yAdvance: 0, xOffset: 0, yOffset: 0 }));
-  const run = { glyphs, positions, get advanceWidth(): number { return positions.reduce((sum, p) => sum + p.xAdvance, 0); } };
-  return run as unknown as ReturnType<Font['layout']>;
+interface PlainGlyph {
+  readonly code: string;
+  readonly width: number;
+}
+
+const plainGlyphs = new WeakMap<EmbeddedFont, Map<string, PlainGlyph>>();
+
+/** Glyph by glyph, each encoded once a font. */
+function plainPiece(font: EmbeddedFont, text: string): Piece {
+  let kept = plainGlyphs.get(font);
+  if (kept === undefined) {
+    kept = new Map();
+    plainGlyphs.set(font, kept);
+  }
+  let show = '<';
+  let width = 0;
+  for (const character of text) {
+    let glyph = kept.get(character);
+    if (glyph === undefined) {
+      const [codes, positions] = font.encode(character);
+      glyph = { code: codes.join(''), width: positions.reduce((sum, p) => sum + p.xAdvance, 0) };
+      kept.set(character, glyph);
+    }
+    show += glyph.code;
+    width += glyph.width;
+  }
+  return { font, show: `${show}>`, width };
+}
+
+/** Fonts parsed once a process. */
+const parsedFonts = new WeakMap<Uint8Array, Font>();
+
+function parsedFont(bytes: Uint8Array): Font {
+  const kept = parsedFonts.get(bytes) ?? (create(bytes as Buffer) as Font);
+  parsedFonts.set(bytes, kept);
+  return kept;
 }

@@ -124,6 +124,10 @@ function wordOf(context: InlineContext, text: string, now: Current): Word {
 
 /** Blanks collapse, but for the no-break blank, which belongs to its word. */
 function addText(context: InlineContext, text: string, now: Current, tokens: Token[]): void {
+  if (!/[ \t\r\n\f]/.test(text)) {
+    if (text !== '') tokens.push(wordOf(context, text, now));
+    return;
+  }
   for (const part of text.split(/([ \t\r\n\f]+)/)) {
     if (part === '') continue;
     if (!/^[ \t\r\n\f]/.test(part)) tokens.push(wordOf(context, part, now));

@@ -4,7 +4,7 @@
  */
 import type { BlockContext } from './block.ts';
 import { sectionBoxes } from './boxes.ts';
-import { type Outline, PackedDocument, pdfText, type Reference } from './document.ts';
+import { type Outline, latin1, PackedDocument, pdfText, type Reference } from './document.ts';
 import { Type } from './face.ts';
 import { Flow } from './flow.ts';
 import { UserError } from '../shell/types.ts';
@@ -95,7 +95,7 @@ async function writePages(input: PdfInput, document: PackedDocument, job: Job): 
       written.set(image, ref);
       document.page.xobjects[image.name] = ref;
     }
-    document.addContent(draft.pieces.map((piece) => (typeof piece === 'string' ? piece : piece())).join('\n'));
+    document.addContent(latin1(draft.pieces.map((piece) => (typeof piece === 'string' ? piece : piece())).join('\n')));
     draft.pieces.length = 0;
     if (input.tags) document.page.dictionary.data['StructParents'] = page;
     if (input.tags) document.page.dictionary.data['Tabs'] = 'S';

@@ -21,10 +21,26 @@ export interface NumberOptions {
   readonly sign?: boolean;
 }
 
+/** Power of ten of a value once it is rounded to three digits: 9.996 is 10.0, so 1. */
+function exponentOf(value: number): number {
+  let exponent = 0;
+  let scaled = value;
+  while (scaled >= 10) {
+    scaled /= 10;
+    exponent += 1;
+  }
+  while (scaled < 1) {
+    scaled *= 10;
+    exponent -= 1;
+  }
+  // Only a value about to round up to the next power needs the exact way, which is slow.
+  return scaled < 9.99 && scaled > 1.001 ? exponent : Number(value.toExponential(SIGNIFICANT - 1).split('e')[1]);
+}
+
 /** Decimals that three significant digits take. */
 function significantDecimals(value: number): number {
   if (value === 0) return 0;
-  const exponent = Number(Math.abs(value).toExponential(SIGNIFICANT - 1).split('e')[1]);
+  const exponent = exponentOf(Math.abs(value));
   return Math.min(MOST_DECIMALS, Math.max(0, SIGNIFICANT - 1 - exponent));
 }
 
