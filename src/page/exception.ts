@@ -52,9 +52,18 @@ export function exceptionView(format: Format, charts: Charts, machine: RecordMac
     hasReadings: measurements.length > 0,
     hasHistory,
     historyKey: main === null ? '' : seriesId(main),
-    historyAlt: main === null || !hasHistory ? '' : charts.drawing('history', seriesId(main)).alt,
+    // Asked for by the PDF alone: the site has it in its drawing, and a chart is not made twice.
+    get historyAlt() {
+      return main === null || !hasHistory ? '' : charts.drawing('history', seriesId(main)).alt;
+    },
     historyCaption: main === null ? '' : `${main.point} ${main.quantity}, ${format.unit(main.unit, main.detection)}: ${main.limit_reason}`,
-    polars: polars.map((m) => ({ key: seriesId(m), alt: charts.drawing('polar', seriesId(m)).alt, caption: `${m.point}: 1× vector, angles as lag` })),
+    polars: polars.map((m) => ({
+      key: seriesId(m),
+      caption: `${m.point}: 1× vector, angles as lag`,
+      get alt() {
+        return charts.drawing('polar', seriesId(m)).alt;
+      },
+    })),
     photos: format.record.survey.photos
       .filter((p) => p.machine === machine.machine)
       .map((p) => ({ path: p.path, file: photoFile(p.path), alt: p.caption ?? `Photo of ${machine.machine}`, caption: p.caption ?? '' })),

@@ -46,10 +46,19 @@ function significantDecimals(value: number): number {
 
 /** Decimals a number was given with, up to nine; what lies beyond twelve digits is the computer's, not the giver's. */
 function ownDecimals(number: number): number {
+  const kept = decimalsOf.get(number);
+  if (kept !== undefined) return kept;
   const value = Number(number.toPrecision(12));
-  for (let d = 0; d < MOST_DECIMALS; d += 1) if (Number(value.toFixed(d)) === value) return d;
-  return MOST_DECIMALS;
+  let decimals = 0;
+  while (decimals < MOST_DECIMALS && Number(value.toFixed(decimals)) !== value) decimals += 1;
+  if (decimalsOf.size > MOST_KEPT) decimalsOf.clear();
+  decimalsOf.set(number, decimals);
+  return decimals;
 }
+
+/** Limits are asked for at each of their readings. */
+const decimalsOf = new Map<number, number>();
+const MOST_KEPT = 4096;
 
 /** Decimals for a value beside a limit. */
 export function decimalsFor(value: number, limit: number | null | undefined): number {
