@@ -131,7 +131,7 @@ export class PackedDocument extends BaseDocument {
   #finish(ref: Reference, finish: () => void): void {
     if (ref.buffer.length > 0) {
       if (ref.compress) {
-        ref.buffer = [deflate(joined(ref.buffer))];
+        ref.buffer = [deflate(Buffer.concat(ref.buffer))];
         ref.compress = false;
       }
       finish();
@@ -252,17 +252,6 @@ export class PackedDocument extends BaseDocument {
 /** pdfkit asks for a Date object; this one is made from the survey's day, never from the clock. */
 // biome-ignore lint/style/noRestrictedGlobals: the type and the constructor with an argument, which no clock answers.
 export const dateOf = (text: string): Date => new Date(`${text}T00:00:00Z`);
-
-function joined(chunks: readonly Uint8Array[]): Uint8Array {
-  if (chunks.length === 1) return chunks[0] as Uint8Array;
-  const all = new Uint8Array(chunks.reduce((sum, c) => sum + c.length, 0));
-  let at = 0;
-  for (const chunk of chunks) {
-    all.set(chunk, at);
-    at += chunk.length;
-  }
-  return all;
-}
 
 /** One byte a character: what pdfkit writes is already escaped to that. */
 export const latin1 = (text: string): Uint8Array => Buffer.from(text, 'latin1');

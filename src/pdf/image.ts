@@ -3,6 +3,7 @@
  * photo knows where it was taken) and turned upright; PNG pixels are packed anew. Never: an image that is decoded in part.
  */
 import { deflateSync, inflateSync } from 'node:zlib';
+import { exifOrientation } from '../page/exif.ts';
 import type { PackedDocument, Reference } from './document.ts';
 
 export interface PdfImage {
@@ -68,25 +69,6 @@ function readJpeg(bytes: Uint8Array): Jpeg {
   if (frame.components !== 1 && frame.components !== 3) throw new ImageError('the JPEG is in four colours, for a printing press');
   const stripped = concatenated(kept);
   return { ...frame, orientation, stripped };
-}
-
-/** Orientation tag (0x0112) of an Exif segment, 1 to 8. */
-function exifOrientation(segment: Uint8Array): number | null {
-  if (segment.length < 18 || String.fromCharCode(...segment.subarray(4, 8)) !== 'Exif') return null;
-  const view = new DataView(segment.buffer, segment.byteOffset + 10, segment.length - 10);
-  const little = view.getUint16(0) === 0x4949;
-  const start = view.getUint32(4, little);
-  if (start + 2 > view.byteLength) return null;
-  const count = view.getUint16(start, little);
-  for (let i = 0; i < count; i += 1) {
-    const entry = start + 2 + i * 12;
-    if (entry + 12 > view.byteLength) return null;
-    if (view.getUint16(entry, little) === 0x0112) {
-      const value = view.getUint16(entry + 8, little);
-      return value >= 1 && value <= 8 ? value : null;
-    }
-  }
-  return null;
 }
 
 /** Image space (unit square, y up) to an upright box (y down) for each Exif orientation. */

@@ -30,7 +30,7 @@ export async function renderPdf(input: PdfInput): Promise<PdfOutput> {
   }
   document.end();
   await ended;
-  return { bytes: joined(chunks), pages: job.pen.pages.length };
+  return { bytes: Buffer.concat(chunks), pages: job.pen.pages.length };
 }
 
 interface Job {
@@ -168,14 +168,4 @@ function writeOutline(document: PackedDocument, pen: Pen): void {
     if (entry.level === 1 || chapter === null) chapter = document.outline.addItem(entry.title, options);
     else chapter.addItem(entry.title, options);
   }
-}
-
-function joined(chunks: readonly Uint8Array[]): Uint8Array {
-  const all = new Uint8Array(chunks.reduce((sum, c) => sum + c.length, 0));
-  let at = 0;
-  for (const chunk of chunks) {
-    all.set(chunk, at);
-    at += chunk.length;
-  }
-  return all;
 }

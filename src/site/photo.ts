@@ -2,21 +2,13 @@
  * Photos for the site. In: JPEG or PNG bytes. Out: the same picture without what it tells about where and when: the Exif
  * block is replaced by one that holds the orientation alone, text chunks are left out. No pixel is encoded anew.
  */
+import { exifOrientation } from '../page/exif.ts';
+
 const word = (bytes: Uint8Array, at: number): number => ((bytes[at] ?? 0) << 8) | (bytes[at + 1] ?? 0);
 
 export function withoutMetadata(bytes: Uint8Array): Uint8Array {
   if (bytes[0] === 0xff && bytes[1] === 0xd8) return cleanJpeg(bytes);
   return bytes[0] === 0x89 && bytes[1] === 0x50 ? cleanPng(bytes) : bytes;
-}
-
-function joined(parts: readonly Uint8Array[]): Uint8Array {
-  const all = new Uint8Array(parts.reduce((sum, p) => sum + p.length, 0));
-  let at = 0;
-  for (const part of parts) {
-    all.set(part, at);
-    at += part.length;
-  }
-  return all;
 }
 
 function cleanJpeg(bytes: Uint8Array): Uint8Array {
@@ -27,26 +19,13 @@ function cleanJpeg(bytes: Uint8Array): Uint8Array {
     const end = at + 2 + word(bytes, at + 2);
     if (marker === 0xda) break;
     const segment = bytes.subarray(at, end);
-    const orientation = marker === 0xe1 ? orientationOf(segment) : null;
+    const orientation = marker === 0xe1 ? exifOrientation(segment) : null;
     if (orientation !== null && orientation !== 1) kept.push(orientationSegment(orientation));
     const isMetadata = (marker >= 0xe1 && marker <= 0xef && marker !== 0xee) || marker === 0xfe;
     if (!isMetadata) kept.push(segment);
     at = end;
   }
-  return joined([...kept, bytes.subarray(at)]);
-}
-
-/** The Exif orientation (tag 0x0112) of an application segment, or null. */
-function orientationOf(segment: Uint8Array): number | null {
-  if (String.fromCharCode(...segment.subarray(4, 8)) !== 'Exif' || segment.length < 20) return null;
-  const view = new DataView(segment.buffer, segment.byteOffset + 10, segment.length - 10);
-  const little = view.getUint16(0) === 0x4949;
-  const start = view.getUint32(4, little);
-  if (start + 2 > view.byteLength) return null;
-  for (let i = 0; i < view.getUint16(start, little) && start + 14 + i * 12 <= view.byteLength; i += 1) {
-    if (view.getUint16(start + 2 + i * 12, little) === 0x0112) return view.getUint16(start + 10 + i * 12, little);
-  }
-  return null;
+  return Buffer.concat([...kept, bytes.subarray(at)]);
 }
 
 /** A big-endian Exif segment with one entry. */
@@ -66,5 +45,5 @@ function cleanPng(bytes: Uint8Array): Uint8Array {
     if (KEPT_CHUNKS.has(String.fromCharCode(...bytes.subarray(at + 4, at + 8)))) kept.push(bytes.subarray(at, end));
     at = end;
   }
-  return joined(kept);
+  return Buffer.concat(kept);
 }
