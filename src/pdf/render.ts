@@ -30,7 +30,7 @@ export async function renderPdf(input: PdfInput): Promise<PdfOutput> {
   }
   document.end();
   await ended;
-  return { bytes: Buffer.concat(chunks), pages: job.pen.pages.length };
+  return { bytes: new Uint8Array(Buffer.concat(chunks)), pages: job.pen.pages.length };
 }
 
 interface Job {
