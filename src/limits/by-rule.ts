@@ -58,7 +58,11 @@ export function chooseByRule(q: RuleQuestion): RuleAnswer {
   if (row.kind === 'pump' || (row.kind === 'motor' && row.pumpCategory !== null)) return forPump(q);
   if (row.kind === 'gearbox') return forGear(q);
   if ((row.kind === 'steam turbine' || row.kind === 'generator') && q.largeTurbineSet) return forLargeTurbine(q);
-  if (row.kind === 'fan' && row.fanCategory !== null && q.support === 'flexible' && (row.powerKw === null || row.powerKw <= FAN_MOST_KW)) return forFan(q, row.fanCategory);
+  if (row.kind === 'fan' && row.fanCategory !== null && q.support === 'flexible') {
+    // Which standard serves it depends on the power: unknown, neither is taken.
+    if (row.powerKw === null) return none('power', { kind: row.kind });
+    if (row.powerKw <= FAN_MOST_KW) return forFan(q, row.fanCategory);
+  }
   return byGroup(q);
 }
 
@@ -128,7 +132,7 @@ function electricalGroup(q: RuleQuestion): Group | RuleAnswer {
   }
   if (powerKw === null) return none('shaft_height_and_power');
   if (powerKw > q.policy.group1MinKw) return { group: 1, by: 'power' };
-  return powerKw <= q.policy.group2MaxKw ? { group: 2, by: 'power' } : none('shaft_height', { power_kw: powerKw });
+  return powerKw <= q.policy.group2MaxKw ? { group: 2, by: 'power' } : none('shaft_height', { power_kw: powerKw, least: q.policy.group2MaxKw, most: q.policy.group1MinKw });
 }
 
 function powerGroup(q: RuleQuestion): Group | RuleAnswer {

@@ -4,7 +4,7 @@
  */
 import { inForce, type PointRow } from '../plant/types.ts';
 import { chooseByRule, isLargeTurbine } from './by-rule.ts';
-import { shaftSet } from './iso20816-3.ts';
+import { SHAFT_SET_ID, shaftSet } from './iso20816-3.ts';
 import { inForceFor, ownLimits } from './own.ts';
 import { publishedById } from './published.ts';
 import { ratedSpeedRpm } from './speed.ts';
@@ -13,6 +13,8 @@ import type { AppliedSet, LimitChoice, LimitQuestion, LimitSet } from './types.t
 export { ownLimits };
 
 const conflictOf = (conflict: string): LimitChoice => ({ set: null, rule: 'limits.none.conflict', facts: { conflict }, conflict, byOurChoice: false });
+
+const without = (rule: string, facts: LimitChoice['facts'] = {}): LimitChoice => ({ set: null, rule, facts, conflict: null, byOurChoice: false });
 
 /** The one set for a series on a day, or none, with the reason as key and facts. Throws nothing. */
 export function chooseLimits(q: LimitQuestion): LimitChoice {
@@ -26,7 +28,7 @@ export function chooseLimits(q: LimitQuestion): LimitChoice {
   const applied = byApplication(q, point, component.kind);
   if (applied !== null) return applied;
   if (point.limitSet !== null || (component.limitSet !== null && point.measuredOn !== 'pipe' && point.measuredOn !== 'structure')) {
-    return { set: null, rule: 'limits.none.named', facts: { limit_set: point.limitSet ?? component.limitSet, quantity: q.series.quantity }, conflict: null, byOurChoice: false };
+    return without('limits.none.named', { limit_set: point.limitSet ?? component.limitSet, quantity: q.series.quantity });
   }
   return byRule(q, point);
 }
@@ -35,17 +37,19 @@ export function chooseLimits(q: LimitQuestion): LimitChoice {
 function byName(q: LimitQuestion, point: PointRow, name: string, by: 'point' | 'component'): LimitChoice | null {
   const own = q.own.byName.get(name) ?? [];
   const published = own.length > 0 ? [] : builtIn(q, name);
-  if (own.length === 0 && published.length === 0) return conflictOf(`no limit set is called "${name}"`);
-  const found = inForceFor(own.length > 0 ? own : published, q.series, point.measuredOn, q.day, by === 'point');
+  if (own.length === 0 && published === null) return q.series.quantity === 'displacement' ? without('limits.none.shaft_speed') : null;
+  if (own.length === 0 && published?.length === 0) return conflictOf(`no limit set is called "${name}"`);
+  const found = inForceFor(own.length > 0 ? own : (published ?? []), q.series, point.measuredOn, q.day, by === 'point');
   if (found === null) return null;
   if ('conflict' in found) return conflictOf(found.conflict);
   return { set: found.set, rule: `limits.named.${by}`, facts: { limit_set: name, title: found.set.title, basis: found.set.basis }, conflict: null, byOurChoice: false };
 }
 
-function builtIn(q: LimitQuestion, name: string): readonly LimitSet[] {
-  if (name !== 'iso20816-3-shaft') return publishedById(name);
+/** Rows of a built-in set; null for the shaft formulas where the rated speed is unknown. */
+function builtIn(q: LimitQuestion, name: string): readonly LimitSet[] | null {
+  if (name !== SHAFT_SET_ID) return publishedById(name);
   const speedRpm = ratedSpeedRpm(q.machine, q.component, q.day);
-  return speedRpm === null ? [] : [shaftSet(speedRpm)];
+  return speedRpm === null ? null : [shaftSet(speedRpm)];
 }
 
 const RANKS = ['point', 'component', 'machine', 'kind'] as const;
@@ -75,7 +79,8 @@ function byRule(q: LimitQuestion, point: PointRow): LimitChoice {
     conflict: null,
     byOurChoice: answer.set !== null && point.direction === 'axial' && place === 'bearing housing',
   });
-  if (place !== 'bearing housing' && place !== 'shaft relative') return done({ set: null, rule: 'limits.none.place', facts: { place } });
+  if (place === 'shaft absolute') return without('limits.none.shaft_absolute');
+  if (place !== 'bearing housing' && place !== 'shaft relative') return without('limits.none.place', { place });
   const rows = q.machine.components.map((c) => inForce(c.rows, q.day));
   const component = inForce(q.component.rows, q.day);
   const { policy } = q.plant;

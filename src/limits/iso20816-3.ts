@@ -23,16 +23,18 @@ const annexB: Standard = { source: 'ISO 20816-3, from ISO 7919-3 (quoted second-
 
 export const SHAFT_SPEED_RANGE_RPM = [1000, 30000] as const;
 
+export const SHAFT_SET_ID = 'iso20816-3-shaft';
+
+const SHAFT_ROW = { id: SHAFT_SET_ID, title: 'Shaft relative vibration, by rated speed', quantity: 'displacement', unit: 'µm', detection: 'true peak-to-peak', measuredOn: 'shaft relative' } as const;
+
+/** The formulas as they stand in the list of sets: their boundaries are numbers only at a rated speed. */
+export const SHAFT_FORMULAS: LimitSet = publishedSet(annexB, { ...SHAFT_ROW, title: 'Shaft relative vibration: A/B 4800/√n, B/C 9000/√n, C/D 13200/√n, n the rated speed in r/min (1000 to 30 000, recalled)' });
+
 /** Shaft-relative displacement, µm peak-to-peak: 4800, 9000 and 13200 by √n, n the rated speed in r/min. */
 export function shaftSet(speedRpm: number): LimitSet {
   const root = Math.sqrt(speedRpm);
   return publishedSet(annexB, {
-    id: 'iso20816-3-shaft',
-    title: 'Shaft relative vibration, by rated speed',
-    quantity: 'displacement',
-    unit: 'µm',
-    detection: 'true peak-to-peak',
-    measuredOn: 'shaft relative',
+    ...SHAFT_ROW,
     ab: 4800 / root,
     bc: 9000 / root,
     cd: 13200 / root,

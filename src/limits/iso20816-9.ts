@@ -3,6 +3,8 @@ import { publishedSet, type Standard, velocitySet } from './published-set.ts';
 import type { LimitSet } from './types.ts';
 
 const standard: Standard = { source: 'ISO 20816-9 (quoted second-hand)', edition: '2020', table: 'rating ladder', confidence: 'one source', lowHz: 10, highHz: 1000 };
+/** No band is at hand for acceleration and shaft displacement. */
+const unbanded: Standard = { ...standard, table: 'rating ladder', lowHz: null, highHz: null };
 
 export const RATING_LADDER = [2, 3.15, 5, 8, 12.5, 20, 31.5, 50, 80, 125, 200, 315] as const;
 
@@ -24,7 +26,7 @@ function accelerationSet(ratingAr: number): LimitSet | null {
   const triple = rungs(ratingAr);
   if (triple === null) return null;
   const [ab, bc, cd] = triple;
-  return publishedSet(standard, { id: `iso20816-9-ar${ratingAr}`, title: `Gear units, rating AR ${ratingAr}`, quantity: 'acceleration', unit: 'm/s²', detection: 'true peak', ab, bc, cd });
+  return publishedSet(unbanded, { id: `iso20816-9-ar${ratingAr}`, title: `Gear units, rating AR ${ratingAr}`, quantity: 'acceleration', unit: 'm/s²', detection: 'true peak', ab, bc, cd });
 }
 
 /** Shaft displacement by DR rating, µm peak-to-peak; by name only. */
@@ -32,7 +34,7 @@ function displacementRatingSet(ratingDr: number): LimitSet | null {
   const triple = rungs(ratingDr);
   if (triple === null) return null;
   const [ab, bc, cd] = triple;
-  return publishedSet(standard, {
+  return publishedSet(unbanded, {
     id: `iso20816-9-dr${ratingDr}`, title: `Gear units, rating DR ${ratingDr}`, quantity: 'displacement', unit: 'µm', detection: 'true peak-to-peak', measuredOn: 'shaft relative', ab, bc, cd,
   });
 }

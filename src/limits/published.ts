@@ -3,7 +3,7 @@ import { CLASS_SETS } from './iso10816-1.ts';
 import { PUMP_SETS } from './iso10816-7.ts';
 import { FAN_SETS } from './iso14694.ts';
 import { LARGE_TURBINE_SETS } from './iso20816-2.ts';
-import { INDUSTRIAL_SETS } from './iso20816-3.ts';
+import { INDUSTRIAL_SETS, SHAFT_FORMULAS } from './iso20816-3.ts';
 import { GEAR_SETS } from './iso20816-9.ts';
 import type { LimitSet } from './types.ts';
 
@@ -16,8 +16,10 @@ for (const set of ALL) {
   else rows.push(set);
 }
 
-/** Every built-in set, one row a quantity. The shaft formulas are made at a rated speed and stand in iso20816-3.ts. */
-export const publishedSets = (): readonly LimitSet[] => ALL;
+const LISTED: readonly LimitSet[] = [...ALL, SHAFT_FORMULAS];
+
+/** Every built-in set, one row a quantity; the shaft formulas stand among them without numbers, for those need a rated speed. */
+export const publishedSets = (): readonly LimitSet[] => LISTED;
 
 /** Rows of a built-in set by its id, one a quantity; empty for an unknown id. */
 export const publishedById = (id: string): readonly LimitSet[] => BY_ID.get(id) ?? [];

@@ -8,7 +8,7 @@ export type KnownQuantity = (typeof KNOWN_QUANTITIES)[number];
 
 export const isKnownQuantity = (quantity: string): quantity is KnownQuantity => (KNOWN_QUANTITIES as readonly string[]).includes(quantity);
 
-const PEAK = /^(pk|peak|0-pk|0-peak|zero-to-peak|zero-peak)$/;
+const PEAK = /^(pk|peak|0-p|0-pk|0-peak|zero-to-peak|zero-peak)$/;
 const PEAK_TO_PEAK = /^(pk-pk|p-p|pp|pk-to-pk|peak-to-peak|peak-peak|peaktopeak|p2p|pkpk)$/;
 
 /**

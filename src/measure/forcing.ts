@@ -1,5 +1,6 @@
 /**
- * Forcing frequencies as multiples of the speed of the inner ring or shaft (textbook formulas, common practice).
+ * Forcing frequencies (textbook formulas, common practice). In: geometry, counts, speeds. Out: multiples of the speed of the
+ * inner ring, or Hz. Never: a verdict.
  */
 export interface RollingBearing {
   /** Number of rolling elements. */
@@ -20,3 +21,10 @@ export function bearingOrders(bearing: RollingBearing): { readonly bpfo: number;
     bsf: (bearing.pitchDiameter / (2 * bearing.elementDiameter)) * (1 - r * r),
   };
 }
+
+/** Gear mesh in Hz: teeth times the speed of the shaft that carries them. */
+export const gearMeshHz = (teeth: number, shaftHz: number): number => teeth * shaftHz;
+/** Vane or blade pass in Hz. */
+export const bladePassHz = (blades: number, shaftHz: number): number => blades * shaftHz;
+/** Twice the line frequency in Hz: 100 or 120. */
+export const twiceLineHz = (lineHz: 50 | 60): number => 2 * lineHz;

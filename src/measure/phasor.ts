@@ -11,5 +11,7 @@ export function vectorChange(from: Phasor, to: Phasor): Phasor {
   const x = to.amplitude * Math.cos(to.lagDeg * RAD_PER_DEG) - from.amplitude * Math.cos(from.lagDeg * RAD_PER_DEG);
   const y = to.amplitude * Math.sin(to.lagDeg * RAD_PER_DEG) - from.amplitude * Math.sin(from.lagDeg * RAD_PER_DEG);
   const deg = Math.atan2(y, x) / RAD_PER_DEG;
-  return { amplitude: Math.hypot(x, y), lagDeg: deg < 0 ? deg + 360 : deg };
+  const lag = deg < 0 ? deg + 360 : deg;
+  // A hair below zero rounds to 360, which is 0.
+  return { amplitude: Math.hypot(x, y), lagDeg: lag >= 360 ? 0 : lag };
 }

@@ -7,23 +7,22 @@ import { nearestWord } from './nearest.ts';
 
 /** Standard gravity, m/s² (CGPM 1901), exact. */
 export const STANDARD_GRAVITY = 9.80665;
-const INCH = 0.0254;
 
-/** Factor to the SI unit of each quantity: m, m/s, m/s². */
+/** Factor to the SI unit of each quantity (m, m/s, m/s²) as a fraction of whole numbers, so that a conversion rounds once. */
 const UNITS = {
-  'mm/s': { quantity: 'velocity', si: 1e-3 },
-  'in/s': { quantity: 'velocity', si: INCH },
-  'm/s': { quantity: 'velocity', si: 1 },
-  µm: { quantity: 'displacement', si: 1e-6 },
-  mm: { quantity: 'displacement', si: 1e-3 },
-  mil: { quantity: 'displacement', si: INCH / 1000 },
-  in: { quantity: 'displacement', si: INCH },
-  m: { quantity: 'displacement', si: 1 },
-  g: { quantity: 'acceleration', si: STANDARD_GRAVITY },
-  'm/s²': { quantity: 'acceleration', si: 1 },
-  'mm/s²': { quantity: 'acceleration', si: 1e-3 },
-  'in/s²': { quantity: 'acceleration', si: INCH },
-} as const satisfies Record<string, { readonly quantity: KnownQuantity; readonly si: number }>;
+  'mm/s': { quantity: 'velocity', si: [1, 1000] },
+  'in/s': { quantity: 'velocity', si: [254, 10_000] },
+  'm/s': { quantity: 'velocity', si: [1, 1] },
+  µm: { quantity: 'displacement', si: [1, 1_000_000] },
+  mm: { quantity: 'displacement', si: [1, 1000] },
+  mil: { quantity: 'displacement', si: [254, 10_000_000] },
+  in: { quantity: 'displacement', si: [254, 10_000] },
+  m: { quantity: 'displacement', si: [1, 1] },
+  g: { quantity: 'acceleration', si: [980_665, 100_000] },
+  'm/s²': { quantity: 'acceleration', si: [1, 1] },
+  'mm/s²': { quantity: 'acceleration', si: [1, 1000] },
+  'in/s²': { quantity: 'acceleration', si: [254, 10_000] },
+} as const satisfies Record<string, { readonly quantity: KnownQuantity; readonly si: readonly [number, number] }>;
 
 export type UnitSymbol = keyof typeof UNITS;
 
@@ -32,20 +31,27 @@ export interface Unit {
   readonly quantity: KnownQuantity;
 }
 
-/** Spellings by canonical symbol, folded as by `fold`. */
+const MILLIMETRE = ['mm', 'millimeter', 'millimetre', 'millimeters', 'millimetres'];
+const INCH = ['in', 'inch', 'inches', '"'];
+const METRE = ['m', 'meter', 'metre', 'meters', 'metres'];
+const PER_SECOND = ['/s', '/sec', '/second', 's-1', 's^-1', '*s-1', '*s^-1', '.s-1'];
+const PER_SECOND_SQUARED = ['/s2', '/s^2', '/s**2', '/s/s', '/sec2', '/sec^2', '/sec/sec', '/second2', 's-2', 's^-2', '*s-2', '*s^-2', '.s-2'];
+const joined = (lengths: readonly string[], rates: readonly string[]): string[] => lengths.flatMap((length) => rates.map((rate) => length + rate));
+
+/** Spellings by canonical symbol, folded as by `fold`. `mms` is none: it is typed for mm and for mm/s. */
 const SPELLINGS: Readonly<Record<UnitSymbol, readonly string[]>> = {
-  'mm/s': ['mm/s', 'mm/sec', 'mm/second', 'mms-1', 'mms^-1', 'mm*s-1', 'mm.s-1', 'mms', 'mmps'],
-  'in/s': ['in/s', 'in/sec', 'ips', 'inch/s', 'inch/sec', 'inches/s', 'inches/sec', 'ins-1', 'in*s-1', '"/s'],
-  'm/s': ['m/s', 'm/sec', 'ms-1', 'm*s-1', 'ms^-1', 'mps'],
+  'mm/s': [...joined(MILLIMETRE, PER_SECOND), 'mmps'],
+  'in/s': [...joined(INCH, PER_SECOND), 'ips'],
+  'm/s': [...joined(METRE, PER_SECOND), 'mps'],
   µm: ['µm', 'um', 'micron', 'microns', 'micrometer', 'micrometre', 'micrometers', 'micrometres', 'mkm'],
-  mm: ['mm', 'millimeter', 'millimetre', 'millimeters', 'millimetres'],
-  mil: ['mil', 'mils', 'thou'],
-  in: ['in', 'inch', 'inches', '"'],
-  m: ['m', 'meter', 'metre', 'meters', 'metres'],
+  mm: MILLIMETRE,
+  mil: ['mil', 'mils', 'thou', 'thous'],
+  in: INCH,
+  m: METRE,
   g: ['g', 'gs', "g's", 'gn', 'g0'],
-  'm/s²': ['m/s2', 'm/s^2', 'm/s/s', 'm/sec2', 'm/sec^2', 'ms-2', 'ms^-2', 'm*s-2', 'mps2'],
-  'mm/s²': ['mm/s2', 'mm/s^2', 'mm/sec2', 'mm/sec^2', 'mms-2', 'mms^-2'],
-  'in/s²': ['in/s2', 'in/s^2', 'in/sec2', 'in/sec^2', 'ins-2', 'inch/s2'],
+  'm/s²': [...joined(METRE, PER_SECOND_SQUARED), 'mps2'],
+  'mm/s²': joined(MILLIMETRE, PER_SECOND_SQUARED),
+  'in/s²': joined(INCH, PER_SECOND_SQUARED),
 };
 
 const BY_SPELLING = new Map<string, UnitSymbol>();
@@ -65,6 +71,8 @@ function fold(text: string): string {
     .replace(/\u207b\u00b2/g, '-2')
     .replace(/\u00b2/g, '2')
     .replace(/[\u2212\u2013]/g, '-')
+    .replace(/[\u2019\u02bc]/g, "'")
+    .replace(/\u2033/g, '"')
     .replace(/[\u00b7\u22c5]/g, '*')
     .replace(/\bper\b/g, '/')
     .replace(/[\s\u00a0\u202f]+/g, '');
@@ -89,7 +97,8 @@ const isSymbol = (text: string): text is UnitSymbol => Object.hasOwn(UNITS, text
 export function unitFactor(from: string, to: string): number | null {
   if (from === to) return 1;
   if (!isSymbol(from) || !isSymbol(to) || UNITS[from].quantity !== UNITS[to].quantity) return null;
-  return UNITS[from].si / UNITS[to].si;
+  const [a, b] = [UNITS[from].si, UNITS[to].si];
+  return (a[0] * b[1]) / (a[1] * b[0]);
 }
 
 /** Canonical symbols of a quantity, for hints. */
@@ -97,12 +106,14 @@ export const unitsOf = (quantity: KnownQuantity): UnitSymbol[] => (Object.keys(U
 
 export type FrequencyUnit = 'Hz' | 'CPM' | 'r/min';
 
-const FREQUENCIES: Readonly<Record<string, FrequencyUnit>> = {
-  hz: 'Hz', hertz: 'Hz', '1/s': 'Hz', 's-1': 'Hz', cps: 'Hz', cpm: 'CPM', 'cycles/min': 'CPM', 'r/min': 'r/min', rpm: 'r/min', 'rev/min': 'r/min', '1/min': 'r/min', 'min-1': 'r/min',
-};
+const FREQUENCIES: ReadonlyMap<string, FrequencyUnit> = new Map([
+  ...['hz', 'hertz', '1/s', 's-1', 's^-1', 'cps'].map((spelling) => [spelling, 'Hz'] as const),
+  ...['cpm', 'c/min', 'cycles/min', 'cycles/minute'].map((spelling) => [spelling, 'CPM'] as const),
+  ...['r/min', 'rpm', 'r.p.m.', 'rev/min', 'revs/min', 'u/min', '1/min', 'min-1', 'min^-1'].map((spelling) => [spelling, 'r/min'] as const),
+]);
 
 /** Hz, CPM or r/min of a spelling, or null. */
-export const parseFrequencyUnit = (text: string): FrequencyUnit | null => FREQUENCIES[fold(text)] ?? null;
+export const parseFrequencyUnit = (text: string): FrequencyUnit | null => FREQUENCIES.get(fold(text)) ?? null;
 
 const PER_MINUTE = 60;
 
@@ -111,3 +122,4 @@ export const toHz = (value: number, unit: FrequencyUnit): number => (unit === 'H
 export const fromHz = (hz: number, unit: FrequencyUnit): number => (unit === 'Hz' ? hz : hz * PER_MINUTE);
 /** Orders: multiples of the running speed in r/min. */
 export const toOrders = (hz: number, speedRpm: number): number => (hz * PER_MINUTE) / speedRpm;
+export const fromOrders = (orders: number, speedRpm: number): number => (orders * speedRpm) / PER_MINUTE;
