@@ -57,8 +57,8 @@ export class LimitBook {
   }
 
   /** No dated row bears on it, so one choice serves all its days. */
-  #neverChanges({ series, component, machine }: Track): boolean {
-    return this.#limitDays.length <= 1 && series.rows.length === 1 && component.rows.length === 1 && machine.rows.length === 1;
+  #neverChanges({ series, machine }: Track): boolean {
+    return this.#limitDays.every((day) => day === Number.NEGATIVE_INFINITY) && [series, machine, ...machine.components].every(({ rows }) => rows.length === 1);
   }
 
   #atStretch(track: Track, day: Day, kind: SurveyKind): LimitsInForce {
@@ -67,7 +67,10 @@ export class LimitBook {
       kept = new Map();
       this.#kept.set(track, kept);
     }
-    const stretch = `${kind === 'acceptance' ? 'a' : ''}${startsBefore(this.#limitDays, day)} ${countBefore(track.series.rows, day)} ${countBefore(track.component.rows, day)} ${countBefore(track.machine.rows, day)}`;
+    const { series, machine } = track;
+    // Rated speed and what it is coupled to are read from the other components too.
+    const begun = [series, machine, ...machine.components].map(({ rows }) => countBefore(rows, day)).join(' ');
+    const stretch = `${kind === 'acceptance' ? 'a' : ''}${startsBefore(this.#limitDays, day)} ${begun}`;
     let found = kept.get(stretch);
     if (found === undefined) {
       found = this.#choose(track, day, kind);
