@@ -147,11 +147,11 @@ function dateAxis(days: readonly number[], x: Scale, frame: Frame): Shape[] {
   return shapes;
 }
 
-/** Events between the first day and the last, as ticks from above; their words stand where they do not collide. */
+/** Events between the first day and the last, as ticks from above; their words stand where they do not collide, the newest first. */
 function eventTicks(input: HistoryInput, first: number, last: number, x: Scale, frame: Frame): Shape[] {
   const shapes: Shape[] = [];
-  let free = Number.NEGATIVE_INFINITY;
-  for (const event of [...input.events].sort((a, b) => (a.date < b.date ? -1 : 1))) {
+  let free = Number.POSITIVE_INFINITY;
+  for (const event of [...input.events].sort((a, b) => (a.date < b.date ? 1 : -1))) {
     const day = parseDay(event.date);
     if (day === null || day < first || day > last) continue;
     const at = x(day);
@@ -159,9 +159,9 @@ function eventTicks(input: HistoryInput, first: number, last: number, x: Scale, 
     const long = event.label.length * (SIZE - 0.5) * LETTER;
     const turned = at + 2 + long > frame.right;
     const start = turned ? at - 2 - long : at + 2;
-    if (start < free) continue;
+    if (start + long > free) continue;
     shapes.push(label(turned ? at - 2 : at + 2, frame.top - 2.5, event.label, SIZE - 0.5, turned ? 'end' : 'start'));
-    free = (turned ? at : start + long) + 4;
+    free = (turned ? start : at) - 4;
   }
   return shapes;
 }

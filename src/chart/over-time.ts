@@ -34,6 +34,8 @@ const PARTS: readonly Part[] = [
 
 const SIZE = 6.6;
 const WIDEST = 40;
+/** From the middle of a date to the middle of the next. */
+const DATE_ROOM = 38;
 /** A part as tall and wide as this has its letter and count inside. */
 const ROOM = { height: 9, width: 17 };
 
@@ -55,16 +57,22 @@ export function plantOverTime(input: OverTimeInput): Drawing {
   for (const column of columns) shapes.push(...columnShapes(column, y));
   const last = columns[columns.length - 1];
   if (last !== undefined) shapes.push(...lettersBeside(last, y, top));
-  let free = Number.NEGATIVE_INFINITY;
-  for (const [i, column] of columns.entries()) {
-    const at = column.left + column.width / 2;
-    if (at - 18 < free) continue;
-    shapes.push(label(at, height - 6, dates[i] ?? '', SIZE - 0.2, 'middle'));
-    free = at + 20;
-  }
+  const middles = columns.map((column) => column.left + column.width / 2);
+  for (const i of labelled(middles)) shapes.push(label(middles[i] ?? 0, height - 6, dates[i] ?? '', SIZE - 0.2, 'middle'));
   shapes.push(stroke(line(left, bottom, right, bottom), 'rule', 0.6));
   for (const tick of y.ticks(3).filter(Number.isInteger)) shapes.push(label(left - 5, y(tick) + 2.4, String(tick), SIZE, 'end'));
   return { width: round(width), height: round(height), alt: input.alt, shapes };
+}
+
+/** Columns whose date is printed: the last one always, those before it where they have room. */
+function labelled(middles: readonly number[]): number[] {
+  const out: number[] = [];
+  const last = middles.length - 1;
+  for (const [i, at] of middles.entries()) {
+    const before = middles[out[out.length - 1] ?? -1] ?? Number.NEGATIVE_INFINITY;
+    if (i === last || (at - before >= DATE_ROOM && (middles[last] ?? at) - at >= DATE_ROOM)) out.push(i);
+  }
+  return out;
 }
 
 interface Drawn {

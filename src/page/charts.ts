@@ -11,10 +11,15 @@ import type { Format } from './format.ts';
 
 export const seriesId = (m: RecordMeasurement): string => `${m.machine}\u001f${m.point}\u001f${m.quantity}\u001f${m.detection ?? ''}`;
 
+/** Events that concern this series. */
+function eventsOf(record: SwayfolioRecord, m: RecordMeasurement) {
+  const events = record.machines.find((machine) => machine.machine === m.machine)?.events ?? [];
+  return events.filter((e) => (e.component === null || e.component === m.component) && (e.point === null || e.point === m.point) && (e.quantity === null || e.quantity === m.quantity));
+}
+
 /** Surveys before which a new baseline was set for this series, as indices into the history. */
 function newBaselines(record: SwayfolioRecord, m: RecordMeasurement): number[] {
-  const events = record.machines.find((machine) => machine.machine === m.machine)?.events ?? [];
-  const days = events.filter((e) => e.new_baseline && (e.point === null || e.point === m.point) && (e.quantity === null || e.quantity === m.quantity) && (e.component === null || e.component === m.component)).map((e) => e.date);
+  const days = eventsOf(record, m).filter((e) => e.new_baseline).map((e) => e.date);
   return days.map((day) => record.surveys.findIndex((s) => s.date >= day)).filter((i) => i > 0);
 }
 
@@ -75,7 +80,6 @@ export class Charts {
 
   #history(m: RecordMeasurement): Drawing {
     const { record } = this.#format;
-    const events = record.machines.find((machine) => machine.machine === m.machine)?.events ?? [];
     return historyChart({
       dates: record.surveys.map((s) => s.date),
       values: m.history.value,
@@ -86,7 +90,7 @@ export class Charts {
       cd: m.limits?.cd ?? null,
       alarm: m.limits?.alarm ?? null,
       baseline: m.baseline?.value ?? null,
-      events: events.filter((e) => (e.component === null || e.component === m.component) && (e.point === null || e.point === m.point)).map((e) => ({ date: e.date, label: e.event === 'other' && e.notes !== null ? shortened(e.notes) : e.event, newBaseline: e.new_baseline })),
+      events: eventsOf(record, m).map((e) => ({ date: e.date, label: e.event === 'other' && e.notes !== null ? shortened(e.notes) : e.event, newBaseline: e.new_baseline })),
       language: record.plant.language,
       forecast: forecastOf(record, m) ?? null,
       unit: this.#format.unit(m.unit, m.detection),

@@ -9,6 +9,7 @@ import { dirname, join } from 'node:path';
 import { performance } from 'node:perf_hooks';
 import { parseArgs } from 'node:util';
 import { build } from 'esbuild';
+import { firstPaint } from './first-paint.ts';
 import { benchPlant, type PlantSize } from './plant.ts';
 
 interface Measured {
@@ -86,6 +87,8 @@ async function main(): Promise<void> {
   print('  the CSV files split by hand', stage('split by hand', plant), machines);
   print('  csv-parse alone', parsed, machines, `check reaches ${(parsed.seconds / checked.seconds).toFixed(2)} of its speed (aim 0.3; ${checked.seconds.toFixed(3)} s, start-up apart)`);
   print("  the PDF's content, deflate alone", stage('the PDF as raw strings', plant), machines);
+  const paint = await firstPaint(2000, join(root, 'site'));
+  process.stdout.write(`\nthe site\n  list of 2000 machines, ${paint.kilobytes.toFixed(0)} kB: first paint ${paint.paintMs.toFixed(0)} ms (aim 1000), loaded ${paint.loadedMs.toFixed(0)} ms\n`);
 }
 
 try {

@@ -7,9 +7,11 @@ import { inks } from '../../src/brand/brand.ts';
 import type { Drawing, PathShape } from '../../src/chart/drawing.ts';
 import { apart } from '../../src/chart/history.ts';
 import { toPdfOperators } from '../../src/chart/operators.ts';
+import { plantOverTime } from '../../src/chart/over-time.ts';
 import { ringValue } from '../../src/chart/polar.ts';
 import { toSvg } from '../../src/chart/svg.ts';
 import { zoneMark } from '../../src/chart/zone-mark.ts';
+import { dayText } from '../../src/plant/day.ts';
 import { all, CASES, columns, DATES, history, polar, spark } from './cases.ts';
 
 const names = Object.keys(CASES);
@@ -125,6 +127,17 @@ describe('what a line may not say', () => {
     expect(drawn('history forecast').alt).toContain('Forecast: C/D between 2026-01-20 and 2026-08-01.');
     expect(drawn('history forecast open').alt).toContain('Forecast: C/D from 2026-01-20 on.');
     expect(drawn('history no limits').alt).toBe('DE1H velocity.');
+  });
+
+  it('the newest event keeps its words where they are crowded, the newest survey its date', () => {
+    const words = (drawing: Drawing): string[] => drawing.shapes.flatMap((s) => (s.kind === 'text' ? [s.text] : []));
+    const crowded = words(history({ events: ['2025-06-01', '2025-06-20', '2025-07-02'].map((date, i) => ({ date, label: `repair number ${i + 1}`, newBaseline: false })) }));
+    expect(crowded).toContain('repair number 3');
+    expect(crowded).not.toContain('repair number 2');
+    for (const n of [39, 40, 41, 42]) {
+      const dates = Array.from({ length: n }, (_, i) => dayText(20_000 + 91 * i));
+      expect(words(plantOverTime({ dates, counts: dates.map(() => ({ A: 1 })), width: 490, height: 120, alt: '' }))).toContain(dates[n - 1]);
+    }
   });
 
   it('labels of limits never lie on one another', () => {
