@@ -11,9 +11,12 @@ import { site } from '../../src/site/site.ts';
 import { readPlant } from '../../src/survey/read.ts';
 import { workList } from '../../src/table/work-list.ts';
 import { open, read, type ReadPage } from '../pdf/document.ts';
+import { a1bCheck, hasA1bValidator, hasQpdf, qpdfCheck } from '../pdf/validators.ts';
 
 const demo = new URL('../../demo-survey', import.meta.url).pathname;
+const assets = loadAssets(demo);
 let record: SwayfolioRecord;
+let recordText: string;
 let bytes: Uint8Array;
 let pages: ReadPage[];
 let site_: Map<string, string>;
@@ -21,12 +24,11 @@ let site_: Map<string, string>;
 beforeAll(async () => {
   const { plant } = readPlant(realShell, demo);
   if (plant === null) throw new Error('the demo plant has errors');
-  const text = writeRecord(assess(plant, { survey: null, toolVersion: 'test' }));
-  record = readRecord(text);
-  const assets = loadAssets(demo);
-  bytes = (await reportPdf(record, assets, { tags: true, profile: 'PDF/A-3b', recordText: text })).bytes;
+  recordText = writeRecord(assess(plant, { survey: null, toolVersion: 'test' }));
+  record = readRecord(recordText);
+  bytes = (await reportPdf(record, assets, { tags: true, profile: 'PDF/A-3b', recordText })).bytes;
   pages = await read(bytes);
-  site_ = new Map([...site(record, assets, { pdf: true, recordText: text })].flatMap((f) => (typeof f.bytes === 'string' ? [[f.path, f.bytes] as const] : [])));
+  site_ = new Map([...site(record, assets, { pdf: true, recordText })].flatMap((f) => (typeof f.bytes === 'string' ? [[f.path, f.bytes] as const] : [])));
 }, 120_000);
 
 /** Text without blanks of any kind: lines and cells part words in the PDF. */
@@ -67,6 +69,23 @@ describe('the PDF', () => {
     const titles = (await document.getOutline())?.map((o) => o.title) ?? [];
     for (const title of ['What to do first', 'Ranked actions', 'All machines', 'Method, limits and policy', 'Cautions']) expect(titles).toContain(title);
   });
+});
+
+describe('the PDF, held from outside where the means are here', () => {
+  it.skipIf(!hasQpdf)('qpdf --check finds no fault', () => {
+    expect(qpdfCheck(bytes)).toContain('No syntax or stream encoding errors');
+  });
+
+  it.skipIf(!hasA1bValidator)('the PDF/A-1b validator takes the same report in that profile, tagged', async () => {
+    const inProfile = await reportPdf(record, assets, { tags: true, profile: 'PDF/A-1b', recordText });
+    expect(a1bCheck(inProfile.bytes)).toContain('is a valid PDF/A-1b file');
+  }, 120_000);
+
+  it('is at most twice the packed untagged one, what is attached left out of both', async () => {
+    const bare = { ...record, inputs: [] };
+    const size = async (tags: boolean): Promise<number> => (await reportPdf(bare, assets, { tags, profile: 'PDF/A-3b', recordText: '{}' })).bytes.length;
+    expect((await size(true)) / (await size(false))).toBeLessThanOrEqual(2);
+  }, 60_000);
 });
 
 describe('every output', () => {

