@@ -8,6 +8,7 @@ import type { EmbeddedFont } from './document.ts';
 import type { SetWord, Type } from './face.ts';
 import type { PdfImage } from './image.ts';
 import type { Line, PageNumber, Token, Word } from './inline.ts';
+import { groupsOf, type Run, runsOf } from './runs.ts';
 import type { Node, Structure } from './tags.ts';
 
 export interface PageLink {
@@ -246,38 +247,4 @@ function joinPieces(pieces: (string | (() => string))[]): void {
   }
   flush();
   pieces.splice(0, pieces.length, ...joined);
-}
-
-/** Neighbouring tokens of one node. */
-function groupsOf(tokens: readonly Token[]): { readonly node: Node | null; readonly tokens: Token[] }[] {
-  const groups: { node: Node | null; tokens: Token[] }[] = [];
-  for (const token of tokens) {
-    const last = groups[groups.length - 1];
-    if (last !== undefined && last.node === token.node) last.tokens.push(token);
-    else groups.push({ node: token.node, tokens: [token] });
-  }
-  return groups;
-}
-
-type Run =
-  | { readonly kind: 'words'; readonly words: Word[]; width: number }
-  | { readonly kind: 'mark'; readonly token: Extract<Token, { kind: 'mark' }>; readonly width: number }
-  | { readonly kind: 'page'; readonly token: Extract<Token, { kind: 'page' }>; readonly width: number };
-
-function runsOf(tokens: readonly Token[]): Run[] {
-  const runs: Run[] = [];
-  for (const token of tokens) {
-    if (token.kind === 'break') continue;
-    if (token.kind === 'mark') runs.push({ kind: 'mark', token, width: token.width });
-    else if (token.kind === 'page') runs.push({ kind: 'page', token, width: token.width });
-    else {
-      const word = token.kind === 'space' ? token.word : token;
-      const last = runs[runs.length - 1];
-      if (last?.kind === 'words') {
-        last.words.push(word);
-        last.width += word.width;
-      } else runs.push({ kind: 'words', words: [word], width: word.width });
-    }
-  }
-  return runs;
 }
