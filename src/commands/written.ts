@@ -35,7 +35,7 @@ function summary(delivery: Delivery, out: string, machines: Readonly<Record<stri
   const { record, pages } = delivery;
   const raised = URGENCIES.filter((urgency) => (machines[urgency] ?? 0) > 0).map((urgency) => `${urgency}: ${machines[urgency]}`);
   return [
-    `${record.plant.plant}, survey ${record.survey.id}: ${record.machines.length} machines; ${raised.length === 0 ? 'nothing raised' : raised.join(', ')}`,
+    `${record.plant.plant}, survey ${record.survey.id}: ${record.machines.length} ${record.machines.length === 1 ? 'machine' : 'machines'}; ${raised.length === 0 ? 'nothing raised' : raised.join(', ')}`,
     `  ${out}/report.pdf (${pages} pages)`,
     `  ${out}/site/index.html`,
     `  ${out}/work-list.csv`,

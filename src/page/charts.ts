@@ -11,6 +11,9 @@ import type { Format } from './format.ts';
 
 export const seriesId = (m: RecordMeasurement): string => `${m.machine}\u001f${m.point}\u001f${m.quantity}\u001f${m.detection ?? ''}`;
 
+/** Lower beside many readings, so that chart and readings of a machine stand on one page; points. */
+const historyHeight = (readings: number): number => Math.max(100, 166 - 11 * Math.max(0, readings - 6));
+
 /** Events that concern this series. */
 function eventsOf(record: SwayfolioRecord, m: RecordMeasurement) {
   const events = record.machines.find((machine) => machine.machine === m.machine)?.events ?? [];
@@ -95,7 +98,7 @@ export class Charts {
       forecast: forecastOf(record, m) ?? null,
       unit: this.#format.unit(m.unit, m.detection),
       width: 490,
-      height: 170,
+      height: historyHeight(this.#format.measurementsOf(m.machine).length),
       alt: this.alt(m),
     });
   }

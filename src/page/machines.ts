@@ -106,7 +106,7 @@ export function readingView(format: Format, m: RecordMeasurement): ReadingView {
   const held = m.held === null ? '' : `last ${m.held.zone}, ${format.date(m.held.date)}, not confirmed`;
   const near = m.near_boundary === null ? '' : `near ${m.near_boundary}`;
   const set = m.limits;
-  const boundaries = set === null ? '' : [set.ab, set.bc, set.cd].map((v) => (v === null ? '–' : format.number(v))).join(' / ');
+  const boundaries = set === null ? '' : [set.ab, set.bc, set.cd].map((v) => (v === null ? '–' : format.number(v))).join('\u00a0/\u00a0');
   const doubts = m.doubts.map((d) => d.message);
   return {
     anchor: `reading-${slugOf(seriesId(m))}`,
