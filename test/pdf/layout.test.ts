@@ -1,26 +1,8 @@
 /** Pages as a reader gets them: nothing cut, nothing lost, nothing alone; read back by pdfjs-dist. */
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { body, open, pdf, read, type ReadPage } from './document.ts';
-
-const words = (count: number, stem = 'word'): string[] => Array.from({ length: count }, (_, i) => `${stem}${i}`);
-const fill = (count: number): string => words(count, 'fill').map((w) => `<p>${w}</p>`).join('');
-const of = (pages: readonly ReadPage[], stem: RegExp): string[] => body(pages).split(' ').filter((w) => stem.test(w));
-const row = (...cells: string[]): string => `<tr>${cells.map((c) => `<td>${c}</td>`).join('')}</tr>`;
-const table = (columns: readonly string[], rows: string): string => `<table>${columns.map((c) => `<col class="${c}">`).join('')}<tbody>${rows}</tbody></table>`;
-
-/** Margins of the sheet, points: text stands between the running head and the footer. */
-function inside(pages: readonly ReadPage[]): void {
-  for (const page of pages) {
-    for (const item of page.items) {
-      if (item.str.trim() === '' || /^(Left|Right|Foot|DRAFT|Page \d+ of \d+)$/.test(item.str)) continue;
-      expect(item.x, item.str).toBeGreaterThanOrEqual(51.9);
-      expect(item.x + item.width, item.str).toBeLessThanOrEqual(page.width - 51.5);
-      expect(item.y, item.str).toBeGreaterThanOrEqual(57.9);
-      expect(item.y, item.str).toBeLessThanOrEqual(page.height - 60);
-    }
-  }
-}
+import { body, pdf, read, type ReadPage } from './document.ts';
+import { fill, inside, of, row, table, words } from './pages.ts';
 
 describe('rows taller than a page', () => {
   for (const count of [61, 62, 63, 64, 65, 66, 67, 68, 69, 70, 140, 900]) {
@@ -145,52 +127,6 @@ describe('page numbers', () => {
     expect((right?.x ?? 0) + (right?.width ?? 0)).toBeLessThanOrEqual((page?.width ?? 0) - 51);
     expect((foot?.x ?? 0) + (foot?.width ?? 0)).toBeLessThan(number?.x ?? 0);
   });
-});
-
-describe('names from right to left', () => {
-  it('keep their brackets and numbers on the proper sides', async () => {
-    const [page] = await read((await pdf('<section><p>Pump שלום (אחת) 123 end</p></section>', { mark: null })).bytes);
-    const line = page?.items.filter((i) => i.y > 700 && i.y < 790 && i.str.trim() !== '') ?? [];
-    const x = (part: RegExp): number => line.find((i) => part.test(i.str))?.x ?? Number.NaN;
-    // Unicode Standard Annex 9, rules W2 to N1: the number and the bracketed word stand left of the first word.
-    expect(x(/123/)).toBeLessThan(x(/אחת|תחא/));
-    expect(x(/אחת|תחא/)).toBeLessThan(x(/שלום|םולש/));
-    expect(x(/שלום|םולש/)).toBeLessThan(x(/end/));
-  });
-
-  it('marks of direction are not printed and turn nothing round', async () => {
-    const [page] = await read((await pdf('<section><p>a\u202edcba\u202c b\u200bc</p></section>', { mark: null })).bytes);
-    expect(page?.text).toContain('adcba bc');
-  });
-});
-
-it('a repeated head is an artifact: each head cell is in the structure once', async () => {
-  const rows = words(150).map((w) => row(w)).join('');
-  const { bytes } = await pdf(`<section><table><col class="text"><thead><tr><th scope="col">Head</th></tr></thead><tbody>${rows}</tbody></table></section>`);
-  const document = await open(bytes);
-  let heads = 0;
-  const visit = (node: { role?: string; children?: object[] }): void => {
-    if (node.role === 'TH' && (node.children?.length ?? 0) > 0) heads += 1;
-    for (const child of node.children ?? []) visit(child);
-  };
-  const printed = (await read(bytes)).filter((p) => p.text.includes('Head')).length;
-  // Each page's tree is the whole one, with the content of that page alone.
-  for (let n = 1; n <= document.numPages; n += 1) visit((await (await document.getPage(n)).getStructTree()) as object);
-  expect(printed).toBe(document.numPages);
-  expect(document.numPages).toBeGreaterThan(2);
-  expect(heads).toBe(1);
-});
-
-describe('markup that a parser would mend in silence is refused', () => {
-  for (const [what, html] of [
-    ['a stray closing tag', '<section><p>x</strong></p></section>'], ['a document type', '<!doctype html><section><p>x</p></section>'], ['text beside a figure in a cell', '<section><table><tbody><tr><td>lost<figure data-chart="c" data-key="1"></figure></td></tr></tbody></table></section>'],
-    ['a span of no number', '<section><table><tbody><tr><td colspan="wide">x</td></tr></tbody></table></section>'], ['an unknown mark', '<section><p><span data-mark="E"></span> E</p></section>'], ['a figure of nothing', '<section><figure data-alt="x"></figure></section>'],
-    ['a page of nowhere', '<section><p><span data-page="gone"></span></p></section>'], ['a link to nowhere', '<section><p><a href="#gone">x</a></p></section>'],
-  ] as const) {
-    it(what, async () => {
-      await expect(pdf(html)).rejects.toThrow(/^Template test: /);
-    });
-  }
 });
 
 it('random documents keep every word once, between the margins, and give the same bytes', async () => {
