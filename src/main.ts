@@ -7,6 +7,7 @@ import process from 'node:process';
 import yargs, { type Argv } from 'yargs';
 import { check } from './commands/check.ts';
 import type { Argument, Arguments, Command, Context, ExitCode } from './commands/command.ts';
+import { draft } from './commands/draft.ts';
 import { limits } from './commands/limits.ts';
 import { newCommand } from './commands/new.ts';
 import { printable } from './commands/problems.ts';
@@ -16,7 +17,7 @@ import { packageVersion } from './shell/package.ts';
 import { realShell } from './shell/shell.ts';
 import { UserError } from './shell/types.ts';
 
-const COMMANDS: readonly Command[] = [newCommand, check, report, render, limits];
+const COMMANDS: readonly Command[] = [newCommand, check, draft, report, render, limits];
 
 async function run(words: readonly string[], context: Context): Promise<ExitCode> {
   let code: ExitCode = 0;

@@ -64,7 +64,7 @@ function extentOf(finding: Finding | null, ledger: LedgerAction | null): { compo
 export function actionsOf(context: Context, assessed: Assessed, reported: ReadonlyMap<string, Reported>): DraftAction[] {
   const id = assessed.machine.id;
   const rows = context.plant.actions.filter((a) => a.machine === id);
-  const ids = new Set(rows.map((r) => r.id));
+  const ids = new Set([...rows.map((r) => r.id), ...[...reported.keys()].filter((finding) => isActionId(finding, id))]);
   const findings = [...reported.values()].filter((r) => r.finding.machine === id && r.finding.closed === null);
   const items: DraftAction[] = [];
   const joined = new Set<LedgerAction>();
@@ -91,6 +91,9 @@ function isLive(context: Context, item: DraftAction): boolean {
   return after !== null && survey !== undefined && after.date >= dayText(survey.from);
 }
 
+/** `<machine>/<date>/<n>`: a finding that was drafted bears the id of its action. */
+const isActionId = (finding: string, machine: string): boolean => finding.startsWith(`${machine}/`);
+
 function freshId(ids: Set<string>, machine: string, date: string): string {
   let n = 1;
   while (ids.has(`${machine}/${date}/${n}`)) n += 1;
@@ -113,7 +116,7 @@ function itemOf(context: Context, assessed: Assessed, report: Reported | null, l
   const first = report === null ? (ledger?.raised ?? dayAt(context, context.current)) : dayAt(context, report.firstSurvey);
   const isOverridden = finding !== null && finding.overrideBy !== null && finding.urgency !== null && assessed.override !== null;
   return {
-    id: ledger?.id ?? freshId(ids, assessed.machine.id, dayText(first)),
+    id: ledger?.id ?? (finding !== null && isActionId(finding.id, assessed.machine.id) ? finding.id : freshId(ids, assessed.machine.id, dayText(first))),
     assessed,
     finding,
     ledger,

@@ -43,7 +43,8 @@ export function indicationsOf(context: Context, verdicts: readonly Verdict[], is
     const isSecond = hits.some((h) => h.rule !== rule && h.facts['bearing'] !== undefined && h.facts['bearing'] === facts['bearing']);
     const told = { ...facts, confidence: isSecond ? 'medium' : 'low' };
     const key = rule.replace(' ', '.');
-    return { rule: rule.split(' ')[0] as string, message: say(language, `assess.indication.${key}`, told), confirm: say(language, `assess.confirm.${key}`, told), mark: 'common practice', facts: told };
+    const cause = say(language, `assess.cause.${key}`, told);
+    return { rule: rule.split(' ')[0] as string, message: say(language, `assess.indication.${key}`, { ...told, cause }), cause, confirm: say(language, `assess.confirm.${key}`, told), mark: 'common practice', facts: told };
   });
 }
 

@@ -195,6 +195,8 @@ function draftedCheck(context: Context, draft: DraftAction): string | null {
   const look = draft.verdict?.look ?? null;
   if (look !== null && doubtedHigh(look)) return say(language, 'assess.check.doubt', {});
   if (draft.computed.rule === 'R1') return say(language, 'assess.check.mount', {});
-  if (draft.verdict === null || draft.computed.urgency === 'watch') return null;
+  if (draft.computed.urgency === 'watch') return null;
+  if (draft.computed.rule === 'M2') return say(language, 'assess.check.access', {});
+  if (draft.verdict === null) return null;
   return say(language, look === null ? 'assess.check.access' : 'assess.check.repeat', {});
 }

@@ -91,8 +91,10 @@ function heldReason(context: Context, verdict: Verdict, from: Look): Reason {
     doubt: look?.doubts.find((d) => d.effect === 'held')?.kind ?? null,
     rule: 'M1',
   };
+  const { language } = context.plant.settings;
   const variant = look === null ? '' : facts['doubt'] === null ? '.unseen' : '.doubted';
-  return { reason: say(context.plant.settings.language, `assess.reason.M1${variant}`, facts), facts };
+  const doubt = facts['doubt'] === null ? null : say(language, `assess.doubt_name.${facts['doubt']}`);
+  return { reason: say(language, `assess.reason.M1${variant}`, { ...facts, doubt }), facts };
 }
 
 /** The boundary that the reading lies above, or the one ahead of it, in words. */

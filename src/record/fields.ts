@@ -74,7 +74,7 @@ export const FIELDS: Readonly<Record<string, string>> = {
   override: 'urgency:w:urgency by:s reason:s until:d? lowers_now:b',
   spare: 'machine:s proven:b reason:s facts:F',
   accepted: 'point:s? quantity:s? up_to:n unit:s? until:d? by:s? reason:s? in_force:b',
-  indications: 'rule:s message:s confirm:s mark:w:mark facts:F',
+  indications: 'rule:s message:s cause:s* confirm:s mark:w:mark facts:F',
   doubts: 'kind:w:doubt message:s effect:w:effect facts:F',
   events: 'date:d component:s? point:s? quantity:s? event:s new_baseline:b serial_out:s? serial_in:s? notes:s?',
   components: `machine:s component:s implicit:b kind:w?:kind condition:w:condition governed_by:o?:governed_by limit_set:s? limit_reason:s

@@ -29,6 +29,8 @@ export interface Doubt {
 export interface Indication {
   readonly rule: string;
   readonly message: string;
+  /** What the readings are consistent with, as the message names it; absent in records of older versions. */
+  readonly cause?: string;
   readonly confirm: string;
   readonly mark: Mark;
   readonly facts: Facts;

@@ -55,6 +55,19 @@ function removeMade(folder: string): void {
   rmSync(folder, { recursive: true, force: true });
 }
 
+/** Written beside as `<path>.new-<pid>` and renamed in. */
+export function replaceFile(path: string, bytes: Uint8Array): void {
+  const fresh = `${path}.new-${process.pid}`;
+  try {
+    mkdirSync(dirname(path), { recursive: true });
+    writeFileSync(fresh, bytes);
+    renameSync(fresh, path);
+  } catch (error) {
+    rmSync(fresh, { force: true });
+    throw asUserError(error, path, 'Nothing was changed.');
+  }
+}
+
 /** Writes files into a folder that must be new or empty; on failure nothing stays. */
 export function createFolder(out: string, files: Iterable<OutputFile>): void {
   const isNew = !existsSync(out);
@@ -120,7 +133,7 @@ const DISK_TROUBLE: Readonly<Record<string, string>> = {
   EEXIST: 'a part of the path is a file', ENOTEMPTY: 'another run wrote it meanwhile', ENOENT: 'another run took it away meanwhile',
 };
 
-function asUserError(error: unknown, out: string): unknown {
+function asUserError(error: unknown, out: string, hint = 'Nothing was changed; name another folder by --out.'): unknown {
   const why = DISK_TROUBLE[(error as NodeJS.ErrnoException).code ?? ''];
-  return why === undefined ? error : new UserError(`Cannot write ${out}: ${why}.`, 'Nothing was changed; name another folder by --out.');
+  return why === undefined ? error : new UserError(`Cannot write ${out}: ${why}.`, hint);
 }

@@ -2,7 +2,7 @@
 import { existsSync, readFileSync, statSync } from 'node:fs';
 import { resolve } from 'node:path';
 import { listFiles } from './list.ts';
-import { claimFolder, createFolder, replaceFolder } from './replace.ts';
+import { claimFolder, createFolder, replaceFile, replaceFolder } from './replace.ts';
 import { type Shell, UserError } from './types.ts';
 
 const WHY: Readonly<Record<string, string>> = {
@@ -32,6 +32,7 @@ export const realShell: Shell = {
   claimFolder: (out) => void claimFolder(out),
   replaceFolder,
   createFolder,
+  replaceFile,
   today: () => new Date().toISOString().slice(0, 10),
   stdout: (text) => void process.stdout.write(text),
   stderr: (text) => void process.stderr.write(text),

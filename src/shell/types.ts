@@ -19,6 +19,8 @@ export interface Shell {
   replaceFolder(out: string, files: Iterable<OutputFile>): void;
   /** Writes files into a folder that must be new or empty. */
   createFolder(out: string, files: Iterable<OutputFile>): void;
+  /** Replaces one file, or makes it: written beside and renamed in, so that it is the old one or the new one, whole. */
+  replaceFile(path: string, bytes: Uint8Array): void;
   /** Today as `YYYY-MM-DD` by UTC: only `check` and `issue` ask. */
   today(): string;
   stdout(text: string): void;

@@ -8,6 +8,9 @@ export const FINDINGS_COLUMNS = [
   'owner', 'urgency', 'override_by', 'override_reason', 'override_until', 'verify_point', 'verify_below', 'carried_from', 'confirmed', 'closed',
 ] as const;
 
+/** First line of a new findings.csv. */
+export const FINDINGS_HEAD: readonly string[] = FINDINGS_COLUMNS.map((name) => (name === 'finding_text' ? 'finding' : name));
+
 export function findingsHeader(header: readonly string[]): string[] {
   const second = header.lastIndexOf('finding');
   return header.map((name, i) => (name === 'finding' && i === second && i !== header.indexOf('finding') ? 'finding_text' : name));

@@ -5,6 +5,7 @@
 import { dayText } from '../plant/day.ts';
 import type { Finding, Plant, Series, Survey } from '../plant/types.ts';
 import type { OutputFile } from '../shell/types.ts';
+import { FINDINGS_HEAD } from './findings.ts';
 
 const cell = (text: string): string => (/[",\r\n]/.test(text) ? `"${text.replaceAll('"', '""')}"` : text);
 const csv = (rows: readonly (readonly (string | number | null)[])[]): string => `${rows.map((row) => row.map((v) => cell(v === null ? '' : String(v))).join(',')).join('\n')}\n`;
@@ -83,7 +84,7 @@ export function nextSurvey(plant: Plant, survey: string, alarms: Alarms = new Ma
     { path: `${home}/readings.csv`, bytes: csv([READING_COLUMNS, ...rows]) },
   ];
   const open = openFindings(plant);
-  if (open.length > 0) files.push({ path: `${home}/findings.csv`, bytes: csv([FINDING_COLUMNS, ...open.map(findingRow)]) });
+  if (open.length > 0) files.push({ path: `${home}/findings.csv`, bytes: csv([FINDINGS_HEAD, ...open.map(findingRow)]) });
   return files;
 }
 
@@ -94,11 +95,6 @@ function readingRow(series: Series, alarms: Alarms): (string | number | null)[] 
   const blanks = { before: [''], after: ['', '', last?.state ?? '', '', '', '', '', '', '', '', '', ''] };
   return [series.machine, series.point, series.quantity, series.detection, ...blanks.before, series.unit, ...blanks.after, shown, last === undefined ? null : dayText(last.day), alarm === undefined ? null : Number(alarm.toPrecision(4))];
 }
-
-const FINDING_COLUMNS = [
-  'finding', 'machine', 'component', 'points', 'finding', 'likely_cause', 'less_likely', 'confidence', 'recommendation', 'needs_stop', 'check_first', 'consequence', 'downtime_h', 'parts', 'due', 'owner',
-  'urgency', 'override_by', 'override_reason', 'override_until', 'verify_point', 'verify_below', 'carried_from', 'confirmed', 'closed',
-];
 
 /** Each finding's last version, where it is not closed, with the survey it comes from. */
 function openFindings(plant: Plant): { readonly finding: Finding; readonly from: string }[] {

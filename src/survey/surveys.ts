@@ -29,7 +29,8 @@ export function surveysOf(found: Found, reader: Folder, register: Register, peak
   const heads = new Map<string, Survey>();
   const sources: Source[] = [];
   for (const folder of found.surveys) readFolder(folder, reader, heads, sources);
-  for (const file of found.histories) readHistory(file, reader, heads, sources);
+  const inHistory = new Set(found.histories.flatMap((file) => readHistory(file, reader, heads, sources)));
+  for (const folder of found.surveys) if (folder.readings === null && heads.has(folder.id) && !inHistory.has(folder.id)) tellEmpty(folder, problems);
   const surveys = [...heads.values()].sort((a, b) => a.day - b.day || (a.id < b.id ? -1 : 1));
   const index = new Map(surveys.map((survey, i) => [survey.id, i]));
   const rounds = new Map<string, string>();
@@ -60,14 +61,16 @@ function readFolder(folder: FoundSurvey, reader: Folder, heads: Map<string, Surv
   const findings = folder.findings === null ? null : reader.table(folder.findings, FINDINGS_COLUMNS, ['finding', 'machine'], findingsHeader);
   const table = folder.readings === null ? null : reader.table(folder.readings, READINGS_COLUMNS, ['machine', 'point', 'value']);
   if (table !== null) sources.push({ table, survey: folder.id });
-  if (folder.readings === null || table?.rows.length === 0) {
-    const place = { file: folder.readings ?? folder.yaml ?? `surveys/${folder.id}`, line: null };
-    problems.error('survey-without-readings', place, `The survey ${folder.id} has no readings.`, 'Fill in its readings.csv, or remove the folder.');
-  }
+  if (table?.rows.length === 0) tellEmpty(folder, problems);
   const captions = folder.captions === null ? null : reader.table(folder.captions, ['photo', 'caption'], ['photo', 'caption']);
   for (const path of folder.photos) reader.bytes(path);
   const photos: Photo[] = folder.photos.map((path) => ({ path, machine: '', point: null, caption: captionOf(captions, path, problems) }));
   heads.set(folder.id, { ...head, findings: rowsOf(findings, problems, findingRow), photos, place: { file: folder.readings ?? folder.yaml ?? `surveys/${folder.id}`, line: 1 } });
+}
+
+function tellEmpty(folder: FoundSurvey, problems: Problems): void {
+  const place = { file: folder.readings ?? folder.yaml ?? `surveys/${folder.id}`, line: null };
+  problems.error('survey-without-readings', place, `The survey ${folder.id} has no readings.`, 'Fill in its readings.csv, or remove the folder.');
 }
 
 function captionOf(captions: Table | null, path: string, problems: Problems): string | null {
@@ -75,9 +78,10 @@ function captionOf(captions: Table | null, path: string, problems: Problems): st
   return rowsOf(captions, problems, (cells) => (cells.text('photo') === name ? cells.text('caption') : null))[0] ?? null;
 }
 
-function readHistory(file: string, reader: Folder, heads: Map<string, Survey>, sources: Source[]): void {
+/** Returns the surveys that the file has readings of. */
+function readHistory(file: string, reader: Folder, heads: Map<string, Survey>, sources: Source[]): string[] {
   const table = reader.table(file, READINGS_COLUMNS, ['survey_date', 'machine', 'point', 'value']);
-  if (table === null) return;
+  if (table === null) return [];
   sources.push({ table, survey: null });
   const at = table.column('survey_date');
   if (table.rows.length === 0) reader.problems.error('survey-without-readings', { file, line: 1 }, 'The file has a first line and no readings.', 'Add the readings, or remove the file.');
@@ -89,6 +93,7 @@ function readHistory(file: string, reader: Folder, heads: Map<string, Survey>, s
     const day = parseDay(id);
     if (day !== null && !heads.has(id)) heads.set(id, { ...bareSurvey(id, day), place: { file, line: 1 } });
   }
+  return [...seen];
 }
 
 /** Today's ids of a row's machine and point; null with the problem told when there is none. */

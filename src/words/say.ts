@@ -4,6 +4,7 @@
 import assess from '../../templates/words/en/assess.json' with { type: 'json' };
 import chart from '../../templates/words/en/chart.json' with { type: 'json' };
 import common from '../../templates/words/en/common.json' with { type: 'json' };
+import draft from '../../templates/words/en/draft.json' with { type: 'json' };
 import limits from '../../templates/words/en/limits.json' with { type: 'json' };
 import page from '../../templates/words/en/page.json' with { type: 'json' };
 import units from '../../templates/words/en/units.json' with { type: 'json' };
@@ -13,7 +14,7 @@ import { formatNumber, plainNumber } from './numbers.ts';
 export type Language = 'en' | 'de' | 'es' | 'fr';
 
 /** Sentences by key; a language without a file of its own speaks English. */
-const SENTENCES: Readonly<Record<string, string>> = { ...common, ...units, ...chart, ...limits, ...assess, ...page };
+const SENTENCES: Readonly<Record<string, string>> = { ...common, ...units, ...chart, ...limits, ...assess, ...draft, ...page };
 
 /** A sentence taken apart once: text, or a placeholder with its plural forms. */
 type Part = string | Placeholder;
