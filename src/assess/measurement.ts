@@ -50,7 +50,7 @@ export function measurementOf(context: Context, book: LimitBook, verdict: Verdic
     forecast: forecastLine(context, verdict.movement?.outlook ?? null),
     sisters: sistersLine(context, track),
     doubts: look?.doubts ?? [],
-    notes: notesOf(context, track, look, limits),
+    notes: notesOf(context, track, look, limits, verdict.movement?.trend ?? null),
     history: historyOf(context, track, reading ?? heldFrom?.reading ?? null),
   };
 }

@@ -1,13 +1,15 @@
+import type { Trend } from '../record/types.ts';
 import { say } from '../words/say.ts';
 import { alarmTrip } from './alarm.ts';
 import { bandOf, speedTakenAsFixed } from './comparable.ts';
+import { historyNotes } from './history-notes.ts';
 import { exceeds } from './exceeds.ts';
 import type { LimitsInForce } from './limits-in-force.ts';
 import { type Context, type Look, pointRow, type Track } from './track.ts';
 import { bandFit, neededLowHz } from './zone.ts';
 
 /** What the assessment remarks about one reading without doubting it, in sentences. */
-export function notesOf(context: Context, track: Track, look: Look | null, limits: LimitsInForce): string[] {
+export function notesOf(context: Context, track: Track, look: Look | null, limits: LimitsInForce, trend: Trend | null): string[] {
   const { policy, plant } = context;
   const notes: string[] = [];
   const add = (key: string, facts = {}): void => {
@@ -25,6 +27,7 @@ export function notesOf(context: Context, track: Track, look: Look | null, limit
   if (alarmTrip(limits, look.baseline, policy).baselineAboveCap) add('baseline_above_cap');
   if (look.baseline?.provisional === true) add('baseline_provisional');
   if (look.previous !== null && look.previous.speedRpm === null && look.reading.speedRpm !== null && speedTakenAsFixed(track, look.previous, look.reading)) add('speed_taken_as_fixed');
+  notes.push(...historyNotes(context, track, look, trend));
   const background = backgroundOf(track, look);
   if (background !== null && exceeds(background, policy['2.background.share'] * look.value)) add('background', { background, unit: track.series.unit });
   if (pointRow(track, look.reading.day).measuredOn === null && track.series.quantity === 'displacement') add('place_unknown');

@@ -48,6 +48,8 @@ export function factsOf(context: Context, track: Track, look: Look, movement: Mo
     vector: movement.vector?.amplitude ?? null,
     db_per_year: movement.trend?.db_per_year ?? null,
     readings: movement.trend?.n ?? null,
+    changed_on: movement.trend?.changed_on ?? null,
+    changed_by: movement.trend?.changed_by ?? null,
     closing: closing?.what ?? null,
     likely: movement.outlook === null || 'none' in movement.outlook || movement.outlook.likely === null ? null : dayText(movement.outlook.likely),
     boundary: movement.outlook === null || 'none' in movement.outlook ? null : movement.outlook.boundary,

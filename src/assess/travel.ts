@@ -13,7 +13,7 @@ import { type Context, doubtedLow, type Look, pointRow, type Track } from './tra
 import { lastThreeOverBaseline, trendOf } from './trend.ts';
 
 /** What decided: the last part of the sentence `assess.travel.<travel>.<by>`. */
-export type TravelBy = 'forecast' | 'change' | 'ratio' | 'trend' | 'baseline' | 'baseline ratio' | 'last three' | 'vector' | 'event' | 'second reading' | 'doubt' | 'first' | 'none';
+export type TravelBy = 'forecast' | 'change' | 'ratio' | 'trend' | 'baseline' | 'baseline ratio' | 'last three' | 'level' | 'vector' | 'event' | 'second reading' | 'doubt' | 'first' | 'none';
 
 export interface Movement {
   readonly travel: Travel | null;
@@ -63,7 +63,7 @@ export function movementOf(context: Context, track: Track, look: Look): Movement
     heard: floor === null || loud,
     ratios: row.scale !== 'none' && carriesRatio(look.baseline),
   };
-  const up = fast(context, c) ?? rising(context, c, trend) ?? step(context, c, look, standsOff, vector);
+  const up = fast(context, c) ?? rising(context, c, trend) ?? step(context, c, look, standsOff, vector) ?? level(context, c, trend);
   const plain = up !== null ? done(up.travel, up.by) : look.explainedFall === null ? done('steady', 'none') : done('falling', look.explainedFall);
   const isNear = plain.travel !== 'fast' && outlook !== null && crossesSoon(context, track, look, outlook);
   return isNear ? { ...plain, travel: 'fast', by: 'forecast' } : plain;
@@ -84,11 +84,16 @@ function fast(context: Context, { x, p, q, scale, loud, ratios }: Compared): Up 
 function rising(context: Context, { x, p, q, scale, loud, ratios }: Compared, trend: Trend | null): Up {
   const { policy } = context;
   if (q !== null && risesBy(x, p, q)) return { travel: 'rising', by: 'change' };
-  const rise = ratio(x, p, scale);
-  if (q === null && loud && ratios && reaches(rise, policy['5.rising.factor'])) return { travel: 'rising', by: 'ratio' };
-  const sagged = exceeds(ratioOfDb(-policy['5.rising.sag']), rise);
-  return trend?.kind === 'ramp' && !sagged ? { travel: 'rising', by: 'trend' } : null;
+  if (q === null && loud && ratios && reaches(ratio(x, p, scale), policy['5.rising.factor'])) return { travel: 'rising', by: 'ratio' };
+  return trend?.kind === 'ramp' && !sagged(context, { x, p, scale }) ? { travel: 'rising', by: 'trend' } : null;
 }
+
+/** Too far below the last reading to be part of a rise. */
+const sagged = (context: Context, { x, p, scale }: Pick<Compared, 'x' | 'p' | 'scale'>): boolean => exceeds(ratioOfDb(-context.policy['5.rising.sag']), ratio(x, p, scale));
+
+/** A real rise that was one step: the level it reached is carried, though the baseline does not tell it. */
+const level = (context: Context, compared: Compared, trend: Trend | null): Up =>
+  trend?.kind === 'plateau' && trend.changed_on != null && !sagged(context, compared) ? { travel: 'step', by: 'level' } : null;
 
 function step(context: Context, { x, q, scale, loud, heard, ratios }: Compared, look: Look, standsOff: boolean, vector: Change['vector']): Up {
   const { policy } = context;

@@ -2,11 +2,13 @@
  * Trend over the comparable readings. In: earlier ones and the current. Out: Theil–Sen on the logarithm, Mann–Kendall, and
  * what kind of trend they make together. Never: a rise called real because it is significant alone (the rules say why).
  */
+import { dayText } from '../plant/day.ts';
 import type { Policy } from '../plant/policy.ts';
 import type { Reading } from '../plant/types.ts';
 import type { Trend } from '../record/types.ts';
 import { exceeds, reaches } from './exceeds.ts';
 import { dbOfLog, logAmplitude, ratio, type Scale } from './rise.ts';
+import { lastStep, type Step } from './statistics/change-points.ts';
 import { mannKendall } from './statistics/mann-kendall.ts';
 import { median } from './statistics/median.ts';
 import { theilSenSlope } from './statistics/theil-sen.ts';
@@ -28,15 +30,30 @@ export function trendOf(readings: readonly (Reading & { value: number })[], scal
   const last = (readings[n - 1] as { value: number }).value;
   const significant = !exceeds(twoSidedP, policy['5.trend.p']) && slope > 0;
   const real = significant && reaches(rise, policy['5.trend.rise']) && floor !== null && reaches(last, floor);
-  const plateau = isPlateau(readings, scale, policy);
+  const step = significant || stepped ? stepBefore(times, logs as number[], policy) : null;
+  const plateau = isPlateau(readings, scale, policy) || (step !== null && !exceeds(dbOfLog((logs[n - 1] as number) - step.after), policy['5.plateau.top']));
+  const kind = real ? (plateau ? 'plateau' : 'ramp') : significant ? 'small' : stepped ? 'step' : 'none';
+  // A rise that goes on is no step, though its readings may lie in two heaps with a gap between.
+  const told = kind === 'ramp' ? null : step;
   return {
-    kind: real ? (plateau ? 'plateau' : 'ramp') : significant ? 'small' : stepped ? 'step' : 'none',
+    kind,
     db_per_year: dbOfLog(slope) * DAYS_PER_YEAR,
     slope_per_year: (theilSenSlope(times, readings.map((r) => r.value)) ?? 0) * DAYS_PER_YEAR,
     rise,
     p: twoSidedP,
     n,
+    changed_on: told === null ? null : dayText((readings[told.at] as Reading).day),
+    changed_by: told === null ? null : Math.exp(told.after - told.before),
   };
+}
+
+/**
+ * The last step up among the readings before the current one, where the level has held since. The current one takes no part
+ * in it, so that a higher reading never turns a rise into a step (monotony); it may stand 1 dB over the level and no more.
+ */
+function stepBefore(times: readonly number[], logs: readonly number[], policy: Policy): Step | null {
+  const step = lastStep(times.slice(0, -1), logs.slice(0, -1), policy['5.step.scatter']);
+  return step !== null && reaches(Math.exp(step.after - step.before), policy['5.trend.rise']) ? step : null;
 }
 
 /** Days of each reading, or running days where every one has its running hours. */

@@ -20,6 +20,8 @@ export interface ExceptionView {
   readonly historyKey: string;
   readonly historyAlt: string;
   readonly historyCaption: string;
+  /** What is remarked about the governing reading: a step in its history, a spike that went, what it was compared with. */
+  readonly remarks: string;
   readonly polars: readonly { readonly key: string; readonly alt: string; readonly caption: string }[];
   readonly photos: readonly { readonly path: string; readonly file: string; readonly alt: string; readonly caption: string }[];
   readonly doubts: readonly string[];
@@ -57,6 +59,7 @@ export function exceptionView(format: Format, charts: Charts, machine: RecordMac
       return main === null || !hasHistory ? '' : charts.drawing('history', seriesId(main)).alt;
     },
     historyCaption: main === null ? '' : `${main.point} ${main.quantity}, ${format.unit(main.unit, main.detection)}: ${main.limit_reason}`,
+    remarks: main === null || main.notes.length === 0 ? '' : `${main.point} ${main.quantity}: ${main.notes.join(' ')}`,
     polars: polars.map((m) => ({
       key: seriesId(m),
       caption: `${m.point}: 1× vector, angles as lag`,

@@ -95,7 +95,7 @@ export const FIELDS: Readonly<Record<string, string>> = {
   change: 'absolute:n percent:n? db:n? of_bc:n? significant:b? vector:o?:vector',
   from_baseline: 'absolute:n percent:n? db:n? of_bc:n? significant:b? vector:o?:vector',
   vector: 'amplitude:n lag_deg:n',
-  trend: 'kind:w:trend db_per_year:n? slope_per_year:n? rise:n? p:n? n:i',
+  trend: 'kind:w:trend db_per_year:n? slope_per_year:n? rise:n? p:n? n:i changed_on:d?* changed_by:n?*',
   /** Either a boundary with its dates, or `none` with the reason. */
   forecast: 'boundary:s* earliest:d* likely:d?* latest:d?* range:n* none:s*',
   history: 'value:V typed:T* why:W line:V file:T*',

@@ -35,6 +35,9 @@ export interface Trend {
   readonly rise: number | null;
   readonly p: number | null;
   readonly n: number;
+  /** First reading of the level that a step reached, and the ratio of that level to the one before it; null where no step was found. */
+  readonly changed_on?: DateText | null;
+  readonly changed_by?: number | null;
 }
 
 export type Forecast =
