@@ -1,4 +1,5 @@
-import { type Language, say } from '../words/say.ts';
+import { say } from '../words/say.ts';
+import type { Language } from '../words/sentences.ts';
 
 /** The cautions of every output (section 12 of the rules), in the plant's language. */
 export const CAUTION_KEYS = ['screening', 'maker', 'codes', 'stopping', 'isolate', 'never_reach', 'between', 'recalled', 'only'] as const;

@@ -12,7 +12,7 @@ export function historyAlt(input: HistoryInput, newBaselineAt: readonly number[]
   if (input.baseline !== null) lines.push(`${say(language, 'chart.baseline')} ${formatNumber(language, input.baseline)}`);
   const hollow = input.values.filter((value, i) => value !== null && input.comparable[i] !== true).length;
   const parts = [input.alt];
-  if (lines.length > 0) parts.push(say(language, 'chart.lines', { lines: listText(lines) }));
+  if (lines.length > 0) parts.push(say(language, 'chart.lines', { lines: listText(language, lines) }));
   if (hollow > 0) parts.push(say(language, 'chart.hollow', { n: hollow }));
   if (newBaselineAt.some((i) => i > 0)) parts.push(say(language, 'chart.gaps'));
   if (input.held) parts.push(say(language, 'chart.held'));

@@ -4,7 +4,8 @@
  */
 import { scaleLinear } from 'd3-scale';
 import { plainNumber } from '../words/numbers.ts';
-import { type Language, say } from '../words/say.ts';
+import { say } from '../words/say.ts';
+import type { Language } from '../words/sentences.ts';
 import type { Drawing, Shape } from './drawing.ts';
 import { circle, line, PathPen, round } from './path.ts';
 import { dot, fill, label, ring, stroke } from './shapes.ts';

@@ -4,7 +4,7 @@
  */
 import { scaleLinear } from 'd3-scale';
 import { line as d3line } from 'd3-shape';
-import type { Language } from '../words/say.ts';
+import type { Language } from '../words/sentences.ts';
 import type { Shape } from './drawing.ts';
 import { PathPen, rectangle } from './path.ts';
 import { dot, fill, stroke } from './shapes.ts';

@@ -1,6 +1,6 @@
 import type { RecordAction } from '../record/types.ts';
 import { slugOf } from './file-name.ts';
-import { type ConditionView, type Format, urgencyShort, urgencyText } from './format.ts';
+import type { ConditionView, Format } from './format.ts';
 
 export interface ActionView {
   readonly rank: string;
@@ -11,6 +11,8 @@ export interface ActionView {
   readonly machinePage: string;
   readonly machineAnchor: string;
   readonly condition: ConditionView;
+  /** Code of the urgency, empty where there is none. */
+  readonly level: string;
   readonly urgency: string;
   readonly urgencyFull: string;
   readonly isNow: boolean;
@@ -37,8 +39,6 @@ export interface ActionView {
   readonly points: string;
 }
 
-const ORIGIN: Readonly<Record<RecordAction['origin'], string>> = { analyst: 'found by the analyst', ledger: 'from the ledger', drafted: 'drafted by rule, no words of the analyst yet' };
-
 export function actionView(format: Format, action: RecordAction): ActionView {
   const machine = format.record.machines.find((m) => m.machine === action.machine);
   return {
@@ -50,12 +50,13 @@ export function actionView(format: Format, action: RecordAction): ActionView {
     machinePage: `machines/${slugOf(action.machine)}.html`,
     machineAnchor: `machine-${slugOf(action.machine)}`,
     condition: machine === undefined ? format.condition(null) : format.machineCondition(machine),
-    urgency: urgencyShort(action.urgency),
-    urgencyFull: urgencyText(action.urgency),
+    level: action.urgency ?? '',
+    urgency: format.urgency(action.urgency),
+    urgencyFull: format.urgencyFull(action.urgency),
     isNow: action.urgency === 'now',
     isRejected: action.status === 'rejected',
     due: format.date(action.due),
-    overdue: action.overdue_days === null ? '' : `overdue by ${action.overdue_days} ${action.overdue_days === 1 ? 'day' : 'days'}`,
+    overdue: action.overdue_days === null ? '' : format.say('view.overdue', { days: action.overdue_days }),
     work: action.recommendation ?? '',
     reason: action.reason,
     rule: action.rule ?? '',
@@ -63,14 +64,14 @@ export function actionView(format: Format, action: RecordAction): ActionView {
     above: action.above_next_because ?? '',
     owner: action.owner ?? '',
     workOrder: action.work_order ?? '',
-    status: action.status,
-    origin: ORIGIN[action.origin],
+    status: format.term(action.status),
+    origin: format.say(`view.origin.${action.origin}`),
     raised: format.date(action.raised),
     carried: carriedText(format, action),
     override: overrideText(format, action),
     verification: verificationText(format, action),
     observation: action.observation ?? '',
-    cause: causeText(action),
+    cause: causeText(format, action),
     consequence: action.consequence ?? '',
     practical: practicalText(format, action),
     points: action.points.join(', '),
@@ -78,42 +79,42 @@ export function actionView(format: Format, action: RecordAction): ActionView {
 }
 
 function carriedText(format: Format, action: RecordAction): string {
-  if (action.carried_from === null) return action.times_reported > 1 ? `reported ${action.times_reported} times` : '';
-  const confirmed = action.confirmed === null ? 'not confirmed since' : `confirmed ${format.date(action.confirmed)}`;
-  const stale = action.confirmed === null && action.times_reported >= 3 ? `, unchanged for ${action.times_reported} surveys` : '';
-  return `carried from ${action.carried_from}, ${confirmed}${stale}`;
+  if (action.carried_from === null) return action.times_reported > 1 ? format.say('view.reported', { times: action.times_reported }) : '';
+  const confirmed = action.confirmed === null ? format.say('view.carried.unconfirmed') : format.say('view.carried.confirmed', { date: format.date(action.confirmed) });
+  const stale = action.confirmed === null && action.times_reported >= 3 ? format.say('view.carried.stale', { times: action.times_reported }) : '';
+  return format.say('view.carried', { from: action.carried_from, confirmed, stale });
 }
 
 export function overrideText(format: Format, action: { readonly override: RecordAction['override']; readonly computed_urgency: RecordAction['computed_urgency'] }): string {
   const o = action.override;
   if (o === null) return '';
-  const until = o.until === null ? 'no expiry given' : `until ${format.date(o.until)}`;
-  return `Set to “${urgencyShort(o.urgency)}” by ${o.by} (${until}): ${o.reason}${/[.!?]$/.test(o.reason) ? '' : '.'} The rules say “${urgencyShort(action.computed_urgency)}”.`;
+  const until = o.until === null ? format.say('view.override.no_expiry') : format.say('view.override.until', { date: format.date(o.until) });
+  const reason = `${o.reason}${/[.!?]$/.test(o.reason) ? '' : '.'}`;
+  return format.say('view.override', { urgency: format.urgency(o.urgency), by: o.by, until, reason, computed: format.urgency(action.computed_urgency) });
 }
-
-const RESULT = { verified: 'Verified', 'not verified': 'Not verified, open again', 'not yet measured': 'To verify' } as const;
 
 function verificationText(format: Format, action: RecordAction): string {
   const v = action.verification;
   if (v === null) return '';
-  const target = v.target === null ? '' : ` ${v.target.point} ${v.target.quantity} at or below ${format.number(v.target.value)} ${v.target.unit}`;
-  const before = v.before === null ? '' : `; was ${format.number(v.before.value)} on ${format.date(v.before.date)}`;
-  const after = v.after === null ? '' : `, now ${format.number(v.after.value)} on ${format.date(v.after.date)}`;
-  return `${RESULT[v.result]}:${target}${before}${after}.`;
+  const result = format.say(`view.result.${v.result}`);
+  const target = v.target === null ? `${result}:` : format.say('view.verify.target', { result, point: v.target.point, quantity: v.target.quantity, value: v.target.value, unit: v.target.unit });
+  const before = v.before === null ? '' : format.say('view.verify.before', { value: v.before.value, date: format.date(v.before.date) });
+  const after = v.after === null ? '' : format.say('view.verify.after', { value: v.after.value, date: format.date(v.after.date) });
+  return `${target}${before}${after}.`;
 }
 
-function causeText(action: RecordAction): string {
+function causeText(format: Format, action: RecordAction): string {
   if (action.likely_cause === null) return '';
-  const less = action.less_likely === null ? '' : ` Less likely: ${action.less_likely}.`;
-  const sure = action.confidence === null ? '' : ` (confidence ${action.confidence})`;
-  return `Consistent with ${action.likely_cause}${sure}.${less}`;
+  const cause = action.likely_cause;
+  const told = action.confidence === null ? format.say('view.cause', { cause }) : format.say('view.cause.sure', { cause, confidence: format.term(action.confidence) });
+  return action.less_likely === null ? told : `${told} ${format.say('view.cause.less', { less: action.less_likely })}`;
 }
 
 function practicalText(format: Format, action: RecordAction): string {
   const parts: string[] = [];
-  if (action.needs_stop !== null) parts.push(action.needs_stop ? 'needs a stop' : 'needs no stop');
+  if (action.needs_stop !== null) parts.push(format.say(action.needs_stop ? 'view.needs_stop' : 'view.needs_no_stop'));
   if (action.downtime_h !== null) parts.push(`${format.number(action.downtime_h)} h`);
-  if (action.parts !== null) parts.push(`parts: ${action.parts}`);
+  if (action.parts !== null) parts.push(format.say('view.parts', { parts: action.parts }));
   return parts.join('; ');
 }
 

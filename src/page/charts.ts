@@ -7,6 +7,7 @@ import { plantOverTime } from '../chart/over-time.ts';
 import { polarPlot } from '../chart/polar.ts';
 import { sparkline } from '../chart/sparkline.ts';
 import type { RecordMeasurement, SwayfolioRecord } from '../record/types.ts';
+import { formatDate } from '../words/terms.ts';
 import type { Format } from './format.ts';
 
 export const seriesId = (m: RecordMeasurement): string => `${m.machine}\u001f${m.point}\u001f${m.quantity}\u001f${m.detection ?? ''}`;
@@ -75,10 +76,9 @@ export class Charts {
   /** What a trend shows, in words. */
   alt(m: RecordMeasurement): string {
     const values = m.history.value.filter((v): v is number => v !== null);
-    const { number } = { number: (v: number) => this.#format.number(v) };
-    if (values.length === 0) return `${m.point} ${m.quantity}: no reading.`;
+    if (values.length === 0) return this.#format.say('view.alt.none', { point: m.point, quantity: m.quantity });
     const [least, most, last] = [Math.min(...values), Math.max(...values), values[values.length - 1] as number];
-    return `${m.point} ${m.quantity}, ${values.length} readings from ${number(least)} to ${number(most)}, last ${number(last)} ${this.#format.unit(m.unit, m.detection)}.`;
+    return this.#format.say('view.alt.trend', { point: m.point, quantity: m.quantity, n: values.length, least, most, last, unit: this.#format.unit(m.unit, m.detection) });
   }
 
   #history(m: RecordMeasurement): Drawing {
@@ -93,7 +93,7 @@ export class Charts {
       cd: m.limits?.cd ?? null,
       alarm: m.limits?.alarm ?? null,
       baseline: m.baseline?.value ?? null,
-      events: eventsOf(record, m).map((e) => ({ date: e.date, label: e.event === 'other' && e.notes !== null ? shortened(e.notes) : e.event, newBaseline: e.new_baseline })),
+      events: eventsOf(record, m).map((e) => ({ date: e.date, label: e.event === 'other' && e.notes !== null ? shortened(e.notes) : this.#format.term(e.event), newBaseline: e.new_baseline })),
       language: record.plant.language,
       forecast: forecastOf(record, m) ?? null,
       unit: this.#format.unit(m.unit, m.detection),
@@ -109,8 +109,9 @@ export class Charts {
     const from = now === null || change === null ? null : minus(now, { amplitude: change.amplitude, lagDeg: change.lag_deg });
     const q = m.limits?.bc == null ? null : m.limits.bc * (this.#format.record.policy.find((p) => p.id === '4.q')?.value ?? 0.25);
     const unit = this.#format.unit(m.unit, m.detection);
-    const words = now === null ? 'no vector' : `now ${this.#format.number(now.amplitude)} ${unit} at ${this.#format.number(now.lagDeg)}° lag`;
-    return polarPlot({ from, to: now, q, unit, size: 140, language: this.#format.language, alt: `${m.point}: 1× vector, ${words}${change === null ? '' : `, moved by ${this.#format.number(change.amplitude)}`}.` });
+    const words = now === null ? this.#format.say('view.alt.polar.none') : this.#format.say('view.alt.polar.now', { amplitude: now.amplitude, unit, lag: now.lagDeg });
+    const told = change === null ? words : this.#format.say('view.alt.polar.moved', { words, change: change.amplitude });
+    return polarPlot({ from, to: now, q, unit, size: 140, language: this.#format.language, alt: this.#format.say('view.alt.polar', { point: m.point, words: told }) });
   }
 
   #overTime(): Drawing {
@@ -118,8 +119,8 @@ export class Charts {
     // A second look at a few machines is no column of the plant's.
     const lines = record.plant_over_time.filter((_, i) => record.surveys[i]?.kind !== 're-measurement');
     const last = lines[lines.length - 1];
-    const words = last === undefined ? '' : Object.entries(last.conditions).filter(([, n]) => n > 0).map(([c, n]) => `${n} ${c}`).join(', ');
-    return plantOverTime({ dates: lines.map((l) => l.date), counts: lines.map((l) => l.conditions), width: 490, height: 120, alt: `Machines by condition over ${lines.length} surveys; at the last: ${words}.` });
+    const words = last === undefined ? '' : Object.entries(last.conditions).filter(([, n]) => n > 0).map(([c, n]) => `${n} ${this.#format.term(c)}`).join(', ');
+    return plantOverTime({ dates: lines.map((l) => formatDate(this.#format.language, l.date)), counts: lines.map((l) => l.conditions), width: 490, height: 120, alt: this.#format.say('view.alt.over_time', { n: lines.length, words }) });
   }
 }
 

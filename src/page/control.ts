@@ -22,28 +22,28 @@ export interface ControlView {
 
 export function controlView(format: Format): ControlView {
   const { plant, survey, issue, tool, policy_hash: hash } = format.record;
-  const span = survey.from === survey.to ? format.date(survey.from) : `${format.date(survey.from)} to ${format.date(survey.to)}`;
+  const span = survey.from === survey.to ? format.date(survey.from) : format.say('view.span', { from: format.date(survey.from), to: format.date(survey.to) });
   return {
     plant: plant.plant,
-    title: 'Vibration survey report',
-    status: issue === null ? 'DRAFT, not issued' : `No. ${issue.number}, revision ${issue.revision}, issued ${format.date(issue.issued_on)}`,
+    title: format.say('view.title'),
+    status: issue === null ? format.say('view.draft') : format.say('view.issued', { number: issue.number, revision: issue.revision, date: format.date(issue.issued_on) }),
     fields: [
-      ...field('Client', plant.client),
-      ...field('Site', plant.site),
-      ...field('Contract', plant.contract),
-      ...field('Procedure', plant.procedure),
-      ...field('Survey', `${survey.id}, ${survey.kind}`),
-      ...field('Measured', span),
-      ...field('Contractor', plant.contractor.name),
-      ...field('Address', plant.contractor.address),
-      ...field('Contact', plant.contractor.contact),
-      ...field('Measured by', survey.people.map((p) => p.name).join(', ')),
-      ...field('Reviewed by', survey.reviewed_by ?? 'not yet'),
-      ...field('Approved by', survey.approved_by ?? 'not yet'),
-      ...field('Issue date', format.date(survey.issue_date)),
-      ...field('Distribution', plant.distribution.join(', ')),
-      ...field('Retention', plant.retention),
-      ...field('Made with', `${tool.name} ${tool.version}, policy ${hash.slice(0, 12)}`),
+      ...field(format.say('view.client'), plant.client),
+      ...field(format.say('view.site'), plant.site),
+      ...field(format.say('view.contract'), plant.contract),
+      ...field(format.say('view.procedure'), plant.procedure),
+      ...field(format.say('view.survey'), `${format.survey(survey.id)}, ${format.term(survey.kind)}`),
+      ...field(format.say('view.measured'), span),
+      ...field(format.say('view.contractor'), plant.contractor.name),
+      ...field(format.say('view.address'), plant.contractor.address),
+      ...field(format.say('view.contact'), plant.contractor.contact),
+      ...field(format.say('view.measured_by'), survey.people.map((p) => p.name).join(', ')),
+      ...field(format.say('view.reviewed_by'), survey.reviewed_by ?? format.say('view.not_yet')),
+      ...field(format.say('view.approved_by'), survey.approved_by ?? format.say('view.not_yet')),
+      ...field(format.say('view.issue_date'), format.date(survey.issue_date)),
+      ...field(format.say('view.distribution'), plant.distribution.join(', ')),
+      ...field(format.say('view.retention'), plant.retention),
+      ...field(format.say('view.made_with'), format.say('view.tool', { tool: `${tool.name} ${tool.version}`, hash: hash.slice(0, 12) })),
     ],
     hasLogo: plant.contractor.logo !== null,
     logo: plant.contractor.logo ?? '',
@@ -59,49 +59,50 @@ export function peopleView(format: Format) {
       id: i.id, make: [i.make, i.model].filter((t) => t !== null).join(' '), serial: i.serial ?? '', band: i.band ?? '', calibrated: format.date(i.calibrated_on), due: format.date(i.calibration_due),
       lapsed: i.calibration_due !== null && i.calibration_due < survey.to, laboratory: i.laboratory ?? '',
     })),
-    conditions: [...field('Field check', survey.field_check), ...field('Process', survey.process), ...field('Weather', survey.weather), ...field('Remarks', survey.remarks)],
+    conditions: [...field(format.say('view.field_check'), survey.field_check), ...field(format.say('view.process'), survey.process), ...field(format.say('view.weather'), survey.weather), ...field(format.say('view.remarks'), survey.remarks)],
     hasPeople: survey.people.length > 0,
     hasInstruments: survey.instruments.length > 0,
     hasConditions: [survey.field_check, survey.process, survey.weather, survey.remarks].some((t) => t !== null),
   };
 }
 
-const CONFIDENCE: Readonly<Record<string, string>> = { confirmed: 'confirmed', 'one source': 'one source', recalled: 'recalled: check against your copy of the standard' };
-
 /** A boundary as its source prints it; one that was computed, to three digits. */
 const boundary = (format: Format, value: number | null): string => (value === null ? '–' : Math.round(value * 1000) / 1000 === value ? format.plain(value) : format.number(value));
 
 function limitView(format: Format, set: LimitSetLine) {
   const { ab, bc, cd } = set.boundaries;
-  const band = set.low_hz === null && set.high_hz === null ? '' : `${set.low_hz ?? '…'} to ${set.high_hz ?? '…'} Hz`;
+  const band = set.low_hz === null && set.high_hz === null ? '' : `${format.say('view.span', { from: set.low_hz === null ? '…' : format.plain(set.low_hz), to: set.high_hz === null ? '…' : format.plain(set.high_hz) })} Hz`;
   return {
     id: set.id,
     anchor: `limit-${slugOf(set.id)}`,
     title: set.title,
-    quantity: set.quantity,
+    quantity: format.term(set.quantity),
     unit: format.unit(set.unit, set.detection),
     ab: boundary(format, ab),
     bc: boundary(format, bc),
     cd: boundary(format, cd),
     band,
-    basis: set.basis,
+    basis: format.term(set.basis),
     source: [set.source, set.edition, set.table].filter((t) => t !== null).join(', '),
-    confidence: set.confidence === null ? approval(format, set) : (CONFIDENCE[set.confidence] ?? set.confidence),
+    confidence: set.confidence === null ? approval(format, set) : format.say(`view.sure.${set.confidence}`),
   };
 }
 
 function approval(format: Format, set: LimitSetLine): string {
-  const by = set.approved_by === null ? 'approval not stated' : `approved by ${set.approved_by}`;
-  const on = set.approved_on === null ? '' : ` on ${format.date(set.approved_on)}`;
-  return `${by}${on}${set.valid_from === null ? '' : `, valid from ${format.date(set.valid_from)}`}`;
+  const by = set.approved_by === null ? format.say('view.approval.none') : format.say('view.approval.by', { by: set.approved_by });
+  const on = set.approved_on === null ? by : format.say('view.approval.on', { by, date: format.date(set.approved_on) });
+  return set.valid_from === null ? on : `${on}${format.say('view.approval.valid', { date: format.date(set.valid_from) })}`;
 }
+
+/** Statuses that kept a machine from being measured, joined in the record. */
+const whyText = (format: Format, why: string): string => why.split(', ').map((word) => format.term(word)).join(', ');
 
 export function methodView(format: Format) {
   const { record } = format;
   return {
     sets: record.limit_sets.map((set) => limitView(format, set)),
     hasSets: record.limit_sets.length > 0,
-    policy: record.policy.map((p) => ({ id: p.id, value: format.plain(p.value), unit: p.unit, mark: p.mark, about: p.about, changed: p.overridden })),
+    policy: record.policy.map((p) => ({ id: p.id, value: format.plain(p.value), unit: format.term(p.unit), mark: format.term(p.mark), about: format.policyAbout(p), changed: p.overridden })),
     hash: record.policy_hash,
     problems: record.problems.filter((p) => p.severity !== 'note').map((p) => ({ place: p.line === null ? p.file : `${p.file}:${p.line}`, message: p.message })),
     hasProblems: record.problems.some((p) => p.severity !== 'note'),
@@ -117,11 +118,11 @@ export function coverageView(format: Format) {
     anchor: `machine-${slugOf(c.machine)}`,
     page: `machines/${slugOf(c.machine)}.html`,
     name: format.name(c.machine),
-    status: c.status,
-    why: c.why ?? '',
-    points: `${c.measured} of ${c.of}`,
+    status: format.term(c.status),
+    why: c.why === null ? '' : whyText(format, c.why),
+    points: format.say('view.n_of_m', { n: c.measured, of: c.of }),
     inARow: c.misses_in_a_row === 0 ? '' : String(c.misses_in_a_row),
-    last: c.last_measured === null ? 'never' : format.date(c.last_measured),
+    last: c.last_measured === null ? format.say('view.never') : format.date(c.last_measured),
     next: format.date(c.next_due),
     interval: c.interval_days === null ? '' : String(Math.round(c.interval_days)),
   });
@@ -136,34 +137,35 @@ export function changesView(format: Format) {
   const before = record.surveys[record.surveys.length - 2]?.date ?? '';
   const rows: { what: string; text: string }[] = [];
   for (const set of record.limit_sets) {
-    if (set.valid_from !== null && set.valid_from > before && set.valid_from <= record.survey.to) rows.push({ what: `Limit ${set.id}`, text: `${set.title}: B/C ${format.number(set.boundaries.bc)} ${set.unit} from ${format.date(set.valid_from)}; ${approval(format, set)}` });
+    if (set.valid_from !== null && set.valid_from > before && set.valid_from <= record.survey.to) rows.push({ what: format.say('view.limit', { id: set.id }), text: format.say('view.limit.changed', { title: set.title, bc: format.number(set.boundaries.bc), unit: set.unit, date: format.date(set.valid_from), approval: approval(format, set) }) });
   }
   for (const machine of record.machines) {
     for (const event of machine.events) {
       if (event.date <= before) continue;
-      const where = [event.component, event.point, event.quantity].filter((t) => t !== null).join(' ');
-      const serial = event.serial_in === null ? '' : `, serial ${event.serial_out ?? '?'} out, ${event.serial_in} in`;
-      rows.push({ what: machine.machine, text: `${format.date(event.date)} ${event.event}${where === '' ? '' : ` of ${where}`}${serial}${event.new_baseline ? '; new baseline' : ''}${event.notes === null ? '' : `: ${event.notes}`}` });
+      const where = [event.component, event.point, event.quantity === null ? null : format.term(event.quantity)].filter((t) => t !== null).join(' ');
+      const serial = event.serial_in === null ? '' : format.say('view.serials', { out: event.serial_out ?? '?', in: event.serial_in });
+      const told = format.say(where === '' ? 'view.event' : 'view.event.of', { date: format.date(event.date), event: format.term(event.event), where });
+      rows.push({ what: machine.machine, text: `${told}${serial}${event.new_baseline ? `; ${format.say('view.new_baseline')}` : ''}${event.notes === null ? '' : `: ${event.notes}`}` });
     }
   }
   for (const r of record.plant.renames ?? []) {
-    if (r.since !== null && r.since > before && r.since <= record.survey.to) rows.push({ what: r.machine ?? r.old, text: `${r.kind} ${r.old} is called ${r.new} since ${format.date(r.since)}` });
+    if (r.since !== null && r.since > before && r.since <= record.survey.to) rows.push({ what: r.machine ?? r.old, text: format.say('view.rename', { kind: format.term(r.kind), old: r.old, new: r.new, date: format.date(r.since) }) });
   }
   rows.push(...unitChanges(format));
-  for (const p of record.policy.filter((line) => line.overridden)) rows.push({ what: `Policy ${p.id}`, text: `set to ${format.plain(p.value)} ${p.unit} by this plant: ${p.about}` });
+  for (const p of record.policy.filter((line) => line.overridden)) rows.push({ what: format.say('view.policy', { id: p.id }), text: format.say('view.policy.set', { value: format.plain(p.value), unit: format.term(p.unit), about: format.policyAbout(p) }) });
   return { rows, hasRows: rows.length > 0 };
 }
 
 /** Readings typed in another unit than their point's. */
 function unitChanges(format: Format): { what: string; text: string }[] {
-  return format.record.measurements.flatMap((m) => (m.typed_unit === null ? [] : [{ what: m.machine, text: `${m.point} ${m.quantity} was typed as ${m.typed} ${m.typed_unit} and converted to ${format.unit(m.unit, m.detection)}` }]));
+  return format.record.measurements.flatMap((m) => (m.typed_unit === null ? [] : [{ what: m.machine, text: format.say('view.unit_change', { point: m.point, quantity: m.quantity, typed: `${m.typed} ${m.typed_unit}`, unit: format.unit(m.unit, m.detection) }) }]));
 }
 
 export function acceptedView(format: Format) {
   const rows = format.record.machines.flatMap((m) =>
     m.accepted.map((a) => ({
-      machine: m.machine, point: [a.point, a.quantity].filter((t) => t !== null).join(' ') || 'all points', upTo: `${format.number(a.up_to)} ${a.unit ?? ''}`.trim(), until: format.date(a.until), by: a.by ?? 'not stated',
-      reason: a.reason ?? '', state: a.in_force ? 'in force' : 'no longer in force',
+      machine: m.machine, point: [a.point, a.quantity === null ? null : format.term(a.quantity)].filter((t) => t !== null).join(' ') || format.say('view.all_points'), upTo: `${format.number(a.up_to)} ${a.unit ?? ''}`.trim(), until: format.date(a.until), by: a.by ?? format.say('view.not_stated'),
+      reason: a.reason ?? '', state: format.say(a.in_force ? 'view.in_force' : 'view.no_longer'),
     })),
   );
   return { rows, hasRows: rows.length > 0 };
@@ -178,6 +180,6 @@ export function noticesView(format: Format) {
 export function limitsToSetView(format: Format) {
   const rows = format.record.measurements
     .filter((m) => m.status === 'measured' && m.zone === null && m.ratio_class === null && m.baseline === null && m.limit_set === null)
-    .map((m) => ({ machine: m.machine, point: m.point, quantity: `${m.quantity}, ${format.unit(m.unit, m.detection)}`, because: m.no_zone_because ?? '' }));
+    .map((m) => ({ machine: m.machine, point: m.point, quantity: `${format.term(m.quantity)}, ${format.unit(m.unit, m.detection)}`, because: m.no_zone_because ?? '' }));
   return { rows, hasRows: rows.length > 0 };
 }

@@ -41,7 +41,7 @@ export function exceptionView(format: Format, charts: Charts, machine: RecordMac
   const actions = format.record.actions.filter((a) => a.machine === machine.machine).map((a) => actionView(format, a));
   const hasHistory = main?.history.value.some((v) => v !== null) === true;
   const polars = measurements.filter((m) => (m.phase?.amplitude ?? null) !== null);
-  const spoken = machine.criticality_stated ? machine.criticality : `${machine.criticality} (not stated, taken as such)`;
+  const spoken = machine.criticality_stated ? format.term(machine.criticality) : format.say('view.criticality_taken', { criticality: format.term(machine.criticality) });
   return {
     machine: machineView(format, charts, machine),
     title: machine.name === null ? machine.machine : `${machine.machine}, ${machine.name}`,
@@ -58,39 +58,39 @@ export function exceptionView(format: Format, charts: Charts, machine: RecordMac
     get historyAlt() {
       return main === null || !hasHistory ? '' : charts.drawing('history', seriesId(main)).alt;
     },
-    historyCaption: main === null ? '' : `${main.point} ${main.quantity}, ${format.unit(main.unit, main.detection)}: ${main.limit_reason}`,
+    historyCaption: main === null ? '' : `${main.point} ${format.term(main.quantity)}, ${format.unit(main.unit, main.detection)}: ${main.limit_reason}`,
     remarks: main === null || main.notes.length === 0 ? '' : `${main.point} ${main.quantity}: ${main.notes.join(' ')}`,
     polars: polars.map((m) => ({
       key: seriesId(m),
-      caption: `${m.point}: 1× vector, angles as lag`,
+      caption: format.say('view.polar.caption', { point: m.point }),
       get alt() {
         return charts.drawing('polar', seriesId(m)).alt;
       },
     })),
     photos: format.record.survey.photos
       .filter((p) => p.machine === machine.machine)
-      .map((p) => ({ path: p.path, file: photoFile(p.path), alt: p.caption ?? `Photo of ${machine.machine}`, caption: p.caption ?? '' })),
+      .map((p) => ({ path: p.path, file: photoFile(p.path), alt: p.caption ?? format.say('view.photo', { machine: machine.machine }), caption: p.caption ?? '' })),
     doubts: machine.doubts.map((d) => d.message),
     hasDoubts: machine.doubts.length > 0,
     indications: machine.indications.map((i) => ({ rule: i.rule, message: i.message, confirm: i.confirm })),
     hasIndications: machine.indications.length > 0,
     forecast: main === null ? '' : forecastText(format, main),
     cannotSee: machine.cannot_see.join('; '),
-    events: machine.events.map((e) => ({ date: format.date(e.date), text: `${e.event}${e.notes === null ? '' : `: ${e.notes}`}${e.new_baseline ? ' (new baseline)' : ''}` })),
+    events: machine.events.map((e) => ({ date: format.date(e.date), text: `${format.term(e.event)}${e.notes === null ? '' : `: ${e.notes}`}${e.new_baseline ? ` (${format.say('view.new_baseline')})` : ''}` })),
     hasEvents: machine.events.length > 0,
     components: format.record.components
       .filter((c) => c.machine === machine.machine && !c.implicit)
-      .map((c) => ({ id: c.component, kind: c.kind ?? '', condition: format.condition(c.condition), limits: c.limit_reason })),
+      .map((c) => ({ id: c.component, kind: c.kind === null ? '' : format.term(c.kind), condition: format.condition(c.condition), limits: c.limit_reason })),
   };
 }
 
 /** The forecast of the governing reading in words; nothing where there is no real trend to speak of. */
 function forecastText(format: Format, m: RecordMeasurement): string {
   const { forecast } = m;
-  if (forecast === null || 'none' in forecast) return forecast === null || m.trend === null || m.trend.kind !== 'ramp' ? '' : `No forecast for ${m.point} ${m.quantity}: ${forecast.none}.`;
-  const likely = forecast.likely === null ? 'beyond what it may look ahead' : format.date(forecast.likely);
-  const latest = forecast.latest === null ? 'open' : format.date(forecast.latest);
-  return `${m.point} ${m.quantity} is likely to cross ${forecast.boundary} on ${likely} (80 % range ${format.date(forecast.earliest)} to ${latest}; Theil–Sen on logarithms, residuals left out one by one, widened by Student's t). A crossing is not a failure.`;
+  if (forecast === null || 'none' in forecast) return forecast === null || m.trend === null || m.trend.kind !== 'ramp' ? '' : format.say('view.no_forecast', { point: m.point, quantity: m.quantity, none: forecast.none });
+  const likely = forecast.likely === null ? format.say('view.forecast.beyond') : format.date(forecast.likely);
+  const latest = forecast.latest === null ? format.say('view.forecast.open') : format.date(forecast.latest);
+  return format.say('view.forecast', { point: m.point, quantity: m.quantity, boundary: forecast.boundary, likely, earliest: format.date(forecast.earliest), latest });
 }
 
 /** Name of a photo on the site. */

@@ -3,9 +3,12 @@
  * hold no logic: what they print is made here.
  */
 import type { Detection } from '../measure/detection.ts';
+import type { Urgency } from '../plant/types.ts';
 import type { Condition, RecordMachine, RecordMeasurement, SeriesKey, SwayfolioRecord } from '../record/types.ts';
 import { decimalsFor, formatNumber, NO_BREAK, plainNumber } from '../words/numbers.ts';
-import { type Language, say } from '../words/say.ts';
+import { say } from '../words/say.ts';
+import { hasSentence, type Language } from '../words/sentences.ts';
+import { formatDate, term } from '../words/terms.ts';
 
 /** A condition for print: its mark, letter and words. */
 export interface ConditionView {
@@ -14,10 +17,6 @@ export interface ConditionView {
   readonly text: string;
   readonly isAssessed: boolean;
 }
-
-const DETECTION_WORDS: Readonly<Record<Detection, string>> = {
-  rms: 'r.m.s.', 'calculated peak': 'calc. peak', 'true peak': 'true peak', 'calculated peak-to-peak': 'calc. pk-pk', 'true peak-to-peak': 'true pk-pk', mean: 'mean',
-};
 
 export class Format {
   readonly record: SwayfolioRecord;
@@ -45,6 +44,26 @@ export class Format {
 
   say(key: string, facts = {}): string {
     return say(this.language, key, facts);
+  }
+
+  /** A word of a closed list in the reader's language; the plant's own words stay. */
+  term(word: string): string {
+    return term(this.language, word);
+  }
+
+  /** What a line of the policy does; in English where there are no words for it. */
+  policyAbout(line: { readonly id: string; readonly about: string }): string {
+    const key = `policy.${line.id}`;
+    return hasSentence(this.language, key) ? this.say(key) : line.about;
+  }
+
+  urgency(urgency: Urgency | null): string {
+    return urgency === null ? '–' : this.say(`view.urgency.${urgency}`);
+  }
+
+  /** `now` never stands alone: who decides on stopping is said with it. */
+  urgencyFull(urgency: Urgency | null): string {
+    return urgency === 'now' ? this.say('view.urgency.now.full') : this.urgency(urgency);
   }
 
   number(value: number | null, limit: number | null = null): string {
@@ -82,22 +101,27 @@ export class Format {
   }
 
   unit(unit: string, detection: Detection | null): string {
-    return detection === null ? unit : `${unit}${NO_BREAK}${DETECTION_WORDS[detection].replaceAll(' ', NO_BREAK)}`;
+    return detection === null ? unit : `${unit}${NO_BREAK}${term(this.language, `short ${detection}`).replaceAll(' ', NO_BREAK)}`;
   }
 
   condition(condition: Condition | null): ConditionView {
-    return condition === null || condition === 'not assessed' ? { mark: 'none', text: 'not assessed', isAssessed: false } : { mark: condition, text: condition, isAssessed: true };
+    return condition === null || condition === 'not assessed' ? { mark: 'none', text: this.term('not assessed'), isAssessed: false } : { mark: condition, text: condition, isAssessed: true };
   }
 
   /** Condition of a machine, with how much of it was measured where that was not all. */
   machineCondition(machine: RecordMachine): ConditionView {
     const [n, m] = machine.measured_of;
     const view = this.condition(machine.condition);
-    return view.isAssessed && n < m ? { ...view, text: `${view.text} (${n} of ${m})` } : view;
+    return view.isAssessed && n < m ? { ...view, text: `${view.text} (${this.say('view.n_of_m', { n, of: m })})` } : view;
   }
 
   date(text: string | null): string {
-    return text === null ? '' : text.replaceAll('-', '\u2011');
+    return text === null ? '' : formatDate(this.language, text).replaceAll('-', '\u2011');
+  }
+
+  /** A survey by its name, which is a date as a rule. */
+  survey(id: string): string {
+    return formatDate(this.language, id);
   }
 
   /** Name of a machine beside its id, or nothing. */
@@ -105,17 +129,3 @@ export class Format {
     return this.record.machines.find((m) => m.machine === machine)?.name ?? '';
   }
 }
-
-export const URGENCY_WORDS: Readonly<Record<string, string>> = {
-  now: 'Act now',
-  'within a week': 'Within a week',
-  'within a month': 'Within a month',
-  'next planned stop': 'Next planned stop',
-  watch: 'Watch',
-};
-
-/** `now` never stands alone: who decides on stopping is said with it. */
-export const urgencyText = (urgency: string | null): string =>
-  urgency === null ? '–' : urgency === 'now' ? "Act now; the plant's responsible person decides on stopping" : (URGENCY_WORDS[urgency] ?? urgency);
-
-export const urgencyShort = (urgency: string | null): string => (urgency === null ? '–' : (URGENCY_WORDS[urgency] ?? urgency));

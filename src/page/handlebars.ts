@@ -4,6 +4,7 @@
  */
 import Handlebars from 'handlebars';
 import { UserError } from '../shell/types.ts';
+import { hasSentence, type Language, sentenceOf } from '../words/sentences.ts';
 
 const HELPERS: ReadonlySet<string> = new Set(['if', 'unless', 'each', 'with']);
 
@@ -14,9 +15,9 @@ export class Templates {
   readonly #engine = Handlebars.create();
   readonly #compiled = new Map<string, Render>();
 
-  constructor(sources: ReadonlyMap<string, string>) {
-    this.#sources = sources;
-    for (const [path, source] of sources) {
+  constructor(sources: ReadonlyMap<string, string>, language: Language = 'en') {
+    this.#sources = new Map([...sources].map(([path, source]) => [path, path.endsWith('.hbs') ? withWords(path.replace(/\.hbs$/, ''), source, language) : source]));
+    for (const [path, source] of this.#sources) {
       if (!path.endsWith('.hbs')) continue;
       const name = path.replace(/\.hbs$/, '');
       check(name, source, sources);
@@ -44,6 +45,14 @@ export class Templates {
     if (text === undefined) throw new Error(`There is no file ${path} among the templates.`);
     return text;
   }
+}
+
+/** `[[key]]` is the sentence `page.key` of the language, in place before the template is read. */
+function withWords(name: string, source: string, language: Language): string {
+  return source.replace(/\[\[([^\]\n]*)\]\]/g, (_, key: string, at: number) => {
+    if (!hasSentence(language, `page.${key}`)) throw new UserError(`Template ${name}, line ${source.slice(0, at).split('\n').length}: there are no words "${key}".`, 'The words that a template may use are the page.* keys of templates/words/en/page.json.');
+    return sentenceOf(language, `page.${key}`).replaceAll('&', '&amp;').replaceAll('<', '&lt;').replaceAll('"', '&quot;');
+  });
 }
 
 /** Refuses unescaped output, unknown helpers and partials that are not there. */

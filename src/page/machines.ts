@@ -1,7 +1,7 @@
 import type { RecordMachine, RecordMeasurement } from '../record/types.ts';
 import { type Charts, seriesId } from './charts.ts';
 import { slugOf } from './file-name.ts';
-import { type ConditionView, type Format, urgencyShort, urgencyText } from './format.ts';
+import type { ConditionView, Format } from './format.ts';
 
 /** A machine in the list of all. */
 export interface MachineView {
@@ -46,8 +46,8 @@ export function changeText(format: Format, m: RecordMeasurement): string {
 export function machineView(format: Format, charts: Charts, machine: RecordMachine): MachineView {
   const m = governingMeasurement(format, machine);
   const hasChart = m?.history.value.some((v) => v !== null) === true;
-  const doubts = machine.doubts.length === 0 ? '' : 'doubt';
-  const held = m !== null && m.travel === 'held' ? 'held' : '';
+  const doubts = machine.doubts.length === 0 ? '' : format.say('view.doubt');
+  const held = m !== null && m.travel === 'held' ? format.term('held') : '';
   const [measured] = machine.measured_of;
   return {
     id: machine.machine,
@@ -55,23 +55,23 @@ export function machineView(format: Format, charts: Charts, machine: RecordMachi
     area: machine.area ?? '',
     page: `machines/${slugOf(machine.machine)}.html`,
     anchor: `machine-${slugOf(machine.machine)}`,
-    criticality: machine.criticality,
+    criticality: format.term(machine.criticality),
     condition: format.machineCondition(machine),
-    previous: machine.previous_condition ?? '–',
-    urgency: urgencyShort(machine.urgency),
-    urgencyFull: urgencyText(machine.urgency),
+    previous: machine.previous_condition === null ? '–' : format.term(machine.previous_condition),
+    urgency: format.urgency(machine.urgency),
+    urgencyFull: format.urgencyFull(machine.urgency),
     rule: machine.rule ?? '',
     reason: machine.reason,
-    governing: m === null ? '' : `${m.point} ${m.quantity}`,
+    governing: m === null ? '' : `${m.point} ${format.term(m.quantity)}`,
     value: m === null ? '' : format.reading(m),
     unit: m === null || format.reading(m) === '' ? '' : format.unit(m.unit, m.detection),
     change: m === null ? '' : changeText(format, m),
-    travel: m?.travel ?? '',
+    travel: m?.travel == null ? '' : format.term(m.travel),
     hasChart,
     chartKey: m === null ? '' : seriesId(m),
     chartAlt: m === null || !hasChart ? '' : charts.alt(m),
     isException: machine.urgency !== null,
-    marks: [held, doubts, measured === 0 ? 'not measured' : ''].filter((t) => t !== '').join(', '),
+    marks: [held, doubts, measured === 0 ? format.term('not measured') : ''].filter((t) => t !== '').join(', '),
   };
 }
 
@@ -103,8 +103,8 @@ export interface ReadingView {
 
 export function readingView(format: Format, m: RecordMeasurement): ReadingView {
   const condition = format.condition(m.zone ?? m.ratio_class);
-  const held = m.held === null ? '' : `last ${m.held.zone}, ${format.date(m.held.date)}, not confirmed`;
-  const near = m.near_boundary === null ? '' : `near ${m.near_boundary}`;
+  const held = m.held === null ? '' : format.say('view.last_zone', { zone: format.term(m.held.zone), date: format.date(m.held.date) });
+  const near = m.near_boundary === null ? '' : format.say('view.near', { boundary: m.near_boundary });
   const set = m.limits;
   const boundaries = set === null ? '' : [set.ab, set.bc, set.cd].map((v) => (v === null ? '–' : format.number(v))).join('\u00a0/\u00a0');
   const doubts = m.doubts.map((d) => d.message);
@@ -114,21 +114,21 @@ export function readingView(format: Format, m: RecordMeasurement): ReadingView {
     machineAnchor: `machine-${slugOf(m.machine)}`,
     point: m.point,
     component: m.component === m.machine ? '' : m.component,
-    quantity: m.quantity,
-    value: m.value === null && m.bound === null ? m.status : format.reading(m),
+    quantity: format.term(m.quantity),
+    value: m.value === null && m.bound === null ? format.term(m.status) : format.reading(m),
     unit: format.unit(m.unit, m.detection),
     condition,
     conditionNote: [held, near].filter((t) => t !== '').join('; '),
     change: changeText(format, m),
-    baseline: m.baseline === null ? '' : `${format.number(m.baseline.value)}${m.baseline.provisional ? ' (provisional)' : ''}`,
+    baseline: m.baseline === null ? '' : `${format.number(m.baseline.value)}${m.baseline.provisional ? ` (${format.say('view.provisional')})` : ''}`,
     limits: boundaries,
     alarm: set?.alarm == null ? '' : format.number(set.alarm),
-    travel: m.travel ?? '',
-    status: m.status,
+    travel: m.travel === null ? '' : format.term(m.travel),
+    status: format.term(m.status),
     notes: [...(m.no_zone_because === null || m.status !== 'measured' ? [] : [m.no_zone_because]), ...doubts, ...m.notes].join(' '),
     source: m.source === null ? '' : `${m.source.file}:${m.source.line}`,
     limitReason: m.limit_reason,
-    typed: m.typed_unit === null ? '' : `typed ${m.typed} ${m.typed_unit}`,
+    typed: m.typed_unit === null ? '' : format.say('view.typed', { typed: `${m.typed} ${m.typed_unit}` }),
     chartKey: seriesId(m),
     hasChart: m.history.value.some((v) => v !== null),
   };

@@ -36,11 +36,6 @@ export interface ManagerView {
 const ORDER: readonly Condition[] = ['D', 'r-D', 'C', 'r-C', 'B', 'r-B', 'A', 'r-A', 'not assessed'];
 const BAD = (condition: Condition | null): number => (condition === null || condition === 'not assessed' ? ORDER.length : ORDER.indexOf(condition));
 
-const LABELS = {
-  D: 'severe enough to cause damage · far above its baseline', C: 'not for long-term running · well above its baseline', B: 'acceptable for long-term running · above its baseline', A: 'as newly commissioned · about its baseline',
-  'not assessed': 'not measured, or nothing to judge by',
-} as const;
-
 const MOST_NAMES = 6;
 
 const place = (urgency: Urgency | null): number => (urgency === null ? URGENCIES.length : URGENCIES.indexOf(urgency));
@@ -51,33 +46,29 @@ const MOST = { week: 6, month: 4, stop: 2 } as const;
 export function managerView(format: Format): ManagerView {
   const { record } = format;
   const views = rankedViews(format);
-  const week = views.filter((v) => v.urgency === 'Act now' || v.urgency === 'Within a week');
-  const month = views.filter((v) => v.urgency === 'Within a month');
-  const stop = views.filter((v) => v.urgency === 'Next planned stop');
+  const week = views.filter((v) => v.level === 'now' || v.level === 'within a week');
+  const month = views.filter((v) => v.level === 'within a month');
+  const stop = views.filter((v) => v.level === 'next planned stop');
   const overrides = record.machines.filter((m) => m.override !== null && place(m.override.urgency) > place(m.computed_urgency));
   return {
     plant: record.plant.plant,
     survey: record.survey.id,
-    headline: headline(week.length, month.length, stop.length),
-    groups: [group('This week', week, MOST.week), group('This month', month, MOST.month), group('At the next planned stop', stop, MOST.stop)],
+    headline: headline(format, week.length, month.length, stop.length),
+    groups: [group(format, 'this_week', week, MOST.week), group(format, 'this_month', month, MOST.month), group(format, 'next_stop', stop, MOST.stop)],
     counts: countViews(format),
     coverage: coverageText(format),
     lines: changedLines(format, overrides),
   };
 }
 
-const plural = (n: number, one: string, many: string): string => (n === 1 ? `1 ${one}` : `${n} ${many}`);
-
-function headline(week: number, month: number, stop: number): string {
-  if (week + month + stop === 0) return 'The rules ask for no work from the readings of this survey.';
-  const parts = [week > 0 ? `${plural(week, 'thing', 'things')} to do this week` : 'nothing to do this week', `${month} this month`, `${stop} at the next planned stop`];
-  const text = parts.join(', ');
-  return `${text.charAt(0).toUpperCase()}${text.slice(1)}.`;
+function headline(format: Format, week: number, month: number, stop: number): string {
+  if (week + month + stop === 0) return format.say('view.nothing');
+  return format.say(week > 0 ? 'view.headline' : 'view.headline.none', { week, month, stop });
 }
 
-function group(title: string, actions: readonly ActionView[], most: number): ActionGroup {
+function group(format: Format, title: 'this_week' | 'this_month' | 'next_stop', actions: readonly ActionView[], most: number): ActionGroup {
   const left = actions.length - most;
-  return { title, actions: actions.slice(0, most), isEmpty: actions.length === 0, more: left > 0 ? `and ${left} more in the ranked list` : '' };
+  return { title: format.say(`view.${title}`), actions: actions.slice(0, most), isEmpty: actions.length === 0, more: left > 0 ? format.say('view.more', { n: left }) : '' };
 }
 
 function countViews(format: Format): CountView[] {
@@ -89,7 +80,7 @@ function countViews(format: Format): CountView[] {
     const ratio = zone === 'not assessed' ? zone : (`r-${zone}` as const);
     const hasClass = ratio !== zone;
     return {
-      condition: format.condition(zone), label: LABELS[zone], now: count(now, zone), before: count(before, zone), hasClass, classed: format.condition(ratio), classNow: hasClass ? count(now, ratio) : '',
+      condition: format.condition(zone), label: format.say(`view.zone.${zone}`), now: count(now, zone), before: count(before, zone), hasClass, classed: format.condition(ratio), classNow: hasClass ? count(now, ratio) : '',
       classBefore: hasClass ? count(before, ratio) : '',
     };
   });
@@ -102,11 +93,13 @@ function coverageText(format: Format): string {
   const partly = due.filter((c) => c.status === 'partly measured').length;
   const missed = due.filter((c) => c.status === 'not measured').length;
   const excused = due.filter((c) => c.status === 'excused').length;
-  const rest = [partly > 0 ? `${partly} in part` : '', excused > 0 ? `${excused} excused` : '', missed > 0 ? `${missed} not measured` : ''].filter((t) => t !== '');
-  return `${whole} of ${due.length} machines due were measured${rest.length === 0 ? '' : `, ${rest.join(', ')}`}.`;
+  const parts = [['partly', partly], ['excused', excused], ['missed', missed]] as const;
+  const rest = parts.map(([key, n]) => (n > 0 ? format.say(`view.coverage.${key}`, { n }) : '')).join('');
+  return format.say('view.coverage', { whole, due: due.length, rest });
 }
 
-const names = (list: readonly string[]): string => (list.length > MOST_NAMES ? `${list.slice(0, MOST_NAMES).join(', ')} and ${list.length - MOST_NAMES} more` : list.join(', '));
+const names = (format: Format, list: readonly string[]): string =>
+  list.length > MOST_NAMES ? format.say('view.and_more', { names: list.slice(0, MOST_NAMES).join(', '), n: list.length - MOST_NAMES }) : list.join(', ');
 
 function changedLines(format: Format, overrides: readonly RecordMachine[]): { title: string; text: string }[] {
   const { record } = format;
@@ -114,21 +107,21 @@ function changedLines(format: Format, overrides: readonly RecordMachine[]): { ti
   const fresh = record.actions.filter((a) => a.rank > 0 && a.urgency !== 'watch' && a.times_reported === 1).map((a) => a.machine);
   const verified = record.actions.filter((a) => a.verification?.result === 'verified').map((a) => a.machine);
   const failed = record.actions.filter((a) => a.verification?.result === 'not verified').map((a) => a.machine);
-  const overdue = record.actions.filter((a) => a.overdue_days !== null).map((a) => `${a.machine} (${a.overdue_days} days)`);
-  const missed = record.coverage.filter((c) => c.status === 'not measured').map((c) => (c.misses_in_a_row > 1 ? `${c.machine} (${c.misses_in_a_row} times in a row)` : c.machine));
+  const overdue = record.actions.filter((a) => a.overdue_days !== null).map((a) => format.say('view.days', { machine: a.machine, days: a.overdue_days }));
+  const missed = record.coverage.filter((c) => c.status === 'not measured').map((c) => (c.misses_in_a_row > 1 ? format.say('view.in_a_row', { machine: c.machine, times: c.misses_in_a_row }) : c.machine));
   const limits = record.machines.filter((m) => m.rule === 'M3').map((m) => m.machine);
-  const step = (m: RecordMachine): string => `${m.machine} (${m.previous_condition} to ${m.condition})`;
+  const step = (m: RecordMachine): string => format.say('view.step', { machine: m.machine, from: format.term(m.previous_condition ?? 'not assessed'), to: format.term(m.condition) });
   const lines = [
-    ['New', names([...new Set(fresh)])],
-    ['Worse', names(worse.map(step))],
-    ['Repaired and verified', names(verified)],
-    ['Closed but not verified', names(failed)],
-    ['Overdue', names(overdue)],
-    ['Not measured', names(missed)],
-    ['Without limits or baseline', names(limits)],
-    ['Set lower by hand', overrides.map((m) => `${m.machine}: ${overrideText(format, m)}`).join(' ')],
+    ['new', names(format, [...new Set(fresh)])],
+    ['worse', names(format, worse.map(step))],
+    ['verified', names(format, verified)],
+    ['failed', names(format, failed)],
+    ['overdue', names(format, overdue)],
+    ['missed', names(format, missed)],
+    ['limits', names(format, limits)],
+    ['lower', overrides.map((m) => `${m.machine}: ${overrideText(format, m)}`).join(' ')],
   ] as const;
-  return lines.filter(([, text]) => text !== '').map(([title, text]) => ({ title, text }));
+  return lines.filter(([, text]) => text !== '').map(([key, text]) => ({ title: format.say(`view.line.${key}`), text }));
 }
 
 /** Settled actions, after the ranked ones. */

@@ -34,7 +34,7 @@ const READINGS_A_SECTION = 200;
 export function reportPdf(record: SwayfolioRecord, assets: Assets, options: ReportOptions): Promise<PdfOutput> {
   const format = new Format(record);
   const charts = new Charts(format);
-  const templates = new Templates(assets.templates);
+  const templates = new Templates(assets.templates, format.language);
   const { plant, survey, issue } = record;
   return renderPdf({
     sections: withCautions(record, sectionsOf(format, charts, templates, options)),
@@ -44,22 +44,22 @@ export function reportPdf(record: SwayfolioRecord, assets: Assets, options: Repo
       if (bytes === null) throw new UserError(`The picture ${key} is not there.`, 'Put it back, or take it out of the plant folder.');
       return bytes;
     },
-    title: `${plant.plant}, vibration survey ${survey.id}`,
-    author: plant.contractor.name ?? 'not stated',
-    subject: 'Vibration survey report: screening by overall values, not a diagnosis',
+    title: format.say('view.pdf.title', { plant: plant.plant, survey: survey.id }),
+    author: plant.contractor.name ?? format.say('view.not_stated'),
+    subject: format.say('view.pdf.subject'),
     language: plant.language,
     date: survey.to,
     paper: plant.paper,
     runningLeft: plant.plant,
-    runningRight: `Vibration survey ${survey.id}`,
-    footerLeft: issue === null ? 'DRAFT, not issued. Screening by overall values, not a diagnosis.' : `No. ${issue.number}, revision ${issue.revision}. Screening by overall values, not a diagnosis.`,
-    pageOf: (page, pages) => `Page ${page} of ${pages}`,
-    mark: issue === null ? 'DRAFT' : null,
+    runningRight: format.say('view.pdf.running', { survey: survey.id }),
+    footerLeft: `${issue === null ? format.say('view.draft') : format.say('view.revision', { number: issue.number, revision: issue.revision })}. ${format.say('view.pdf.screening')}`,
+    pageOf: (page, pages) => format.say('view.pdf.page', { page, pages }),
+    mark: issue === null ? format.say('view.pdf.mark') : null,
     inks: inks('light', plant.contractor.accent),
     fonts: assets.pdfFonts,
     tags: options.tags,
     profile: options.profile,
-    attachments: attachmentsOf(record, assets, options.recordText),
+    attachments: attachmentsOf(format, assets, options.recordText),
   });
 }
 
@@ -94,7 +94,7 @@ function* sectionsOf(format: Format, charts: Charts, templates: Templates, optio
   const bodies = options.brief === true ? [] : ordered;
   const shown = new Set(bodies.map((m) => m.machine));
   const unlinked = <T extends { readonly machineAnchor: string; readonly machine: string }>(list: readonly T[]) => list.map((v) => (shown.has(v.machine) ? v : { ...v, machineAnchor: 'ranked' }));
-  if (options.brief !== true) yield render('control', { control: controlView(format), contents: contentsOf(bodies.length > 0) });
+  if (options.brief !== true) yield render('control', { control: controlView(format), contents: contentsOf(format, bodies.length > 0) });
   yield render('manager', { manager: { ...manager, groups: manager.groups.map((g) => ({ ...g, actions: unlinked(g.actions) })) }, hasLines: manager.lines.length > 0 });
   yield render('ranked', { actions: unlinked(actions), hasActions: actions.length > 0, settled, hasSettled: settled.length > 0, notices: noticesView(format) });
   if (options.brief !== true) yield* bodySections(format, charts, render, bodies);
@@ -111,7 +111,7 @@ function* bodySections(format: Format, charts: Charts, render: Render, exception
   let first = true;
   for (const machine of exceptions) {
     const section = render('exception', { ...exceptionView(format, charts, machine), startsPage: first });
-    yield first ? { ...section, html: section.html.replace('<h2', '<h1 id="exceptions">Machines with findings</h1><h2') } : section;
+    yield first ? { ...section, html: section.html.replace('<h2', `<h1 id="exceptions">${format.say('view.chapter.exceptions')}</h1><h2`) } : section;
     first = false;
   }
   const changed = record.machines.flatMap((m, i) => (m.previous_condition !== null && m.previous_condition !== m.condition ? [machines[i] as object] : []));
@@ -133,26 +133,27 @@ function byRank(machines: readonly RecordMachine[], order: readonly string[]): R
 }
 
 /** Chapters of the report; each id is that of a section. */
-function contentsOf(hasExceptions: boolean): { id: string; title: string }[] {
+function contentsOf(format: Format, hasExceptions: boolean): { id: string; title: string }[] {
   const chapters = [
-    ['manager', 'What to do first'], ['ranked', 'Ranked actions'], ['coverage', 'Coverage, accepted deviations, what changed'], ['machines', 'All machines'],
-    ...(hasExceptions ? [['exceptions', 'Machines with findings']] : []),
-    ['peer-check', 'Change of status, for the peer check'], ['method', 'Method, limits and policy'], ['people', 'People and instruments'], ['data', 'The data of this survey'], ['next', 'Due next'],
-    ['cautions', 'Cautions'],
+    ['manager', 'page.what_to_do_first'], ['ranked', 'page.ranked_actions'], ['coverage', 'view.chapter.coverage'], ['machines', 'page.all_machines'],
+    ...(hasExceptions ? [['exceptions', 'view.chapter.exceptions']] : []),
+    ['peer-check', 'page.peer_check'], ['method', 'page.method_limits_and_policy'], ['people', 'page.people_and_instruments'], ['data', 'page.the_data_of_this_survey'], ['next', 'page.due_next'],
+    ['cautions', 'page.cautions'],
   ] as const;
-  return chapters.map(([id = '', title = '']) => ({ id, title }));
+  return chapters.map(([id = '', key = '']) => ({ id, title: format.say(key) }));
 }
 
 /** The record, and the inputs while they are small enough together; else their hashes in the record must do. */
-function attachmentsOf(record: SwayfolioRecord, assets: Assets, recordText: string): PdfAttachment[] {
-  const files: PdfAttachment[] = [{ name: 'record.json', mime: 'application/json', description: 'The assessed record this report was made from', bytes: new TextEncoder().encode(recordText) }];
+function attachmentsOf(format: Format, assets: Assets, recordText: string): PdfAttachment[] {
+  const { record } = format;
+  const files: PdfAttachment[] = [{ name: 'record.json', mime: 'application/json', description: format.say('view.pdf.record'), bytes: new TextEncoder().encode(recordText) }];
   const total = record.inputs.reduce((sum, input) => sum + input.bytes, 0);
   if (total > MOST_ATTACHED_BYTES) return files;
   record.inputs.forEach((input, i) => {
     const bytes = assets.input(input.path);
     if (bytes === null) return;
     const end = /\.([a-z0-9]+)$/i.exec(input.path)?.[1]?.toLowerCase() ?? 'bin';
-    files.push({ name: `input-${String(i + 1).padStart(4, '0')}.${end}`, mime: end === 'csv' ? 'text/csv' : 'application/octet-stream', description: `Input ${input.path}`, bytes });
+    files.push({ name: `input-${String(i + 1).padStart(4, '0')}.${end}`, mime: end === 'csv' ? 'text/csv' : 'application/octet-stream', description: format.say('view.pdf.input', { path: input.path }), bytes });
   });
   return files;
 }

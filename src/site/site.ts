@@ -9,12 +9,14 @@ import type { Assets } from '../page/assets.ts';
 import { Charts, seriesId } from '../page/charts.ts';
 import { acceptedView, changesView, coverageView, methodView, noticesView, peopleView } from '../page/control.ts';
 import { exceptionView, photoFile } from '../page/exception.ts';
-import { Format, URGENCY_WORDS } from '../page/format.ts';
+import { Format } from '../page/format.ts';
 import { Templates } from '../page/handlebars.ts';
 import { governingMeasurement, machineView } from '../page/machines.ts';
 import { managerView, settledViews } from '../page/manager.ts';
+import { URGENCIES } from '../plant/types.ts';
 import type { RecordMachine, RecordMeasurement, SwayfolioRecord } from '../record/types.ts';
 import { type OutputFile, UserError } from '../shell/types.ts';
+import { naturalOrder } from '../words/natural.ts';
 import { withoutMetadata } from './photo.ts';
 import { inkStyles } from './style.ts';
 
@@ -27,12 +29,12 @@ export interface SiteOptions {
 }
 
 const PAGES = [
-  { href: 'index.html', label: 'What to do first' },
-  { href: 'actions.html', label: 'Actions' },
-  { href: 'machines.html', label: 'Machines' },
-  { href: 'coverage.html', label: 'Coverage' },
-  { href: 'method.html', label: 'Method and limits' },
-  { href: 'downloads.html', label: 'Downloads' },
+  { href: 'index.html', label: 'page.what_to_do_first' },
+  { href: 'actions.html', label: 'view.actions' },
+  { href: 'machines.html', label: 'page.machines' },
+  { href: 'coverage.html', label: 'page.coverage' },
+  { href: 'method.html', label: 'page.method_and_limits' },
+  { href: 'downloads.html', label: 'page.downloads' },
 ] as const;
 
 /** A drawing as markup that needs no escaping: svg.ts escapes its words, the rest of it is numbers. */
@@ -42,11 +44,11 @@ const svgOf = (charts: Charts, kind: string, m: RecordMeasurement, decorative = 
 export function* site(record: SwayfolioRecord, assets: Assets, options: SiteOptions): Iterable<OutputFile> {
   const format = new Format(record);
   const charts = new Charts(format);
-  const pages = new Pages(record, new Templates(assets.templates));
+  const pages = new Pages(format, new Templates(assets.templates, format.language));
   const only = options.machine;
   yield* furniture(record, assets, pages);
   if (only === undefined) yield* listPages(format, charts, pages, options);
-  else yield pages.page('index', 'index.html', 'What to do first', firstPage(format));
+  else yield pages.page('index', 'index.html', format.say('page.what_to_do_first'), firstPage(format));
   for (const machine of record.machines) if (only === undefined || machine.machine === only) yield machinePage(format, charts, pages, machine);
   for (const photo of record.survey.photos) {
     const bytes = only === undefined || photo.machine === only ? assets.picture(photo.path) : null;
@@ -55,26 +57,27 @@ export function* site(record: SwayfolioRecord, assets: Assets, options: SiteOpti
 }
 
 class Pages {
-  readonly #record: SwayfolioRecord;
+  readonly #format: Format;
   readonly templates: Templates;
 
-  constructor(record: SwayfolioRecord, templates: Templates) {
-    this.#record = record;
+  constructor(format: Format, templates: Templates) {
+    this.#format = format;
     this.templates = templates;
   }
 
   /** Throws UserError for a template of the plant's own that leaves out the cautions. */
   page(template: string, path: string, title: string, model: object): OutputFile {
-    const { plant, survey, issue, cautions, tool } = this.#record;
+    const format = this.#format;
+    const { plant, survey, issue, cautions, tool } = format.record;
     const up = '../'.repeat(path.split('/').length - 1);
     const html = this.templates.render(`site/${template}`, {
       language: plant.language,
       title,
       plant: plant.plant,
-      survey: survey.id,
-      status: issue === null ? 'draft, not issued' : `No. ${issue.number}, revision ${issue.revision}`,
+      survey: format.survey(survey.id),
+      status: issue === null ? format.say('view.draft.site') : format.say('view.revision', { number: issue.number, revision: issue.revision }),
       up,
-      nav: PAGES.map((p) => ({ ...p, isHere: p.href === path })),
+      nav: PAGES.map((p) => ({ href: p.href, label: format.say(p.label), isHere: p.href === path })),
       cautions,
       tool: `${tool.name} ${tool.version}`,
       ...model,
@@ -100,12 +103,12 @@ function* listPages(format: Format, charts: Charts, pages: Pages, options: SiteO
   const first = firstPage(format);
   const actions = rankedViews(format);
   const settled = settledViews(format);
-  yield pages.page('index', 'index.html', 'What to do first', first);
-  yield pages.page('actions', 'actions.html', 'Ranked actions', { actions, hasActions: actions.length > 0, settled, hasSettled: settled.length > 0 });
-  yield pages.page('machines', 'machines.html', 'Machines', machineList(format, charts));
-  yield pages.page('coverage', 'coverage.html', 'Coverage', { ...first, coverage: coverageView(format), accepted: acceptedView(format), changes: changesView(format), notices: noticesView(format) });
-  yield pages.page('method', 'method.html', 'Method and limits', { method: methodView(format), people: peopleView(format) });
-  yield pages.page('downloads', 'downloads.html', 'Downloads', { hasPdf: options.pdf, method: methodView(format) });
+  yield pages.page('index', 'index.html', format.say('page.what_to_do_first'), first);
+  yield pages.page('actions', 'actions.html', format.say('page.ranked_actions'), { actions, hasActions: actions.length > 0, settled, hasSettled: settled.length > 0 });
+  yield pages.page('machines', 'machines.html', format.say('page.machines'), machineList(format, charts));
+  yield pages.page('coverage', 'coverage.html', format.say('page.coverage'), { ...first, coverage: coverageView(format), accepted: acceptedView(format), changes: changesView(format), notices: noticesView(format) });
+  yield pages.page('method', 'method.html', format.say('page.method_and_limits'), { method: methodView(format), people: peopleView(format) });
+  yield pages.page('downloads', 'downloads.html', format.say('page.downloads'), { hasPdf: options.pdf, method: methodView(format) });
 }
 
 function machineList(format: Format, charts: Charts): object {
@@ -115,10 +118,11 @@ function machineList(format: Format, charts: Charts): object {
     const m = governingMeasurement(format, machine);
     return { ...view, svg: view.hasChart && m !== null ? svgOf(charts, 'sparkline', m, true) : '' };
   });
-  const areas = [...new Set(machines.map((m) => m.area).filter((a) => a !== ''))].sort();
+  const areas = [...new Set(machines.map((m) => m.area).filter((a) => a !== ''))].sort(naturalOrder);
   const order = ['D', 'r-D', 'C', 'r-C', 'B', 'r-B', 'A', 'r-A', 'none'];
-  const conditions = [...new Set(machines.map((m) => m.condition.mark))].sort((a, b) => order.indexOf(a) - order.indexOf(b));
-  return { machines, areas, conditions, urgencies: Object.values(URGENCY_WORDS).filter((u) => machines.some((m) => m.urgency === u)) };
+  const marks = [...new Set(machines.map((m) => m.condition.mark))].sort((a, b) => order.indexOf(a) - order.indexOf(b));
+  const conditions = marks.map((mark) => ({ mark, text: mark === 'none' ? format.term('not assessed') : mark }));
+  return { machines, areas, conditions, urgencies: URGENCIES.map((u) => format.urgency(u)).filter((u) => machines.some((m) => m.urgency === u)) };
 }
 
 function machinePage(format: Format, charts: Charts, pages: Pages, machine: RecordMachine): OutputFile {

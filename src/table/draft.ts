@@ -4,7 +4,8 @@
  */
 import type { RecordAction, RecordMeasurement, SwayfolioRecord } from '../record/types.ts';
 import { formatNumber } from '../words/numbers.ts';
-import { type Language, say } from '../words/say.ts';
+import { say } from '../words/say.ts';
+import type { Language } from '../words/sentences.ts';
 
 /** Cells by column name; `finding_text` is the second column `finding`. Columns that are not here stay blank: they are the analyst's. */
 export type DraftRow = Readonly<Record<string, string>> & { readonly finding: string };

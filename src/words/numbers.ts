@@ -2,7 +2,7 @@
  * Numbers in print (record.md, decision 13). In: a number and the limit beside it. Out: text by our own table of each
  * language, not by the runtime's. Never: fewer digits than it takes for reading and limit to differ.
  */
-import type { Language } from './say.ts';
+import type { Language } from './sentences.ts';
 
 const DECIMAL: Readonly<Record<Language, string>> = { en: '.', de: ',', es: ',', fr: ',' };
 const GROUP: Readonly<Record<Language, string>> = { en: '\u202f', de: '\u202f', es: '\u202f', fr: '\u202f' };

@@ -1,20 +1,10 @@
 /**
  * Sentences from facts. In: a language, a key, facts. Out: a sentence. Never: numbers or dates by the runtime's locale.
  */
-import assess from '../../templates/words/en/assess.json' with { type: 'json' };
-import chart from '../../templates/words/en/chart.json' with { type: 'json' };
-import common from '../../templates/words/en/common.json' with { type: 'json' };
-import draft from '../../templates/words/en/draft.json' with { type: 'json' };
-import limits from '../../templates/words/en/limits.json' with { type: 'json' };
-import page from '../../templates/words/en/page.json' with { type: 'json' };
-import units from '../../templates/words/en/units.json' with { type: 'json' };
 import type { Facts } from './facts.ts';
 import { formatNumber, plainNumber } from './numbers.ts';
-
-export type Language = 'en' | 'de' | 'es' | 'fr';
-
-/** Sentences by key; a language without a file of its own speaks English. */
-const SENTENCES: Readonly<Record<string, string>> = { ...common, ...units, ...chart, ...limits, ...assess, ...draft, ...page };
+import { type Language, sentenceOf } from './sentences.ts';
+import { formatDate, term, unitTerm } from './terms.ts';
 
 /** A sentence taken apart once: text, or a placeholder with its plural forms. */
 type Part = string | Placeholder;
@@ -28,6 +18,9 @@ interface Placeholder {
 }
 
 const parsed = new Map<string, readonly Part[]>();
+
+/** Facts whose value is a word of a closed list. */
+const TERM_FACTS: ReadonlySet<string> = new Set(['quantity', 'kind', 'support', 'place', 'basis', 'status', 'detection', 'limit_detection', 'closing', 'scope', 'condition']);
 
 /** `{name}`, `{name:plain}` or `{name|one|many}`, where the forms may hold placeholders of their own. */
 function parse(sentence: string): readonly Part[] {
@@ -62,19 +55,16 @@ function placeholder(inside: string): Part {
   return { name: inside.slice(0, bar), plain: false, one: parse(forms.slice(0, second)), many: parse(forms.slice(second + 1)) };
 }
 
-export const hasSentence = (_language: Language, key: string): boolean => Object.hasOwn(SENTENCES, key);
-
 /**
  * The sentence of `key` with its placeholders filled from facts: numbers by the language's own number form, null as the
  * language's word for unknown. Throws (a bug) on a key that does not exist or a fact that was not given.
  */
 export function say(language: Language, key: string, facts: Facts = {}): string {
-  let parts = parsed.get(key);
+  const id = `${language} ${key}`;
+  let parts = parsed.get(id);
   if (parts === undefined) {
-    const sentence = SENTENCES[key];
-    if (sentence === undefined || !Object.hasOwn(SENTENCES, key)) throw new Error(`There is no sentence "${key}".`);
-    parts = parse(sentence);
-    parsed.set(key, parts);
+    parts = parse(sentenceOf(language, key));
+    parsed.set(id, parts);
   }
   return fill(language, key, parts, facts);
 }
@@ -86,22 +76,27 @@ function fill(language: Language, key: string, parts: readonly Part[], facts: Fa
     else {
       const value = facts[part.name];
       if (value === undefined) throw new Error(`The sentence "${key}" names the fact "${part.name}", which was not given.`);
-      text += part.one === null || part.many === null ? (part.plain && typeof value === 'number' ? plainNumber(language, value) : factText(language, value)) : fill(language, key, value === 1 ? part.one : part.many, facts);
+      text += part.one === null || part.many === null ? (part.plain && typeof value === 'number' ? plainNumber(language, value) : factText(language, value, part.name)) : fill(language, key, value === 1 ? part.one : part.many, facts);
     }
   }
   return text;
 }
 
-function factText(language: Language, value: Facts[string]): string {
-  if (value === null) return SENTENCES['common.unknown'] ?? 'unknown';
+function factText(language: Language, value: Facts[string], name: string): string {
+  if (value === null) return sentenceOf(language, 'common.unknown');
   if (typeof value === 'number') return formatNumber(language, value);
-  if (typeof value === 'string') return value;
-  if (typeof value === 'boolean') return (value ? SENTENCES['common.yes'] : SENTENCES['common.no']) ?? String(value);
-  return listText(value.map((item) => factText(language, item)));
+  if (typeof value === 'string') return wordText(language, value, name);
+  if (typeof value === 'boolean') return sentenceOf(language, value ? 'common.yes' : 'common.no');
+  return listText(language, value.map((item) => factText(language, item, name)));
+}
+
+function wordText(language: Language, value: string, name: string): string {
+  if (TERM_FACTS.has(name)) return term(language, value);
+  return name === 'unit' ? unitTerm(language, value) : formatDate(language, value);
 }
 
 /** a; a and b; a, b and c. */
-export function listText(items: readonly string[]): string {
+export function listText(language: Language, items: readonly string[]): string {
   if (items.length < 2) return items[0] ?? '';
-  return `${items.slice(0, -1).join(', ')} ${SENTENCES['common.and'] ?? 'and'} ${items[items.length - 1]}`;
+  return `${items.slice(0, -1).join(', ')} ${sentenceOf(language, 'common.and')} ${items[items.length - 1]}`;
 }

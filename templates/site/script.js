@@ -25,20 +25,21 @@
       row.hidden = !fits;
       if (fits) shown += 1;
     });
-    count.textContent = shown + ' of ' + rows.length;
+    count.textContent = shown + ' ' + count.getAttribute('data-of') + ' ' + rows.length;
   }
 
   fields.forEach(function (field) { field.addEventListener('input', apply); });
   form.addEventListener('submit', function (event) { event.preventDefault(); });
 
   var CONDITIONS = ['D', 'r-D', 'C', 'r-C', 'B', 'r-B', 'A', 'r-A', 'none'];
-  var URGENCIES = ['Act now', 'Within a week', 'Within a month', 'Next planned stop', 'Watch', '\u2013'];
+  /* The most urgent first, as the filter lists them; a dash last. */
+  var URGENCIES = Array.prototype.map.call(document.getElementById('f-urgency').options, function (option) { return option.value; }).slice(1).concat('\u2013');
   function key(row, column) {
     if (column === 1) return CONDITIONS.indexOf(row.getAttribute('data-c'));
     if (column === 2) return URGENCIES.indexOf(row.getAttribute('data-u'));
     var content = row.cells[column].textContent.trim();
     if (column === 6 || column === 7) {
-      var number = parseFloat(content.replace('\u2212', '-').replace(/[^\d.+-]/, ''));
+      var number = parseFloat(content.replace('\u2212', '-').replace(/\u202f/g, '').replace(',', '.').replace(/[^\d.+-]/, ''));
       return isNaN(number) ? -Infinity : number;
     }
     return content;

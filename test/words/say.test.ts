@@ -2,7 +2,8 @@ import { readdirSync, readFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { describe, expect, it } from 'vitest';
-import { hasSentence, listText, say } from '../../src/words/say.ts';
+import { listText, say } from '../../src/words/say.ts';
+import { hasSentence } from '../../src/words/sentences.ts';
 
 const home = fileURLToPath(new URL('../../templates/words/en', import.meta.url));
 const files = readdirSync(home).map((name) => ({ name, sentences: JSON.parse(readFileSync(join(home, name), 'utf8')) as Record<string, string> }));
@@ -12,7 +13,7 @@ const factsOf = (sentence: string): string[] => [...sentence.matchAll(/\{([A-Za-
 
 describe('sentences', () => {
   it('lists are joined as a person writes them', () => {
-    expect([[], ['a'], ['a', 'b'], ['a', 'b', 'c']].map(listText)).toEqual(['', 'a', 'a and b', 'a, b and c']);
+    expect([[], ['a'], ['a', 'b'], ['a', 'b', 'c']].map((items) => listText('en', items))).toEqual(['', 'a', 'a and b', 'a, b and c']);
   });
 
   it('an unknown key, also one of every object, and a missing fact are bugs', () => {

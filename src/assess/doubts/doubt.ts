@@ -3,7 +3,8 @@
  * Never: a changed value.
  */
 import type { Doubt, DoubtKind, Facts } from '../../record/types.ts';
-import { type Language, say } from '../../words/say.ts';
+import { say } from '../../words/say.ts';
+import type { Language } from '../../words/sentences.ts';
 import { median } from '../statistics/median.ts';
 import type { Look } from '../track.ts';
 

@@ -1,0 +1,27 @@
+/** Sentences by language and key: templates/words/<language>/*.json. A test holds that each language has the same keys and facts. */
+import enAssess from '../../templates/words/en/assess.json' with { type: 'json' };
+import enChart from '../../templates/words/en/chart.json' with { type: 'json' };
+import enCommon from '../../templates/words/en/common.json' with { type: 'json' };
+import enDraft from '../../templates/words/en/draft.json' with { type: 'json' };
+import enLimits from '../../templates/words/en/limits.json' with { type: 'json' };
+import enPage from '../../templates/words/en/page.json' with { type: 'json' };
+import enTerms from '../../templates/words/en/terms.json' with { type: 'json' };
+import enView from '../../templates/words/en/view.json' with { type: 'json' };
+
+export const LANGUAGES = ['en', 'de', 'es', 'fr'] as const;
+export type Language = (typeof LANGUAGES)[number];
+
+type Sentences = Readonly<Record<string, string>>;
+
+const EN: Sentences = { ...enCommon, ...enTerms, ...enChart, ...enLimits, ...enAssess, ...enDraft, ...enPage, ...enView };
+
+const BY_LANGUAGE: Readonly<Record<Language, Sentences>> = { en: EN, de: EN, es: EN, fr: EN };
+
+export const hasSentence = (language: Language, key: string): boolean => Object.hasOwn(BY_LANGUAGE[language], key);
+
+/** Throws (a bug) for a key that does not exist. */
+export function sentenceOf(language: Language, key: string): string {
+  const sentence = BY_LANGUAGE[language][key];
+  if (sentence === undefined || !hasSentence(language, key)) throw new Error(`There is no sentence "${key}".`);
+  return sentence;
+}
