@@ -144,13 +144,16 @@ export function swappedPoints(context: Context, survey: number): void {
   }
 }
 
-/** swapped-machines: the same for two machines read at the same points, two or more of them. */
+/**
+ * swapped-machines: the same for two machines read at the same points, two or more of them; half the gain a
+ * reading, which makes the whole of it on each machine's sum, and which scatter alone does not reach.
+ */
 export function swappedMachines(context: Context, survey: number): void {
   const { policy, plant } = context;
   const gain = policy['7.swapped.gain'];
   const machines = [...context.byMachine.values()]
     .map((tracks) => awayOf(seenOn(tracks, survey)))
-    .filter((list) => list.length >= 2 && reaches(list.reduce((sum, s) => sum + away(s.look.value, s.before), 0) / list.length, gain));
+    .filter((list) => list.length >= 2 && reaches(list.reduce((sum, s) => sum + away(s.look.value, s.before), 0) / list.length, gain / 2));
   machines.forEach((first, i) => {
     for (const second of machines.slice(i + 1)) {
       const pairs = first.flatMap((a) => {
@@ -161,7 +164,8 @@ export function swappedMachines(context: Context, survey: number): void {
       const mean = (of: (a: Away, b: Away) => number): number => pairs.reduce((sum, [a, b]) => sum + of(a, b), 0) / pairs.length;
       const [nowA, nowB] = [mean((a) => away(a.look.value, a.before)), mean((_, b) => away(b.look.value, b.before))];
       const [thenA, thenB] = [mean((a, b) => away(b.look.value, a.before)), mean((a, b) => away(a.look.value, b.before))];
-      if (!reaches(nowA - thenA, gain) || !reaches(nowB - thenB, gain) || exceeds(2 * (thenA + thenB), nowA + nowB)) continue;
+      const least = gain / 2;
+      if (!reaches(nowA - thenA, least) || !reaches(nowB - thenB, least) || exceeds(2 * (thenA + thenB), nowA + nowB)) continue;
       for (const [a, b] of pairs) {
         const facts = { machine: a.track.machine.id, other: b.track.machine.id };
         for (const s of [a, b]) s.look.doubts.push(doubt(plant.settings.language, 'swapped-machines', 're-measure', facts));
