@@ -1,4 +1,12 @@
 /** Sentences by language and key: templates/words/<language>/*.json. A test holds that each language has the same keys and facts. */
+import deAssess from '../../templates/words/de/assess.json' with { type: 'json' };
+import deChart from '../../templates/words/de/chart.json' with { type: 'json' };
+import deCommon from '../../templates/words/de/common.json' with { type: 'json' };
+import deDraft from '../../templates/words/de/draft.json' with { type: 'json' };
+import deLimits from '../../templates/words/de/limits.json' with { type: 'json' };
+import dePage from '../../templates/words/de/page.json' with { type: 'json' };
+import deTerms from '../../templates/words/de/terms.json' with { type: 'json' };
+import deView from '../../templates/words/de/view.json' with { type: 'json' };
 import enAssess from '../../templates/words/en/assess.json' with { type: 'json' };
 import enChart from '../../templates/words/en/chart.json' with { type: 'json' };
 import enCommon from '../../templates/words/en/common.json' with { type: 'json' };
@@ -14,8 +22,9 @@ export type Language = (typeof LANGUAGES)[number];
 type Sentences = Readonly<Record<string, string>>;
 
 const EN: Sentences = { ...enCommon, ...enTerms, ...enChart, ...enLimits, ...enAssess, ...enDraft, ...enPage, ...enView };
+const DE: Sentences = { ...deCommon, ...deTerms, ...deChart, ...deLimits, ...deAssess, ...deDraft, ...dePage, ...deView };
 
-const BY_LANGUAGE: Readonly<Record<Language, Sentences>> = { en: EN, de: EN, es: EN, fr: EN };
+const BY_LANGUAGE: Readonly<Record<Language, Sentences>> = { en: EN, de: { ...EN, ...DE }, es: EN, fr: EN };
 
 export const hasSentence = (language: Language, key: string): boolean => Object.hasOwn(BY_LANGUAGE[language], key);
 
