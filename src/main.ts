@@ -8,16 +8,18 @@ import yargs, { type Argv } from 'yargs';
 import { check } from './commands/check.ts';
 import type { Argument, Arguments, Command, Context, ExitCode } from './commands/command.ts';
 import { draft } from './commands/draft.ts';
+import { issue } from './commands/issue.ts';
 import { limits } from './commands/limits.ts';
 import { newCommand } from './commands/new.ts';
 import { printable } from './commands/problems.ts';
 import { render } from './commands/render.ts';
 import { report } from './commands/report.ts';
 import { packageVersion } from './shell/package.ts';
+import { verify } from './commands/verify.ts';
 import { realShell } from './shell/shell.ts';
 import { UserError } from './shell/types.ts';
 
-const COMMANDS: readonly Command[] = [newCommand, check, draft, report, render, limits];
+const COMMANDS: readonly Command[] = [newCommand, check, draft, report, issue, verify, render, limits];
 
 async function run(words: readonly string[], context: Context): Promise<ExitCode> {
   let code: ExitCode = 0;
@@ -36,7 +38,7 @@ async function run(words: readonly string[], context: Context): Promise<ExitCode
     });
   for (const command of COMMANDS) {
     parser.command(command.usage, command.describe, (options) => declare(options, command), async (given) => {
-      const known = Object.keys({ ...command.positionals, ...command.options });
+      const known = Object.entries({ ...command.positionals, ...command.options }).filter(([, argument]) => argument.array !== true).map(([name]) => name);
       code = await command.run(oneValueEach(given, known), context);
     });
   }
@@ -45,7 +47,7 @@ async function run(words: readonly string[], context: Context): Promise<ExitCode
 }
 
 function declare(parser: Argv, command: Command): Argv {
-  const required = (name: string): boolean => command.usage.includes(`<${name}>`);
+  const required = (name: string): boolean => command.usage.includes(`<${name}>`) || command.usage.includes(`<${name}..>`);
   for (const [name, argument] of Object.entries(command.positionals)) parser.positional(name, { ...argument, demandOption: required(name) });
   return parser.options(command.options as { readonly [name: string]: Argument });
 }

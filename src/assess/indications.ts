@@ -3,6 +3,7 @@
  * at the current survey. Out: the rules that fit, with their numbers and the confirming test. Never: where nobody with a
  * diagnosing category signs the survey.
  */
+import { diagnoses } from '../plant/survey.ts';
 import type { Facts, Indication, Trend } from '../record/types.ts';
 import { say } from '../words/say.ts';
 import { carriesRatio } from './baseline.ts';
@@ -13,10 +14,7 @@ import { bearingOf, type Verdict } from './level.ts';
 import { median } from './statistics/median.ts';
 import { type Context, componentRow, doubtedHigh, doubtedLow, type Look, pointRow, type Track } from './track.ts';
 
-/** ISO 18436-2 category II or above. */
-const DIAGNOSING = /\b(?:IV|III|II)\b|\bcat(?:egory|\.)?\s*[234]\b/i;
-
-export const isDiagnosed = (context: Context): boolean => (context.plant.surveys[context.current]?.people ?? []).some((p) => p.category !== null && DIAGNOSING.test(p.category));
+export const isDiagnosed = (context: Context): boolean => (context.plant.surveys[context.current]?.people ?? []).some((p) => diagnoses(p.category));
 
 interface Read {
   readonly track: Track;

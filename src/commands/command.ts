@@ -12,6 +12,8 @@ export interface Argument {
   readonly type: 'string' | 'boolean';
   readonly default?: boolean;
   readonly demandOption?: boolean;
+  /** A list: the positional stands as `<name..>`. */
+  readonly array?: boolean;
 }
 
 /** Every argument of every command; which of them may stand is each command's own table. */
@@ -19,8 +21,12 @@ export interface Arguments {
   readonly folder?: string | undefined;
   readonly plant?: string | undefined;
   readonly record?: string | undefined;
+  readonly issued?: readonly string[] | undefined;
   readonly id?: string | undefined;
   readonly survey?: string | undefined;
+  readonly reason?: string | undefined;
+  readonly sign?: string | undefined;
+  readonly key?: string | undefined;
   readonly out?: string | undefined;
   readonly machine?: string | undefined;
   readonly brief?: boolean | undefined;

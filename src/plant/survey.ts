@@ -39,6 +39,12 @@ export interface Sensor {
   readonly calibrationDue: Day | null;
 }
 
+/** ISO 18436-2 category II or above. */
+const DIAGNOSING = /\b(?:IV|III|II)\b|\bcat(?:egory|\.)?\s*[234]\b/i;
+
+/** Whether a person of this category may state what a machine suffers from. */
+export const diagnoses = (category: string | null): boolean => category !== null && DIAGNOSING.test(category);
+
 export interface Notice {
   readonly who: string;
   readonly when: string | null;

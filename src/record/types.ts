@@ -25,6 +25,8 @@ export interface Issue {
   readonly replaces: string | null;
   readonly reason: string | null;
   readonly previous_manifest: string | null;
+  /** What changed since the issue it replaces, a line a change; absent in a first issue. */
+  readonly changes?: readonly string[];
 }
 
 /** plant.yaml as the report needs it. */

@@ -26,6 +26,29 @@ function walk(root: string, below: string, found: { files: string[]; refused: st
   }
 }
 
+/** What an auditor must see: no name is passed over, no link followed. */
+export function listEverything(folder: string): { files: string[]; others: string[] } {
+  const found = { files: [] as string[], others: [] as string[] };
+  const walkAll = (below: string): void => {
+    const entries = readdirSync(join(folder, below), { withFileTypes: true });
+    if (entries.length === 0) found.others.push(below === '' ? '.' : below);
+    for (const entry of entries) {
+      const path = below === '' ? entry.name : `${below}/${entry.name}`;
+      if (entry.isDirectory()) walkAll(path);
+      else (entry.isFile() ? found.files : found.others).push(path);
+    }
+  };
+  walkAll('');
+  found.files.sort(byCodeUnit);
+  found.others.sort(byCodeUnit);
+  return found;
+}
+
+export function foldersIn(folder: string): string[] {
+  if (!existsSync(folder)) return [];
+  return readdirSync(folder, { withFileTypes: true }).filter((entry) => entry.isDirectory()).map((entry) => entry.name).sort(byCodeUnit);
+}
+
 /** A file, or a link to a file of this same folder; pipes, sockets and links to folders are neither (a loop, or a wait without end). */
 function isOwnFile(root: string, path: string, entry: Dirent): boolean {
   if (entry.isFile()) return true;

@@ -133,7 +133,7 @@ const DISK_TROUBLE: Readonly<Record<string, string>> = {
   EEXIST: 'a part of the path is a file', ENOTEMPTY: 'another run wrote it meanwhile', ENOENT: 'another run took it away meanwhile',
 };
 
-function asUserError(error: unknown, out: string, hint = 'Nothing was changed; name another folder by --out.'): unknown {
+export function asUserError(error: unknown, out: string, hint = 'Nothing was changed; name another folder by --out.'): unknown {
   const why = DISK_TROUBLE[(error as NodeJS.ErrnoException).code ?? ''];
   return why === undefined ? error : new UserError(`Cannot write ${out}: ${why}.`, hint);
 }

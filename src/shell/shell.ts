@@ -1,7 +1,8 @@
 /** The real Shell: disk, clock and terminal of this process. In: calls. Out: effects. Never decides anything about the survey. */
 import { existsSync, readFileSync, statSync } from 'node:fs';
 import { resolve } from 'node:path';
-import { listFiles } from './list.ts';
+import { claimArchive } from './archive.ts';
+import { foldersIn, listEverything, listFiles } from './list.ts';
 import { claimFolder, createFolder, replaceFile, replaceFolder } from './replace.ts';
 import { type Shell, UserError } from './types.ts';
 
@@ -23,6 +24,8 @@ function orUserError<T>(path: string, access: () => T): T {
 
 export const realShell: Shell = {
   list: (folder) => orUserError(folder, () => listFiles(folder)),
+  listAll: (folder) => orUserError(folder, () => listEverything(folder)),
+  folders: (folder) => orUserError(folder, () => foldersIn(folder)),
   read: (path) => orUserError(path, () => {
     if (!statSync(path).isFile()) throw new UserError(`Cannot read ${path}: it is no file.`, 'Name a file.');
     return readFileSync(path);
@@ -32,6 +35,7 @@ export const realShell: Shell = {
   claimFolder: (out) => void claimFolder(out),
   replaceFolder,
   createFolder,
+  claimArchive: (folder) => claimArchive(folder),
   replaceFile,
   today: () => new Date().toISOString().slice(0, 10),
   stdout: (text) => void process.stdout.write(text),
