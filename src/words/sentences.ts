@@ -15,6 +15,22 @@ import enLimits from '../../templates/words/en/limits.json' with { type: 'json' 
 import enPage from '../../templates/words/en/page.json' with { type: 'json' };
 import enTerms from '../../templates/words/en/terms.json' with { type: 'json' };
 import enView from '../../templates/words/en/view.json' with { type: 'json' };
+import esAssess from '../../templates/words/es/assess.json' with { type: 'json' };
+import esChart from '../../templates/words/es/chart.json' with { type: 'json' };
+import esCommon from '../../templates/words/es/common.json' with { type: 'json' };
+import esDraft from '../../templates/words/es/draft.json' with { type: 'json' };
+import esLimits from '../../templates/words/es/limits.json' with { type: 'json' };
+import esPage from '../../templates/words/es/page.json' with { type: 'json' };
+import esTerms from '../../templates/words/es/terms.json' with { type: 'json' };
+import esView from '../../templates/words/es/view.json' with { type: 'json' };
+import frAssess from '../../templates/words/fr/assess.json' with { type: 'json' };
+import frChart from '../../templates/words/fr/chart.json' with { type: 'json' };
+import frCommon from '../../templates/words/fr/common.json' with { type: 'json' };
+import frDraft from '../../templates/words/fr/draft.json' with { type: 'json' };
+import frLimits from '../../templates/words/fr/limits.json' with { type: 'json' };
+import frPage from '../../templates/words/fr/page.json' with { type: 'json' };
+import frTerms from '../../templates/words/fr/terms.json' with { type: 'json' };
+import frView from '../../templates/words/fr/view.json' with { type: 'json' };
 
 export const LANGUAGES = ['en', 'de', 'es', 'fr'] as const;
 export type Language = (typeof LANGUAGES)[number];
@@ -23,8 +39,10 @@ type Sentences = Readonly<Record<string, string>>;
 
 const EN: Sentences = { ...enCommon, ...enTerms, ...enChart, ...enLimits, ...enAssess, ...enDraft, ...enPage, ...enView };
 const DE: Sentences = { ...deCommon, ...deTerms, ...deChart, ...deLimits, ...deAssess, ...deDraft, ...dePage, ...deView };
+const ES: Sentences = { ...esCommon, ...esTerms, ...esChart, ...esLimits, ...esAssess, ...esDraft, ...esPage, ...esView };
+const FR: Sentences = { ...frCommon, ...frTerms, ...frChart, ...frLimits, ...frAssess, ...frDraft, ...frPage, ...frView };
 
-const BY_LANGUAGE: Readonly<Record<Language, Sentences>> = { en: EN, de: { ...EN, ...DE }, es: EN, fr: EN };
+const BY_LANGUAGE: Readonly<Record<Language, Sentences>> = { en: EN, de: { ...EN, ...DE }, es: { ...EN, ...ES }, fr: { ...EN, ...FR } };
 
 export const hasSentence = (language: Language, key: string): boolean => Object.hasOwn(BY_LANGUAGE[language], key);
 
