@@ -35,8 +35,7 @@ export function problemText(problems: readonly Problem[]): string {
 }
 
 function linesOf(problem: Problem): readonly string[] {
-  const place = [problem.file === '' ? '.' : problem.file, problem.line, problem.line === null ? null : problem.column].filter((part) => part !== null).join(':');
-  const first = `${place}: ${problem.code} ${problem.message}`;
+  const first = `${placeOf(problem)}: ${problem.code} ${problem.message}`;
   return problem.hint === null ? [first] : [first, `  ${problem.severity === 'error' ? 'mend' : 'hint'}: ${problem.hint}`];
 }
 
@@ -47,6 +46,17 @@ export function countText(counts: ProblemCounts): string {
     .map(([word, count]) => `${count} ${word}${count === 1 ? '' : 's'}`);
   return parts.length === 0 ? 'no problems' : parts.join(', ');
 }
+
+/** The last line of `check`: what to do now. */
+export function nextStep(folder: string, problems: readonly Problem[]): string {
+  const errors = problems.filter((problem) => problem.severity === 'error');
+  const [first] = errors;
+  if (first === undefined) return printable(`Next: ${problems.some((problem) => problem.severity === 'warning') ? 'read the warnings above, which the report will print too, then run' : 'run'}: swayfolio report ${folder}`);
+  const others = errors.length === 1 ? '' : ` and the ${errors.length - 1} after it`;
+  return printable(`Next: mend ${placeOf(first)}${others}, then run again: swayfolio check ${folder}`);
+}
+
+const placeOf = (problem: Problem): string => [problem.file === '' ? '.' : problem.file, problem.line, problem.line === null ? null : problem.column].filter((part) => part !== null).join(':');
 
 /** Input may hold control characters: on a terminal they would move the cursor or ring. */
 export function printable(text: string): string {

@@ -5,8 +5,9 @@
 import { nearestWord } from '../measure/nearest.ts';
 import { type Day, parseDay } from '../plant/day.ts';
 import type { Place } from '../plant/problem.ts';
-import { lineAt, type Table } from './csv.ts';
+import { columnAt, lineAt, type Table } from './csv.ts';
 import type { Problems } from './problems.ts';
+import { bothReadings, type ColumnSign, columnSign, plainForm } from './signs.ts';
 import { cellText } from './text.ts';
 
 const NUMBER = /^[+-]?(?:\d+(?:\.\d*)?|\.\d+)(?:[eE][+-]?\d+)?$/;
@@ -34,6 +35,7 @@ export class Cells {
   readonly #problems: Problems;
   #row: readonly string[] = [];
   #index = -1;
+  readonly #signs = new Map<string, ColumnSign>();
 
   constructor(table: Table, problems: Problems) {
     this.table = table;
@@ -54,11 +56,16 @@ export class Cells {
 
   /** An error at a column of this row. */
   error(code: string, column: string, message: string, hint: string | null = null): void {
-    this.#problems.error(code, { ...this.place, column: this.table.column(column) + 1 || null }, message, hint);
+    this.#problems.error(code, this.at(column), message, hint);
+  }
+
+  /** Where a cell of this row stands. */
+  at(column: string): Place & { readonly column: number | null } {
+    return { ...this.place, column: columnAt(this.table, this.#index, column) };
   }
 
   warn(code: string, column: string, message: string, hint: string | null = null): void {
-    this.#problems.add('warning', code, { ...this.place, column: this.table.column(column) + 1 || null }, message, hint);
+    this.#problems.add('warning', code, this.at(column), message, hint);
   }
 
   text(column: string): string | null {
@@ -76,7 +83,8 @@ export class Cells {
   number(column: string, least: number | null = null): number | null {
     const text = this.text(column);
     if (text === null) return null;
-    const value = plainNumber(text);
+    const value = this.plain(column, text);
+    if (value === 'doubt') return null;
     if (typeof value === 'string') {
       const [what, hint] = NUMBER_FAULTS[value];
       this.error('bad-number', column, `"${column}" ${what}: ${text}.`, hint);
@@ -87,6 +95,35 @@ export class Cells {
       return null;
     }
     return value;
+  }
+
+  /** The number of a text that stands in a column, by the decimal sign of the whole column; `doubt` where that has two readings, told once. */
+  plain(column: string, text: string): number | NumberFault | 'doubt' {
+    if (this.table.decimal === 'dot') {
+      const value = plainNumber(text);
+      return typeof value === 'string' ? plainNumber(plainForm(text, 'dot')) : value;
+    }
+    const found = this.table.decimal === 'comma' ? { sign: 'comma' as const } : this.#signOf(column);
+    if ('sign' in found) return plainNumber(plainForm(text, found.sign));
+    if (found.doubt === 'mixed') return plainNumber(text);
+    const line = lineAt(this.table, found.row);
+    this.#problems.error('decimal-sign', { file: this.table.file, line, column: columnAt(this.table, found.row, column) }, `The column "${column}" reads two ways: ${bothReadings(found.text)}.`, 'State decimal: comma or decimal: dot for this file in the import section of plant.yaml.');
+    return 'doubt';
+  }
+
+  /** The text of a number in the plain form, where its column has one reading. */
+  plainText(column: string, text: string): string {
+    const found = this.table.decimal === null ? this.#signOf(column) : { sign: this.table.decimal };
+    return 'sign' in found ? plainForm(text, found.sign) : text;
+  }
+
+  #signOf(column: string): ColumnSign {
+    const kept = this.#signs.get(column);
+    if (kept !== undefined) return kept;
+    const at = this.table.column(column);
+    const found = columnSign(this.table.rows.map((row) => row[at] ?? ''), this.table.foreign);
+    this.#signs.set(column, found);
+    return found;
   }
 
   day(column: string): Day | null {

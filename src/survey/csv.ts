@@ -1,10 +1,11 @@
 /**
  * CSV files as tables. In: bytes. Out: a header and rows of text with the line each begins on. Never: a value converted,
- * a delimiter guessed, a row dropped.
+ * a delimiter guessed where two fit, a row dropped.
  */
 import { CsvError, parse } from 'csv-parse/sync';
 import { nearestWord } from '../measure/nearest.ts';
-import type { Problems } from './problems.ts';
+import { Problems } from './problems.ts';
+import type { DecimalSign } from './signs.ts';
 import { textOf } from './text.ts';
 
 export interface Table {
@@ -15,6 +16,17 @@ export interface Table {
   readonly lines: readonly number[] | null;
   /** Index of a column by name; −1 where it is not there. */
   column(name: string): number;
+  /** The decimal sign where the file's form or its mapping settles it; null: each column tells its own. */
+  readonly decimal: DecimalSign | null;
+  /** Not in the plain form: a lone dot may part thousands. */
+  readonly foreign: boolean;
+  /** 1-based column of the file that a cell came from, where columns were mapped. */
+  readonly from?: (row: number, name: string) => number | null;
+}
+
+/** 1-based column of the file that a cell of row i stands in; null where there is none. */
+export function columnAt(table: Table, row: number, name: string): number | null {
+  return table.from === undefined ? table.column(name) + 1 || null : table.from(row, name);
 }
 
 /** Line of a row: tables without quoted line ends need no list, row i stands on line i + 2. */
@@ -35,20 +47,36 @@ export function readTable(
     problems.error('empty-file', { file, line: null }, 'The file is empty.', `Its first line names the columns: ${required.join(', ')}.`);
     return null;
   }
-  const records = recordsOf(file, text, problems);
+  const plain = recordsOf(file, text, ',', problems);
+  if (plain === null) return null;
+  const other = otherDelimiter(file, text, plain[0] ?? [], required);
+  const records = other === null ? plain : recordsOf(file, text, other, problems);
   if (records === null) return null;
   const header = named((records[0] ?? []).map((name) => name.normalize('NFC').trim()));
   if (!headerIsSound(file, header, known, required, problems)) return null;
   const lines = linesOf(text, records);
   const at = new Map(header.map((name, i) => [name, i]));
   const { rows, rowLines } = wholeRows(file, records, lines, header.length, problems);
-  return { file, header, rows, lines: rowLines, column: (name) => at.get(name) ?? -1 };
+  // Without a quote no cell of a comma separated file can hold a comma: nothing is to be looked for.
+  const decimal = other === null && !text.includes('"') ? 'dot' : null;
+  return { file, header, rows, lines: rowLines, column: (name) => at.get(name) ?? -1, decimal, foreign: other !== null };
 }
 
-function recordsOf(file: string, text: string, problems: Problems): string[][] | null {
+/** The sign that parts a first line of one field into every column that must be there; null where none or more than one does. */
+function otherDelimiter(file: string, text: string, first: readonly string[], required: readonly string[]): string | null {
+  if (first.length !== 1 || required.length === 0) return null;
+  const end = /[\r\n]/.exec(text)?.index ?? text.length;
+  const fitting = [';', '\t', '|'].filter((sign) => {
+    const names = recordsOf(file, text.slice(0, end), sign, new Problems())?.[0]?.map((name) => name.normalize('NFC').trim()) ?? [];
+    return names.length > 1 && required.every((name) => names.includes(name));
+  });
+  return fitting.length === 1 ? (fitting[0] as string) : null;
+}
+
+export function recordsOf(file: string, text: string, delimiter: string, problems: Problems): string[][] | null {
   try {
     // A quote inside a field that does not begin with one is an inch sign or a second of arc, not a fault.
-    return parse(text, { relax_column_count: true, relax_quotes: true, skip_empty_lines: false }) as string[][];
+    return parse(text, { relax_column_count: true, relax_quotes: true, skip_empty_lines: false, delimiter, ...(text.includes('\r') ? { record_delimiter: ['\r\n', '\n', '\r'] } : {}) }) as string[][];
   } catch (error) {
     if (!(error instanceof CsvError)) throw error;
     const line = typeof error['lines'] === 'number' ? error['lines'] : null;
@@ -59,14 +87,14 @@ function recordsOf(file: string, text: string, problems: Problems): string[][] |
 }
 
 /** Line of each record, header included; null when every record is one line. */
-function linesOf(text: string, records: readonly (readonly string[])[]): number[] | null {
+export function linesOf(text: string, records: readonly (readonly string[])[]): number[] | null {
   if (!text.includes('"')) return null;
   const lines: number[] = [];
   let line = 1;
   for (const record of records) {
     lines.push(line);
     line += 1;
-    for (const field of record) if (field.includes('\n')) line += field.split('\n').length - 1;
+    for (const field of record) if (/[\r\n]/.test(field)) line += field.split(/\r\n|\n|\r/).length - 1;
   }
   return lines;
 }

@@ -2,6 +2,7 @@
  * Ids and their renames. In: an id as typed, its day. Out: the id of today, or null with the nearest as a hint.
  */
 import { nearestWord } from '../measure/nearest.ts';
+import { likelyOriginal } from './damaged.ts';
 import type { Day } from '../plant/day.ts';
 import type { Rename } from '../plant/types.ts';
 import type { Problems } from './problems.ts';
@@ -47,6 +48,11 @@ function follow(id: string, day: Day | null, exists: (id: string) => boolean, re
 /** Tells an id that nothing bears. */
 export function tellUnknown(problems: Problems, place: { readonly file: string; readonly line: number; readonly column: number | null }, what: 'machine' | 'point' | 'component', id: string, where: string, known: readonly string[]): void {
   const near = nearestWord(id, known);
+  const original = likelyOriginal(id, known);
+  if (original !== null) {
+    problems.error(`unknown-${what}`, place, `There is no ${what} "${id}" ${where}.`, `A spreadsheet makes "${id}" of "${original}": that is the likely original. Write it back, and keep the column as text.`);
+    return;
+  }
   problems.error(`unknown-${what}`, place, `There is no ${what} "${id}" ${where}.`, near === null ? `Add it there, or mend the id.` : `The nearest is "${near}".`);
 }
 

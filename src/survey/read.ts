@@ -28,6 +28,8 @@ export class Folder {
   readonly #shell: ReadingShell;
   readonly #folder: string;
   readonly problems: Problems;
+  /** First file of readings by its hash. */
+  readonly #readings = new Map<string, string>();
 
   constructor(shell: ReadingShell, folder: string, problems: Problems) {
     this.#shell = shell;
@@ -39,6 +41,17 @@ export class Folder {
     const bytes = this.#shell.read(`${this.#folder}/${path}`);
     this.inputs.push({ path, bytes: bytes.length, sha256: createHash('sha256').update(bytes).digest('hex') });
     return bytes;
+  }
+
+  /** True, with a problem, where a file of readings is byte for byte another one that was read before. */
+  isTwin(path: string): boolean {
+    const own = this.inputs.find((input) => input.path === path);
+    if (own === undefined || own.bytes === 0) return false;
+    const twin = this.#readings.get(own.sha256);
+    this.#readings.set(own.sha256, twin ?? path);
+    if (twin === undefined) return false;
+    this.problems.error('same-file-twice', { file: path, line: null }, `The file is byte for byte ${twin}: its readings are there already.`, 'Remove one of the two files.');
+    return true;
   }
 
   table(path: string, known: readonly string[], required: readonly string[], named?: (header: readonly string[]) => readonly string[]): Table | null {

@@ -6,9 +6,11 @@ import type { Detection } from '../measure/detection.ts';
 import { isKnownQuantity } from '../measure/detection.ts';
 import { type Day, parseDay } from '../plant/day.ts';
 import { type Reading, STATUSES, type Status } from '../plant/types.ts';
+import { nearestWord } from '../measure/nearest.ts';
 import { Cells, plainNumber } from './cells.ts';
 import type { Table } from './csv.ts';
 import type { Problems } from './problems.ts';
+import { type OwnStates, STATE_WORDS, stateOf } from './states.ts';
 import { detectionOf, type PeakMeans, quantityOf } from './quantities.ts';
 
 export const READINGS_COLUMNS = [
@@ -33,12 +35,12 @@ export interface ReadingEntry {
 }
 
 /** Rows of one table in the order of the file; `survey` null means that each row names its own by survey_date. */
-export function readingEntries(table: Table, survey: string | null, peakMeans: PeakMeans, problems: Problems, take: (entry: ReadingEntry, cells: Cells) => void): void {
+export function readingEntries(table: Table, survey: string | null, peakMeans: PeakMeans, states: OwnStates, problems: Problems, take: (entry: ReadingEntry, cells: Cells) => void): void {
   const cells = new Cells(table, problems);
   const has = (column: string): boolean => table.column(column) >= 0;
   const columns: Columns = { phase: has('phase_deg'), band: has('low_hz') || has('high_hz'), retake: has('retake'), status: has('status'), taken: has('taken_at') };
   while (cells.next()) {
-    const entry = entryOf(cells, survey, peakMeans, columns);
+    const entry = entryOf(cells, survey, peakMeans, states, columns);
     if (entry !== null) take(entry, cells);
   }
 }
@@ -51,16 +53,17 @@ interface Columns {
   readonly taken: boolean;
 }
 
-function entryOf(cells: Cells, survey: string | null, peakMeans: PeakMeans, columns: Columns): ReadingEntry | null {
+function entryOf(cells: Cells, survey: string | null, peakMeans: PeakMeans, states: OwnStates, columns: Columns): ReadingEntry | null {
   const id = survey ?? surveyOf(cells);
   const machine = cells.required('machine');
-  const status = columns.status ? (cells.word('status', STATUSES) ?? 'measured') : 'measured';
+  const stated = columns.status ? statusOf(cells, states) : 'measured';
   const quantityText = cells.text('quantity');
   const quantity = quantityText === null ? null : quantityOf(quantityText);
   const detection = detectionOf(cells, 'detection', quantity ?? '', peakMeans);
   const point = cells.text('point');
   const typed = cells.text('value');
-  const value = typed === null ? null : typedValue(cells, typed, quantity);
+  const value = typed === null ? null : typedValue(cells, typed, quantity, states);
+  const status = stated === 'measured' ? (value?.status ?? stated) : stated;
   if (point === null && status === 'measured' && machine !== null) {
     cells.error('blank', 'point', '"point" is blank.', 'Only a row with a status other than measured may speak for the whole machine.');
     return null;
@@ -78,7 +81,7 @@ function entryOf(cells: Cells, survey: string | null, peakMeans: PeakMeans, colu
     retake: columns.retake ? retakeOf(cells) : 0,
     takenOn,
     convention: columns.phase ? (cells.word('phase_convention', ['lag', 'lead'] as const) ?? 'lag') : 'lag',
-    reading: readingOf(cells, status, typed, value, columns, takenAt),
+    reading: readingOf(cells, status, value, columns, takenAt),
   };
 }
 
@@ -93,16 +96,33 @@ function surveyOf(cells: Cells): string | null {
 interface Typed {
   readonly number: number | null;
   readonly bound: '<' | '>' | null;
+  /** As typed, in the plain form; null where a word stands for the number. */
+  readonly text: string | null;
+  /** Where a word stands for the number. */
+  readonly status: Status | null;
 }
 
-/** A number or a bound; undefined with the problem told. `<0.2` is no number, `>50` is at least 50. */
-function typedValue(cells: Cells, typed: string, quantity: string | null): Typed | undefined {
+/** A status by its own word, or by one that stands for it. */
+function statusOf(cells: Cells, states: OwnStates): Status {
+  const text = cells.text('status');
+  if (text === null) return 'measured';
+  const state = STATUSES.find((s) => s === text) ?? stateOf(text, states);
+  if (state === null) return cells.word('status', STATUSES) ?? 'measured';
+  return state === 'not read' ? 'measured' : state;
+}
+
+/** A number, a bound or a word for a state; undefined with the problem told. `<0.2` is no number, `>50` is at least 50. */
+function typedValue(cells: Cells, typed: string, quantity: string | null, states: OwnStates): Typed | undefined {
   const sign = typed[0];
   const bound = sign === '<' || sign === '>' ? sign : null;
   const digits = bound === null ? typed : typed.slice(1).trim();
-  const value = plainNumber(digits);
+  const value = cells.plain('value', digits);
+  if (value === 'doubt') return undefined;
   if (typeof value === 'string') {
-    const hint = value === 'comma' ? 'Write the decimal sign as a dot, or map the file in the import section of plant.yaml.' : 'Give a number, a bound such as <0.2, or leave it blank and say why in status.';
+    const state = value === 'no number' ? stateOf(typed, states) : null;
+    if (state !== null) return { number: null, bound: null, text: null, status: state === 'not read' ? null : state };
+    const near = value === 'no number' ? nearestWord(typed, STATE_WORDS) : null;
+    const hint = value === 'comma' ? 'Write the decimal sign as a dot, or map the file in the import section of plant.yaml.' : `Give a number, a bound such as <0.2, or leave it blank and say why in status.${near === null ? '' : ` The nearest word known is "${near}".`}${value === 'infinite' ? '' : ' A word for a state is mapped in plant.yaml by import: { states: { word: status } }.'}`;
     cells.error('bad-number', 'value', `"value" is ${value === 'infinite' ? 'not finite' : value === 'comma' ? 'written with a comma' : 'no number'}: ${typed}.`, hint);
     return undefined;
   }
@@ -110,7 +130,7 @@ function typedValue(cells: Cells, typed: string, quantity: string | null): Typed
     cells.error('negative', 'value', `"value" is negative: ${typed}. An amplitude never is.`, 'Check the sign; a gap or a position is a quantity of its own.');
     return undefined;
   }
-  return { number: bound === '<' ? null : value, bound };
+  return { number: bound === '<' ? null : value, bound, text: cells.table.decimal === 'dot' && bound === null ? typed : `${bound ?? ''}${cells.plainText('value', digits)}`, status: null };
 }
 
 function takenDay(cells: Cells, text: string): Day | null {
@@ -130,7 +150,7 @@ function retakeOf(cells: Cells): number {
   return 0;
 }
 
-function readingOf(cells: Cells, status: Status, typed: string | null, value: Typed | null, columns: Columns, takenAt: string | null): ReadingEntry['reading'] {
+function readingOf(cells: Cells, status: Status, value: Typed | null, columns: Columns, takenAt: string | null): ReadingEntry['reading'] {
   const lagDeg = columns.phase ? cells.number('phase_deg') : null;
   return {
     survey: -1,
@@ -138,7 +158,7 @@ function readingOf(cells: Cells, status: Status, typed: string | null, value: Ty
     status,
     value: value?.number ?? null,
     bound: value?.bound ?? null,
-    typed,
+    typed: value?.text ?? null,
     typedUnit: null,
     lowHz: columns.band ? cells.number('low_hz', 0) : null,
     highHz: columns.band ? cells.number('high_hz', 0) : null,

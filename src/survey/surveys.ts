@@ -15,6 +15,7 @@ import type { Folder } from './read.ts';
 import { READINGS_COLUMNS, readingEntries } from './readings.ts';
 import type { Register } from './register.ts';
 import { bareSurvey, surveyHead } from './settings.ts';
+import { NO_STATES } from './states.ts';
 import { readYaml } from './yaml.ts';
 
 interface Source {
@@ -35,7 +36,7 @@ export function surveysOf(found: Found, reader: Folder, register: Register, peak
   const index = new Map(surveys.map((survey, i) => [survey.id, i]));
   const rounds = new Map<string, string>();
   for (const source of sources) {
-    readingEntries(source.table, source.survey, peakMeans, problems, (entry, cells) => {
+    readingEntries(source.table, source.survey, peakMeans, NO_STATES, problems, (entry, cells) => {
       const at = index.get(entry.survey);
       if (at === undefined) return;
       const survey = surveys[at] as Survey;
@@ -60,7 +61,8 @@ function readFolder(folder: FoundSurvey, reader: Folder, heads: Map<string, Surv
   if (head === null) return;
   const findings = folder.findings === null ? null : reader.table(folder.findings, FINDINGS_COLUMNS, ['finding', 'machine'], findingsHeader);
   const table = folder.readings === null ? null : reader.table(folder.readings, READINGS_COLUMNS, ['machine', 'point', 'value']);
-  if (table !== null) sources.push({ table, survey: folder.id });
+  const twin = table !== null && folder.readings !== null && table.rows.length > 0 && reader.isTwin(folder.readings);
+  if (table !== null && !twin) sources.push({ table, survey: folder.id });
   if (table?.rows.length === 0) tellEmpty(folder, problems);
   const captions = folder.captions === null ? null : reader.table(folder.captions, ['photo', 'caption'], ['photo', 'caption']);
   for (const path of folder.photos) reader.bytes(path);
@@ -82,6 +84,7 @@ function captionOf(captions: Table | null, path: string, problems: Problems): st
 function readHistory(file: string, reader: Folder, heads: Map<string, Survey>, sources: Source[]): string[] {
   const table = reader.table(file, READINGS_COLUMNS, ['survey_date', 'machine', 'point', 'value']);
   if (table === null) return [];
+  if (reader.isTwin(file)) return [];
   sources.push({ table, survey: null });
   const at = table.column('survey_date');
   if (table.rows.length === 0) reader.problems.error('survey-without-readings', { file, line: 1 }, 'The file has a first line and no readings.', 'Add the readings, or remove the file.');
@@ -100,15 +103,14 @@ function readHistory(file: string, reader: Folder, heads: Map<string, Survey>, s
 function idsOf(register: Register, names: Names, typedMachine: string, typedPoint: string | null, day: Day, cells: Cells, problems: Problems): { machine: string; point: string | null } | null {
   const machine = names.any ? names.machine(typedMachine, day, (id) => register.machines.has(id)) : typedMachine;
   if (register.machine(machine) === null) {
-    tellUnknown(problems, { ...cells.place, column: cells.table.column('machine') + 1 }, 'machine', machine, 'in machines.csv', [...register.machines.keys()]);
+    tellUnknown(problems, cells.at('machine'), 'machine', machine, 'in machines.csv', [...register.machines.keys()]);
     return null;
   }
   if (typedPoint === null) return { machine, point: null };
   if (register.joiner.isFaulty(machine, typedPoint)) return null;
-  const declared = cells.table.column('point') + 1;
   const point = names.any ? names.inner('point', machine, typedPoint, day, (id) => register.joiner.pointsOf(machine).includes(id)) : typedPoint;
   if (register.joiner.knowsPoint(machine, point)) return { machine, point };
-  tellUnknown(problems, { ...cells.place, column: declared }, 'point', point, `of machine "${machine}" in points.csv`, register.joiner.pointsOf(machine));
+  tellUnknown(problems, cells.at('point'), 'point', point, `of machine "${machine}" in points.csv`, register.joiner.pointsOf(machine));
   return null;
 }
 

@@ -10,7 +10,7 @@ describe('check', () => {
     const run = swayfolio(plantFolder(), ['check', 'plant']);
     expect(run.stderr).toBe('');
     expect(run.code).toBe(0);
-    expect(run.stdout).toMatch(/(no problems|warnings?|notes?)\n$/);
+    expect(run.stdout).toMatch(/(no problems|warnings?|notes?)\nNext: .*swayfolio report plant\n$/);
   });
 
   test('prints file:line:column: code message, all of several faults in one run', () => {
@@ -19,7 +19,7 @@ describe('check', () => {
     expect(run.code).toBe(1);
     expect(run.stdout).toMatch(/^surveys\/2026-01-14\/readings\.csv:2:5: \S+ .*eight/m);
     expect(run.stdout).toMatch(/^surveys\/2026-01-14\/readings\.csv:3:1: \S+ .*P-9/m);
-    expect(run.stdout).toMatch(/2 errors/);
+    expect(run.stdout).toMatch(/2 errors\nNext: mend surveys\/2026-01-14\/readings\.csv:2:5 and the 1 after it, then run again: swayfolio check plant\n$/);
   });
 
   test('shows the first five of a kind and counts the rest; --json has them all', () => {
@@ -60,7 +60,7 @@ const BAD: readonly (readonly [string, Readonly<Record<string, string | null>>, 
   ['an unknown machine', { [LAST]: readings(['P-3,DE-H,velocity,rms,1,mm/s,1480']) }, /readings\.csv:2:1: .*P-3/],
   ['an unknown point', { [LAST]: readings(['P-1,DE-V,velocity,rms,1,mm/s,1480']) }, /readings\.csv:2:2: .*DE-V/],
   ['a reading given twice', { [LAST]: readings(['P-1,DE-H,velocity,rms,1,mm/s,1480', 'P-1,DE-H,velocity,rms,2,mm/s,1480']) }, /readings\.csv:3.*2/],
-  ['a value that is no number', { [LAST]: readings(['P-1,DE-H,velocity,rms,OFF,mm/s,1480']) }, /readings\.csv:2:5: .*OFF/],
+  ['a value that is no number', { [LAST]: readings(['P-1,DE-H,velocity,rms,eight,mm/s,1480']) }, /readings\.csv:2:5: .*eight/],
   ['an infinite value', { [LAST]: readings(['P-1,DE-H,velocity,rms,Infinity,mm/s,1480']) }, /readings\.csv:2:5: .*Infinity/],
   ['a value that overflows', { [LAST]: readings(['P-1,DE-H,velocity,rms,1e999,mm/s,1480']) }, /readings\.csv:2:5: .*1e999/],
   ['a negative value', { [LAST]: readings(['P-1,DE-H,velocity,rms,-2,mm/s,1480']) }, /readings\.csv:2:5: .*-2/],
