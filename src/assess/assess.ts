@@ -17,6 +17,7 @@ import { lookAt } from './look.ts';
 import { type Assessed, assessMachine, componentLines, conditionAt, machineLine } from './machine.ts';
 import { measurementOf } from './measurement.ts';
 import { rankedActions } from './rank.ts';
+import { ruleLines } from './rules.ts';
 import { sistersOf } from './sisters.ts';
 import { spareOf } from './spare.ts';
 import { type Context, dayAt, machineRow, type Track, tracksOf } from './track.ts';
@@ -94,6 +95,7 @@ function recordOf(context: Context, book: LimitBook, assessed: readonly Assessed
     surveys,
     policy,
     policy_hash: policyHash(policy),
+    rules: ruleLines(plant.settings.language),
     limit_sets: limitSetLines(new Set(used)),
     cautions: cautionsIn(plant.settings.language),
     machines,

@@ -2,14 +2,15 @@
  * The parts of the record that are copied rather than judged: plant, surveys, policy, limit sets, the plant over time.
  */
 import { createHash } from 'node:crypto';
-import { dayText } from '../plant/day.ts';
+import { type Day, dayText } from '../plant/day.ts';
 import { POLICY_DEFAULTS, POLICY_IDS } from '../plant/policy.ts';
-import type { Instrument, Person, Plant, Survey } from '../plant/types.ts';
+import type { Instrument, LedgerAction, Person, Plant, Survey } from '../plant/types.ts';
 import type { Condition, LimitSetLine, PlantOverTime, PolicyLine, RecordInstrument, RecordMachine, RecordPerson, RecordPlant, RecordSurvey, SurveyLine } from '../record/types.ts';
 import { inService, measuredOf, wasMeasured } from './coverage.ts';
 import { dateOrNull } from './cut.ts';
 import type { LimitsInForce } from './limits-in-force.ts';
 import { conditionAt } from './machine.ts';
+import { median } from './statistics/median.ts';
 import type { Context } from './track.ts';
 
 export function plantLine({ settings, renames }: Plant): RecordPlant {
@@ -149,8 +150,20 @@ export function plantOverTime(context: Context, surveys: readonly SurveyLine[], 
       measured += n;
       of += m;
     }
-    const raised = context.plant.actions.filter((a) => a.raised === null || a.raised <= survey.day);
-    const closed = raised.filter((a) => (a.status === 'done' || a.status === 'rejected') && a.closed !== null && a.closed <= survey.day).length;
-    return { survey: survey.id, date: dayText(survey.day), conditions, measured, of, open_actions: raised.length - closed, closed_actions: closed };
+    return { survey: survey.id, date: dayText(survey.day), conditions, measured, of, ...ledgerAt(context, survey.day, context.plant.surveys[s - 1]?.day ?? null) };
   });
+}
+
+/** The ledger as it stood on the day of a survey; `before` is the day of the survey before it. */
+function ledgerAt(context: Context, day: Day, before: Day | null): Pick<PlantOverTime, 'open_actions' | 'closed_actions' | 'closure_days' | 'repeats'> {
+  const raised = context.plant.actions.filter((a) => a.raised === null || a.raised <= day);
+  const isClosed = (a: LedgerAction): a is LedgerAction & { closed: Day } => (a.status === 'done' || a.status === 'rejected') && a.closed !== null && a.closed <= day;
+  const closed = raised.filter(isClosed);
+  const lately = closed.flatMap((a) => (a.raised === null || (before !== null && a.closed <= before) ? [] : [a.closed - a.raised]));
+  return {
+    open_actions: raised.length - closed.length,
+    closed_actions: closed.length,
+    closure_days: lately.length === 0 ? null : median(lately),
+    repeats: before === null ? 0 : raised.filter((a) => !isClosed(a) && a.raised !== null && a.raised <= before).length,
+  };
 }

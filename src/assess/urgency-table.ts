@@ -53,6 +53,13 @@ export function tableLevel(condition: Zone | RatioClass, travel: Travel, critica
   return urgency === null ? NO_LEVEL : { urgency, rule };
 }
 
+/** Every row of the table with its zone and travel, for print: critical, essential, general, then the same with a proven spare. */
+export const tableRows = (): { readonly rule: string; readonly zone: string; readonly travel: Travel; readonly levels: readonly (Urgency | null)[] }[] =>
+  Object.entries(TABLE).map(([rule, levels]) => {
+    const travel = (Object.keys(ROW_OF) as Travel[]).find((t) => t !== 'held' && ROW_OF[t] === Number(rule[1])) as Travel;
+    return { rule, zone: rule[0] as string, travel, levels };
+  });
+
 /** Order of urgency, larger is more urgent; null is 0. */
 export const weight = (urgency: Urgency | null): number => (urgency === null ? 0 : URGENCIES.length - URGENCIES.indexOf(urgency));
 

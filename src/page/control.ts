@@ -1,5 +1,5 @@
 /** The control page, people and instruments, coverage, changes, method: what an auditor asks for. */
-import type { LimitSetLine } from '../record/types.ts';
+import type { LimitSetLine, RuleLine } from '../record/types.ts';
 import { slugOf } from './file-name.ts';
 import type { Format } from './format.ts';
 
@@ -99,15 +99,38 @@ const whyText = (format: Format, why: string): string => why.split(', ').map((wo
 
 export function methodView(format: Format) {
   const { record } = format;
+  const rules = record.rules ?? [];
+  const rule = (r: RuleLine) => ({ id: r.id, mark: format.term(r.mark), about: format.ruleAbout(r) });
+  const level = (r: RuleLine, column: number): string => format.term(r.levels[column] ?? '');
   return {
     sets: record.limit_sets.map((set) => limitView(format, set)),
     hasSets: record.limit_sets.length > 0,
     policy: record.policy.map((p) => ({ id: p.id, value: format.plain(p.value), unit: format.term(p.unit), mark: format.term(p.mark), about: format.policyAbout(p), changed: p.overridden })),
     hash: record.policy_hash,
+    urgencyRules: rules.filter((r) => r.levels.length > 0).map((r) => ({ ...rule(r), critical: level(r, 0), essential: level(r, 1), general: level(r, 2), spare: [3, 4, 5].map((i) => level(r, i)).join(' / ') })),
+    otherRules: rules.filter((r) => r.levels.length === 0).map(rule),
+    hasRules: rules.length > 0,
     problems: record.problems.filter((p) => p.severity !== 'note').map((p) => ({ place: p.line === null ? p.file : `${p.file}:${p.line}`, message: p.message })),
     hasProblems: record.problems.some((p) => p.severity !== 'note'),
     inputs: record.inputs.map((i) => ({ path: i.path, bytes: String(i.bytes), sha256: i.sha256 })),
   };
+}
+
+const WORST_FIRST = ['D', 'C', 'B', 'A', 'r-D', 'r-C', 'r-B', 'r-A', 'not assessed'] as const;
+
+/** Machines by condition, coverage and the ledger at each survey. */
+export function overTimeView(format: Format) {
+  const { plant_over_time: lines } = format.record;
+  const rows = lines.map((line) => ({
+    survey: format.survey(line.survey),
+    conditions: WORST_FIRST.filter((c) => line.conditions[c] > 0).map((c) => `${line.conditions[c]} ${format.term(c)}`).join(', '),
+    points: format.say('view.n_of_m', { n: line.measured, of: line.of }),
+    open: String(line.open_actions),
+    repeats: line.repeats === undefined ? '' : String(line.repeats),
+    closed: String(line.closed_actions),
+    closureDays: line.closure_days == null ? '' : format.plain(line.closure_days),
+  }));
+  return { rows, hasRows: rows.length > 1 };
 }
 
 export function coverageView(format: Format) {

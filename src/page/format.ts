@@ -18,6 +18,9 @@ export interface ConditionView {
   readonly isAssessed: boolean;
 }
 
+/** Travel by its number in the ids of the urgency table. */
+const TRAVELS = ['fast', 'rising', 'step', 'steady', 'falling'] as const;
+
 export class Format {
   readonly record: SwayfolioRecord;
   readonly language: Language;
@@ -55,6 +58,14 @@ export class Format {
   policyAbout(line: { readonly id: string; readonly about: string }): string {
     const key = `policy.${line.id}`;
     return hasSentence(this.language, key) ? this.say(key) : line.about;
+  }
+
+  /** What a rule does; rows of the urgency table (D1 to A3) name their zone and travel. */
+  ruleAbout(line: { readonly id: string; readonly about: string }): string {
+    const key = `assess.rule.${line.id}`;
+    if (hasSentence(this.language, key)) return this.say(key);
+    const travel = TRAVELS[Number(line.id.charAt(1)) - 1];
+    return travel === undefined ? line.about : this.say('assess.rule.table', { zone: line.id.charAt(0), travel: this.term(travel) });
   }
 
   urgency(urgency: Urgency | null): string {

@@ -6,7 +6,7 @@ import { inks } from '../brand/brand.ts';
 import type { Assets } from '../page/assets.ts';
 import { rankedViews } from '../page/actions.ts';
 import { Charts } from '../page/charts.ts';
-import { acceptedView, changesView, controlView, coverageView, limitsToSetView, methodView, noticesView, peopleView } from '../page/control.ts';
+import { acceptedView, changesView, controlView, coverageView, limitsToSetView, methodView, noticesView, overTimeView, peopleView } from '../page/control.ts';
 import { exceptionView } from '../page/exception.ts';
 import { Format } from '../page/format.ts';
 import { Templates } from '../page/handlebars.ts';
@@ -107,7 +107,7 @@ function* bodySections(format: Format, charts: Charts, render: Render, exception
   const { record } = format;
   yield render('coverage', { coverage: coverageView(format), accepted: acceptedView(format), changes: changesView(format) });
   const machines = record.machines.map((m) => machineView(format, charts, m));
-  yield render('machines', { machines, overTimeAlt: charts.drawing('over-time', 'all').alt });
+  yield render('machines', { machines, overTime: overTimeView(format), overTimeAlt: charts.drawing('over-time', 'all').alt });
   let first = true;
   for (const machine of exceptions) {
     const section = render('exception', { ...exceptionView(format, charts, machine), startsPage: first });

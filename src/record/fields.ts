@@ -109,13 +109,14 @@ export const FIELDS: Readonly<Record<string, string>> = {
   before: 'value:n date:d',
   after: 'value:n date:d',
   coverage: `machine:s due:b in_scope:b measured:i of:i status:w:covered why:s? misses_in_a_row:i last_measured:d? next_due:d? interval_days:n?`,
-  plant_over_time: 'survey:s date:d conditions:I measured:i of:i open_actions:i closed_actions:i',
+  plant_over_time: 'survey:s date:d conditions:I measured:i of:i open_actions:i closed_actions:i closure_days:n?* repeats:i*',
+  rules: 'id:s mark:w:mark about:s levels:S',
   problems: 'code:s severity:w:severity file:s line:i? column:i? message:s hint:s?',
   inputs: 'path:s bytes:i sha256:s',
 };
 
 /** Keys of the whole, in order. */
-export const TOP = `format:i tool:o:tool issue:o?:issue plant:o:plant survey:o:survey surveys:l:surveys policy:l:policy policy_hash:s limit_sets:l:limit_sets
+export const TOP = `format:i tool:o:tool issue:o?:issue plant:o:plant survey:o:survey surveys:l:surveys policy:l:policy policy_hash:s rules:l:rules* limit_sets:l:limit_sets
     cautions:S machines:l:machines components:l:components measurements:l:measurements actions:l:actions coverage:l:coverage
     plant_over_time:l:plant_over_time problems:l:problems inputs:l:inputs`;
 

@@ -242,6 +242,19 @@ export interface PlantOverTime {
   readonly of: number;
   readonly open_actions: number;
   readonly closed_actions: number;
+  /** Median days from raised to closed of the actions closed since the survey before; null where none was. Absent in early records. */
+  readonly closure_days?: number | null;
+  /** Open actions that stood at an earlier survey already. Absent in early records. */
+  readonly repeats?: number;
+}
+
+/** A rule that may stand beside a verdict. */
+export interface RuleLine {
+  readonly id: string;
+  readonly mark: Mark;
+  readonly about: string;
+  /** Of the urgency table: critical, essential, general, then the same with a proven spare; else empty. */
+  readonly levels: readonly string[];
 }
 
 export interface SwayfolioRecord {
@@ -253,6 +266,8 @@ export interface SwayfolioRecord {
   readonly surveys: readonly SurveyLine[];
   readonly policy: readonly PolicyLine[];
   readonly policy_hash: string;
+  /** Absent in early records. */
+  readonly rules?: readonly RuleLine[];
   readonly limit_sets: readonly LimitSetLine[];
   readonly cautions: readonly string[];
   readonly machines: readonly RecordMachine[];

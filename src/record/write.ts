@@ -10,7 +10,9 @@ const SIGNIFICANT = 12;
 /** Throws an Error that names the path for NaN, an infinity, or a key that no order lists. */
 export function writeRecord(record: SwayfolioRecord): string {
   checkKeys(record as unknown as Fields, RECORD, 'record');
-  const lines = RECORD.map((key) => `${JSON.stringify(key)}: ${topText(key, (record as unknown as Fields)[key])}`);
+  const fields = record as unknown as Fields;
+  // What may be absent stays so: an old record written again is the old bytes.
+  const lines = RECORD.filter((key) => fields[key] !== undefined).map((key) => `${JSON.stringify(key)}: ${topText(key, fields[key])}`);
   return `{\n${lines.join(',\n')}\n}\n`;
 }
 

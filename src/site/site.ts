@@ -7,7 +7,7 @@ import { toSvg } from '../chart/svg.ts';
 import { rankedViews } from '../page/actions.ts';
 import type { Assets } from '../page/assets.ts';
 import { Charts, seriesId } from '../page/charts.ts';
-import { acceptedView, changesView, coverageView, methodView, noticesView, peopleView } from '../page/control.ts';
+import { acceptedView, changesView, coverageView, methodView, noticesView, overTimeView, peopleView } from '../page/control.ts';
 import { exceptionView, photoFile } from '../page/exception.ts';
 import { Format } from '../page/format.ts';
 import { Templates } from '../page/handlebars.ts';
@@ -106,7 +106,7 @@ function* listPages(format: Format, charts: Charts, pages: Pages, options: SiteO
   yield pages.page('index', 'index.html', format.say('page.what_to_do_first'), first);
   yield pages.page('actions', 'actions.html', format.say('page.ranked_actions'), { actions, hasActions: actions.length > 0, settled, hasSettled: settled.length > 0 });
   yield pages.page('machines', 'machines.html', format.say('page.machines'), machineList(format, charts));
-  yield pages.page('coverage', 'coverage.html', format.say('page.coverage'), { ...first, coverage: coverageView(format), accepted: acceptedView(format), changes: changesView(format), notices: noticesView(format) });
+  yield pages.page('coverage', 'coverage.html', format.say('page.coverage'), { ...first, coverage: coverageView(format), overTime: overTimeView(format), accepted: acceptedView(format), changes: changesView(format), notices: noticesView(format) });
   yield pages.page('method', 'method.html', format.say('page.method_and_limits'), { method: methodView(format), people: peopleView(format) });
   yield pages.page('downloads', 'downloads.html', format.say('page.downloads'), { hasPdf: options.pdf, method: methodView(format) });
 }

@@ -78,3 +78,11 @@ it('an older survey of the same level changes no verdict', () => {
   const told = (r: typeof now) => [machineOf(r, 'M').condition, machineOf(r, 'M').urgency, measurementOf(r, 'M', 'P').travel];
   expect(told(longer)).toEqual(told(now));
 });
+
+it('the plant over time: open, repeated and closed actions, and how long the closing took', () => {
+  const actions = 'action,machine,raised,recommendation,status,closed\nM/1,M,2023-01-10,balance,done,2023-06-01\nM/2,M,2023-01-10,align,done,2023-04-20\nM/3,M,2023-04-11,look,open,\n';
+  const plant = folder([{ machine: 'M', columns: { ...GROUPS.G2R, interval_days: '91' }, series: [{ point: 'P', values: [1, 1, 1, 1] }] }], { 'actions.csv': actions });
+  const lines = recordOf(plant).plant_over_time.map((l) => [l.open_actions, l.repeats, l.closed_actions, l.closure_days]);
+  // Raised to closed: 142 and 100 days, both between the second survey and the third.
+  expect(lines).toEqual([[2, 0, 0, null], [3, 2, 0, null], [1, 1, 2, 121], [1, 1, 2, null]]);
+});

@@ -66,6 +66,14 @@ describe('the PDF', () => {
     }
   });
 
+  it('prints every rule with its mark, and every default of the policy', () => {
+    const from = pages.findIndex((p) => p.text.includes('Method, limits and policy') && p.text.includes('Limit sets in force'));
+    const method = squeezed(pages.slice(from).map((p) => p.text).join(' '));
+    expect(record.rules?.length).toBe(16 + 11 + 12 + 11);
+    for (const rule of record.rules ?? []) expect(method, rule.id).toContain(squeezed(`${rule.id} ${rule.levels.length > 0 ? rule.about : `${rule.mark} ${rule.about}`}`));
+    for (const line of record.policy) expect(method, line.id).toContain(squeezed(line.id));
+  });
+
   it('attaches the record and every input; bookmarks tell the chapters', async () => {
     const document = await open(bytes);
     expect(Object.keys((await document.getAttachments()) ?? {}).length).toBe(1 + record.inputs.length);
