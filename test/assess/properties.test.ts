@@ -50,6 +50,68 @@ describe('monotone', () => {
   });
 });
 
+describe('monotone with held points, long trends and forecasts', () => {
+  const long = fc.array(value, { minLength: 8, maxLength: 8 });
+  /** A rise with scatter, so that trends, plateaus and forecasts come about often. */
+  const ramp = fc.tuple(fc.integer({ min: 30, max: 250 }), fc.integer({ min: 0, max: 30 }), fc.array(fc.integer({ min: -8, max: 8 }), { minLength: 9, maxLength: 9 }))
+    .map(([level, growth, noise]) => noise.map((e, i) => (level / 100) * (1 + growth / 100) ** i * (1 + e / 100)));
+
+  function expectNoLower(low: SwayfolioRecord, high: SwayfolioRecord): void {
+    if (isDoubtedLow(low) || isDoubtedLow(high)) return;
+    expect(weight(machineOf(high, 'M').urgency)).toBeGreaterThanOrEqual(weight(machineOf(low, 'M').urgency));
+  }
+
+  /** Each point read at all surveys but the last, where some could not be reached; `factor` raises the last reading of each. */
+  const withHeld = (g: keyof typeof GROUPS, c: string, histories: readonly (readonly number[])[], held: readonly boolean[], factor: number): Files =>
+    folder([{
+      machine: 'M', columns: { ...GROUPS[g], criticality: c, interval_days: '91' },
+      series: histories.map((values, i) => {
+        const raised = [...values.slice(0, -1), (values[values.length - 1] as number) * factor];
+        return { point: `P${i}`, values: held[i] === true ? [...raised, 'no access'] : [values[0] as number, ...raised] };
+      }),
+    }]);
+  /** A held point counts as its last reading: one that was doubted low in its own time is left out, as a measured one is. */
+  const wasDoubtedLow = (files: Files): boolean => isDoubtedLow(recordOf(files, QUARTERS[7]));
+
+  it('raising the last reading of held points and of measured ones', () => {
+    fc.assert(
+      fc.property(group, criticality, fc.array(fc.tuple(fc.oneof(long, ramp), fc.boolean()), { minLength: 1, maxLength: 3 }), fc.integer({ min: 101, max: 400 }), (g, c, points, percent) => {
+        const [histories, held] = [points.map(([values]) => values.slice(0, 8)), points.map(([, h]) => h)];
+        const [low, high] = [1, percent / 100].map((factor) => withHeld(g, c, histories, held, factor)) as [Files, Files];
+        if (wasDoubtedLow(low) || wasDoubtedLow(high)) return;
+        expectNoLower(recordOf(low), recordOf(high));
+      }),
+      { numRuns: 400, seed: 17 },
+    );
+  });
+
+  it('raising the last reading of a rise', () => {
+    let [trends, forecasts] = [0, 0];
+    fc.assert(
+      fc.property(group, criticality, ramp, fc.integer({ min: 1, max: 120 }), (g, c, values, percent) => {
+        const last = values[values.length - 1] as number;
+        const low = judged(g, c, [values], false);
+        const m = low.measurements[0];
+        trends += Number(m?.trend?.kind === 'ramp' || m?.trend?.kind === 'plateau');
+        forecasts += Number(m?.forecast != null && !('none' in m.forecast));
+        expectNoLower(low, judged(g, c, [[...values.slice(0, -1), last * (1 + percent / 100)]], false));
+      }),
+      { numRuns: 600, seed: 19 },
+    );
+    expect(trends).toBeGreaterThan(200);
+    expect(forecasts).toBeGreaterThan(50);
+  });
+
+  it('raising every reading of a machine by one factor', () => {
+    fc.assert(
+      fc.property(group, criticality, fc.oneof(long, ramp), fc.integer({ min: 101, max: 300 }), (g, c, values, percent) => {
+        expectNoLower(judged(g, c, [values], false), judged(g, c, [values.map((v) => (v * percent) / 100)], false));
+      }),
+      { numRuns: 400, seed: 23 },
+    );
+  });
+});
+
 /** A plant of three machines with a little of everything. */
 const plant: readonly MachineInput[] = [
   { machine: 'FAN-2', columns: { ...GROUPS.G2R, criticality: 'critical', interval_days: '91' }, series: [{ point: '1H', values: [1.2, 1.3, 1.2, 2.4] }, { point: '2H', values: [1, 'stopped', 1.1, 1.2] }] },
