@@ -2,6 +2,7 @@
  * What the history of one reading shows beside its level: a step, a spike that went, the class of speed or state it is
  * compared in. In: a look. Out: sentences. Never: a level raised or lowered by them.
  */
+import { shownFacts } from '../measure/display.ts';
 import { dayText } from '../plant/day.ts';
 import type { Reading } from '../plant/types.ts';
 import type { Trend } from '../record/types.ts';
@@ -17,7 +18,7 @@ export function historyNotes(context: Context, track: Track, look: Look, trend: 
   const notes: string[] = [];
   if (trend?.changed_on != null) notes.push(say(language, 'assess.note.step', { date: trend.changed_on, times: trend.changed_by ?? null }));
   const spike = spikeBefore(context, track, look);
-  if (spike !== null) notes.push(say(language, 'assess.note.was_high', { date: dayText(spike.day), value: spike.value, unit }));
+  if (spike !== null) notes.push(say(language, 'assess.note.was_high', shownFacts(context.plant.settings.units, { date: dayText(spike.day), value: spike.value, unit })));
   const speeds = speedClass(context, track, look);
   if (speeds !== null) notes.push(say(language, 'assess.note.speed_class', speeds));
   return notes;

@@ -3,6 +3,7 @@
  * at the current survey. Out: the rules that fit, with their numbers and the confirming test. Never: where nobody with a
  * diagnosing category signs the survey.
  */
+import { shownFacts } from '../measure/display.ts';
 import { diagnoses } from '../plant/survey.ts';
 import type { Facts, Indication, Trend } from '../record/types.ts';
 import { say } from '../words/say.ts';
@@ -42,7 +43,7 @@ export function indicationsOf(context: Context, verdicts: readonly Verdict[], is
     const told = { ...facts, confidence: isSecond ? 'medium' : 'low' };
     const key = rule.replace(' ', '.');
     const cause = say(language, `assess.cause.${key}`, told);
-    return { rule: rule.split(' ')[0] as string, message: say(language, `assess.indication.${key}`, { ...told, cause }), cause, confirm: say(language, `assess.confirm.${key}`, told), mark: 'common practice', facts: told };
+    return { rule: rule.split(' ')[0] as string, message: say(language, `assess.indication.${key}`, { ...shownFacts(context.plant.settings.units, told), cause }), cause, confirm: say(language, `assess.confirm.${key}`, told), mark: 'common practice', facts: told };
   });
 }
 

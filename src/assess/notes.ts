@@ -1,3 +1,4 @@
+import { shownFacts } from '../measure/display.ts';
 import type { Trend } from '../record/types.ts';
 import { say } from '../words/say.ts';
 import { alarmTrip } from './alarm.ts';
@@ -13,7 +14,7 @@ export function notesOf(context: Context, track: Track, look: Look | null, limit
   const { policy, plant } = context;
   const notes: string[] = [];
   const add = (key: string, facts = {}): void => {
-    notes.push(say(plant.settings.language, `assess.note.${key}`, facts));
+    notes.push(say(plant.settings.language, `assess.note.${key}`, shownFacts(plant.settings.units, facts)));
   };
   if (look === null) return notes;
   if (look.zone !== null && limits.set !== null) {

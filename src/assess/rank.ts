@@ -2,6 +2,7 @@
  * The ranking: stable, with its reason. In: draft actions. Out: RecordActions in order, each saying why it stands above
  * the next. Inside a level: overdue, closeness to C/D in bands of 10 %, absolute before ratio, travel, criticality, id.
  */
+import { shownFacts } from '../measure/display.ts';
 import { type Day, dayText } from '../plant/day.ts';
 import { CRITICALITIES } from '../plant/types.ts';
 import type { RecordAction, Travel } from '../record/types.ts';
@@ -185,7 +186,7 @@ function draftedWork(context: Context, draft: DraftAction): string {
   if (rule === 'M1' && draft.verdict?.look != null) return say(language, 'assess.work.repeat', { point });
   if (rule === 'M2' || rule === 'M1') return say(language, 'assess.work.measure', {});
   if (rule === 'M3') return say(language, 'assess.work.limits', {});
-  if (draft.computed.urgency === 'watch') return alarm === null ? say(language, 'assess.work.watch', { point }) : say(language, 'assess.work.watch.alarm', { point, alarm, unit });
+  if (draft.computed.urgency === 'watch') return alarm === null ? say(language, 'assess.work.watch', { point }) : say(language, 'assess.work.watch.alarm', shownFacts(context.plant.settings.units, { point, alarm, unit }));
   if (draft.computed.urgency === 'now') return say(language, 'assess.work.now', {});
   return say(language, condition !== null && 'CD'.includes(condition.slice(-1)) ? 'assess.work.repair' : 'assess.work.find', { point });
 }

@@ -1,6 +1,7 @@
 /**
  * Reasons in words. In: a verdict. Out: one sentence and the facts it was made from. Never: a diagnosis.
  */
+import { shownFacts } from '../measure/display.ts';
 import { dayText } from '../plant/day.ts';
 import type { Facts } from '../record/types.ts';
 import { say } from '../words/say.ts';
@@ -60,7 +61,7 @@ const finite = (value: number): number | null => (Number.isFinite(value) ? value
 
 /** How it moved, in words: `assess.travel.<travel>.<by>`. */
 export function travelWords(context: Context, facts: Facts): string {
-  return say(context.plant.settings.language, `assess.travel.${facts['travel'] ?? 'steady'}.${facts['by']}`, facts);
+  return say(context.plant.settings.language, `assess.travel.${facts['travel'] ?? 'steady'}.${facts['by']}`, shownFacts(context.plant.settings.units, facts));
 }
 
 /** Sentence for the level of a verdict. */
@@ -71,7 +72,7 @@ export function reasonOf(context: Context, verdict: Verdict): Reason {
   if (look === null || verdict.movement === null) return { reason: say(language, 'assess.reason.none', {}), facts: {} };
   const facts: Facts = { ...factsOf(context, track, look, verdict.movement), rule: level.rule };
   const kind = look.zone !== null ? 'zone' : look.ratioClass !== null ? 'class' : 'shown';
-  const parts = [say(language, `assess.reason.${kind}`, { ...facts, travel_words: travelWords(context, facts), limit_words: limitWords(context, facts) })];
+  const parts = [say(language, `assess.reason.${kind}`, { ...shownFacts(context.plant.settings.units, facts), travel_words: travelWords(context, facts), limit_words: limitWords(context, facts) })];
   if (level.rule === 'R1' || level.rule === 'H1' || level.rule === 'K1' || level.rule === 'F1') parts.push(say(language, `assess.reason.${level.rule}`, facts));
   const among = context.sisters.get(track);
   if (among?.outlier === true) parts.push(say(language, 'assess.reason.S1', { n: among.n, db: among.dbAboveMedian }));
@@ -96,7 +97,7 @@ function heldReason(context: Context, verdict: Verdict, from: Look): Reason {
   const { language } = context.plant.settings;
   const variant = look === null ? '' : facts['doubt'] === null ? '.unseen' : '.doubted';
   const doubt = facts['doubt'] === null ? null : say(language, `assess.doubt_name.${facts['doubt']}`);
-  return { reason: say(language, `assess.reason.M1${variant}`, { ...facts, doubt }), facts };
+  return { reason: say(language, `assess.reason.M1${variant}`, { ...shownFacts(context.plant.settings.units, facts), doubt }), facts };
 }
 
 /** The boundary that the reading lies above, or the one ahead of it, in words. */
@@ -105,5 +106,5 @@ function limitWords(context: Context, facts: Facts): string {
   const limit = name === undefined ? null : (facts[name] ?? null);
   const above = facts['condition'] === 'C' || facts['condition'] === 'D';
   if (limit === null || name === undefined) return '';
-  return say(context.plant.settings.language, above ? 'assess.limit.above' : 'assess.limit.below', { boundary: `${name[0]}/${name[1]}`.toUpperCase(), limit, unit: facts['unit'] ?? '' });
+  return say(context.plant.settings.language, above ? 'assess.limit.above' : 'assess.limit.below', shownFacts(context.plant.settings.units, { boundary: `${name[0]}/${name[1]}`.toUpperCase(), limit, unit: facts['unit'] ?? '' }));
 }

@@ -1,4 +1,5 @@
 /** The control page, people and instruments, coverage, changes, method: what an auditor asks for. */
+import { fromHz } from '../measure/units.ts';
 import type { LimitSetLine, RuleLine } from '../record/types.ts';
 import { slugOf } from './file-name.ts';
 import type { Format } from './format.ts';
@@ -71,7 +72,9 @@ const boundary = (format: Format, value: number | null): string => (value === nu
 
 function limitView(format: Format, set: LimitSetLine) {
   const { ab, bc, cd } = set.boundaries;
-  const band = set.low_hz === null && set.high_hz === null ? '' : `${format.say('view.span', { from: set.low_hz === null ? '…' : format.plain(set.low_hz), to: set.high_hz === null ? '…' : format.plain(set.high_hz) })} Hz`;
+  const frequency = format.record.plant.frequency_unit;
+  const edge = (hz: number | null): string => (hz === null ? '…' : format.plain(fromHz(hz, frequency)));
+  const band = set.low_hz === null && set.high_hz === null ? '' : `${format.say('view.span', { from: edge(set.low_hz), to: edge(set.high_hz) })} ${frequency}`;
   return {
     id: set.id,
     anchor: `limit-${slugOf(set.id)}`,
@@ -181,7 +184,7 @@ export function changesView(format: Format) {
 
 /** Readings typed in another unit than their point's. */
 function unitChanges(format: Format): { what: string; text: string }[] {
-  return format.record.measurements.flatMap((m) => (m.typed_unit === null ? [] : [{ what: m.machine, text: format.say('view.unit_change', { point: m.point, quantity: m.quantity, typed: `${m.typed} ${m.typed_unit}`, unit: format.unit(m.unit, m.detection) }) }]));
+  return format.asRead.measurements.flatMap((m) => (m.typed_unit === null ? [] : [{ what: m.machine, text: format.say('view.unit_change', { point: m.point, quantity: m.quantity, typed: `${m.typed} ${m.typed_unit}`, unit: format.unit(m.unit, m.detection) }) }]));
 }
 
 export function acceptedView(format: Format) {

@@ -7,6 +7,7 @@ import type { Urgency } from '../plant/types.ts';
 import type { Condition, RecordMachine, RecordMeasurement, SeriesKey, SwayfolioRecord } from '../record/types.ts';
 import { decimalsFor, formatNumber, NO_BREAK, plainNumber } from '../words/numbers.ts';
 import { say } from '../words/say.ts';
+import { inDisplayUnits } from './display.ts';
 import { hasSentence, type Language } from '../words/sentences.ts';
 import { formatDate, term } from '../words/terms.ts';
 
@@ -22,14 +23,18 @@ export interface ConditionView {
 const TRAVELS = ['fast', 'rising', 'step', 'steady', 'falling'] as const;
 
 export class Format {
+  /** The record as it stands in record.json. */
+  readonly asRead: SwayfolioRecord;
+  /** The same in the plant's display units: what is printed. */
   readonly record: SwayfolioRecord;
   readonly language: Language;
   readonly #byMachine = new Map<string, RecordMeasurement[]>();
 
   constructor(record: SwayfolioRecord) {
-    this.record = record;
+    this.asRead = record;
+    this.record = inDisplayUnits(record);
     this.language = record.plant.language;
-    for (const measurement of record.measurements) {
+    for (const measurement of this.record.measurements) {
       const list = this.#byMachine.get(measurement.machine);
       if (list === undefined) this.#byMachine.set(measurement.machine, [measurement]);
       else list.push(measurement);

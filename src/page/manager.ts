@@ -41,7 +41,7 @@ const MOST_NAMES = 6;
 const place = (urgency: Urgency | null): number => (urgency === null ? URGENCIES.length : URGENCIES.indexOf(urgency));
 
 /** Longest lists on the page: what does not fit stands in the ranked list. */
-const MOST = { week: 6, month: 4, stop: 2 } as const;
+const MOST = { A4: { week: 6, month: 4, stop: 2 }, Letter: { week: 5, month: 3, stop: 1 } } as const;
 
 export function managerView(format: Format): ManagerView {
   const { record } = format;
@@ -49,12 +49,13 @@ export function managerView(format: Format): ManagerView {
   const week = views.filter((v) => v.level === 'now' || v.level === 'within a week');
   const month = views.filter((v) => v.level === 'within a month');
   const stop = views.filter((v) => v.level === 'next planned stop');
+  const most = MOST[record.plant.paper];
   const overrides = record.machines.filter((m) => m.override !== null && place(m.override.urgency) > place(m.computed_urgency));
   return {
     plant: record.plant.plant,
     survey: record.survey.id,
     headline: headline(format, week.length, month.length, stop.length),
-    groups: [group(format, 'this_week', week, MOST.week), group(format, 'this_month', month, MOST.month), group(format, 'next_stop', stop, MOST.stop)],
+    groups: [group(format, 'this_week', week, most.week), group(format, 'this_month', month, most.month), group(format, 'next_stop', stop, most.stop)],
     counts: countViews(format),
     coverage: coverageText(format),
     lines: changedLines(format, overrides),

@@ -49,7 +49,7 @@ export function* site(record: SwayfolioRecord, assets: Assets, options: SiteOpti
   yield* furniture(record, assets, pages);
   if (only === undefined) yield* listPages(format, charts, pages, options);
   else yield pages.page('index', 'index.html', format.say('page.what_to_do_first'), firstPage(format));
-  for (const machine of record.machines) if (only === undefined || machine.machine === only) yield machinePage(format, charts, pages, machine);
+  for (const machine of format.record.machines) if (only === undefined || machine.machine === only) yield machinePage(format, charts, pages, machine);
   for (const photo of record.survey.photos) {
     const bytes = only === undefined || photo.machine === only ? assets.picture(photo.path) : null;
     if (bytes !== null) yield { path: `photos/${photoFile(photo.path)}`, bytes: withoutMetadata(bytes) };

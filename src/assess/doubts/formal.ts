@@ -21,16 +21,16 @@ function retakes(context: Context, look: Look, track: Track): void {
   const values = [...(look.reading.retakes ?? []).filter((r): r is Reading & { value: number } => isMeasured(r)).map((r) => r.value), look.value];
   const [least, most] = [Math.min(...values), Math.max(...values)];
   if (!exceeds(most - least, context.policy['7.retake'] * least)) return;
-  look.doubts.push(doubt(context.plant.settings.language, 'retake-differs', 'note', { least, most, unit: track.series.unit, takes: values.length }));
+  look.doubts.push(doubt(context.plant.settings, 'retake-differs', 'note', { least, most, unit: track.series.unit, takes: values.length }));
 }
 
 function dates(context: Context, survey: Survey, look: Look): void {
   const { day } = look.reading;
   const last = survey.issueDate ?? Math.max(survey.to, survey.day);
   const facts = { date: dayText(day), from: dayText(survey.from), to: dayText(survey.to) };
-  const { language } = context.plant.settings;
-  if (day > last) look.doubts.push(doubt(language, 'date', 'note', facts, '.future'));
-  else if (day < survey.from || day > survey.to) look.doubts.push(doubt(language, 'date', 'note', facts));
+  const { settings } = context.plant;
+  if (day > last) look.doubts.push(doubt(settings, 'date', 'note', facts, '.future'));
+  else if (day < survey.from || day > survey.to) look.doubts.push(doubt(settings, 'date', 'note', facts));
 }
 
 function calibration(context: Context, survey: Survey, look: Look): void {
@@ -38,12 +38,12 @@ function calibration(context: Context, survey: Survey, look: Look): void {
   const due = instrument?.calibrationDue ?? null;
   if (due === null || due >= look.reading.day) return;
   const facts = { instrument: look.reading.instrument, due: dayText(due), days: look.reading.day - due };
-  look.doubts.push(doubt(context.plant.settings.language, 'calibration', 'note', facts));
+  look.doubts.push(doubt(context.plant.settings, 'calibration', 'note', facts));
 }
 
 function qualification(context: Context, survey: Survey, look: Look): void {
   const person = survey.people.find((p) => p.name === look.reading.measuredBy);
   const expires = person?.expires ?? null;
   if (person === undefined || expires === null || expires >= look.reading.day) return;
-  look.doubts.push(doubt(context.plant.settings.language, 'qualification', 'note', { person: person.name, expires: dayText(expires) }));
+  look.doubts.push(doubt(context.plant.settings, 'qualification', 'note', { person: person.name, expires: dayText(expires) }));
 }

@@ -9,15 +9,15 @@ import { doubt, lastTime } from './doubt.ts';
 /** near-zero: below 5 % of the baseline while running (an unknown speed counts as running), or a reading at speed 0. */
 export function nearZeroDoubts(context: Context, survey: number): void {
   const share = context.policy['7.near_zero.share'];
-  const { language } = context.plant.settings;
+  const { settings } = context.plant;
   for (const track of context.tracks) {
     const look = track.looks[survey];
     if (look === null || look === undefined || pointRow(track, look.reading.day).scale !== 'linear') continue;
     if (look.reading.speedRpm === 0) {
-      look.doubts.push(doubt(language, 'near-zero', 'held', { value: look.value, unit: track.series.unit }, '.standing'));
+      look.doubts.push(doubt(settings, 'near-zero', 'held', { value: look.value, unit: track.series.unit }, '.standing'));
     } else if (look.baseline !== null && exceeds(share * look.baseline.value, look.value)) {
       const facts = { value: look.value, unit: track.series.unit, baseline: look.baseline.value, percent: (100 * look.value) / look.baseline.value };
-      look.doubts.push(doubt(language, 'near-zero', 'held', facts));
+      look.doubts.push(doubt(settings, 'near-zero', 'held', facts));
     }
   }
 }
@@ -38,7 +38,7 @@ export function allDownDoubts(context: Context, survey: number): void {
       points = (points ?? new Set()).add(track.series.point);
     }
     if (down === null || points === null || points.size < policy['7.all_down.points']) continue;
-    for (const look of down) look.doubts.push(doubt(plant.settings.language, 'all-down', 'held', { points: points.size, percent: 100 * policy['7.all_down.share'] }));
+    for (const look of down) look.doubts.push(doubt(plant.settings, 'all-down', 'held', { points: points.size, percent: 100 * policy['7.all_down.share'] }));
   }
 }
 
@@ -78,6 +78,6 @@ function judgeFall(context: Context, track: Track, look: Look, before: number): 
   if (second) look.explainedFall = 'second reading';
   else {
     const facts = { value: look.value, unit: track.series.unit, previous: before, percent: 100 * (1 - look.value / before) };
-    look.doubts.push(doubt(context.plant.settings.language, 'unexplained-fall', 'held', facts));
+    look.doubts.push(doubt(context.plant.settings, 'unexplained-fall', 'held', facts));
   }
 }

@@ -24,7 +24,7 @@ const ROUNDING = 0.02;
 
 /** impossible: what no signal can be, whatever it is. */
 export function impossiblePairs(context: Context, survey: number): void {
-  const { language } = context.plant.settings;
+  const { settings } = context.plant;
   for (const tracks of context.byMachine.values()) {
     const seen = seenOn(tracks, survey);
     for (const a of seen) {
@@ -35,7 +35,7 @@ export function impossiblePairs(context: Context, survey: number): void {
     impossibleFrequencies(context, seen);
   }
   function mark(s: Seen, facts: Readonly<Record<string, string | number>>, variant: string): void {
-    if (!s.look.doubts.some((d) => d.kind === 'impossible')) s.look.doubts.push(doubt(language, 'impossible', 're-measure', facts, variant));
+    if (!s.look.doubts.some((d) => d.kind === 'impossible')) s.look.doubts.push(doubt(settings, 'impossible', 're-measure', facts, variant));
   }
   /** r.m.s. against the peak, or half the peak-to-peak, of the same quantity. */
   function pair(rms: Seen, other: Seen): void {
@@ -64,7 +64,7 @@ function impossibleFrequencies(context: Context, seen: readonly Seen[]): void {
     const { fromDisplacementHz, fromAccelerationHz } = three;
     if (!exceeds(fromDisplacementHz, (1 + context.policy['7.impossible.margin']) * fromAccelerationHz)) continue;
     const facts = { low: fromAccelerationHz, high: fromDisplacementHz };
-    for (const s of three.members) s.look.doubts.push(doubt(context.plant.settings.language, 'impossible', 're-measure', facts, '.frequencies'));
+    for (const s of three.members) s.look.doubts.push(doubt(context.plant.settings, 'impossible', 're-measure', facts, '.frequencies'));
   }
 }
 
@@ -100,7 +100,7 @@ export function identicalReadings(context: Context, survey: number): void {
     const equal = (digits: number) => pairs.filter((p) => p.look.value.toPrecision(digits) === p.before.toPrecision(digits));
     const [three, two] = [equal(3), equal(2)];
     const same = three.length >= policy['7.identical.points'] ? three : two.length >= policy['7.identical.two'] ? two : [];
-    for (const s of same) s.look.doubts.push(doubt(plant.settings.language, 'identical', 're-measure', { readings: same.length, digits: same === three ? 3 : 2 }));
+    for (const s of same) s.look.doubts.push(doubt(plant.settings, 'identical', 're-measure', { readings: same.length, digits: same === three ? 3 : 2 }));
   }
 }
 
@@ -138,7 +138,7 @@ export function swappedPoints(context: Context, survey: number): void {
         const [now, then] = [[away(a.look.value, a.before), away(b.look.value, b.before)] as const, [away(b.look.value, a.before), away(a.look.value, b.before)] as const];
         const gain = policy['7.swapped.gain'];
         if (!reaches(now[0] - then[0], gain) || !reaches(now[1] - then[1], gain) || exceeds(2 * (then[0] + then[1]), now[0] + now[1])) continue;
-        for (const s of [a, b]) s.look.doubts.push(doubt(plant.settings.language, 'swapped-points', 're-measure', { point: x.point, other: y.point }));
+        for (const s of [a, b]) s.look.doubts.push(doubt(plant.settings, 'swapped-points', 're-measure', { point: x.point, other: y.point }));
       }
     });
   }
@@ -168,7 +168,7 @@ export function swappedMachines(context: Context, survey: number): void {
       if (!reaches(nowA - thenA, least) || !reaches(nowB - thenB, least) || exceeds(2 * (thenA + thenB), nowA + nowB)) continue;
       for (const [a, b] of pairs) {
         const facts = { machine: a.track.machine.id, other: b.track.machine.id };
-        for (const s of [a, b]) s.look.doubts.push(doubt(plant.settings.language, 'swapped-machines', 're-measure', facts));
+        for (const s of [a, b]) s.look.doubts.push(doubt(plant.settings, 'swapped-machines', 're-measure', facts));
       }
     }
   });

@@ -110,5 +110,5 @@ function mark(context: Context, suspect: Suspect, factor: number, scope: Scope |
   if (look.doubts.some((d) => d.kind === 'unit-factor')) return;
   const up = factor > 1;
   const facts = { ratio: suspect.ratio, factor: up ? factor : 1 / factor, scope, name, readings };
-  look.doubts.push(doubt(context.plant.settings.language, 'unit-factor', up ? 're-measure' : 'held', facts, up ? '.high' : '.low'));
+  look.doubts.push(doubt(context.plant.settings, 'unit-factor', up ? 're-measure' : 'held', facts, up ? '.high' : '.low'));
 }
