@@ -8,6 +8,7 @@ import type { InputFile, Plant } from '../plant/types.ts';
 import type { Shell } from '../shell/types.ts';
 import { readTable, type Table } from './csv.ts';
 import { type Found, findFiles, PLANT_TABLES } from './find.ts';
+import { fits, type Imports, mappingOf, NO_IMPORTS } from './mapping.ts';
 import { ACCEPTED_COLUMNS, ACTIONS_COLUMNS, acceptedRow, actionRow, EVENTS_COLUMNS, eventRow, LIMITS_COLUMNS, limitRow, RENAMES_COLUMNS, renameRow, rowsOf } from './ledgers.ts';
 import { COMPONENTS_COLUMNS, MACHINES_COLUMNS } from './machines.ts';
 import { Names } from './names.ts';
@@ -77,14 +78,15 @@ export function readPlant(shell: ReadingShell, folder: string): { readonly plant
   const problems = new Problems();
   const { files, refused } = shell.list(folder);
   for (const path of refused) problems.add('warning', 'link-refused', { file: path, line: null }, 'A link that leaves the plant folder is not followed.', 'Copy the file into the folder.');
-  const found = findFiles(files);
-  if (!isPlant(found, problems)) return { plant: null, problems: problems.sorted() };
   const reader = new Folder(shell, folder, problems);
-  const { settings, policy } = readSettings(found, reader);
+  const { settings, policy, imports } = readSettings(files.includes('plant.yaml'), reader);
+  const found = findFiles(files, (path) => mappingOf(imports, path) !== null);
+  if (!isPlant(found, problems)) return { plant: null, problems: problems.sorted() };
+  tellUnused(imports, found, problems);
   const tables = Object.fromEntries(PLANT_TABLES.map((name) => [name, found.tables.has(name) ? reader.table(name, COLUMNS[name].known, COLUMNS[name].required) : null])) as unknown as Tables;
   const names = new Names(rowsOf(tables['renames.csv'], problems, renameRow));
   const register = registerOf(found.tables.has('points.csv'), tables, settings.peakMeans, names, problems);
-  const surveys = surveysOf(found, reader, register, settings.peakMeans, names);
+  const surveys = surveysOf(found, reader, register, settings.peakMeans, names, imports);
   const ledgers = {
     limits: rowsOf(tables['limits.csv'], problems, limitRow(settings.peakMeans)),
     events: rowsOf(tables['events.csv'], problems, eventRow),
@@ -101,7 +103,7 @@ export function readPlant(shell: ReadingShell, folder: string): { readonly plant
 
 function isPlant(found: Found, problems: Problems): boolean {
   for (const file of found.strangers) problems.add('note', 'unknown-file', { file, line: null }, 'The name of this file says nothing to swayfolio; it is left out.', null);
-  const hasSurvey = found.histories.length > 0 || found.surveys.length > 0;
+  const hasSurvey = found.histories.length > 0 || found.imports.length > 0 || found.surveys.length > 0;
   if (found.plantYaml === null && !hasSurvey) {
     problems.error('no-plant', { file: '', line: null }, 'This folder is no plant: it has neither plant.yaml nor a survey.', 'Make one by: swayfolio new <folder>');
     return false;
@@ -111,9 +113,16 @@ function isPlant(found: Found, problems: Problems): boolean {
   return true;
 }
 
-function readSettings(found: Found, reader: Folder): Settings {
-  const none = { settings: NO_SETTINGS, policy: policyWith({}) };
-  if (found.plantYaml === null) return none;
-  const yaml = readYaml(found.plantYaml, reader.bytes(found.plantYaml), reader.problems);
+function tellUnused(imports: Imports, found: Found, problems: Problems): void {
+  for (const { file } of imports.files) {
+    if (found.imports.some((path) => fits(file, path))) continue;
+    problems.error('import-no-file', { file: 'plant.yaml', line: null }, `The import section speaks of "${file}", and no file of that name is there.`, 'Give its path in the plant folder, such as surveys/2026-01-14/export.csv; * stands for any part of a name.');
+  }
+}
+
+function readSettings(there: boolean, reader: Folder): Settings {
+  const none = { settings: NO_SETTINGS, policy: policyWith({}), imports: NO_IMPORTS };
+  if (!there) return none;
+  const yaml = readYaml('plant.yaml', reader.bytes('plant.yaml'), reader.problems);
   return yaml === null ? none : settingsOf(yaml, reader.problems);
 }

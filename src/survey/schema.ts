@@ -7,6 +7,7 @@ import { POLICY_IDS } from '../plant/policy.ts';
 import { type Day, parseDay } from '../plant/day.ts';
 import { SURVEY_KINDS } from '../plant/types.ts';
 import { plainNumber } from './cells.ts';
+import { importJsonSchema, importSchema, NO_IMPORTS } from './mapping.ts';
 
 const blankToNull = (value: unknown): unknown => (value === '' || value === undefined ? null : value);
 
@@ -46,7 +47,7 @@ export const plantSchema = z.object({
   policy: z.preprocess((v) => blankToNull(v) ?? {}, z.record(z.string(), number)).default({}),
   retention: text,
   distribution: texts,
-  import: z.unknown().optional(),
+  import: z.preprocess((v) => blankToNull(v) ?? {}, importSchema).default(NO_IMPORTS),
 });
 
 /** `next_stops: { area: [dates] }` as a list of date and area. */
@@ -105,7 +106,7 @@ export function plantJsonSchema(): object {
       policy: { type: ['object', 'null'], properties: Object.fromEntries(POLICY_IDS.map((id) => [id, value])), additionalProperties: false },
       retention: textSchema,
       distribution: { type: ['array', 'string', 'null'], items: { type: 'string' } },
-      import: { type: ['object', 'null'] },
+      import: importJsonSchema(),
     },
     required: ['plant'],
   };

@@ -5,6 +5,7 @@ import { parseFrequencyUnit, parseUnit } from '../measure/units.ts';
 import { type Day, parseDay } from '../plant/day.ts';
 import { POLICY_IDS, type Policy, type PolicyId, policyWith } from '../plant/policy.ts';
 import type { PlantSettings, Survey } from '../plant/types.ts';
+import { type Imports, NO_IMPORTS } from './mapping.ts';
 import type { Problems } from './problems.ts';
 import { PLANT_KEYS, plantSchema, SURVEY_KEYS, surveySchema } from './schema.ts';
 import type { YamlFile } from './yaml.ts';
@@ -42,6 +43,7 @@ function tell(yaml: YamlFile, error: Issues, problems: Problems): void {
 export interface Settings {
   readonly settings: PlantSettings;
   readonly policy: Policy;
+  readonly imports: Imports;
 }
 
 export const NO_SETTINGS: PlantSettings = {
@@ -50,7 +52,7 @@ export const NO_SETTINGS: PlantSettings = {
 };
 
 export function settingsOf(yaml: YamlFile, problems: Problems): Settings {
-  const none = { settings: NO_SETTINGS, policy: policyWith({}) };
+  const none = { settings: NO_SETTINGS, policy: policyWith({}), imports: NO_IMPORTS };
   const map = mapOf(yaml, PLANT_KEYS, problems);
   if (map === null) return none;
   const parsed = plantSchema.safeParse(map);
@@ -60,7 +62,6 @@ export function settingsOf(yaml: YamlFile, problems: Problems): Settings {
   }
   const { data } = parsed;
   if (data.plant === null) problems.error('no-plant-name', yaml.place(['plant']), '"plant" is blank: the report needs its name.', 'Add a line: plant: Name of the plant');
-  if (data.import !== undefined) problems.add('warning', 'import-unread', yaml.place(['import']), 'The import section is not applied: this version reads files in the plain form only.', 'Bring the files into the plain form of the plant folder.');
   const { units, frequencyUnit } = displayUnits(yaml, data.units, data.peak_means, problems);
   return {
     settings: {
@@ -80,6 +81,7 @@ export function settingsOf(yaml: YamlFile, problems: Problems): Settings {
       distribution: data.distribution,
     },
     policy: policyWith(overridesOf(yaml, data.policy, problems)),
+    imports: data.import,
   };
 }
 

@@ -6,8 +6,10 @@ import type { Photo, Survey } from '../plant/types.ts';
 import type { Cells } from './cells.ts';
 import type { Table } from './csv.ts';
 import { FINDINGS_COLUMNS, findingRow, findingsHeader, photoOf } from './findings.ts';
-import type { Found, FoundSurvey } from './find.ts';
+import { type Found, type FoundSurvey, surveyName } from './find.ts';
 import { rowsOf } from './ledgers.ts';
+import { mappedTable } from './mapped.ts';
+import { type Imports, mappingOf } from './mapping.ts';
 import { type Names, tellUnknown } from './names.ts';
 import type { Problems } from './problems.ts';
 import type { PeakMeans } from './quantities.ts';
@@ -15,8 +17,10 @@ import type { Folder } from './read.ts';
 import { READINGS_COLUMNS, readingEntries } from './readings.ts';
 import type { Register } from './register.ts';
 import { bareSurvey, surveyHead } from './settings.ts';
-import { NO_STATES } from './states.ts';
+import { joinDays } from './rounds.ts';
 import { readYaml } from './yaml.ts';
+
+const NO_JOINS: ReadonlyMap<string, string> = new Map();
 
 interface Source {
   readonly table: Table;
@@ -25,24 +29,28 @@ interface Source {
 }
 
 /** All surveys, ascending by day then id; readings are joined by the way. */
-export function surveysOf(found: Found, reader: Folder, register: Register, peakMeans: PeakMeans, names: Names): Survey[] {
+export function surveysOf(found: Found, reader: Folder, register: Register, peakMeans: PeakMeans, names: Names, imports: Imports): Survey[] {
   const { problems } = reader;
   const heads = new Map<string, Survey>();
   const sources: Source[] = [];
   for (const folder of found.surveys) readFolder(folder, reader, heads, sources);
-  const inHistory = new Set(found.histories.flatMap((file) => readHistory(file, reader, heads, sources)));
+  const folders = new Set(heads.keys());
+  const inHistory = new Set([...found.histories.flatMap((file) => readHistory(file, reader, heads, sources)), ...found.imports.flatMap((file) => readMapped(file, imports, reader, heads, sources))]);
   for (const folder of found.surveys) if (folder.readings === null && heads.has(folder.id) && !inHistory.has(folder.id)) tellEmpty(folder, problems);
+  const joined = imports.span_days === null ? NO_JOINS : joinDays(heads, folders, imports.span_days);
+  const states = new Map(Object.entries(imports.states));
   const surveys = [...heads.values()].sort((a, b) => a.day - b.day || (a.id < b.id ? -1 : 1));
   const index = new Map(surveys.map((survey, i) => [survey.id, i]));
   const rounds = new Map<string, string>();
   for (const source of sources) {
-    readingEntries(source.table, source.survey, peakMeans, NO_STATES, problems, (entry, cells) => {
-      const at = index.get(entry.survey);
+    readingEntries(source.table, source.survey, peakMeans, states, problems, (entry, cells) => {
+      const at = index.get(joined.get(entry.survey) ?? entry.survey);
       if (at === undefined) return;
       const survey = surveys[at] as Survey;
-      const joined = idsOf(register, names, entry.machine, entry.point, survey.day, cells, problems);
-      if (joined === null || !isOneRound(rounds, joined.machine, survey, cells)) return;
-      register.joiner.join(entry, cells, joined.machine, joined.point, at, survey.day, register.componentIds(joined.machine)[0] as string);
+      const ids = idsOf(register, names, entry.machine, entry.point, survey.day, cells, problems);
+      if (ids === null || !isOneRound(rounds, ids.machine, survey, cells)) return;
+      const day = joined.has(entry.survey) ? (parseDay(entry.survey) ?? survey.day) : survey.day;
+      register.joiner.join(entry, cells, ids.machine, ids.point, at, day, register.componentIds(ids.machine)[0] as string);
     });
   }
   register.joiner.spread();
@@ -86,8 +94,35 @@ function readHistory(file: string, reader: Folder, heads: Map<string, Survey>, s
   if (table === null) return [];
   if (reader.isTwin(file)) return [];
   sources.push({ table, survey: null });
-  const at = table.column('survey_date');
   if (table.rows.length === 0) reader.problems.error('survey-without-readings', { file, line: 1 }, 'The file has a first line and no readings.', 'Add the readings, or remove the file.');
+  return surveysIn(table, heads);
+}
+
+/** Reads a file that the import section speaks of; its survey is stated, or its folder, or in each row. */
+function readMapped(file: string, imports: Imports, reader: Folder, heads: Map<string, Survey>, sources: Source[]): string[] {
+  const mapping = mappingOf(imports, file);
+  if (mapping === null) return [];
+  const parts = file.split('/');
+  const survey = mapping.survey ?? (parts[0] === 'surveys' && parts.length >= 3 ? surveyName(parts[1] as string) : null);
+  const bytes = reader.bytes(file);
+  if (reader.isTwin(file)) return [];
+  const table = mappedTable(file, bytes, mapping, survey !== null, reader.problems);
+  if (table === null) return survey === null ? [] : [survey];
+  if (table.rows.length === 0) reader.problems.error('survey-without-readings', { file, line: null }, 'The file has no readings below its column names.', 'Check header, footer and wide in its mapping, or remove the file.');
+  sources.push({ table, survey });
+  if (survey === null) return surveysIn(table, heads);
+  const day = parseDay(survey);
+  const head = heads.get(survey);
+  if (head?.place?.file === `surveys/${survey}`) heads.set(survey, { ...head, place: { file, line: 1 } });
+  if (!heads.has(survey) && day !== null) heads.set(survey, { ...bareSurvey(survey, day), place: { file, line: 1 } });
+  if (!heads.has(survey)) reader.problems.error('bad-date', { file, line: null }, `The survey "${survey}" of its mapping is no date, and no folder in surveys/ bears that name.`, 'State survey as YYYY-MM-DD.');
+  return [survey];
+}
+
+/** The surveys that rows name; each is a survey of its own where no folder is. */
+function surveysIn(table: Table, heads: Map<string, Survey>): string[] {
+  const { file } = table;
+  const at = table.column('survey_date');
   const seen = new Set<string>();
   for (const row of table.rows) {
     const id = (row[at] ?? '').trim();
