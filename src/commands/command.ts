@@ -30,6 +30,7 @@ export interface Arguments {
   readonly out?: string | undefined;
   readonly machine?: string | undefined;
   readonly brief?: boolean | undefined;
+  readonly 'single-file'?: boolean | undefined;
   readonly tags?: boolean | undefined;
   readonly json?: boolean | undefined;
   readonly quiet?: boolean | undefined;

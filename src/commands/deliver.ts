@@ -9,6 +9,7 @@ import { reportPdf } from '../pdf/report.ts';
 import { readRecord } from '../record/read.ts';
 import type { SwayfolioRecord } from '../record/types.ts';
 import { type OutputFile, UserError } from '../shell/types.ts';
+import { singleFile } from '../site/single.ts';
 import { site } from '../site/site.ts';
 import { workList } from '../table/work-list.ts';
 import type { Arguments } from './command.ts';
@@ -36,7 +37,8 @@ export async function deliver(recordText: string, assets: Assets, options: Argum
     yield { path: 'work-list.csv', bytes: workList(record) };
     yield { path: 'report.pdf', bytes: pdf.bytes };
     progress('writing the site');
-    for (const file of site(record, proved, { pdf: true, recordText, ...ofMachine })) yield { path: `site/${file.path}`, bytes: file.bytes };
+    const pages = site(record, proved, { pdf: true, recordText, ...ofMachine });
+    for (const file of options['single-file'] === true ? [singleFile(pages)] : pages) yield { path: `site/${file.path}`, bytes: file.bytes };
   }
 }
 
