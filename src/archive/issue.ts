@@ -69,10 +69,10 @@ function nextNumber(survey: string, issues: readonly Issued[], record: Swayfolio
   return `${year}-${String(Math.max(0, ...used) + 1).padStart(3, '0')}`;
 }
 
-/** The head as the record has it; with what changed since the issue it replaces. */
-export function headOf(file: IssueFile, changes: readonly string[] | null): Issue {
+/** The head as the record has it; with what changed since the issue it replaces, and what is past its retention. */
+export function headOf(file: IssueFile, changes: readonly string[] | null, due?: readonly string[] | null): Issue {
   const { number, revision, issued_on, replaces, reason, previous_manifest } = file;
-  return { number, revision, issued_on, replaces, reason, previous_manifest, ...(changes === null ? {} : { changes }) };
+  return { number, revision, issued_on, replaces, reason, previous_manifest, ...(changes === null ? {} : { changes }), ...(due === undefined ? {} : { retention_due: due }) };
 }
 
 /** Readings first, then what follows from them, then what is neither; of each kind in the record's order. */

@@ -135,8 +135,8 @@ function isHeadOf({ issue }: SwayfolioRecord, file: IssueFile): boolean {
 }
 
 /** An altered record may hold keys that no record has. */
-function knownHead({ number, revision, issued_on, replaces, reason, previous_manifest, changes }: Issue): Issue {
-  return { number, revision, issued_on, replaces, reason, previous_manifest, ...(changes === undefined ? {} : { changes }) };
+function knownHead({ number, revision, issued_on, replaces, reason, previous_manifest, changes, retention_due }: Issue): Issue {
+  return { number, revision, issued_on, replaces, reason, previous_manifest, ...(changes === undefined ? {} : { changes }), ...(retention_due === undefined ? {} : { retention_due }) };
 }
 
 function reproductionOf(frozen: Frozen, { folder, assessAgain }: Question): Reproduction {

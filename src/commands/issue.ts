@@ -10,6 +10,7 @@ import type { SwayfolioRecord } from '../record/types.ts';
 import { type ArchiveClaim, type OutputFile, type Shell, UserError } from '../shell/types.ts';
 import { changeLines } from './changes.ts';
 import { type Arguments, type Command, type Context, type ExitCode, plantArgument } from './command.ts';
+import type { Delivery } from './deliver.ts';
 import { printable } from './problems.ts';
 
 export const issue: Command = {
@@ -52,16 +53,19 @@ interface Way {
 async function issueInto(folder: string, record: SwayfolioRecord, { given, key, claim }: Way, { shell }: Context): Promise<ExitCode> {
   const { issuesIn } = await import('../archive/chain.ts');
   const { changesSince, folderOf, frozenFiles, headOf, nextIssue, printedChanges } = await import('../archive/issue.ts');
+  const { dueFor } = await import('../archive/retention.ts');
   const { fingerprint } = await import('../archive/ssh-key.ts');
   const { readRecord } = await import('../record/read.ts');
   const { writeRecord } = await import('../record/write.ts');
   const archive = `${folder}/issued`;
-  const file = nextIssue(archive, issuesIn(archive, shell), record, {
+  const issues = issuesIn(archive, shell);
+  const file = nextIssue(archive, issues, record, {
     survey: record.survey.id, reason: given.reason ?? null, today: shell.today(), signedBy: key === null ? null : fingerprint(key.publicBlob),
   });
   const replaced = file.replaces === null ? null : readRecord(new TextDecoder().decode(shell.read(`${archive}/${file.replaces}/record.json`)));
   const changes = replaced === null ? null : changesSince(replaced, readRecord(writeRecord(record)));
-  const text = writeRecord({ ...record, issue: headOf(file, changes === null ? null : printedChanges(changes)) });
+  const due = record.plant.retention === null ? undefined : dueFor(issues, record.plant.retention, file.issued_on);
+  const text = writeRecord({ ...record, issue: headOf(file, changes === null ? null : printedChanges(changes), due) });
   const { deliver } = await import('./deliver.ts');
   const { loadAssets } = await import('../shell/assets.ts');
   const delivery = await deliver(text, loadAssets(folder), {}, shell.progress);
@@ -69,7 +73,7 @@ async function issueInto(folder: string, record: SwayfolioRecord, { given, key, 
   const all = both(delivery.files, inputFiles(folder, delivery.record, shell));
   claim.publish(folderOf(file), frozenFiles(all, file, key, (hash) => { manifestHash = hash; }));
   shell.progress('');
-  shell.stdout(told(`${archive}/${folderOf(file)}`, file, delivery.pages, manifestHash, changes));
+  shell.stdout(told(`${archive}/${folderOf(file)}`, file, delivery, manifestHash, changes));
   return 0;
 }
 
@@ -99,7 +103,7 @@ function* inputFiles(folder: string, record: SwayfolioRecord, shell: Shell): Ite
   for (const path of hashes.keys()) throw new UserError(`${folder}/${path} was taken away while its report was made.`, 'Run again when nobody writes to it; nothing was issued.');
 }
 
-function told(at: string, file: IssueFile, pages: number, manifestHash: string, changes: readonly Difference[] | null): string {
+function told(at: string, file: IssueFile, { pages, record }: Delivery, manifestHash: string, changes: readonly Difference[] | null): string {
   return [
     `Issued survey ${file.survey} as number ${file.number}, revision ${file.revision}, on ${file.issued_on}: ${at}`,
     `  report.pdf (${pages} pages), site/, record.json, work-list.csv, inputs/`,
@@ -107,6 +111,14 @@ function told(at: string, file: IssueFile, pages: number, manifestHash: string, 
     `  previous manifest  ${file.previous_manifest ?? 'none: the first of this archive'}`,
     `  its own manifest   ${manifestHash}`,
     ...(file.signed_by === null ? [] : [`  signed by          ${file.signed_by}`]),
+    ...retentionLines(record),
     '  Keep the hash of its manifest apart from the archive: it proves the last issue, which no later one names.',
   ].map((line) => `${printable(line)}\n`).join('');
+}
+
+function retentionLines({ plant, issue }: SwayfolioRecord): readonly string[] {
+  if (plant.retention === null) return [];
+  const due = issue?.retention_due ?? null;
+  if (due === null) return [`  retention          ${plant.retention}: names no number of years, so what is past it cannot be told`];
+  return [`  retention          ${plant.retention}; past it: ${due.length === 0 ? 'none' : due.join(', ')} (nothing is ever deleted)`];
 }

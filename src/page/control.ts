@@ -3,6 +3,7 @@ import { fromHz } from '../measure/units.ts';
 import type { LimitSetLine, RuleLine } from '../record/types.ts';
 import { slugOf } from './file-name.ts';
 import type { Format } from './format.ts';
+import { decisionText, issueChanges, issueFields } from './issue.ts';
 
 export interface FieldView {
   readonly label: string;
@@ -16,6 +17,12 @@ export interface ControlView {
   readonly title: string;
   readonly status: string;
   readonly fields: readonly FieldView[];
+  /** Of the fields, what an issue says of itself. */
+  readonly issue: readonly FieldView[];
+  readonly isIssued: boolean;
+  /** Since the issue that this one replaces. */
+  readonly changes: readonly string[];
+  readonly hasChanges: boolean;
   readonly hasLogo: boolean;
   readonly logo: string;
   readonly contractor: string;
@@ -41,11 +48,16 @@ export function controlView(format: Format): ControlView {
       ...field(format.say('view.measured_by'), survey.people.map((p) => p.name).join(', ')),
       ...field(format.say('view.reviewed_by'), survey.reviewed_by ?? format.say('view.not_yet')),
       ...field(format.say('view.approved_by'), survey.approved_by ?? format.say('view.not_yet')),
-      ...field(format.say('view.issue_date'), format.date(survey.issue_date)),
+      ...field(format.say('view.issue_date'), format.date(issue?.issued_on ?? survey.issue_date)),
+      ...issueFields(format),
       ...field(format.say('view.distribution'), plant.distribution.join(', ')),
       ...field(format.say('view.retention'), plant.retention),
       ...field(format.say('view.made_with'), format.say('view.tool', { tool: `${tool.name} ${tool.version}`, hash: hash.slice(0, 12) })),
     ],
+    issue: issueFields(format),
+    isIssued: issue !== null,
+    changes: issueChanges(format),
+    hasChanges: issueChanges(format).length > 0,
     hasLogo: plant.contractor.logo !== null,
     logo: plant.contractor.logo ?? '',
     contractor: plant.contractor.name ?? '',
@@ -113,6 +125,7 @@ export function methodView(format: Format) {
     urgencyRules: rules.filter((r) => r.levels.length > 0).map((r) => ({ ...rule(r), critical: level(r, 0), essential: level(r, 1), general: level(r, 2), spare: [3, 4, 5].map((i) => level(r, i)).join(' / ') })),
     otherRules: rules.filter((r) => r.levels.length === 0).map(rule),
     hasRules: rules.length > 0,
+    decision: decisionText(format, record.measurements),
     problems: record.problems.filter((p) => p.severity !== 'note').map((p) => ({ place: p.line === null ? p.file : `${p.file}:${p.line}`, message: p.message })),
     hasProblems: record.problems.some((p) => p.severity !== 'note'),
     inputs: record.inputs.map((i) => ({ path: i.path, bytes: String(i.bytes), sha256: i.sha256 })),

@@ -4,6 +4,7 @@ import { type ActionView, actionView, overrideText } from './actions.ts';
 import { type Charts, seriesId } from './charts.ts';
 import { slugOf } from './file-name.ts';
 import type { Format } from './format.ts';
+import { decisionText } from './issue.ts';
 import { governingMeasurement, type MachineView, machineView, type ReadingView, readingView } from './machines.ts';
 
 export interface ExceptionView {
@@ -29,6 +30,8 @@ export interface ExceptionView {
   readonly indications: readonly { readonly rule: string; readonly message: string; readonly confirm: string }[];
   readonly hasIndications: boolean;
   readonly forecast: string;
+  /** The rule by which its zones were told. */
+  readonly decision: string;
   readonly cannotSee: string;
   readonly events: readonly { readonly date: string; readonly text: string }[];
   readonly hasEvents: boolean;
@@ -75,6 +78,7 @@ export function exceptionView(format: Format, charts: Charts, machine: RecordMac
     indications: machine.indications.map((i) => ({ rule: i.rule, message: i.message, confirm: i.confirm })),
     hasIndications: machine.indications.length > 0,
     forecast: main === null ? '' : forecastText(format, main),
+    decision: decisionText(format, measurements),
     cannotSee: machine.cannot_see.join('; '),
     events: machine.events.map((e) => ({ date: format.date(e.date), text: `${format.term(e.event)}${e.notes === null ? '' : `: ${e.notes}`}${e.new_baseline ? ` (${format.say('view.new_baseline')})` : ''}` })),
     hasEvents: machine.events.length > 0,

@@ -2,6 +2,7 @@ import type { RecordMachine, RecordMeasurement } from '../record/types.ts';
 import { type Charts, seriesId } from './charts.ts';
 import { slugOf } from './file-name.ts';
 import type { ConditionView, Format } from './format.ts';
+import { isUncertaintyStated } from './issue.ts';
 
 /** A machine in the list of all. */
 export interface MachineView {
@@ -104,7 +105,7 @@ export interface ReadingView {
 export function readingView(format: Format, m: RecordMeasurement): ReadingView {
   const condition = format.condition(m.zone ?? m.ratio_class);
   const held = m.held === null ? '' : format.say('view.last_zone', { zone: format.term(m.held.zone), date: format.date(m.held.date) });
-  const near = m.near_boundary === null ? '' : format.say('view.near', { boundary: m.near_boundary });
+  const near = m.near_boundary === null ? '' : format.say(isUncertaintyStated(format) ? 'view.near.stated' : 'view.near', { boundary: m.near_boundary });
   const set = m.limits;
   const boundaries = set === null ? '' : [set.ab, set.bc, set.cd].map((v) => (v === null ? '–' : format.number(v))).join('\u00a0/\u00a0');
   const doubts = m.doubts.map((d) => d.message);

@@ -46,7 +46,7 @@ export const WORDS: Readonly<Record<string, readonly string[]>> = {
 /** Fields by the name of the key under which an object, or each object of a list, stands. */
 export const FIELDS: Readonly<Record<string, string>> = {
   tool: 'name:s version:s',
-  issue: 'number:s revision:i issued_on:d replaces:s? reason:s? previous_manifest:s? changes:S*',
+  issue: 'number:s revision:i issued_on:d replaces:s? reason:s? previous_manifest:s? changes:S* retention_due:S?*',
   plant: `plant:s client:s? site:s? contract:s? procedure:s? contractor:o:contractor language:w:language paper:w:paper units:U
     frequency_unit:w:frequency next_stops:l:next_stops renames:l:renames* retention:s? distribution:S`,
   contractor: 'name:s? address:s? contact:s? logo:s? accent:s?',

@@ -27,6 +27,8 @@ export interface Issue {
   readonly previous_manifest: string | null;
   /** What changed since the issue it replaces, a line a change; absent in a first issue. */
   readonly changes?: readonly string[];
+  /** Issues of the archive whose retention had ended on the day of this one; null where the plant's words name no number of years; absent where it states none. */
+  readonly retention_due?: readonly string[] | null;
 }
 
 /** plant.yaml as the report needs it. */

@@ -7,7 +7,7 @@ import { toSvg } from '../chart/svg.ts';
 import { rankedViews } from '../page/actions.ts';
 import type { Assets } from '../page/assets.ts';
 import { Charts, seriesId } from '../page/charts.ts';
-import { acceptedView, changesView, coverageView, methodView, noticesView, overTimeView, peopleView } from '../page/control.ts';
+import { acceptedView, changesView, controlView, coverageView, methodView, noticesView, overTimeView, peopleView } from '../page/control.ts';
 import { exceptionView, photoFile } from '../page/exception.ts';
 import { Format } from '../page/format.ts';
 import { Templates } from '../page/handlebars.ts';
@@ -108,7 +108,7 @@ function* listPages(format: Format, charts: Charts, pages: Pages, options: SiteO
   yield pages.page('machines', 'machines.html', format.say('page.machines'), machineList(format, charts));
   yield pages.page('coverage', 'coverage.html', format.say('page.coverage'), { ...first, coverage: coverageView(format), overTime: overTimeView(format), accepted: acceptedView(format), changes: changesView(format), notices: noticesView(format) });
   yield pages.page('method', 'method.html', format.say('page.method_and_limits'), { method: methodView(format), people: peopleView(format) });
-  yield pages.page('downloads', 'downloads.html', format.say('page.downloads'), { hasPdf: options.pdf, method: methodView(format) });
+  yield pages.page('downloads', 'downloads.html', format.say('page.downloads'), { hasPdf: options.pdf, method: methodView(format), control: controlView(format) });
 }
 
 function machineList(format: Format, charts: Charts): object {

@@ -59,9 +59,26 @@ describe('issue', () => {
     expect(contents(join(home, ISSUED, '2026-001'))).toEqual(old);
     const hashOf = (text: string): string => /its own manifest +([0-9a-f]{64})/.exec(text)?.[1] ?? '';
     expect(issueOf(home, '2026-001-r1')).toMatchObject({ number: '2026-001', revision: 1, replaces: '2026-001', reason: 'P-1 was mistyped', previous_manifest: hashOf(first.stdout) });
+    const page = Object.values(contents(join(home, ISSUED, '2026-001-r1/site'))).join('');
+    for (const printed of ['P-1 was mistyped', hashOf(first.stdout), 'value: 5.9, was 8.9']) expect(page).toContain(printed);
     const verified = swayfolio(home, ['verify', 'plant', '--json']);
     expect(verified.code).toBe(0);
     expect(JSON.parse(verified.stdout).issues.map((issue: { chain: string }) => issue.chain)).toEqual(['first', 'linked', 'linked']);
+  });
+
+  test('the decision rule stands with each verdict, and what is past its retention on the control page', () => {
+    const stated = 'plant: Test Works\nretention: ten years\npolicy: { 2.near.share: 0.2 }\n';
+    const old = readings(['P-1,DE-H,velocity,rms,2.0,mm/s,1480']);
+    const home = plantFolder({ ...ISSUABLE, 'plant.yaml': stated, 'surveys/2014-01-14/readings.csv': old, 'surveys/2014-01-14/survey.yaml': `${PEOPLE}issue_date: 2014-02-01\n`, [LAST]: readings(['P-1,DE-H,velocity,rms,5.2,mm/s,1480']) });
+    expect(swayfolio(home, ['issue', 'plant', '--survey', '2014-01-14']).stdout).toContain('ten years; past it: none');
+    expect(swayfolio(home, ['issue', 'plant']).stdout).toContain('ten years; past it: 2014-001 (nothing is ever deleted)');
+    expect(archiveOf(home)).toEqual(['2014-001', '2026-001']);
+    const site = contents(join(home, ISSUED, '2026-001/site'));
+    const machine = Object.entries(site).find(([path, text]) => path.startsWith('machines/p-1') && text.includes('DE-H'))?.[1] ?? '';
+    expect(machine).toMatch(/Decision rule: iso10816-7[^<]*2009[^<]*on a boundary the better zone \(our choice\)\. The uncertainty stated, 20 % \(2\.near\.share\)/);
+    expect(machine).toContain('not clear: within the stated uncertainty of B/C');
+    expect(site['downloads.html']).toContain('2014-001; nothing is ever deleted');
+    expect(swayfolio(home, ['verify', 'plant']).code).toBe(0);
   });
 
   test('refused: errors in the input; findings that nobody of a diagnosing category stands for; a reason for a first issue; a survey that is not there', () => {
