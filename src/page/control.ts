@@ -3,7 +3,7 @@ import { fromHz } from '../measure/units.ts';
 import type { LimitSetLine, RuleLine } from '../record/types.ts';
 import { slugOf } from './file-name.ts';
 import type { Format } from './format.ts';
-import { decisionText, issueChanges, issueFields } from './issue.ts';
+import { decisionOfAll, issueChanges, issueFields } from './issue.ts';
 
 export interface FieldView {
   readonly label: string;
@@ -125,7 +125,7 @@ export function methodView(format: Format) {
     urgencyRules: rules.filter((r) => r.levels.length > 0).map((r) => ({ ...rule(r), critical: level(r, 0), essential: level(r, 1), general: level(r, 2), spare: [3, 4, 5].map((i) => level(r, i)).join(' / ') })),
     otherRules: rules.filter((r) => r.levels.length === 0).map(rule),
     hasRules: rules.length > 0,
-    decision: decisionText(format, record.measurements),
+    decision: decisionOfAll(format),
     problems: record.problems.filter((p) => p.severity !== 'note').map((p) => ({ place: p.line === null ? p.file : `${p.file}:${p.line}`, message: p.message })),
     hasProblems: record.problems.some((p) => p.severity !== 'note'),
     inputs: record.inputs.map((i) => ({ path: i.path, bytes: String(i.bytes), sha256: i.sha256 })),

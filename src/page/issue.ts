@@ -25,11 +25,18 @@ export const isUncertaintyStated = (format: Format): boolean => format.record.po
 
 /** Limit sets with edition, boundary rule and what is done about uncertainty, for the verdicts of these readings. */
 export function decisionText(format: Format, measurements: readonly RecordMeasurement[]): string {
-  const { limit_sets: all, policy } = format.record;
   const used = new Set(measurements.flatMap((m) => (m.limit_set === null ? [] : [m.limit_set])));
-  const named = new Set(all.filter((set) => used.has(set.id)).map((set) => `${set.id} (${[set.source, set.edition, set.table].filter((part) => part !== null).join(', ') || set.title})`));
-  const share = policy.find((line) => line.id === NEAR)?.value ?? 0;
+  const sets = format.record.limit_sets.filter((set) => used.has(set.id));
+  const named = new Set(sets.map((set) => `${set.id} (${[set.source, set.edition, set.table].filter((part) => part !== null).join(', ') || set.title})`));
+  return ruleText(format, named.size === 0 ? format.say('view.decision.none') : [...named].join('; '));
+}
+
+/** The same where every set is listed beside it. */
+export const decisionOfAll = (format: Format): string => ruleText(format, format.say('view.decision.listed'));
+
+function ruleText(format: Format, sets: string): string {
+  const share = format.record.policy.find((line) => line.id === NEAR)?.value ?? 0;
   const percent = format.plain(Math.round(share * 1000) / 10);
   const uncertainty = isUncertaintyStated(format) ? format.say('view.decision.stated', { percent }) : format.say('view.decision.tolerance', { percent });
-  return format.say('view.decision', { sets: named.size === 0 ? format.say('view.decision.none') : [...named].join('; '), uncertainty });
+  return format.say('view.decision', { sets, uncertainty });
 }
