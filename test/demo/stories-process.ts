@@ -1,0 +1,23 @@
+/** Stories of the process floor. */
+import type { Story } from './story.ts';
+
+export const PROCESS: readonly Story[] = [
+  { machine: 'JP-1A', at: { point: '3H' }, reading: { zone: 'C', travel: 'steady' }, boundaries: { ab: 3.2, bc: 5.1, cd: 8.5 }, says: { condition: 'C', urgency: 'next planned stop', rule: 'C4' }, action: { due: '2026-03-02' }, because: 'category II to 200 kW: 6.0 is C; steady, essential: next planned stop, with and without the spare' },
+  { machine: 'JP-1C', at: { point: '3H' }, reading: { zone: 'D', travel: 'fast' }, says: { condition: 'D', urgency: 'now', rule: 'D1' }, because: '9.1 > 8.5; 9.1 − 2.1 > 2q = 2.55: fast; a spare never relieves D1' },
+  { machine: 'PW-02', at: { point: '3H' }, reading: { zone: 'C', travel: 'rising' }, says: { condition: 'C', previous_condition: 'B', urgency: 'within a month', rule: 'C2' }, because: '4.2 × 1.4 = 5.88 > 5.1; the rise of 1.68 is above q = 1.275 and not above 2q: rising; C2 essential' },
+  { machine: 'CP-03', at: { point: '3H' }, reading: { zone: 'A', travel: 'held' }, doubts: [['unexplained-fall', 'held']], says: { urgency: 'next planned stop' }, because: '1.9 ≤ 5.7/1.6 and nothing was done: zone as read, the level of the last reading (C4 essential) is held [7, case 14]' },
+  { machine: 'EV-02', at: { point: '2H' }, reading: { status: 'no access', travel: 'held' }, says: { urgency: 'within a month', rule: 'M1', previous_condition: 'C' }, because: 'last C4 critical within a month; one miss gives M2 watch: the worse is M1 [case 13]' },
+  { machine: 'KB-01', at: { point: '3H' }, reading: { zone: 'B', limit_set: 'blower' }, boundaries: { bc: 9, cd: 14 }, says: { condition: 'B', urgency: null }, because: 'no published zone for a lobe blower; own limits 9 and 14, no A/B: 7.5 is B' },
+  { machine: 'KB-01', at: { point: '4H' }, reading: { travel: 'steady' }, says: {}, because: 'the point was DE until 2025: one series by the rename' },
+  { machine: 'VP-01', at: { point: '1H' }, reading: { zone: null }, boundaries: { bc: 5.0 }, says: { condition: 'not assessed', urgency: null }, because: 'a band from 10 Hz cannot see 590 r/min where the limits need 2 Hz [1]; B/C is 5.0 since 2025-12-01, approved' },
+  { machine: 'VP-01', survey: '2025-11-19', at: { point: '1H' }, reading: { zone: 'A' }, boundaries: { bc: 4.5 }, because: 'before 2025-12-01 the limit was 4.5: the past is judged by the row then in force' },
+  { machine: 'AC-01', at: { point: '1H' }, reading: { zone: null, ratio_class: 'r-B', travel: 'step' }, says: { condition: 'r-B', urgency: 'watch', rule: 'B3' }, because: '3.6/2.0 = 1.8: r-B; plateau of the last three: step; B3 essential: watch' },
+  { machine: 'GP-01', at: { point: '2H' }, doubts: [['retake-differs', 'note']], reading: { zone: 'B' }, because: '2.60 against 1.95 is a third apart; the last take counts' },
+  { machine: 'GP-01', at: { point: '3H', quantity: 'acceleration', detection: 'true peak' }, reading: { ratio_class: 'r-B', travel: 'rising' }, says: { urgency: 'next planned stop', rule: 'B2' }, because: '34/18.2 = 1.87: r-B, and 34/19.2 = 1.77 since last time is above 1.6: rising; B2 essential' },
+  { machine: 'CR-01', at: { point: '2A' }, reading: { zone: 'B', travel: 'rising' }, says: { condition: 'B', urgency: 'next planned stop', rule: 'B2' }, action: { status: 'ordered', overdue_days: 61, times_reported: 3 }, because: '3.6 lies between 3.2 and 5.1; real trend: rising; B2 essential; due 2025-11-14 is 61 days before; told at three surveys in three wordings' },
+  { machine: 'CR-01', at: { point: '1V' }, doubts: [['date', 'note']], because: 'taken on 2026-01-12, two days before its survey' },
+  { machine: 'SB-02', at: { point: '1H' }, reading: { zone: 'D', travel: 'step' }, says: { condition: 'D', urgency: 'within a week', rule: 'D3' }, action: { status: 'rejected' }, because: '5.1 > 4.5 of G2R; plateau since 4.8: step; D3 general; the rejected recommendation stays on the list' },
+  { machine: 'DR-01', at: { point: '2V' }, reading: { zone: 'C', travel: 'step' }, says: { condition: 'C', urgency: 'within a month', rule: 'C3' }, because: '3.3 is C of G2R; 3.3 − 2.0 > q = 0.7 over the baseline, nothing since last time: step; C3 essential' },
+  { machine: 'MA-01', at: { point: '1H' }, reading: { zone: 'B', travel: 'fast' }, says: { condition: 'B', urgency: 'next planned stop', computed_urgency: 'within a month', rule: 'B1' }, because: '2.5 − 1.0 = 1.5 > 2q = 1.4: fast; B1 essential: within a month; overridden by name, with reason and expiry' },
+  { machine: 'SN-03', at: { point: '3H' }, reading: { zone: 'D', travel: 'steady' }, says: { condition: 'D', urgency: 'within a month', rule: 'D4' }, because: '9.0 > 8.5, steady, general: D4 within a month' },
+];
