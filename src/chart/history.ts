@@ -6,6 +6,8 @@ import { scaleLinear } from 'd3-scale';
 import { dayText, parseDay } from '../plant/day.ts';
 import { formatNumber, limitNumber, plainNumber } from '../words/numbers.ts';
 import { say } from '../words/say.ts';
+import type { Language } from '../words/sentences.ts';
+import { formatDate } from '../words/terms.ts';
 import type { Drawing, Ink, Shape } from './drawing.ts';
 import { historyAlt } from './history-alt.ts';
 import { line, rectangle, round } from './path.ts';
@@ -43,7 +45,7 @@ export function historyChart(input: HistoryInput): Drawing {
     ...ticks.map((t) => label(frame.left - 5, y(t.value) + SIZE * 0.35, t.text, SIZE, 'end')),
     stroke(line(frame.left, frame.bottom, frame.right, frame.bottom), 'rule', 0.6),
     ...lineShapes(lines, y, frame),
-    ...dateAxis(days, x, frame),
+    ...dateAxis(days, x, frame, input.language ?? 'en'),
     ...eventTicks(input, first, last, time, frame),
     ...forecastRange(input, time, y, frame, top),
     ...readings(runsOf(series, x, y), input.held, frame),
@@ -131,7 +133,7 @@ export function apart(places: readonly number[], step: number, top: number): num
 }
 
 /** A tick a survey; dates where they have room. */
-function dateAxis(days: readonly number[], x: Scale, frame: Frame): Shape[] {
+function dateAxis(days: readonly number[], x: Scale, frame: Frame, language: Language): Shape[] {
   const shapes: Shape[] = [];
   const room = 11 * SIZE * LETTER;
   let free = Number.NEGATIVE_INFINITY;
@@ -141,7 +143,7 @@ function dateAxis(days: readonly number[], x: Scale, frame: Frame): Shape[] {
     shapes.push(stroke(line(at, frame.bottom, at, frame.bottom + 2.5), 'rule', 0.6));
     const isLast = i === days.length - 1;
     if (!isLast && (at < free || lastX - at < room)) return;
-    shapes.push(label(at, frame.bottom + 11, dayText(day), SIZE - 0.5, 'middle'));
+    shapes.push(label(at, frame.bottom + 11, formatDate(language, dayText(day)), SIZE - 0.5, 'middle'));
     free = at + room;
   });
   return shapes;

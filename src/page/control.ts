@@ -1,6 +1,7 @@
 /** The control page, people and instruments, coverage, changes, method: what an auditor asks for. */
 import { fromHz } from '../measure/units.ts';
 import type { LimitSetLine, RuleLine } from '../record/types.ts';
+import { unitTerm } from '../words/terms.ts';
 import { slugOf } from './file-name.ts';
 import type { Format } from './format.ts';
 import { decisionOfAll, issueChanges, issueFields } from './issue.ts';
@@ -203,7 +204,7 @@ function unitChanges(format: Format): { what: string; text: string }[] {
 export function acceptedView(format: Format) {
   const rows = format.record.machines.flatMap((m) =>
     m.accepted.map((a) => ({
-      machine: m.machine, point: [a.point, a.quantity === null ? null : format.term(a.quantity)].filter((t) => t !== null).join(' ') || format.say('view.all_points'), upTo: `${format.number(a.up_to)} ${a.unit ?? ''}`.trim(), until: format.date(a.until), by: a.by ?? format.say('view.not_stated'),
+      machine: m.machine, point: [a.point, a.quantity === null ? null : format.term(a.quantity)].filter((t) => t !== null).join(' ') || format.say('view.all_points'), upTo: `${format.number(a.up_to)} ${unitTerm(format.language, a.unit ?? '')}`.trim(), until: format.date(a.until), by: a.by ?? format.say('view.not_stated'),
       reason: a.reason ?? '', state: format.say(a.in_force ? 'view.in_force' : 'view.no_longer'),
     })),
   );

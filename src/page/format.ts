@@ -59,6 +59,12 @@ export class Format {
     return term(this.language, word);
   }
 
+  /** The same, shorter where a narrow column asks for it. */
+  shortTerm(word: string): string {
+    const short = this.term(`short ${word}`);
+    return short === `short ${word}` ? this.term(word) : short;
+  }
+
   /** What a line of the policy does; in English where there are no words for it. */
   policyAbout(line: { readonly id: string; readonly about: string }): string {
     const key = `policy.${line.id}`;

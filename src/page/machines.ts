@@ -84,6 +84,8 @@ export interface ReadingView {
   readonly point: string;
   readonly component: string;
   readonly quantity: string;
+  /** For a narrow column. */
+  readonly quantityShort: string;
   readonly value: string;
   readonly unit: string;
   readonly condition: ConditionView;
@@ -116,6 +118,7 @@ export function readingView(format: Format, m: RecordMeasurement): ReadingView {
     point: m.point,
     component: m.component === m.machine ? '' : m.component,
     quantity: format.term(m.quantity),
+    quantityShort: format.shortTerm(m.quantity),
     value: m.value === null && m.bound === null ? format.term(m.status) : format.reading(m),
     unit: format.unit(m.unit, m.detection),
     condition,
