@@ -1,4 +1,4 @@
-// Builds the program: src/ becomes dist/ (our own code bundled, packages left where npm puts them), and the two
+// Builds the program: src/ becomes dist/ (our own code bundled, packages left where npm puts them), and the
 // JSON Schemas are written beside it. In memory first, so that a build that fails leaves the old dist/ whole.
 import { mkdirSync, rmSync, writeFileSync } from 'node:fs';
 import { dirname, join } from 'node:path';
@@ -11,7 +11,7 @@ const dist = join(root, 'dist');
 export async function buildProgram() {
   const result = await build({
     absWorkingDir: root,
-    entryPoints: { main: './src/main.ts', 'schemas/plant': './src/survey/schema.ts', 'schemas/record': './src/record/schema.ts' },
+    entryPoints: { main: './src/main.ts', 'schemas/plant': './src/survey/schema.ts', 'schemas/record': './src/record/schema.ts', 'schemas/comparison': './src/record/comparison.ts' },
     outdir: 'dist',
     bundle: true,
     splitting: true,
@@ -31,6 +31,7 @@ export async function buildProgram() {
   }
   await writeSchema('plant', 'plantJsonSchema');
   await writeSchema('record', 'recordJsonSchema');
+  await writeSchema('comparison', 'comparisonJsonSchema');
 }
 
 async function writeSchema(name, of) {

@@ -7,6 +7,7 @@ import process from 'node:process';
 import yargs, { type Argv } from 'yargs';
 import { check } from './commands/check.ts';
 import type { Argument, Arguments, Command, Context, ExitCode } from './commands/command.ts';
+import { compare } from './commands/compare.ts';
 import { draft } from './commands/draft.ts';
 import { issue } from './commands/issue.ts';
 import { limits } from './commands/limits.ts';
@@ -19,7 +20,7 @@ import { verify } from './commands/verify.ts';
 import { realShell } from './shell/shell.ts';
 import { UserError } from './shell/types.ts';
 
-const COMMANDS: readonly Command[] = [newCommand, check, draft, report, issue, verify, render, limits];
+const COMMANDS: readonly Command[] = [newCommand, check, draft, report, issue, verify, compare, render, limits];
 
 async function run(words: readonly string[], context: Context): Promise<ExitCode> {
   let code: ExitCode = 0;

@@ -22,6 +22,8 @@ export interface Arguments {
   readonly plant?: string | undefined;
   readonly record?: string | undefined;
   readonly issued?: readonly string[] | undefined;
+  readonly records?: readonly string[] | undefined;
+  readonly csv?: boolean | undefined;
   readonly id?: string | undefined;
   readonly survey?: string | undefined;
   readonly reason?: string | undefined;
