@@ -4,7 +4,7 @@
  */
 import { unitFactor } from '../measure/units.ts';
 import type { ComparedVerdict } from '../record/comparison.ts';
-import type { Condition, RecordMachine, RecordMeasurement, SwayfolioRecord } from '../record/types.ts';
+import type { Condition, RecordMachine, RecordMeasurement, SwayfolioRecord, Zone } from '../record/types.ts';
 import { type Ids, type Named, placeOf } from './compared.ts';
 
 /** True above the boundary by the rules' tolerance. */
@@ -58,16 +58,19 @@ function classToday(m: RecordMeasurement, now: RecordMeasurement | undefined, to
     return { today: zoneOf(m.value, boundaries, exceeds), because: `limits ${limitText(before)} (${m.limit_set ?? 'none'}) then, ${limitText(boundaries)} (${now.limit_set ?? 'none'}) today` };
   }
   const [before, after] = [ratios(then), ratios(today)];
-  if (before.join() === after.join() || m.baseline === null) return kept;
-  const letter = zoneOf(m.value, after.map((r) => r * (m.baseline?.value ?? 0)), exceeds);
-  return { today: m.ratio_class === 'r-A' ? 'r-A' : (`r-${letter}` as Condition), because: `policy 2.ratio ×${before.join(', ×')} is ×${after.join(', ×')} today` };
+  if (before.join() === after.join() || m.baseline === null || m.unit === 'dB') return kept;
+  const { value: baseline } = m.baseline;
+  const letters = [before, after].map((steps) => zoneOf(m.value ?? 0, steps.map((step) => step * baseline), exceeds));
+  // A value below its floor is r-A whatever its ratio; the record has no floor, so such a class stands.
+  if (`r-${letters[0]}` !== m.ratio_class) return kept;
+  return { today: `r-${letters[1] as Zone}`, because: `policy 2.ratio ×${before.join(', ×')} then, ×${after.join(', ×')} today` };
 }
 
 const same = (a: number | null, b: number | null): boolean => a === b || (a !== null && b !== null && Math.abs(a - b) <= 1e-9 * Math.abs(a));
 const limitText = (boundaries: readonly (number | null)[]): string => boundaries.map((b) => (b === null ? '–' : String(Number(b.toPrecision(6))))).join('/');
 const ratios = (record: SwayfolioRecord): number[] => ['2.ratio.b', '2.ratio.c', '2.ratio.d'].map((id) => record.policy.find((line) => line.id === id)?.value ?? 0);
 
-function zoneOf(value: number, [ab, bc, cd]: readonly (number | null)[], exceeds: Exceeds): 'A' | 'B' | 'C' | 'D' {
+function zoneOf(value: number, [ab, bc, cd]: readonly (number | null)[], exceeds: Exceeds): Zone {
   const above = (boundary: number | null | undefined): boolean => boundary !== null && boundary !== undefined && exceeds(value, boundary);
   return above(cd) ? 'D' : above(bc) ? 'C' : above(ab) ? 'B' : 'A';
 }

@@ -36,7 +36,7 @@ function verdicts(c: Comparison): Chapter[] {
   return [
     chapter('differing', 'Verdicts that depend on what changed', 'Conditions as issued that are others under the limits and policy of today, and why.', 'Each condition is the same under the limits and policy of today.', ['Machine', 'Survey', 'As issued', 'Today', 'Why', 'From'],
       differing.map((v) => [cell(v.machine), cell(v.survey), cell(v.issued), cell(v.today), cell(v.why ?? ''), cell(placeText(v))])),
-    chapter('verdicts', 'Every condition as issued', 'Each machine at each survey, beside the condition under the limits and policy of today. A point that was not measured keeps its last class in both.', 'No machine.', columns, c.verdicts.map(row)),
+    chapter('verdicts', 'Every condition as issued', 'Each machine at each survey, beside the condition under the limits and policy of today. A reading is judged again by its limits and ratio classes alone: points that were not measured, bounds, bands and floors stay as issued.', 'No machine.', columns, c.verdicts.map(row)),
   ];
 }
 
