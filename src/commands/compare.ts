@@ -57,13 +57,17 @@ async function gather(paths: readonly string[], shell: Shell, version: string): 
   };
   for (const given of paths) {
     const path = given.replace(/(?<=[^/])\/+$/, '');
+    if (path.endsWith('.json')) {
+      add(path, path);
+      continue;
+    }
     if (shell.exists(`${path}/plant.yaml`)) plants.push(path);
     const archive = shell.exists(`${path}/issued`) ? `${path}/issued` : path;
     const issues = shell.exists(`${path}/record.json`) || shell.folders(archive).length === 0 ? [] : issuesIn(archive, shell);
     if (shell.exists(`${path}/record.json`)) add(path, `${path}/record.json`);
     else if (issues.length > 0) for (const issue of issues) add(`issued/${issue.name}`, `${archive}/${issue.name}/record.json`);
     else if (shell.exists(`${path}/plant.yaml`)) throw new UserError(`${path} has no issued report.`, 'Issue one by: swayfolio issue, or name record.json files.');
-    else add(path, path);
+    else throw new UserError(`${path} holds no record and no issued report.`, 'Give a plant folder, issued folders, or record.json files.');
   }
   const plant = plants.length === 1 ? (plants[0] ?? null) : null;
   return { records, plant, ...(plant === null ? { today: null, notes: [] } : await assessedToday(plant, shell, version)) };

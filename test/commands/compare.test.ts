@@ -15,7 +15,7 @@ function twoRecords(restated: boolean): string {
 
 const RECORDS = ['first/record.json', 'second/record.json'];
 
-test('an altered reading: exit 1, told in PDF folder, site and CSV; the same bytes twice', () => {
+test('an altered reading: exit 1, told in the site and beside it; the same bytes twice', () => {
   const home = twoRecords(true);
   const run = swayfolio(home, ['compare', ...RECORDS, '--out', 'years', '--csv']);
   expect(run.code, run.stderr).toBe(1);
@@ -24,7 +24,7 @@ test('an altered reading: exit 1, told in PDF folder, site and CSV; the same byt
   const written = contents(join(home, 'years'));
   expect(contents(join(home, 'again'))).toEqual(written);
   expect(Object.keys(written)).toEqual(expect.arrayContaining(['comparison.csv', 'comparison.json', 'comparison.pdf', 'site/index.html', 'site/restated.html']));
-  expect(written['site/restated.html']).toMatch(/2\.2 mm\/s.*first\/record\.json › surveys\/2025.11.10\/readings\.csv:2.*2\.7 mm\/s.*second\/record\.json/s);
+  expect(written['site/restated.html']).toMatch(/2\.2 mm\/s.*first\/record\.json.*surveys\/2025-11-10\/readings\.csv:2.*2\.7 mm\/s.*second\/record\.json/s);
   for (const [path, text] of Object.entries(written)) if (path.endsWith('.html')) expect(text, path).toContain('screening by overall values');
 });
 
@@ -41,7 +41,7 @@ test('nothing altered: exit 0; CSV alone goes to stdout, and the schema of the p
 test('wrong use: no folder to write to, no record, a plant without issues', () => {
   const home = twoRecords(false);
   for (const [args, code, text] of [
-    [RECORDS, 2, 'no folder to write to'], [['plant'], 1, 'has no issued report'], [['plant/plant.yaml', '--csv'], 1, 'is no JSON'], [['absent.json', '--csv'], 1, 'absent.json'],
+    [RECORDS, 2, 'no folder to write to'], [['plant'], 1, 'has no issued report'], [['plant/surveys', '--csv'], 1, 'plant/surveys'], [['absent.json', '--csv'], 1, 'absent.json'],
   ] as const) {
     const run = swayfolio(home, ['compare', ...args]);
     expect([run.code, run.stdout]).toEqual([code, '']);
