@@ -26,6 +26,7 @@ export interface Arguments {
   readonly csv?: boolean | undefined;
   readonly id?: string | undefined;
   readonly survey?: string | undefined;
+  readonly from?: readonly string[] | undefined;
   readonly reason?: string | undefined;
   readonly sign?: string | undefined;
   readonly key?: string | undefined;

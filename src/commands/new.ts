@@ -2,15 +2,21 @@
 import { parseDay } from '../plant/day.ts';
 import type { SwayfolioRecord } from '../record/types.ts';
 import type { OutputFile } from '../shell/types.ts';
+import type { Shell } from '../shell/types.ts';
 import { UserError } from '../shell/types.ts';
-import type { Command } from './command.ts';
+import type { Command, ExitCode } from './command.ts';
+import { nextStep, printable, problemText } from './problems.ts';
 
 export const newCommand: Command = {
   usage: 'new <folder>',
-  describe: 'make a plant folder; with --survey, the next survey of a plant',
+  describe: 'make a plant folder; with --from, out of exports; with --survey, the next survey of a plant',
   positionals: { folder: { describe: 'a folder that is new or empty; with --survey, the plant folder', type: 'string' } },
-  options: { survey: { describe: 'date of the next survey, YYYY-MM-DD', type: 'string' } },
-  async run({ folder = '', survey }, { shell, version }) {
+  options: {
+    survey: { describe: 'date of the next survey, YYYY-MM-DD', type: 'string' },
+    from: { describe: 'exports to make the plant of, in whatever form they are', type: 'string', array: true },
+  },
+  async run({ folder = '', survey, from }, { shell, version }) {
+    if (from !== undefined) return madeFrom(folder, from, survey, shell);
     if (survey === undefined) {
       const { newPlant } = await import('../survey/new.ts');
       shell.createFolder(folder, newPlant());
@@ -31,6 +37,26 @@ export const newCommand: Command = {
     return 0;
   },
 };
+
+/** The plant of some exports: what is sure stands in its mapping, what is not is asked here and there. */
+async function madeFrom(folder: string, from: readonly string[], survey: string | undefined, shell: Shell): Promise<ExitCode> {
+  if (survey !== undefined) throw new UserError('--from and --survey do not go together.', 'Make the plant by --from first.', 2);
+  const exports = from.map((path) => ({ name: nameOf(path), bytes: shell.read(path) }));
+  const twice = exports.find((file, i) => exports.findIndex((other) => other.name.toLowerCase() === file.name.toLowerCase()) !== i);
+  if (exports.length === 0 || twice !== undefined) throw new UserError(twice === undefined ? '--from names no file.' : `Two of the files are called ${twice.name}.`, 'Name each export once; rename one of two of the same name.', 2);
+  const { plantFrom } = await import('../survey/from.ts');
+  const { files, questions } = plantFrom(exports, nameOf(shell.absolute(folder)));
+  shell.createFolder(folder, files);
+  const { readPlant } = await import('../survey/read.ts');
+  const { problems } = readPlant(shell, folder);
+  shell.stdout(`Made ${folder}: the exports are copied into surveys/, the mapping of their columns stands in plant.yaml.\n`);
+  for (const question of questions) shell.stdout(`question: ${printable(question)}\n`);
+  shell.stdout(problemText(problems));
+  shell.stdout(questions.length === 0 ? `${nextStep(folder, problems)}\n` : `Next: answer the ${questions.length === 1 ? 'question' : `${questions.length} questions`} in ${folder}/plant.yaml, then run: swayfolio check ${folder}\n`);
+  return 0;
+}
+
+const nameOf = (path: string): string => path.replaceAll('\\', '/').replace(/\/+$/, '').split('/').pop() ?? path;
 
 /** ALARM of each series at the last survey, to stand beside the blanks of the next. */
 function alarmsOf(record: SwayfolioRecord): Map<string, number> {

@@ -59,3 +59,32 @@ describe('new', () => {
     expect(existsSync(join(broken, 'plant/surveys/2026-03-15'))).toBe(false);
   });
 });
+
+describe('new --from', () => {
+  test('exports without a question: a folder that report takes at once; what was given stays as it was', () => {
+    const home = freshFolder();
+    const text = 'Asset;Point;Date;Vel (mm/s RMS)\nFAN-1;1H;14/01/2026;1,8\nFAN-1;2H;14/01/2026;STBY\n';
+    writeFileSync(join(home, 'export.csv'), text);
+    const run = swayfolio(home, ['new', 'works', '--from', 'export.csv']);
+    expect(run.stderr).toBe('');
+    expect(run.code).toBe(0);
+    expect(run.stdout).toMatch(/Next: .*swayfolio report works\n$/);
+    expect(readFileSync(join(home, 'export.csv'), 'utf8')).toBe(text);
+    expect(readFileSync(join(home, 'works/surveys/export.csv'), 'utf8')).toBe(text);
+    expect(readFileSync(join(home, 'works/plant.yaml'), 'utf8')).toMatch(/\$schema=\.\/plant\.schema\.json/);
+    expect(swayfolio(home, ['report', 'works']).code).toBe(0);
+  });
+
+  test('asks, and is refused for a file that is not there, two of one name, and together with --survey', () => {
+    const home = freshFolder();
+    writeFileSync(join(home, 'export.csv'), 'Asset;Point;Date;Level\nFAN-1;1H;01/02/2026;1,8\n');
+    const run = swayfolio(home, ['new', 'works', '--from', 'export.csv']);
+    expect(run.stdout).toMatch(/question: surveys\/export\.csv: In which unit[\s\S]*Next: answer the 2 questions in works\/plant\.yaml/);
+    for (const args of [['missing.csv'], ['export.csv', './export.csv'], ['export.csv', '--survey', '2026-01-14']]) {
+      const refused = swayfolio(home, ['new', 'other', '--from', ...args]);
+      expect(refused.code).not.toBe(0);
+      expect(refused.stderr).not.toMatch(STACK);
+      expect(existsSync(join(home, 'other'))).toBe(false);
+    }
+  });
+});
