@@ -1,4 +1,5 @@
 /** plant.yaml and survey.yaml as settings and survey heads. */
+import { readableAccent } from '../words/legible.ts';
 import { parseDetection } from '../measure/detection.ts';
 import { nearestWord } from '../measure/nearest.ts';
 import { parseFrequencyUnit, parseUnit } from '../measure/units.ts';
@@ -63,6 +64,7 @@ export function settingsOf(yaml: YamlFile, problems: Problems): Settings {
   const { data } = parsed;
   if (data.plant === null) problems.error('no-plant-name', yaml.place(['plant']), '"plant" is blank: the report needs its name.', 'Add a line: plant: Name of the plant');
   const { units, frequencyUnit } = displayUnits(yaml, data.units, data.peak_means, problems);
+  checkAccent(yaml, data.contractor.accent, problems);
   return {
     settings: {
       plant: data.plant ?? NO_SETTINGS.plant,
@@ -83,6 +85,14 @@ export function settingsOf(yaml: YamlFile, problems: Problems): Settings {
     policy: policyWith(overridesOf(yaml, data.policy, problems)),
     imports: data.import,
   };
+}
+
+/** A colour that cannot be read on the paper is refused: the report would not be the contractor's dress, or not be legible. */
+function checkAccent(yaml: YamlFile, accent: string | null, problems: Problems): void {
+  if (accent === null) return;
+  const readable = readableAccent(accent);
+  if (readable === null) problems.error('bad-value', yaml.place(['contractor', 'accent']), `The accent "${accent}" is no colour of the form #rrggbb.`, 'Give six digits after #, such as #0b6a6a, in quotes.');
+  else if (readable !== accent.toLowerCase()) problems.error('faint-colour', yaml.place(['contractor', 'accent']), `The accent ${accent} cannot be read on white paper: text needs a contrast of 4.5 to 1.`, `The nearest that passes is "${readable}".`);
 }
 
 function displayUnits(yaml: YamlFile, given: Readonly<Record<string, { unit: string | null; detection: string | null }>>, peakMeans: 'calculated' | 'true' | null, problems: Problems) {

@@ -1,6 +1,9 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { contrast, inks } from '../../src/brand/brand.ts';
+import { inks } from '../../src/brand/brand.ts';
+import { contrast, readableAccent } from '../../src/words/legible.ts';
+import { readPlant } from '../../src/survey/read.ts';
+import { folder, GROUPS, memoryShell } from '../assess/folder.ts';
 
 const MODES = ['light', 'dark'] as const;
 const TEXT = ['ink', 'quiet', 'teal'] as const;
@@ -47,5 +50,27 @@ describe.each(MODES)('the palette, %s', (mode) => {
       expect(teal).toBe(contrast(accent, paper) >= 4.5 ? accent : palette.teal);
     }));
     for (const bad of ['', 'red', '#123', '#12345g', 'url(x)', '#0b6a6a;}']) expect(inks(mode, bad).teal).toBe(palette.teal);
+  });
+});
+
+describe('an accent that is asked for', () => {
+  it('is kept where it reaches 4.5:1 on white, else darkened just so far', () => {
+    expect(readableAccent('#767676')).toBe('#767676');
+    // One step lighter than the known grey, #777777, fails; the nearest that passes is the known one.
+    expect(readableAccent('#777777')).toBe('#767676');
+    expect(readableAccent('teal')).toBeNull();
+    const hex = fc.nat(0xffffff).map((n) => `#${n.toString(16).padStart(6, '0')}`);
+    fc.assert(fc.property(hex, (accent) => {
+      const found = readableAccent(accent) ?? '';
+      expect(contrast(found, '#ffffff')).toBeGreaterThanOrEqual(4.5);
+      if (contrast(accent, '#ffffff') >= 4.5) expect(found).toBe(accent);
+    }));
+  });
+
+  it('and fails is a problem at its line, with the colour that passes', () => {
+    const yaml = 'plant: Mill\ncontractor:\n  name: Surveys\n  accent: "#ffee00"\n';
+    const { plant, problems } = readPlant(memoryShell({ ...folder([{ machine: 'P-1', columns: GROUPS.G2R, series: [{ point: '1H', values: [1, 1.1] }] }]), 'plant.yaml': yaml }), 'plant');
+    expect(plant).toBeNull();
+    expect(problems.filter((p) => p.severity === 'error')).toMatchObject([{ code: 'faint-colour', file: 'plant.yaml', line: 4, hint: expect.stringMatching(/#[0-9a-f]{6}/) as string }]);
   });
 });
