@@ -6,6 +6,7 @@ import { linesOf, recordsOf } from './csv.ts';
 import { DELIMITERS, type MappedFile } from './mapping.ts';
 import { Problems } from './problems.ts';
 import { textOf } from './text.ts';
+import { isWorkbook, workbookGrid } from './workbook.ts';
 
 export interface GridRow {
   readonly line: number;
@@ -23,6 +24,7 @@ const LOOK = 65_536;
 
 /** `fits` counts how many of the columns asked for a grid has in one of its first rows. */
 export function gridOf(file: string, bytes: Uint8Array, mapping: MappedFile, fits: (rows: readonly GridRow[]) => number, problems: Problems): Grid | null {
+  if (isWorkbook(file)) return workbookGrid(file, bytes, mapping.sheet, problems);
   const text = textOf(file, bytes, problems, mapping.encoding);
   if (text === null) return null;
   if (text.trim() === '') {
