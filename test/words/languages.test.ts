@@ -3,6 +3,7 @@ import { readdirSync, readFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { describe, expect, it } from 'vitest';
+import { POLICY_DEFAULTS } from '../../src/plant/policy.ts';
 import { say } from '../../src/words/say.ts';
 import { formatDate, term, unitTerm } from '../../src/words/terms.ts';
 
@@ -42,6 +43,10 @@ describe('languages', () => {
       const [english, other] = [sentences('en', file), sentences(language, file)];
       for (const [key, sentence] of Object.entries(english)) if (/[a-z]{3}.* .*[a-z]{3}/.test(sentence.replace(/\{\w+(:plain)?\}/g, ''))) expect(other[key], `${language} ${key}`).not.toBe(sentence);
     }
+  });
+
+  it('what each policy default does stands in English as the policy itself has it, and in every other language', () => {
+    expect(sentences('en', 'policy.json')).toEqual(Object.fromEntries(Object.entries(POLICY_DEFAULTS).map(([id, line]) => [`policy.${id}`, line.about])));
   });
 
   it('numbers, dates and terms of facts follow the language', () => {
