@@ -51,7 +51,10 @@ async function gather(paths: readonly string[], shell: Shell, version: string): 
   const { readRecord } = await import('../record/read.ts');
   const records: Named[] = [];
   const plants: string[] = [];
+  const seen = new Set<string>();
   const add = (name: string, path: string): void => {
+    if (seen.has(shell.absolute(path))) return;
+    seen.add(shell.absolute(path));
     shell.progress(`reading ${name}`);
     records.push({ name, record: readRecord(utf8(shell.read(path), path)) });
   };
@@ -65,7 +68,7 @@ async function gather(paths: readonly string[], shell: Shell, version: string): 
     const archive = shell.exists(`${path}/issued`) ? `${path}/issued` : path;
     const issues = shell.exists(`${path}/record.json`) || shell.folders(archive).length === 0 ? [] : issuesIn(archive, shell);
     if (shell.exists(`${path}/record.json`)) add(path, `${path}/record.json`);
-    else if (issues.length > 0) for (const issue of issues) add(`issued/${issue.name}`, `${archive}/${issue.name}/record.json`);
+    else if (issues.length > 0) for (const issue of issues) add(paths.length === 1 ? `issued/${issue.name}` : `${archive}/${issue.name}`, `${archive}/${issue.name}/record.json`);
     else if (shell.exists(`${path}/plant.yaml`)) throw new UserError(`${path} has no issued report.`, 'Issue one by: swayfolio issue, or name record.json files.');
     else throw new UserError(`${path} holds no record and no issued report.`, 'Give a plant folder, issued folders, or record.json files.');
   }

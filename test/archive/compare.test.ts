@@ -69,3 +69,46 @@ describe('ten years', () => {
     for (const line of csv.trim().split('\r\n').slice(1)) expect(line).toMatch(/"This is screening by overall values, not a diagnosis\..*"$/);
   });
 });
+
+describe('what is missing to an action', () => {
+  const [first, second] = [records[38] as (typeof records)[number], records[39] as (typeof records)[number]];
+  const ended = (result: 'not verified' | 'not yet measured' | 'verified' | null, status: 'done' | 'rejected' = 'done') => {
+    const actions = second.record.actions.filter((a) => a.action === 'A-2').map((a) => ({
+      ...a, status, closed: '2025-09-01', closed_by: 'M. Fitter', verification: result === null || a.verification === null ? null : { ...a.verification, result },
+    }));
+    return compared([first, { ...second, record: { ...second.record, actions } }]).actions.find((a) => a.action === 'A-2')?.flags;
+  };
+  it.each([
+    ['not yet measured', 'done', ['closed without a reading after']], [null, 'done', ['closed without a reading after']], ['not verified', 'done', ['closed, not verified by the reading after']],
+    ['verified', 'done', []], ['not yet measured', 'rejected', ['rejected by M. Fitter']],
+  ] as const)('%s, %s', (result, status, flags) => {
+    expect(ended(result, status)?.filter((flag) => !flag.startsWith('recurs'))).toEqual(flags);
+  });
+
+  it('an open action that the next record does not have is told', () => {
+    const flags = compared([first, { ...second, record: { ...second.record, actions: [] } }]).actions.find((a) => a.action === 'A-2')?.flags;
+    expect(flags).toContain(`no longer reported after issued/${at(38)}, never closed`);
+  });
+});
+
+describe('other changes of a later record', () => {
+  const [first, second] = [records[38] as (typeof records)[number], records[39] as (typeof records)[number]];
+
+  it('a unit that is converted restates nothing; a point that went is told', () => {
+    const inInches = second.record.measurements.map((m) => (m.machine === 'P-3' ? { ...m, unit: 'in/s', history: { ...m.history, value: m.history.value.map((v) => (v === null ? null : Number((v / 25.4).toPrecision(12)))) } } : m));
+    const c2 = compared([first, { ...second, record: { ...second.record, measurements: inInches.filter((m) => m.point !== '2R') } }]);
+    expect(c2.restated).toEqual([]);
+    expect(c2.changes.map((x) => [x.kind, x.of, x.before, x.after])).toEqual([['point', 'P-2 2R velocity rms', 'measured', 'gone'], ['unit', 'P-3 1H velocity rms', 'mm/s', 'in/s']]);
+    expect(c2.vanished.map((v) => `${v.machine} ${v.point}`)).toEqual(['P-2 2R']);
+  });
+
+  it('a forecast stands beside the first reading above its boundary', () => {
+    const { record } = first;
+    const forecast = { boundary: 'B/C', earliest: '2025-08-01', likely: '2025-10-01', latest: '2026-01-01', range: 0.8 };
+    const measurements = record.measurements.map((m) => (m.machine === 'P-3' ? { ...m, forecast } : m));
+    const crossed = second.record.measurements.map((m) => (m.machine === 'P-3' ? { ...m, history: { ...m.history, value: m.history.value.map((v, i) => (i === 39 ? 99 : v)) } } : m));
+    const outcome = (later: typeof measurements) => compared([{ ...first, record: { ...record, measurements } }, { ...second, record: { ...second.record, measurements: later } }]).forecasts.map((f) => f.outcome);
+    expect(outcome(crossed)).toEqual(['within the range']);
+    expect(outcome([...second.record.measurements])).toEqual(['not crossed so far']);
+  });
+});
