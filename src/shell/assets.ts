@@ -52,4 +52,4 @@ function loadTemplates(plantFolder: string | null): ReadonlyMap<string, string> 
   return templates;
 }
 
-const templatePaths = (folder: string): readonly string[] => realShell.list(folder).files.filter((path) => !path.startsWith('words/'));
+const templatePaths = (folder: string): readonly string[] => realShell.list(folder).files.filter((path) => !path.startsWith('words/') && !path.endsWith('.md'));
