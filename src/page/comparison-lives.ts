@@ -24,7 +24,7 @@ export function coverageChapters(c: Comparison): Chapter[] {
 
 export function actionChapters(c: Comparison): Chapter[] {
   return [
-    chapter('actions', 'Actions from raised to verified', 'What is only watched is no action. Verified means: a comparable reading after closing at or below the target that was fixed before.', 'No action.', ['Action', 'Recommended', 'Raised, ordered', 'Closed by', 'Days open', 'Verification', 'What is missing'],
+    chapter('actions', 'Actions from raised to verified', 'What is only watched is no action. Verified means: a comparable reading after closing at or below the target that was fixed before.', 'No action.', ['Action', 'Recommended', 'Raised, ordered', 'Closed by', 'Days open', 'Verification', 'What is missing; reported in'],
       c.actions.map((a) => [
         cell(`${a.action} ${a.points.join(', ')}`), cell(a.recommendation ?? ''), cell(`${a.raised ?? 'not stated'}; ${a.ordered === null ? 'not reported as ordered' : `ordered, reported ${a.ordered}`}${a.work_order === null ? '' : `, ${a.work_order}`}; reported ${a.times_reported}×`),
         cell(a.closed === null ? a.status : `${a.status} ${a.closed}, ${a.closed_by ?? 'nobody named'}`), cell(a.days_open ?? ''), cell(`${a.verification ?? 'none'}${a.before === null ? '' : `; before ${a.before}`}${a.after === null ? '' : `; after ${a.after}`}`), cell([...a.flags, `${a.first_record} to ${a.last_record}`].join('; ')),
