@@ -51,7 +51,7 @@ export function countText(counts: ProblemCounts): string {
 export function nextStep(folder: string, problems: readonly Problem[]): string {
   const errors = problems.filter((problem) => problem.severity === 'error');
   const [first] = errors;
-  if (first === undefined) return printable(`Next: ${problems.some((problem) => problem.severity === 'warning') ? 'read the warnings above, which the report will print too, then run' : 'run'}: swayfolio report ${folder}`);
+  if (first === undefined) return printable(`Next: ${problems.some((problem) => problem.severity === 'warning') ? 'read the warnings above, then run: ' : ''}swayfolio report ${folder}`);
   const others = errors.length === 1 ? '' : ` and the ${errors.length - 1} after it`;
   return printable(`Next: mend ${placeOf(first)}${others}, then run again: swayfolio check ${folder}`);
 }

@@ -145,6 +145,15 @@ class Sketcher {
     return measured.length > 1 ? measured : [];
   }
 
+  /** Neither points nor values have a column, and there are columns left: they may be the points. */
+  #isMatrix(wide: readonly number[]): boolean {
+    return wide.length === 0 && !this.#columns.has('point') && !this.#columns.has('value') && this.#unknownColumns().length > 0;
+  }
+
+  #unknownColumns(): string[] {
+    return this.#sheet.names.filter((own) => own !== '' && columnOfName(own) === null);
+  }
+
   #ids(wide: readonly number[]): void {
     const { names } = this.#sheet;
     const pairs: [string, string][] = [];
@@ -156,7 +165,7 @@ class Sketcher {
     }
     this.#lines.push(`columns: ${flow(pairs)}`);
     for (const column of ['machine', 'point'] as const) {
-      if (!this.#columns.has(column)) this.#questions.push(`Which column names the ${column}? Add it under columns, as ${column}: name. There are: ${names.filter((n) => n !== '').slice(0, 30).join(', ')}.`);
+      if (!this.#columns.has(column) && !(column === 'point' && this.#isMatrix(wide))) this.#questions.push(`Which column names the ${column}? Add it under columns, as ${column}: name. There are: ${names.filter((n) => n !== '').slice(0, 30).join(', ')}.`);
     }
     if (wide.length === 0) return;
     const point = this.#columns.get('point');
@@ -171,6 +180,11 @@ class Sketcher {
   /** Unit, detection and decimal sign of the values. */
   #values(wide: readonly number[]): void {
     const value = this.#columns.get('value');
+    if (this.#isMatrix(wide)) {
+      const open = this.#unknownColumns();
+      this.#questions.push(`Are the columns ${open.slice(0, 30).join(', ')} points, with their values below? If so, write wide: ${`{ ${open.slice(0, 30).map((own) => `${scalar(own)}: ${flow([['point', own]])}`).join(', ')} }`} and state constants: { quantity: velocity, unit: mm/s, detection: rms }, as it was measured.`);
+      return;
+    }
     if (value === undefined && wide.length === 0) {
       this.#questions.push(`Which column holds the values? Add it under columns, as value: name, or several under wide. There are: ${this.#sheet.names.filter((n) => n !== '').slice(0, 30).join(', ')}.`);
       return;

@@ -41,6 +41,7 @@ describe('new --from', () => {
   it('asks which peak, which day, and for columns it does not know', () => {
     expect(made('Asset,Point,Vel (mm/s pk)\nFAN-1,1H,1.8\n').questions.join('\n')).toMatch(/calculated from r\.m\.s\.[\s\S]*On which day/);
     expect(made('Foo,Point,Value (g rms),Date\nFAN-1,1H,1.8,2026-01-14\n').questions.join('\n')).toMatch(/Which column names the machine/);
+    expect(made('Machine,1H,2H\nFAN-1,1.2,1.4\n').questions[0]).toMatch(/Are the columns 1H, 2H points[\s\S]*wide: \{ 1H: \{ point: 1H \}, 2H: \{ point: 2H \} \}/);
     expect(made(Buffer.from('Gerät,Wert\nx,1\n', 'latin1')).questions.join('\n')).toMatch(/Windows-1252 this line reads: Gerät,Wert/);
   });
 
