@@ -25,13 +25,18 @@ export function columnWidths(needs: readonly Need[], available: number, padding:
   return shared(natural, least, available - sum);
 }
 
-/** Text columns give way first, down to a few letters; then all. */
+/** Text columns give way first, the widest before the others, down to a few letters; then all. */
 function shrunk(needs: readonly Need[], least: readonly number[], excess: number): number[] {
-  const spare = least.map((w, i) => (needs[i]?.kind === 'text' ? Math.max(0, w - NARROWEST) : 0));
-  const total = spare.reduce((a, b) => a + b, 0);
-  const share = total === 0 ? 0 : Math.min(1, excess / total);
-  const widths = least.map((w, i) => w - (spare[i] as number) * share);
-  const left = excess - total * share;
+  const levelled = (most: number): number[] => least.map((w, i) => (needs[i]?.kind === 'text' ? Math.min(w, Math.max(most, NARROWEST)) : w));
+  const saved = (most: number): number => least.reduce((sum, w, i) => sum + w - (levelled(most)[i] as number), 0);
+  let [low, high] = [NARROWEST, Math.max(...least)];
+  for (let round = 0; round < 40; round += 1) {
+    const middle = (low + high) / 2;
+    if (saved(middle) >= excess) low = middle;
+    else high = middle;
+  }
+  const widths = levelled(low);
+  const left = excess - saved(low);
   if (left <= 0.001) return widths;
   const sum = widths.reduce((a, b) => a + b, 0);
   return widths.map((w) => (w * (sum - left)) / sum);
