@@ -130,7 +130,7 @@ function sheetGrid(file: string, parts: Parts, book: Book, sheet: Sheet, problem
   let cell: Cell | null = null;
   let inValue = false;
   elementsOf(parts, sheet.path, (name, a) => {
-    if (name === 'row') [cells, line] = [[], Number(a['r'] ?? line + 1)];
+    if (name === 'row') [cells, line] = [[], rowOf(a['r'], line + 1)];
     else if (name === 'c') cell = { column: a['r'] === undefined ? cells.length : columnOf(a['r']), type: a['t'] ?? 'n', style: Number(a['s'] ?? 0), value: '', isFormula: false, hasValue: false };
     else if (name === 'f' && cell !== null) cell.isFormula = true;
     else if (name === 'mergeCell') seen.merged += 1;
@@ -165,6 +165,13 @@ function tellSeen(file: string, sheet: Sheet, seen: Seen, problems: Problems): v
     problems.add('warning', 'formula-cells', { file, line: null }, `${seen.formulas} cells of sheet "${sheet.name}" are formulas, the first at ${seen.firstFormula}: the values they had when it was saved are taken.`, 'Put the values themselves into the cells where they are readings.');
   }
   if (seen.merged > 0) problems.add('note', 'merged-cells', { file, line: null }, `${seen.merged} ranges of sheet "${sheet.name}" are merged: only the first cell of each has the text.`, null);
+}
+
+/** A row's number as it states it; the one that follows where it states none. */
+function rowOf(stated: string | undefined, next: number): number {
+  const row = stated === undefined ? next : Number(stated);
+  if (!Number.isSafeInteger(row) || row < 1) throw new WorkbookFault('workbook-broken', `"${stated}" is no row`, null);
+  return row;
 }
 
 /** Letters of a cell's reference, A = 0. */

@@ -137,3 +137,11 @@ it('a workbook gives the record of the same readings as CSV', () => {
   const bare = (m: ReturnType<typeof measurementOf>) => ({ ...m, source: null, history: null });
   expect(bare(record.measurements[0] as ReturnType<typeof measurementOf>)).toEqual(bare(measurementOf(csv, 'M', '1H')));
 });
+
+describe('a row whose number is none', () => {
+  it.each(['x', '-1', '1.5', '', '1e99'])('is refused: r="%s"', (r) => {
+    const { grid, told } = read({ sheets: [{ name: 'A', rows: `<row r="${r}"><c r="A1" t="x"><v>1</v></c></row>` }] });
+    expect(grid).toBeNull();
+    expect(told).toEqual(['error workbook-broken']);
+  });
+});
