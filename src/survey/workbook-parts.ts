@@ -1,6 +1,10 @@
 /** The zip and the XML of a workbook, by kept libraries and within limits. In: bytes. Out: parts by path; elements in order. */
-import { unzipSync } from 'fflate';
-import { Parser } from 'htmlparser2';
+import { createRequire } from 'node:module';
+
+/** Loaded where a workbook is read and nowhere else: `check` of plain files does not wait for them. */
+const load = createRequire(import.meta.url);
+const zip = (): typeof import('fflate') => load('fflate') as typeof import('fflate');
+const xml = (): typeof import('htmlparser2') => load('htmlparser2') as typeof import('htmlparser2');
 
 /** Why a workbook cannot be read: a problem's code, the end of its sentence, a hint of its own. */
 export class WorkbookFault extends Error {
@@ -32,7 +36,7 @@ export function unpacked(bytes: Uint8Array): Map<string, Uint8Array> {
     return true;
   };
   try {
-    return new Map(Object.entries(unzipSync(bytes, { filter })));
+    return new Map(Object.entries(zip().unzipSync(bytes, { filter })));
   } catch (error) {
     if (error instanceof WorkbookFault) throw error;
     throw new WorkbookFault('workbook-broken', 'it is no workbook, or it is damaged', null);
@@ -46,6 +50,7 @@ export function elementsOf(parts: ReadonlyMap<string, Uint8Array>, path: string,
   const bytes = parts.get(path);
   if (bytes === undefined) throw new WorkbookFault('workbook-broken', `its part ${path || 'of the sheet'} is missing`, null);
   const local = (name: string): string => name.slice(name.indexOf(':') + 1);
+  const { Parser } = xml();
   const parser = new Parser({
     onopentag: (name, attributes) => open(local(name), attributes),
     onclosetag: (name) => close(local(name)),
