@@ -11,7 +11,12 @@ const dist = join(root, 'dist');
 export async function buildProgram() {
   const result = await build({
     absWorkingDir: root,
-    entryPoints: { main: './src/main.ts', 'schemas/plant': './src/survey/schema.ts', 'schemas/record': './src/record/schema.ts', 'schemas/comparison': './src/record/comparison.ts' },
+    entryPoints: {
+      main: './src/main.ts',
+      'schemas/plant': './src/survey/schema.ts',
+      'schemas/record': './src/record/schema.ts',
+      'schemas/comparison': './src/record/comparison.ts',
+    },
     outdir: 'dist',
     bundle: true,
     splitting: true,

@@ -9,6 +9,11 @@ if (isMainThread) register(import.meta.url);
 
 export async function load(url, context, next) {
   if (!url.startsWith('file:') || !url.endsWith('.ts')) return next(url, context);
-  const { code } = transformSync(readFileSync(fileURLToPath(url), 'utf8'), { loader: 'ts', format: 'esm', target: 'node20.19', sourcefile: url });
+  const { code } = transformSync(readFileSync(fileURLToPath(url), 'utf8'), {
+    loader: 'ts',
+    format: 'esm',
+    target: 'node20.19',
+    sourcefile: url,
+  });
   return { format: 'module', source: code, shortCircuit: true };
 }

@@ -38,10 +38,17 @@ async function run(words: readonly string[], context: Context): Promise<ExitCode
       throw error ?? new UserError(message, 'swayfolio --help lists the commands, swayfolio <command> --help its options.', 2);
     });
   for (const command of COMMANDS) {
-    parser.command(command.usage, command.describe, (options) => declare(options, command), async (given) => {
-      const known = Object.entries({ ...command.positionals, ...command.options }).filter(([, argument]) => argument.array !== true).map(([name]) => name);
-      code = await command.run(oneValueEach(given, known), context);
-    });
+    parser.command(
+      command.usage,
+      command.describe,
+      (options) => declare(options, command),
+      async (given) => {
+        const known = Object.entries({ ...command.positionals, ...command.options })
+          .filter(([, argument]) => argument.array !== true)
+          .map(([name]) => name);
+        code = await command.run(oneValueEach(given, known), context);
+      },
+    );
   }
   await parser.parseAsync();
   return code;
@@ -49,7 +56,8 @@ async function run(words: readonly string[], context: Context): Promise<ExitCode
 
 function declare(parser: Argv, command: Command): Argv {
   const required = (name: string): boolean => command.usage.includes(`<${name}>`) || command.usage.includes(`<${name}..>`);
-  for (const [name, argument] of Object.entries(command.positionals)) parser.positional(name, { ...argument, demandOption: required(name) });
+  for (const [name, argument] of Object.entries(command.positionals))
+    parser.positional(name, { ...argument, demandOption: required(name) });
   return parser.options(command.options as { readonly [name: string]: Argument });
 }
 
@@ -68,7 +76,9 @@ function tell(error: unknown): ExitCode {
     realShell.stderr(`swayfolio: ${printable(error.message)}\n${error.hint === null ? '' : `  hint: ${printable(error.hint)}\n`}`);
     return error.exitCode;
   }
-  realShell.stderr(`swayfolio ${packageVersion()}: this is a bug of the program, not of your data; nothing was replaced.\n${error instanceof Error ? error.stack : String(error)}\n`);
+  realShell.stderr(
+    `swayfolio ${packageVersion()}: this is a bug of the program, not of your data; nothing was replaced.\n${error instanceof Error ? error.stack : String(error)}\n`,
+  );
   return 3;
 }
 

@@ -1,6 +1,8 @@
 /** Packages without types of their own that tests use as oracles. */
 declare module 'csv-spectrum' {
-  export default function spectrum(done: (error: Error | null, cases: { readonly name: string; readonly csv: Buffer; readonly json: Buffer }[]) => void): void;
+  export default function spectrum(
+    done: (error: Error | null, cases: { readonly name: string; readonly csv: Buffer; readonly json: Buffer }[]) => void,
+  ): void;
 }
 declare module 'js-quantities' {
   interface Quantity {

@@ -31,12 +31,22 @@ export function alterationsOf(folder: string, manifest: Uint8Array | null, vouch
   for (const [path, hash] of stated) {
     const now = there.get(path);
     const moved = byHash.get(hash);
-    if (now === undefined) found.push({ path, kind: 'missing', message: moved === undefined || stated.has(moved) ? 'the manifest lists it' : `the manifest lists it; its bytes are in ${moved}` });
+    if (now === undefined)
+      found.push({
+        path,
+        kind: 'missing',
+        message: moved === undefined || stated.has(moved) ? 'the manifest lists it' : `the manifest lists it; its bytes are in ${moved}`,
+      });
     else if (now !== hash) found.push({ path, kind: 'changed', message: `its SHA-256 is ${now}; the manifest states ${hash}` });
   }
   for (const path of there.keys()) if (!stated.has(path)) found.push({ path, kind: 'added', message: 'the manifest does not list it' });
   const isOwn = isCanonical && Buffer.from(text, 'utf8').equals(manifest);
   if (!isOwn) found.push({ path: MANIFEST, kind: 'changed', message: 'it is not in the form that issue writes, byte for byte' });
-  else if (found.length > 0 && !vouched) found.push({ path: MANIFEST, kind: 'changed', message: 'it, or the files named, are not as issued: no signature and no later issue vouches for it' });
+  else if (found.length > 0 && !vouched)
+    found.push({
+      path: MANIFEST,
+      kind: 'changed',
+      message: 'it, or the files named, are not as issued: no signature and no later issue vouches for it',
+    });
   return found;
 }

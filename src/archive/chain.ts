@@ -18,8 +18,15 @@ export interface Issued {
 
 const hash = z.string().regex(/^[0-9a-f]{64}$/);
 const SHAPE = z.object({
-  number: z.string().regex(/^\d{4}-\d{3,}$/), revision: z.number().int().min(0), tool: z.object({ name: z.string(), version: z.string() }), survey: z.string(),
-  issued_on: z.string().regex(/^\d{4}-\d{2}-\d{2}$/), replaces: z.string().nullable(), reason: z.string().nullable(), previous_manifest: hash.nullable(), signed_by: z.string().nullable(),
+  number: z.string().regex(/^\d{4}-\d{3,}$/),
+  revision: z.number().int().min(0),
+  tool: z.object({ name: z.string(), version: z.string() }),
+  survey: z.string(),
+  issued_on: z.string().regex(/^\d{4}-\d{2}-\d{2}$/),
+  replaces: z.string().nullable(),
+  reason: z.string().nullable(),
+  previous_manifest: hash.nullable(),
+  signed_by: z.string().nullable(),
 });
 
 /** A key a line, in the order of the type. */
@@ -40,13 +47,17 @@ export function readIssue(text: string): IssueFile | null {
 
 /** Issues of an archive, by name. Throws a UserError for a folder named as an issue that is none. */
 export function issuesIn(archive: string, shell: ArchiveShell): readonly Issued[] {
-  return shell.folders(archive).filter((name) => ISSUE_FOLDER.test(name)).map((name) => {
-    const at = `${archive}/${name}`;
-    const whole = shell.exists(`${at}/${ISSUE_FILE}`) && shell.exists(`${at}/${MANIFEST}`);
-    const file = whole ? readIssue(new TextDecoder().decode(shell.read(`${at}/${ISSUE_FILE}`))) : null;
-    if (file === null) throw new UserError(`${at} is named as an issued report and is none.`, `See what is wrong by: swayfolio verify ${at}`);
-    return { name, file, manifestHash: sha256(shell.read(`${at}/${MANIFEST}`)) };
-  });
+  return shell
+    .folders(archive)
+    .filter((name) => ISSUE_FOLDER.test(name))
+    .map((name) => {
+      const at = `${archive}/${name}`;
+      const whole = shell.exists(`${at}/${ISSUE_FILE}`) && shell.exists(`${at}/${MANIFEST}`);
+      const file = whole ? readIssue(new TextDecoder().decode(shell.read(`${at}/${ISSUE_FILE}`))) : null;
+      if (file === null)
+        throw new UserError(`${at} is named as an issued report and is none.`, `See what is wrong by: swayfolio verify ${at}`);
+      return { name, file, manifestHash: sha256(shell.read(`${at}/${MANIFEST}`)) };
+    });
 }
 
 /** The manifest that the next issue names; null in an empty archive. Throws a UserError where the chain has come apart. */
@@ -54,7 +65,10 @@ export function chainEnd(archive: string, issues: readonly Issued[]): string | n
   const named = new Set(issues.map((issued) => issued.file.previous_manifest));
   const ends = issues.filter((issued) => !named.has(issued.manifestHash));
   if (issues.length > 0 && ends.length !== 1) {
-    throw new UserError(`The chain of ${archive} has come apart: ${ends.map((end) => end.name).join(', ')} are named by no later issue.`, `See what was changed by: swayfolio verify ${archive}`);
+    throw new UserError(
+      `The chain of ${archive} has come apart: ${ends.map((end) => end.name).join(', ')} are named by no later issue.`,
+      `See what was changed by: swayfolio verify ${archive}`,
+    );
   }
   return ends[0]?.manifestHash ?? null;
 }

@@ -17,7 +17,9 @@ const isAction = (action: RecordAction): boolean => action.origin !== 'drafted' 
 
 function reportsOf(records: readonly Named[]): Map<string, Report[]> {
   const found = new Map<string, Report[]>();
-  for (const at of records) for (const action of at.record.actions) if (isAction(action)) found.set(action.action, [...(found.get(action.action) ?? []), { at, action }]);
+  for (const at of records)
+    for (const action of at.record.actions)
+      if (isAction(action)) found.set(action.action, [...(found.get(action.action) ?? []), { at, action }]);
   return found;
 }
 
@@ -34,13 +36,34 @@ function lifeOf(reports: readonly Report[], records: readonly Named[], earlier: 
   const end = records.at(-1) as Named;
   const machine = ids.machine(action.machine);
   const ended = action.closed ?? dateOf(end.record);
-  const recurs = [...earlier].reverse().find((life) => ids.machine(life.machine) === machine && life.closed !== null && life.closed <= raised && sharesPoint(life, action, ids)) ?? null;
-  const side = (reading: { readonly value: number; readonly date: string } | null | undefined): string | null => (reading == null ? null : `${reading.value} ${action.verification?.target?.unit ?? action.unit ?? ''} on ${reading.date}`);
+  const recurs =
+    [...earlier]
+      .reverse()
+      .find(
+        (life) => ids.machine(life.machine) === machine && life.closed !== null && life.closed <= raised && sharesPoint(life, action, ids),
+      ) ?? null;
+  const side = (reading: { readonly value: number; readonly date: string } | null | undefined): string | null =>
+    reading == null ? null : `${reading.value} ${action.verification?.target?.unit ?? action.unit ?? ''} on ${reading.date}`;
   return {
-    action: action.action, machine: action.machine, points: [...action.points], recommendation: action.recommendation, raised, first_record: first.at.name, last_record: last.at.name,
-    times_reported: new Set(reports.map(({ at }) => at.record.survey.id)).size, ordered: orderedOn(reports), work_order: action.work_order, closed: action.closed, closed_by: action.closed_by, status: action.status,
-    verification: action.verification?.result ?? null, before: side(action.verification?.before), after: side(action.verification?.after), days_open: (parseDay(ended) ?? 0) - (parseDay(raised) ?? 0),
-    flags: flagsOf(last, end, recurs), recurs: recurs?.action ?? null,
+    action: action.action,
+    machine: action.machine,
+    points: [...action.points],
+    recommendation: action.recommendation,
+    raised,
+    first_record: first.at.name,
+    last_record: last.at.name,
+    times_reported: new Set(reports.map(({ at }) => at.record.survey.id)).size,
+    ordered: orderedOn(reports),
+    work_order: action.work_order,
+    closed: action.closed,
+    closed_by: action.closed_by,
+    status: action.status,
+    verification: action.verification?.result ?? null,
+    before: side(action.verification?.before),
+    after: side(action.verification?.after),
+    days_open: (parseDay(ended) ?? 0) - (parseDay(raised) ?? 0),
+    flags: flagsOf(last, end, recurs),
+    recurs: recurs?.action ?? null,
   };
 }
 
@@ -74,6 +97,17 @@ export function asFoundOf(records: readonly Named[]): AsFound[] {
     if (found === undefined || found.action.as_found === null) return [];
     const said = [...reports].reverse().map(({ action }) => action);
     const { action } = found;
-    return [{ action: action.action, machine: action.machine, said: said.find((a) => a.observation !== null)?.observation ?? said.find((a) => a.recommendation !== null)?.recommendation ?? null, cause: said.find((a) => a.likely_cause !== null)?.likely_cause ?? null, as_found: found.action.as_found, closed: action.closed, closed_by: action.closed_by, record: found.at.name }];
+    return [
+      {
+        action: action.action,
+        machine: action.machine,
+        said: said.find((a) => a.observation !== null)?.observation ?? said.find((a) => a.recommendation !== null)?.recommendation ?? null,
+        cause: said.find((a) => a.likely_cause !== null)?.likely_cause ?? null,
+        as_found: found.action.as_found,
+        closed: action.closed,
+        closed_by: action.closed_by,
+        record: found.at.name,
+      },
+    ];
   });
 }

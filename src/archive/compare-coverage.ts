@@ -12,18 +12,37 @@ export function coverageOf(records: readonly Named[], ids: Ids): ComparedCoverag
   for (const { name, record } of records) {
     for (const line of record.coverage) {
       const id = ids.machine(line.machine);
-      const cell = { record: name, survey: record.survey.id, date: dateOf(record), status: line.status, measured: line.measured, of: line.of, why: line.why };
+      const cell = {
+        record: name,
+        survey: record.survey.id,
+        date: dateOf(record),
+        status: line.status,
+        measured: line.measured,
+        of: line.of,
+        why: line.why,
+      };
       machines.set(id, [...(machines.get(id) ?? []), cell]);
     }
   }
   const last = new Map(records.flatMap(({ record }) => record.machines.map((m) => [ids.machine(m.machine), m] as const)));
   const told = toldDates(records, ids);
-  return [...machines].sort(([a], [b]) => naturalOrder(a, b)).map(([machine, surveys]) => {
-    const measured = [...new Set([...surveys.filter((s) => s.measured > 0).map((s) => s.date), ...(told.get(machine) ?? [])])].sort(byCodeUnit);
-    const end = surveys.at(-1)?.date ?? '';
-    const { name = null, criticality = 'essential' } = last.get(machine) ?? {};
-    return { machine, name, criticality, surveys, ...longestGap(measured, end), quarters_missed: quartersMissed(measured, surveys[0]?.date ?? end, end) };
-  });
+  return [...machines]
+    .sort(([a], [b]) => naturalOrder(a, b))
+    .map(([machine, surveys]) => {
+      const measured = [...new Set([...surveys.filter((s) => s.measured > 0).map((s) => s.date), ...(told.get(machine) ?? [])])].sort(
+        byCodeUnit,
+      );
+      const end = surveys.at(-1)?.date ?? '';
+      const { name = null, criticality = 'essential' } = last.get(machine) ?? {};
+      return {
+        machine,
+        name,
+        criticality,
+        surveys,
+        ...longestGap(measured, end),
+        quarters_missed: quartersMissed(measured, surveys[0]?.date ?? end, end),
+      };
+    });
 }
 
 /** Days of surveys that no record is of, such as a re-measurement: the last record tells what was measured then. */
@@ -34,7 +53,8 @@ function toldDates(records: readonly Named[], ids: Ids): Map<string, string[]> {
   const own = new Set(records.map(({ record }) => record.survey.id));
   for (const line of last?.surveys ?? []) {
     if (line.date < from || own.has(line.id)) continue;
-    for (const machine of Object.keys(line.conditions)) found.set(ids.machine(machine), [...(found.get(ids.machine(machine)) ?? []), line.date]);
+    for (const machine of Object.keys(line.conditions))
+      found.set(ids.machine(machine), [...(found.get(ids.machine(machine)) ?? []), line.date]);
   }
   return found;
 }
@@ -56,6 +76,7 @@ const quarterOf = (date: string): number => Number(date.slice(0, 4)) * 4 + Math.
 function quartersMissed(measured: readonly string[], from: string, to: string): string[] {
   const there = new Set(measured.map(quarterOf));
   const missed: string[] = [];
-  for (let quarter = quarterOf(from); quarter <= quarterOf(to); quarter += 1) if (!there.has(quarter)) missed.push(`${Math.floor(quarter / 4)} Q${(quarter % 4) + 1}`);
+  for (let quarter = quarterOf(from); quarter <= quarterOf(to); quarter += 1)
+    if (!there.has(quarter)) missed.push(`${Math.floor(quarter / 4)} Q${(quarter % 4) + 1}`);
   return missed;
 }

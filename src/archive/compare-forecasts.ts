@@ -13,14 +13,32 @@ type Dates = Exclude<Forecast, { readonly none: string }>;
 export function forecastsOf(records: readonly Named[], ids: Ids, exceeds: Exceeds): ComparedForecast[] {
   const last = records.at(-1) as Named;
   const latest = ids.bySeries(last.record);
-  return records.flatMap((named) => named.record.measurements.flatMap((m) => {
-    if (m.forecast === null || 'none' in m.forecast) return [];
-    const limit = limitOf(m, m.forecast.boundary, named.record);
-    if (limit === null) return [];
-    const { boundary, earliest, likely, latest: until } = m.forecast;
-    const came = whatCame(m, m.forecast, limit, dateOf(named.record), last.record, latest.get(ids.series(m)), ids, exceeds);
-    return [{ machine: m.machine, point: m.point, quantity: m.quantity, detection: m.detection, survey: named.record.survey.id, boundary, limit, unit: m.unit, earliest, likely, latest: until, ...came, ...placeOf(named.name, named.record, m) }];
-  }));
+  return records.flatMap((named) =>
+    named.record.measurements.flatMap((m) => {
+      if (m.forecast === null || 'none' in m.forecast) return [];
+      const limit = limitOf(m, m.forecast.boundary, named.record);
+      if (limit === null) return [];
+      const { boundary, earliest, likely, latest: until } = m.forecast;
+      const came = whatCame(m, m.forecast, limit, dateOf(named.record), last.record, latest.get(ids.series(m)), ids, exceeds);
+      return [
+        {
+          machine: m.machine,
+          point: m.point,
+          quantity: m.quantity,
+          detection: m.detection,
+          survey: named.record.survey.id,
+          boundary,
+          limit,
+          unit: m.unit,
+          earliest,
+          likely,
+          latest: until,
+          ...came,
+          ...placeOf(named.name, named.record, m),
+        },
+      ];
+    }),
+  );
 }
 
 /** The boundary as a value in the reading's unit. */
@@ -34,10 +52,29 @@ function limitOf(m: RecordMeasurement, boundary: string, record: SwayfolioRecord
 
 type Came = Pick<ComparedForecast, 'came' | 'outcome'>;
 
-function whatCame(m: RecordMeasurement, forecast: Dates, limit: number, made: string, last: SwayfolioRecord, now: RecordMeasurement | undefined, ids: Ids, exceeds: Exceeds): Came {
+function whatCame(
+  m: RecordMeasurement,
+  forecast: Dates,
+  limit: number,
+  made: string,
+  last: SwayfolioRecord,
+  now: RecordMeasurement | undefined,
+  ids: Ids,
+  exceeds: Exceeds,
+): Came {
   const factor = now === undefined ? null : now.unit === m.unit ? 1 : unitFactor(now.unit, m.unit);
-  const renewed = last.machines.find((machine) => ids.machine(machine.machine) === ids.machine(m.machine))?.events
-    .filter((e) => e.new_baseline && e.date > made && (e.component === null || e.component === m.component) && (e.point === null || ids.point(m.machine, e.point) === ids.point(m.machine, m.point)) && (e.quantity === null || e.quantity === m.quantity)).map((e) => e.date).sort()[0];
+  const renewed = last.machines
+    .find((machine) => ids.machine(machine.machine) === ids.machine(m.machine))
+    ?.events.filter(
+      (e) =>
+        e.new_baseline &&
+        e.date > made &&
+        (e.component === null || e.component === m.component) &&
+        (e.point === null || ids.point(m.machine, e.point) === ids.point(m.machine, m.point)) &&
+        (e.quantity === null || e.quantity === m.quantity),
+    )
+    .map((e) => e.date)
+    .sort()[0];
   let seen: string | null = null;
   for (const [i, survey] of last.surveys.entries()) {
     const value = now?.history.value[i] ?? null;
@@ -45,9 +82,16 @@ function whatCame(m: RecordMeasurement, forecast: Dates, limit: number, made: st
     if (renewed !== undefined && survey.date >= renewed) break;
     seen = survey.date;
     if (!exceeds(value * factor, limit)) continue;
-    const outcome = survey.date < forecast.earliest ? 'before the range' : forecast.latest !== null && survey.date > forecast.latest ? 'after the range' : 'within the range';
+    const outcome =
+      survey.date < forecast.earliest
+        ? 'before the range'
+        : forecast.latest !== null && survey.date > forecast.latest
+          ? 'after the range'
+          : 'within the range';
     return { came: `first read above it on ${survey.date}`, outcome };
   }
   if (renewed !== undefined) return { came: `new baseline on ${renewed}, not read above it before`, outcome: 'new baseline first' };
-  return seen === null ? { came: 'no reading since', outcome: 'no reading since' } : { came: `not read above it up to ${seen}`, outcome: 'not crossed so far' };
+  return seen === null
+    ? { came: 'no reading since', outcome: 'no reading since' }
+    : { came: `not read above it up to ${seen}`, outcome: 'not crossed so far' };
 }

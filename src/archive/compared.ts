@@ -12,13 +12,21 @@ export interface Named {
 
 export const byCodeUnit = (a: string, b: string): number => (a < b ? -1 : a > b ? 1 : 0);
 
-export const dateOf = (record: SwayfolioRecord): string => record.surveys.find((line) => line.id === record.survey.id)?.date ?? record.survey.to;
+export const dateOf = (record: SwayfolioRecord): string =>
+  record.surveys.find((line) => line.id === record.survey.id)?.date ?? record.survey.to;
 
 /** By survey, then revision: a re-issue stands after what it replaced. */
 export const inOrder = (records: readonly Named[]): Named[] =>
-  [...records].sort((a, b) => byCodeUnit(dateOf(a.record), dateOf(b.record)) || byCodeUnit(a.record.survey.id, b.record.survey.id) || (a.record.issue?.revision ?? -1) - (b.record.issue?.revision ?? -1) || byCodeUnit(a.name, b.name));
+  [...records].sort(
+    (a, b) =>
+      byCodeUnit(dateOf(a.record), dateOf(b.record)) ||
+      byCodeUnit(a.record.survey.id, b.record.survey.id) ||
+      (a.record.issue?.revision ?? -1) - (b.record.issue?.revision ?? -1) ||
+      byCodeUnit(a.name, b.name),
+  );
 
-export const pairs = (records: readonly Named[]): (readonly [Named, Named])[] => records.slice(1).map((now, i) => [records[i] as Named, now]);
+export const pairs = (records: readonly Named[]): (readonly [Named, Named])[] =>
+  records.slice(1).map((now, i) => [records[i] as Named, now]);
 
 /** Today's ids of machines and points. */
 export class Ids {
@@ -38,7 +46,11 @@ export class Ids {
 
   point(machine: string, id: string): string {
     const today = this.machine(machine);
-    return last(id, (name) => this.#points.find((rename) => rename.old === name && (rename.machine === null || this.machine(rename.machine) === today))?.new);
+    return last(
+      id,
+      (name) =>
+        this.#points.find((rename) => rename.old === name && (rename.machine === null || this.machine(rename.machine) === today))?.new,
+    );
   }
 
   series(m: RecordMeasurement): string {
@@ -62,12 +74,22 @@ function last(id: string, next: (name: string) => string | undefined): string {
 }
 
 /** File, line, date, instrument and person of a reading. */
-export function placeOf(name: string, record: SwayfolioRecord, m: RecordMeasurement | null): { record: string; file: string | null; line: number | null; date: string | null; instrument: string | null; person: string | null } {
+export function placeOf(
+  name: string,
+  record: SwayfolioRecord,
+  m: RecordMeasurement | null,
+): { record: string; file: string | null; line: number | null; date: string | null; instrument: string | null; person: string | null } {
   const people = record.survey.people.map((person) => person.name).join(', ');
   const only = record.survey.instruments.length === 1 ? (record.survey.instruments[0]?.id ?? null) : null;
   return {
-    record: name, file: m?.source?.file ?? null, line: m?.source?.line ?? null, date: m?.taken_at?.slice(0, 10) ?? dateOf(record), instrument: m?.instrument ?? only, person: m?.measured_by ?? (people === '' ? null : people),
+    record: name,
+    file: m?.source?.file ?? null,
+    line: m?.source?.line ?? null,
+    date: m?.taken_at?.slice(0, 10) ?? dateOf(record),
+    instrument: m?.instrument ?? only,
+    person: m?.measured_by ?? (people === '' ? null : people),
   };
 }
 
-export const seriesText = (m: Pick<RecordMeasurement, 'machine' | 'point' | 'quantity' | 'detection'>): string => `${m.machine} ${m.point} ${m.quantity}${m.detection === null ? '' : ` ${m.detection}`}`;
+export const seriesText = (m: Pick<RecordMeasurement, 'machine' | 'point' | 'quantity' | 'detection'>): string =>
+  `${m.machine} ${m.point} ${m.quantity}${m.detection === null ? '' : ` ${m.detection}`}`;

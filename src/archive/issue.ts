@@ -29,7 +29,10 @@ export function assertSignedFor(record: SwayfolioRecord): void {
   if (record.survey.people.some((person) => diagnoses(person.category))) return;
   const stated = record.actions.filter((action) => action.rank > 0 && (action.origin !== 'drafted' || action.urgency !== 'watch'));
   if (stated.length === 0) return;
-  const of = stated.slice(0, 3).map((action) => action.machine).join(', ');
+  const of = stated
+    .slice(0, 3)
+    .map((action) => action.machine)
+    .join(', ');
   throw new UserError(
     `Survey ${record.survey.id} has ${stated.length} findings or exceptions (${of}${stated.length > 3 ? ' …' : ''}) and names nobody of a diagnosing category.`,
     `Name in surveys/${record.survey.id}/survey.yaml under people: who stands for them, with category: ISO 18436-2 category II or above.`,
@@ -39,7 +42,8 @@ export function assertSignedFor(record: SwayfolioRecord): void {
 /** The issue that this one would replace: the survey's latest; null for its first. */
 export function replacedBy(survey: string, issues: readonly Issued[]): Issued | null {
   let found: Issued | null = null;
-  for (const issued of issues) if (issued.file.survey === survey && (found === null || issued.file.revision > found.file.revision)) found = issued;
+  for (const issued of issues)
+    if (issued.file.survey === survey && (found === null || issued.file.revision > found.file.revision)) found = issued;
   return found;
 }
 
@@ -47,9 +51,13 @@ export function replacedBy(survey: string, issues: readonly Issued[]): Issued | 
 export function nextIssue(archive: string, issues: readonly Issued[], record: SwayfolioRecord, wish: IssueWish): IssueFile {
   const replaced = replacedBy(wish.survey, issues);
   if (replaced !== null && wish.reason === null) {
-    throw new UserError(`Survey ${wish.survey} is issued already, as ${archive}/${replaced.name}.`, 'An issued report is never changed; to issue it again give --reason "why": it gets the next revision, and the old one stays.');
+    throw new UserError(
+      `Survey ${wish.survey} is issued already, as ${archive}/${replaced.name}.`,
+      'An issued report is never changed; to issue it again give --reason "why": it gets the next revision, and the old one stays.',
+    );
   }
-  if (replaced === null && wish.reason !== null) throw new UserError(`Survey ${wish.survey} was not issued before, so there is nothing to give a reason for.`, 'Leave --reason out.', 2);
+  if (replaced === null && wish.reason !== null)
+    throw new UserError(`Survey ${wish.survey} was not issued before, so there is nothing to give a reason for.`, 'Leave --reason out.', 2);
   return {
     number: replaced?.file.number ?? nextNumber(wish.survey, issues, record),
     revision: replaced === null ? 0 : replaced.file.revision + 1,
@@ -72,7 +80,16 @@ function nextNumber(survey: string, issues: readonly Issued[], record: Swayfolio
 /** The head as the record has it; with what changed since the issue it replaces, and what is past its retention. */
 export function headOf(file: IssueFile, changes: readonly string[] | null, due?: readonly string[] | null): Issue {
   const { number, revision, issued_on, replaces, reason, previous_manifest } = file;
-  return { number, revision, issued_on, replaces, reason, previous_manifest, ...(changes === null ? {} : { changes }), ...(due === undefined ? {} : { retention_due: due }) };
+  return {
+    number,
+    revision,
+    issued_on,
+    replaces,
+    reason,
+    previous_manifest,
+    ...(changes === null ? {} : { changes }),
+    ...(due === undefined ? {} : { retention_due: due }),
+  };
 }
 
 /** Readings first, then what follows from them, then what is neither; of each kind in the record's order. */
@@ -80,8 +97,12 @@ export function changesSince(before: SwayfolioRecord, after: SwayfolioRecord): r
   const ranks: readonly ((change: Difference) => boolean)[] = [
     ({ kind, path }) => kind === 'figure' && /^measurements .*: (?:value|typed|status)$/.test(path),
     ({ kind, path }) => kind === 'figure' && !path.includes(' facts'),
-    ({ kind }) => kind === 'limit', ({ kind }) => kind === 'policy', ({ kind }) => kind === 'version', ({ kind }) => kind === 'input',
-    ({ kind }) => kind === 'figure', ({ kind }) => kind === 'wording',
+    ({ kind }) => kind === 'limit',
+    ({ kind }) => kind === 'policy',
+    ({ kind }) => kind === 'version',
+    ({ kind }) => kind === 'input',
+    ({ kind }) => kind === 'figure',
+    ({ kind }) => kind === 'wording',
   ];
   const found = differencesOf(before, after);
   const rankOf = (change: Difference): number => ranks.findIndex((fits) => fits(change));
@@ -91,16 +112,27 @@ export function changesSince(before: SwayfolioRecord, after: SwayfolioRecord): r
 export function printedChanges(changes: readonly Difference[]): readonly string[] {
   if (changes.length === 0) return ['No figure, limit, setting, input or wording of the record'];
   const lines = changes.slice(0, PRINTED_CHANGES).map((change) => `${change.kind}: ${differenceText(change)}`);
-  return changes.length > PRINTED_CHANGES ? [...lines, `and ${changes.length - PRINTED_CHANGES} more; both records are in the archive`] : lines;
+  return changes.length > PRINTED_CHANGES
+    ? [...lines, `and ${changes.length - PRINTED_CHANGES} more; both records are in the archive`]
+    : lines;
 }
 
 export const folderOf = (file: IssueFile): string => issueFolder(file.number, file.revision);
 
 /** Files of the folder, passed on as they come; the manifest and its signature last. `told` gets the manifest's hash. */
-export function* frozenFiles(files: Iterable<OutputFile>, file: IssueFile, key: SigningKey | null, told: (manifestHash: string) => void): Iterable<OutputFile> {
+export function* frozenFiles(
+  files: Iterable<OutputFile>,
+  file: IssueFile,
+  key: SigningKey | null,
+  told: (manifestHash: string) => void,
+): Iterable<OutputFile> {
   const lines: ManifestLine[] = [];
   for (const each of withHead(files, file)) {
-    if (!isPlainPath(each.path)) throw new UserError(`The name of ${JSON.stringify(each.path)} has a control character or a backslash; no manifest can list it.`, 'Rename the file in the plant folder.');
+    if (!isPlainPath(each.path))
+      throw new UserError(
+        `The name of ${JSON.stringify(each.path)} has a control character or a backslash; no manifest can list it.`,
+        'Rename the file in the plant folder.',
+      );
     lines.push({ path: each.path, sha256: sha256(each.bytes) });
     yield each;
   }

@@ -36,7 +36,11 @@ function signingKeyOf(outer: Fields, name: string): SigningKey {
   const cipher = outer.text();
   outer.string();
   outer.string();
-  if (cipher !== 'none') throw new UserError(`The key ${name} is encrypted; swayfolio asks for no passphrase.`, 'Sign with a key that has none, or take the passphrase off a copy by: ssh-keygen -p');
+  if (cipher !== 'none')
+    throw new UserError(
+      `The key ${name} is encrypted; swayfolio asks for no passphrase.`,
+      'Sign with a key that has none, or take the passphrase off a copy by: ssh-keygen -p',
+    );
   if (outer.number() !== 1) throw damaged(name);
   const publicBlob = outer.string();
   const inner = new Fields(outer.string());
@@ -46,7 +50,8 @@ function signingKeyOf(outer: Fields, name: string): SigningKey {
   if (kind !== KEY_TYPE) throw new UserError(`The key ${name} is of the kind ${kind}; only Ed25519 signs here.`, HINT);
   const own = inner.string();
   const secret = inner.string();
-  if (secret.length !== 64 || !Buffer.from(own).equals(secret.subarray(32)) || !Buffer.from(publicBlob).equals(publicBlobOf(own))) throw damaged(name);
+  if (secret.length !== 64 || !Buffer.from(own).equals(secret.subarray(32)) || !Buffer.from(publicBlob).equals(publicBlobOf(own)))
+    throw damaged(name);
   const key = createPrivateKey({ key: Buffer.concat([PKCS8, secret.subarray(0, 32)]), format: 'der', type: 'pkcs8' });
   return { key, publicBlob: Uint8Array.from(publicBlob) };
 }
@@ -63,7 +68,9 @@ export function readPublicKeys(bytes: Uint8Array, name: string): readonly Uint8A
     return match === null ? [] : [Uint8Array.from(Buffer.from(match[1] as string, 'base64'))];
   });
   if (found.length === 0) throw new UserError(`${name} holds no Ed25519 public key.`, 'Give the .pub file of the key that signed.');
-  for (const blob of found) if (publicKeyOf(blob) === null) throw new UserError(`${name} holds a damaged public key.`, 'Give the .pub file of the key that signed.');
+  for (const blob of found)
+    if (publicKeyOf(blob) === null)
+      throw new UserError(`${name} holds a damaged public key.`, 'Give the .pub file of the key that signed.');
   return found;
 }
 

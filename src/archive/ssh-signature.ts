@@ -13,14 +13,23 @@ const HASH = 'sha512';
 const LINE = 70;
 
 /** What is signed: the message by its hash alone. */
-const signed = (message: Uint8Array): Buffer => Buffer.concat([MAGIC, field(NAMESPACE), field(''), field(HASH), field(createHash(HASH).update(message).digest())]);
+const signed = (message: Uint8Array): Buffer =>
+  Buffer.concat([MAGIC, field(NAMESPACE), field(''), field(HASH), field(createHash(HASH).update(message).digest())]);
 
 export function signMessage(message: Uint8Array, { key, publicBlob }: SigningKey): string {
   return signatureText(publicBlob, signBytes(null, signed(message), key));
 }
 
 function signatureText(publicBlob: Uint8Array, signature: Uint8Array): string {
-  const blob = Buffer.concat([MAGIC, number(1), field(publicBlob), field(NAMESPACE), field(''), field(HASH), field(Buffer.concat([field(KEY_TYPE), field(signature)]))]);
+  const blob = Buffer.concat([
+    MAGIC,
+    number(1),
+    field(publicBlob),
+    field(NAMESPACE),
+    field(''),
+    field(HASH),
+    field(Buffer.concat([field(KEY_TYPE), field(signature)])),
+  ]);
   const lines = blob.toString('base64').match(new RegExp(`.{1,${LINE}}`, 'g')) ?? [];
   return `-----BEGIN SSH SIGNATURE-----\n${lines.join('\n')}\n-----END SSH SIGNATURE-----\n`;
 }

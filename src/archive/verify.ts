@@ -40,7 +40,12 @@ export interface Question {
 
 export type Reproduction =
   | { readonly result: 'reproduced'; readonly wording: readonly Difference[]; readonly versions: readonly Difference[] }
-  | { readonly result: 'differs'; readonly differences: readonly Difference[]; readonly wording: readonly Difference[]; readonly versions: readonly Difference[] }
+  | {
+      readonly result: 'differs';
+      readonly differences: readonly Difference[];
+      readonly wording: readonly Difference[];
+      readonly versions: readonly Difference[];
+    }
   | { readonly result: 'not possible'; readonly because: string };
 
 export interface Verdict {
@@ -64,12 +69,14 @@ export function verifyIssue(question: Question, shell: ArchiveShell): Verdict {
   const signature = signatureOf(manifest, read(SIGNATURE), issue, question.keys);
   const vouched = signature.state === 'good' || neighbours.some((other) => other.previous === manifestHash);
   const alterations = [...alterationsOf(folder, manifest, vouched, shell), ...signature.alterations];
-  if (issueBytes !== null && (issue === null || issueText(issue) !== utf8(issueBytes))) alterations.push({ path: ISSUE_FILE, kind: 'changed', message: 'it is not as issue writes it' });
+  if (issueBytes !== null && (issue === null || issueText(issue) !== utf8(issueBytes)))
+    alterations.push({ path: ISSUE_FILE, kind: 'changed', message: 'it is not as issue writes it' });
   if (issue !== null && question.inArchive && !folder.endsWith(`/${issueFolder(issue.number, issue.revision)}`)) {
     alterations.push({ path: '.', kind: 'renamed', message: `issue.json says ${issueFolder(issue.number, issue.revision)}` });
   }
   const record = frozenRecord(read(RECORD_FILE));
-  if (issue !== null && !('none' in record) && !isHeadOf(record.read, issue)) alterations.push({ path: RECORD_FILE, kind: 'changed', message: 'its issue is not that of issue.json' });
+  if (issue !== null && !('none' in record) && !isHeadOf(record.read, issue))
+    alterations.push({ path: RECORD_FILE, kind: 'changed', message: 'its issue is not that of issue.json' });
   const chain = chainOf(issue, question);
   const reproduction: Reproduction = 'none' in record ? { result: 'not possible', because: record.none } : reproductionOf(record, question);
   const isSound = alterations.length === 0 && chain !== 'broken' && signature.state !== 'bad' && reproduction.result === 'reproduced';
@@ -86,8 +93,18 @@ interface Signature {
   readonly alterations: readonly Alteration[];
 }
 
-function signatureOf(manifest: Uint8Array | null, bytes: Uint8Array | null, issue: IssueFile | null, keys: readonly Uint8Array[] | null): Signature {
-  const bad = (kind: Alteration['kind'], message: string): Signature => ({ state: 'bad', signer: null, message, alterations: [{ path: SIGNATURE, kind, message }] });
+function signatureOf(
+  manifest: Uint8Array | null,
+  bytes: Uint8Array | null,
+  issue: IssueFile | null,
+  keys: readonly Uint8Array[] | null,
+): Signature {
+  const bad = (kind: Alteration['kind'], message: string): Signature => ({
+    state: 'bad',
+    signer: null,
+    message,
+    alterations: [{ path: SIGNATURE, kind, message }],
+  });
   const stated = issue?.signed_by ?? null;
   if (bytes === null) {
     if (stated !== null) return bad('missing', `issue.json says that ${stated} signed`);
@@ -103,7 +120,12 @@ function signatureOf(manifest: Uint8Array | null, bytes: Uint8Array | null, issu
   if (keys !== null && !keys.some((key) => Buffer.from(key).equals(blob))) {
     return { state: 'bad', signer, message: `signed by ${signer}, which is not the key given`, alterations: [] };
   }
-  return { state: 'good', signer, message: `signed by ${signer}${keys === null ? '; whose key that is was not checked (--key)' : ', the key given'}`, alterations: [] };
+  return {
+    state: 'good',
+    signer,
+    message: `signed by ${signer}${keys === null ? '; whose key that is was not checked (--key)' : ', the key given'}`,
+    alterations: [],
+  };
 }
 
 function chainOf(issue: IssueFile | null, { neighbours, inArchive }: Question): Verdict['chain'] {
@@ -130,13 +152,29 @@ function frozenRecord(bytes: Uint8Array | null): Frozen | { readonly none: strin
 }
 
 function isHeadOf({ issue }: SwayfolioRecord, file: IssueFile): boolean {
-  return issue !== null && issue.number === file.number && issue.revision === file.revision && issue.issued_on === file.issued_on
-    && issue.replaces === file.replaces && issue.reason === file.reason && issue.previous_manifest === file.previous_manifest;
+  return (
+    issue !== null &&
+    issue.number === file.number &&
+    issue.revision === file.revision &&
+    issue.issued_on === file.issued_on &&
+    issue.replaces === file.replaces &&
+    issue.reason === file.reason &&
+    issue.previous_manifest === file.previous_manifest
+  );
 }
 
 /** An altered record may hold keys that no record has. */
 function knownHead({ number, revision, issued_on, replaces, reason, previous_manifest, changes, retention_due }: Issue): Issue {
-  return { number, revision, issued_on, replaces, reason, previous_manifest, ...(changes === undefined ? {} : { changes }), ...(retention_due === undefined ? {} : { retention_due }) };
+  return {
+    number,
+    revision,
+    issued_on,
+    replaces,
+    reason,
+    previous_manifest,
+    ...(changes === undefined ? {} : { changes }),
+    ...(retention_due === undefined ? {} : { retention_due }),
+  };
 }
 
 function reproductionOf(frozen: Frozen, { folder, assessAgain }: Question): Reproduction {

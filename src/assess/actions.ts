@@ -5,7 +5,7 @@
 import { type Day, dayText } from '../plant/day.ts';
 import type { Finding, LedgerAction } from '../plant/types.ts';
 import type { Override } from '../record/types.ts';
-import type { Level, } from './urgency-table.ts';
+import type { Level } from './urgency-table.ts';
 import { NO_LEVEL, weight } from './urgency-table.ts';
 import type { Assessed } from './machine.ts';
 import { byUrgency } from './machine.ts';
@@ -52,12 +52,16 @@ export function reportedFindings(context: Context): Map<string, Reported> {
 }
 
 const covers = (item: { readonly component: string | null; readonly points: readonly string[] }, verdict: Verdict): boolean =>
-  (item.component === null || item.component === verdict.track.component.id) && (item.points.length === 0 || item.points.includes(verdict.track.series.point));
+  (item.component === null || item.component === verdict.track.component.id) &&
+  (item.points.length === 0 || item.points.includes(verdict.track.series.point));
 
 /** Component and points that an action speaks of; empty means all of the machine. */
 function extentOf(finding: Finding | null, ledger: LedgerAction | null): { component: string | null; points: readonly string[] } {
   const points = finding?.points ?? [];
-  return { component: finding?.component ?? null, points: points.length === 0 && finding === null && ledger?.verifyPoint ? [ledger.verifyPoint] : points };
+  return {
+    component: finding?.component ?? null,
+    points: points.length === 0 && finding === null && ledger?.verifyPoint ? [ledger.verifyPoint] : points,
+  };
 }
 
 /** All draft actions of a machine. */
@@ -87,7 +91,10 @@ function isLive(context: Context, item: DraftAction): boolean {
   if (item.status === 'rejected') return item.computed.urgency !== null;
   const after = item.verification?.after ?? null;
   const survey = context.plant.surveys[context.current];
-  if (item.verification?.result !== 'verified') return item.verification !== null || item.ledger.closed === null || item.ledger.closed > dayAt(context, Math.max(0, context.current - 1));
+  if (item.verification?.result !== 'verified')
+    return (
+      item.verification !== null || item.ledger.closed === null || item.ledger.closed > dayAt(context, Math.max(0, context.current - 1))
+    );
   return after !== null && survey !== undefined && after.date >= dayText(survey.from);
 }
 
@@ -116,11 +123,15 @@ function itemOf(context: Context, assessed: Assessed, report: Reported | null, l
   const first = report === null ? (ledger?.raised ?? dayAt(context, context.current)) : dayAt(context, report.firstSurvey);
   const isOverridden = finding !== null && finding.overrideBy !== null && finding.urgency !== null && assessed.override !== null;
   return {
-    id: ledger?.id ?? (finding !== null && isActionId(finding.id, assessed.machine.id) ? finding.id : freshId(ids, assessed.machine.id, dayText(first))),
+    id:
+      ledger?.id ??
+      (finding !== null && isActionId(finding.id, assessed.machine.id) ? finding.id : freshId(ids, assessed.machine.id, dayText(first))),
     assessed,
     finding,
     ledger,
-    carriedFrom: finding?.carriedFrom ?? (report !== null && report.lastSurvey < context.current ? (context.plant.surveys[report.lastSurvey]?.id ?? null) : null),
+    carriedFrom:
+      finding?.carriedFrom ??
+      (report !== null && report.lastSurvey < context.current ? (context.plant.surveys[report.lastSurvey]?.id ?? null) : null),
     raised: ledger?.raised ?? first,
     timesReported: report?.times ?? timesSince(context, ledger?.raised ?? null),
     verdict,

@@ -101,7 +101,10 @@ function recordOf(context: Context, book: LimitBook, assessed: readonly Assessed
     machines,
     components: assessed.flatMap((a) => componentLines(context, a)),
     measurements,
-    actions: rankedActions(context, assessed.flatMap((a) => actionsOf(context, a, reported))),
+    actions: rankedActions(
+      context,
+      assessed.flatMap((a) => actionsOf(context, a, reported)),
+    ),
     coverage: coverageLines(context),
     plant_over_time: plantOverTime(context, surveys, machines),
     problems: plant.problems,

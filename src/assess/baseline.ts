@@ -13,7 +13,13 @@ import { type Baseline, pointRow, type Track } from './track.ts';
 import { type Boundaries, zoneOf } from './zone.ts';
 
 /** Null when the plant states none and no earlier reading compares. */
-export function baselineFor(track: Track, current: Reading, comparable: readonly (Reading & { value: number })[], limits: Boundaries, policy: Policy): Baseline | null {
+export function baselineFor(
+  track: Track,
+  current: Reading,
+  comparable: readonly (Reading & { value: number })[],
+  limits: Boundaries,
+  policy: Policy,
+): Baseline | null {
   const row = pointRow(track, current.day);
   if (row.baseline !== null && !isStale(track, current, row.baselineFrom)) {
     return { value: row.baseline, from: row.baselineFrom ?? 'stated', n: 0, provisional: false };

@@ -12,7 +12,8 @@ export function cannotSee(context: Context, tracks: readonly Track[]): string[] 
     hidden.push(say(language, `assess.cannot.${what}`, {}));
   };
   if (!quantities.has('acceleration') && rows.some((r) => r.bearings !== 'plain')) add('bearing');
-  if (rows.some((r) => r.bearings === 'plain') && !tracks.some((t) => t.series.rows.some((p) => p.measuredOn === 'shaft relative'))) add('shaft');
+  if (rows.some((r) => r.bearings === 'plain') && !tracks.some((t) => t.series.rows.some((p) => p.measuredOn === 'shaft relative')))
+    add('shaft');
   if (!quantities.has('displacement') && rows.some((r) => r.speedRpm !== null && r.speedRpm <= context.policy['1.slow.speed'])) add('slow');
   if (rows.some((r) => r.kind === 'motor' || r.kind === 'generator')) add('electrical');
   if (!tracks.some((t) => t.series.readings.some((r) => r.phase !== null))) add('phase');

@@ -15,7 +15,8 @@ export function changeOf(value: number, reference: number, look: Look, scale: Sc
     percent: reference > 0 && scale !== 'dB' ? (100 * absolute) / reference : null,
     db: decibelChange(value, reference, scale),
     of_bc: bc === null ? null : absolute / bc,
-    significant: q === null ? null : risesBy(value, reference, q) || risesBy(reference, value, q) || (vector !== null && exceeds(vector.amplitude, q)),
+    significant:
+      q === null ? null : risesBy(value, reference, q) || risesBy(reference, value, q) || (vector !== null && exceeds(vector.amplitude, q)),
     vector,
   };
 }

@@ -10,8 +10,18 @@ import { type Context, componentRow, doubtedLow, isMeasured, type Look, pointRow
 
 /** Why a reading takes no part; each is a sentence `assess.why.<code>`. */
 export type NotComparable =
-  | 'not measured' | 'bound' | 'other state' | 'other speed' | 'speed unknown' | 'other load' | 'other band' | 'other mounting' | 'other instrument'
-  | 'sensor moved' | 'before new baseline' | 'doubted low';
+  | 'not measured'
+  | 'bound'
+  | 'other state'
+  | 'other speed'
+  | 'speed unknown'
+  | 'other load'
+  | 'other band'
+  | 'other mounting'
+  | 'other instrument'
+  | 'sensor moved'
+  | 'before new baseline'
+  | 'doubted low';
 
 /** An event renews the baseline of this series; balancing does not renew that of acceleration unless it says so. */
 export function renewsBaseline(event: PlantEvent, quantity: string): boolean {
@@ -70,7 +80,13 @@ function otherSpeed(track: Track, earlier: Reading, current: Reading, share: num
 
 function otherTaking(context: Context, track: Track, earlier: Reading, current: Reading): NotComparable | null {
   const { plant, policy } = context;
-  if (earlier.lowHz !== null || current.lowHz !== null || earlier.highHz !== null || current.highHz !== null || track.series.rows.length > 1) {
+  if (
+    earlier.lowHz !== null ||
+    current.lowHz !== null ||
+    earlier.highHz !== null ||
+    current.highHz !== null ||
+    track.series.rows.length > 1
+  ) {
     const [a, b] = [bandOf(track, earlier), bandOf(track, current)];
     if (a.lowHz !== b.lowHz || a.highHz !== b.highHz) return 'other band';
   }
@@ -78,7 +94,8 @@ function otherTaking(context: Context, track: Track, earlier: Reading, current: 
   const [then, now] = [plant.surveys[earlier.survey], plant.surveys[current.survey]];
   if (differ(mountingOf(then, earlier), mountingOf(now, current))) return 'other mounting';
   const high = bandOf(track, current).highHz;
-  if (high !== null && exceeds(high, policy['3.mounting.above']) && differ(modelOf(then, earlier), modelOf(now, current))) return 'other instrument';
+  if (high !== null && exceeds(high, policy['3.mounting.above']) && differ(modelOf(then, earlier), modelOf(now, current)))
+    return 'other instrument';
   return null;
 }
 
@@ -90,13 +107,24 @@ export interface ComparableOptions {
 }
 
 /** null when `earlier` compares with `current`, else why not (section 3 of the rules, in its order). */
-export function whyNotComparable(context: Context, track: Track, earlier: Reading, current: Reading, options: ComparableOptions): NotComparable | null {
+export function whyNotComparable(
+  context: Context,
+  track: Track,
+  earlier: Reading,
+  current: Reading,
+  options: ComparableOptions,
+): NotComparable | null {
   if (earlier.bound !== null) return 'bound';
   if (!isMeasured(earlier)) return 'not measured';
   if (earlier.state !== current.state) return 'other state';
   const speed = otherSpeed(track, earlier, current, options.speedShare);
   if (speed !== null) return speed;
-  if (earlier.loadPct !== null && current.loadPct !== null && exceeds(Math.abs(earlier.loadPct - current.loadPct), context.policy['3.load'])) return 'other load';
+  if (
+    earlier.loadPct !== null &&
+    current.loadPct !== null &&
+    exceeds(Math.abs(earlier.loadPct - current.loadPct), context.policy['3.load'])
+  )
+    return 'other load';
   const taking = otherTaking(context, track, earlier, current);
   if (taking !== null) return taking;
   if (track.events.length > 0) {
@@ -109,13 +137,20 @@ export function whyNotComparable(context: Context, track: Track, earlier: Readin
 }
 
 /** Earlier readings that compare with the reading of `current`, oldest first. */
-export function comparableBefore(context: Context, track: Track, current: Reading, acrossNewBaseline = false): (Reading & { value: number })[] {
+export function comparableBefore(
+  context: Context,
+  track: Track,
+  current: Reading,
+  acrossNewBaseline = false,
+): (Reading & { value: number })[] {
   const options = { speedShare: context.policy['3.speed.overall'], acrossNewBaseline };
   const found: (Reading & { value: number })[] = [];
   for (const reading of track.series.readings) {
     if (reading.survey >= current.survey) break;
     if (!isMeasured(reading)) continue;
-    const compares = track.uniform ? !standsDoubted(context, track, reading, current) : whyNotComparable(context, track, reading, current, options) === null;
+    const compares = track.uniform
+      ? !standsDoubted(context, track, reading, current)
+      : whyNotComparable(context, track, reading, current, options) === null;
     if (compares) found.push(reading);
   }
   return found;

@@ -19,8 +19,14 @@ export function intervalOf(context: Context, machine: Machine): number | null {
 }
 
 export function usualIntervalDays(surveys: readonly Survey[]): number | null {
-  const days = surveys.filter((s) => s.kind === 'routine').map((s) => s.day).slice(-INTERVAL_SURVEYS);
-  const gaps = days.slice(1).map((d, i) => d - (days[i] as Day)).filter((gap) => gap > 0);
+  const days = surveys
+    .filter((s) => s.kind === 'routine')
+    .map((s) => s.day)
+    .slice(-INTERVAL_SURVEYS);
+  const gaps = days
+    .slice(1)
+    .map((d, i) => d - (days[i] as Day))
+    .filter((gap) => gap > 0);
   return gaps.length === 0 ? null : median(gaps);
 }
 
@@ -35,7 +41,12 @@ export function inService(machine: Machine, day: Day): boolean {
 export function inScope(machine: Machine, survey: Survey): boolean {
   const row = machineRow(machine, survey.day);
   const { scope } = survey;
-  return scope.all || scope.machines.includes(machine.id) || (row.area !== null && scope.areas.includes(row.area)) || (row.route !== null && scope.routes.includes(row.route));
+  return (
+    scope.all ||
+    scope.machines.includes(machine.id) ||
+    (row.area !== null && scope.areas.includes(row.area)) ||
+    (row.route !== null && scope.routes.includes(row.route))
+  );
 }
 
 /** Series that could carry a zone or class: known quantities, and own ones with a floor or limits. */
@@ -58,7 +69,8 @@ export function measuredOf(context: Context, tracks: readonly Track[], survey: n
   return [measured, whole.size];
 }
 
-export const wasMeasured = (tracks: readonly Track[], survey: number): boolean => tracks.some((t) => isMeasured(t.readings[survey] ?? null));
+export const wasMeasured = (tracks: readonly Track[], survey: number): boolean =>
+  tracks.some((t) => isMeasured(t.readings[survey] ?? null));
 
 /** Last survey up to `survey` at which anything of the machine was measured; −1 where never. */
 export function lastMeasured(tracks: readonly Track[], survey: number): number {
@@ -119,7 +131,14 @@ export function missesInARow(context: Context, machine: Machine): number {
   return misses;
 }
 
-function statusOf(line: { readonly measured: number; readonly of: number; readonly inScope: boolean; readonly due: boolean; readonly any: boolean; readonly excused: boolean }): CoverageLine['status'] {
+function statusOf(line: {
+  readonly measured: number;
+  readonly of: number;
+  readonly inScope: boolean;
+  readonly due: boolean;
+  readonly any: boolean;
+  readonly excused: boolean;
+}): CoverageLine['status'] {
   if (line.any) return line.measured === line.of ? 'measured' : 'partly measured';
   if (!line.inScope) return 'out of scope';
   if (line.excused) return 'excused';

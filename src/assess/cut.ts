@@ -17,11 +17,20 @@ export function cutAt(plant: Plant, survey: string | null): Plant {
   const current = plant.surveys[index];
   if (current === undefined) {
     const known = plant.surveys.map((s) => s.id).slice(-6);
-    throw new UserError(`There is no survey "${survey ?? ''}".`, known.length === 0 ? 'The plant has no survey yet.' : `Surveys here: ${known.join(', ')}.`, 2);
+    throw new UserError(
+      `There is no survey "${survey ?? ''}".`,
+      known.length === 0 ? 'The plant has no survey yet.' : `Surveys here: ${known.join(', ')}.`,
+      2,
+    );
   }
   const day = Math.max(current.day, current.to);
   const machines: Machine[] = plant.machines
-    .map((m) => ({ ...m, series: m.series.map((s) => (s.readings.some((r) => r.survey > index) ? { ...s, readings: s.readings.filter((r) => r.survey <= index) } : s)) }))
+    .map((m) => ({
+      ...m,
+      series: m.series.map((s) =>
+        s.readings.some((r) => r.survey > index) ? { ...s, readings: s.readings.filter((r) => r.survey <= index) } : s,
+      ),
+    }))
     .filter((m) => m.declared || m.series.some((s) => s.readings.length > 0));
   return {
     ...plant,

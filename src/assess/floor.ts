@@ -13,7 +13,12 @@ const OF_RMS: Readonly<Record<string, number>> = { rms: 1, 'calculated peak': Ma
 const OF_TRUE_PEAK: Readonly<Record<string, number>> = { 'true peak': 1, 'true peak-to-peak': 2 };
 
 /** Floor with its unit by quantity, detection and place, before conversion to the series' unit. */
-function floorOf(quantity: string, detection: Detection, shaft: boolean, policy: Policy): { readonly value: number; readonly unit: string } | null {
+function floorOf(
+  quantity: string,
+  detection: Detection,
+  shaft: boolean,
+  policy: Policy,
+): { readonly value: number; readonly unit: string } | null {
   const ofRms = OF_RMS[detection];
   const ofPeak = OF_TRUE_PEAK[detection];
   if (quantity === 'velocity') return ofRms === undefined ? null : { value: policy['2.floor.velocity.rms'] * ofRms, unit: 'mm/s' };

@@ -44,7 +44,14 @@ function boundaryAhead(context: Context, track: Track, look: Look): Target | nul
     return value === null ? null : { name, value };
   }
   const row = pointRow(track, look.reading.day);
-  if (look.ratioClass === null || look.ratioClass === 'r-D' || row.scale !== 'linear' || !carriesRatio(look.baseline) || look.baseline.provisional) return null;
+  if (
+    look.ratioClass === null ||
+    look.ratioClass === 'r-D' ||
+    row.scale !== 'linear' ||
+    !carriesRatio(look.baseline) ||
+    look.baseline.provisional
+  )
+    return null;
   const steps = ratioSteps(context, row.scale);
   const factor = look.ratioClass === 'r-C' ? steps[2] : steps[1];
   return { name: look.ratioClass === 'r-C' ? 'r-C/r-D' : 'r-B/r-C', value: factor * look.baseline.value };
@@ -141,5 +148,11 @@ export function forecastLine(context: Context, outlook: Outlook | null): Forecas
   const { language } = context.plant.settings;
   if ('none' in outlook) return { none: say(language, `assess.forecast.${outlook.none}`, outlook.facts) };
   const text = (day: Day | null): string | null => (day === null ? null : dayText(day));
-  return { boundary: outlook.boundary, earliest: dayText(outlook.earliest), likely: text(outlook.likely), latest: text(outlook.latest), range: context.policy['6.forecast.range'] };
+  return {
+    boundary: outlook.boundary,
+    earliest: dayText(outlook.earliest),
+    likely: text(outlook.likely),
+    latest: text(outlook.latest),
+    range: context.policy['6.forecast.range'],
+  };
 }

@@ -18,7 +18,14 @@ export function historyNotes(context: Context, track: Track, look: Look, trend: 
   const notes: string[] = [];
   if (trend?.changed_on != null) notes.push(say(language, 'assess.note.step', { date: trend.changed_on, times: trend.changed_by ?? null }));
   const spike = spikeBefore(context, track, look);
-  if (spike !== null) notes.push(say(language, 'assess.note.was_high', shownFacts(context.plant.settings.units, { date: dayText(spike.day), value: spike.value, unit })));
+  if (spike !== null)
+    notes.push(
+      say(
+        language,
+        'assess.note.was_high',
+        shownFacts(context.plant.settings.units, { date: dayText(spike.day), value: spike.value, unit }),
+      ),
+    );
   const speeds = speedClass(context, track, look);
   if (speeds !== null) notes.push(say(language, 'assess.note.speed_class', speeds));
   return notes;
@@ -35,7 +42,9 @@ const BACK = 2;
 function spikeBefore(context: Context, track: Track, look: Look): (Reading & { value: number }) | null {
   // The first reading that was back stood doubted until this one.
   const among = new Set<Reading>([...look.comparable, look.reading]);
-  const all = track.series.readings.filter((r): r is Reading & { value: number } => isMeasured(r) && (among.has(r) || track.lifted[r.survey] === look.survey + 1));
+  const all = track.series.readings.filter(
+    (r): r is Reading & { value: number } => isMeasured(r) && (among.has(r) || track.lifted[r.survey] === look.survey + 1),
+  );
   const { scale } = pointRow(track, look.reading.day);
   if (scale === 'none' || all.length < SPIKE_WITHIN + BACK) return null;
   for (let i = all.length - 1 - BACK; i >= all.length - 1 - SPIKE_WITHIN; i -= 1) {
@@ -57,5 +66,11 @@ function speedClass(context: Context, track: Track, look: Look): { from: number;
   const before = track.series.readings.filter((r) => r.survey < look.survey && isMeasured(r)).length;
   if (rpm === null || componentRow(track, look.reading.day).drive !== 'variable' || !exceeds(before, look.comparable.length)) return null;
   const share = context.policy['3.speed.overall'];
-  return { from: Math.round(rpm * (1 - share)), to: Math.round(rpm * (1 + share)), n: look.comparable.length, of: before, state: look.reading.state === null ? '' : `, ${look.reading.state}` };
+  return {
+    from: Math.round(rpm * (1 - share)),
+    to: Math.round(rpm * (1 + share)),
+    n: look.comparable.length,
+    of: before,
+    state: look.reading.state === null ? '' : `, ${look.reading.state}`,
+  };
 }

@@ -59,15 +59,18 @@ export function verdictOf(context: Context, track: Track, standing: Standing): V
   let level = look === null || movement === null ? NO_LEVEL : withHysteresis(context, track, look, movement, standing);
   if (heldFrom !== null) {
     const held = plainLevel(context, track, heldFrom, movementOf(context, track, heldFrom), standing);
-    if (weight(held.urgency) > weight(level.urgency) || (held.urgency !== null && look === null)) level = { urgency: held.urgency, rule: 'M1' };
+    if (weight(held.urgency) > weight(level.urgency) || (held.urgency !== null && look === null))
+      level = { urgency: held.urgency, rule: 'M1' };
   }
   if (level.urgency === null && look !== null && context.sisters.get(track)?.outlier === true) level = { urgency: 'watch', rule: 'S1' };
-  if (level.urgency !== null && level.urgency !== 'watch' && isAccepted(context, track, look ?? heldFrom)) level = { urgency: 'watch', rule: 'K1' };
+  if (level.urgency !== null && level.urgency !== 'watch' && isAccepted(context, track, look ?? heldFrom))
+    level = { urgency: 'watch', rule: 'K1' };
   return { track, look, movement, heldFrom, condition: conditionOf(look) ?? (look === null ? conditionOf(heldFrom) : null), level };
 }
 
 /** Read in a band that cannot tell its zone: limits are there, the verdict is not, so the last level stands. */
-const isBlind = (look: Look): boolean => look.zone === null && look.ratioClass === null && look.limits.set !== null && look.limits.bc !== null;
+const isBlind = (look: Look): boolean =>
+  look.zone === null && look.ratioClass === null && look.limits.set !== null && look.limits.bc !== null;
 
 const isAccepted = (context: Context, track: Track, look: Look | null): boolean =>
   look !== null && context.plant.accepted.some((a) => accepts(a, track, look.value, dayAt(context, context.current)));
@@ -77,7 +80,14 @@ export function plainLevel(context: Context, track: Track, look: Look, movement:
   return levelOf(context, track, look, conditionOf(look), movement, standing);
 }
 
-function levelOf(context: Context, track: Track, look: Look, condition: Zone | RatioClass | null, movement: Movement, standing: Standing): Level {
+function levelOf(
+  context: Context,
+  track: Track,
+  look: Look,
+  condition: Zone | RatioClass | null,
+  movement: Movement,
+  standing: Standing,
+): Level {
   if (condition === null || movement.travel === null) return NO_LEVEL;
   const level = byForecast(condition, movement, standing) ?? tableLevel(condition, movement.travel, standing.criticality, standing.spare);
   // The rules name r-D alone; held there it would let an unsupported r-C of a critical machine stand above an r-D, so both are held.
@@ -142,7 +152,13 @@ function withHysteresis(context: Context, track: Track, look: Look, movement: Mo
 }
 
 /** The worst zone or class, up to the earlier one, whose lower boundary the reading has not left by the share of the rules. */
-function notYetLeft(context: Context, track: Track, look: Look, condition: Zone | RatioClass, earlier: Zone | RatioClass): Zone | RatioClass {
+function notYetLeft(
+  context: Context,
+  track: Track,
+  look: Look,
+  condition: Zone | RatioClass,
+  earlier: Zone | RatioClass,
+): Zone | RatioClass {
   const byRatio = condition.startsWith('r-');
   if (byRatio !== earlier.startsWith('r-')) return condition;
   const row = pointRow(track, look.reading.day);

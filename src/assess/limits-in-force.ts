@@ -58,7 +58,10 @@ export class LimitBook {
 
   /** No dated row bears on it, so one choice serves all its days. */
   #neverChanges({ series, machine }: Track): boolean {
-    return this.#limitDays.every((day) => day === Number.NEGATIVE_INFINITY) && [series, machine, ...machine.components].every(({ rows }) => rows.length === 1);
+    return (
+      this.#limitDays.every((day) => day === Number.NEGATIVE_INFINITY) &&
+      [series, machine, ...machine.components].every(({ rows }) => rows.length === 1)
+    );
   }
 
   #atStretch(track: Track, day: Day, kind: SurveyKind): LimitsInForce {
@@ -84,7 +87,10 @@ export class LimitBook {
     const { machine, component, series } = track;
     const choice = chooseLimits({ plant, machine, component, series, day, surveyKind, own: this.#own });
     const set = choice.conflict === null ? choice.set : null;
-    const factor = set === null ? null : limitFactor({ unit: set.unit, detection: set.detection ?? series.detection }, { unit: series.unit, detection: series.detection });
+    const factor =
+      set === null
+        ? null
+        : limitFactor({ unit: set.unit, detection: set.detection ?? series.detection }, { unit: series.unit, detection: series.detection });
     const inSeries = (value: number | null): number | null => (value === null || factor === null ? null : value * factor.factor);
     const bc = inSeries(set?.bc ?? null);
     return {
@@ -105,7 +111,8 @@ export class LimitBook {
   }
 }
 
-const startDays = (rows: readonly Dated[]): Day[] => [...new Set(rows.map((r) => r.validFrom ?? Number.NEGATIVE_INFINITY))].sort((a, b) => a - b);
+const startDays = (rows: readonly Dated[]): Day[] =>
+  [...new Set(rows.map((r) => r.validFrom ?? Number.NEGATIVE_INFINITY))].sort((a, b) => a - b);
 
 function startsBefore(days: readonly Day[], day: Day): number {
   let count = 0;

@@ -5,7 +5,18 @@ import { createHash } from 'node:crypto';
 import { type Day, dayText } from '../plant/day.ts';
 import { POLICY_DEFAULTS, POLICY_IDS } from '../plant/policy.ts';
 import type { Instrument, LedgerAction, Person, Plant, Survey } from '../plant/types.ts';
-import type { Condition, LimitSetLine, PlantOverTime, PolicyLine, RecordInstrument, RecordMachine, RecordPerson, RecordPlant, RecordSurvey, SurveyLine } from '../record/types.ts';
+import type {
+  Condition,
+  LimitSetLine,
+  PlantOverTime,
+  PolicyLine,
+  RecordInstrument,
+  RecordMachine,
+  RecordPerson,
+  RecordPlant,
+  RecordSurvey,
+  SurveyLine,
+} from '../record/types.ts';
 import { inService, measuredOf, wasMeasured } from './coverage.ts';
 import { dateOrNull } from './cut.ts';
 import type { LimitsInForce } from './limits-in-force.ts';
@@ -21,7 +32,13 @@ export function plantLine({ settings, renames }: Plant): RecordPlant {
     site: settings.site,
     contract: settings.contract,
     procedure: settings.procedure,
-    contractor: { name: contractor.name, address: contractor.address, contact: contractor.contact, logo: contractor.logo, accent: contractor.accent },
+    contractor: {
+      name: contractor.name,
+      address: contractor.address,
+      contact: contractor.contact,
+      logo: contractor.logo,
+      accent: contractor.accent,
+    },
     language: settings.language,
     paper: settings.paper,
     units: settings.units,
@@ -33,7 +50,13 @@ export function plantLine({ settings, renames }: Plant): RecordPlant {
   };
 }
 
-const personLine = (p: Person): RecordPerson => ({ name: p.name, role: p.role, category: p.category, certificate: p.certificate, expires: dateOrNull(p.expires) });
+const personLine = (p: Person): RecordPerson => ({
+  name: p.name,
+  role: p.role,
+  category: p.category,
+  certificate: p.certificate,
+  expires: dateOrNull(p.expires),
+});
 
 const instrumentLine = (i: Instrument): RecordInstrument => ({
   id: i.id,
@@ -56,7 +79,13 @@ export function surveyHead(survey: Survey): RecordSurvey {
     scope: survey.scope,
     people: survey.people.map(personLine),
     instruments: survey.instruments.map(instrumentLine),
-    sensors: survey.sensors.map((s) => ({ id: s.id, serial: s.serial, sensitivity: s.sensitivity, mounting: s.mounting, calibration_due: dateOrNull(s.calibrationDue) })),
+    sensors: survey.sensors.map((s) => ({
+      id: s.id,
+      serial: s.serial,
+      sensitivity: s.sensitivity,
+      mounting: s.mounting,
+      calibration_due: dateOrNull(s.calibrationDue),
+    })),
     field_check: survey.fieldCheck,
     process: survey.process,
     weather: survey.weather,
@@ -101,14 +130,25 @@ export function policyLines({ policy }: Plant): PolicyLine[] {
 
 /** SHA-256 of ids and values in force: two records of one hash were judged by one policy. */
 export const policyHash = (lines: readonly PolicyLine[]): string =>
-  createHash('sha256').update(lines.map((line) => `${line.id}=${line.value}\n`).join('')).digest('hex');
+  createHash('sha256')
+    .update(lines.map((line) => `${line.id}=${line.value}\n`).join(''))
+    .digest('hex');
 
 /** Each limit set that judged something, once for each of its quantities and rows, by id. */
 export function limitSetLines(used: Iterable<LimitsInForce>): LimitSetLine[] {
   const lines = new Map<string, LimitSetLine>();
   for (const { set } of used) {
     if (set === null) continue;
-    const key = [set.id, set.quantity, set.detection ?? '', set.measuredOn ?? '', set.validFrom ?? '', set.ab ?? '', set.bc ?? '', set.cd ?? ''].join('\u0000');
+    const key = [
+      set.id,
+      set.quantity,
+      set.detection ?? '',
+      set.measuredOn ?? '',
+      set.validFrom ?? '',
+      set.ab ?? '',
+      set.bc ?? '',
+      set.cd ?? '',
+    ].join('\u0000');
     if (lines.has(key)) continue;
     lines.set(key, {
       id: set.id,
@@ -132,7 +172,17 @@ export function limitSetLines(used: Iterable<LimitsInForce>): LimitSetLine[] {
   return [...lines.entries()].sort(([a], [b]) => (a < b ? -1 : a > b ? 1 : 0)).map(([, line]) => line);
 }
 
-const noConditions = (): Record<Condition, number> => ({ A: 0, B: 0, C: 0, D: 0, 'r-A': 0, 'r-B': 0, 'r-C': 0, 'r-D': 0, 'not assessed': 0 });
+const noConditions = (): Record<Condition, number> => ({
+  A: 0,
+  B: 0,
+  C: 0,
+  D: 0,
+  'r-A': 0,
+  'r-B': 0,
+  'r-C': 0,
+  'r-D': 0,
+  'not assessed': 0,
+});
 
 /** Counts of machines by condition at each survey; a machine in service that was not measured counts as not assessed. */
 export function plantOverTime(context: Context, surveys: readonly SurveyLine[], current: readonly RecordMachine[]): PlantOverTime[] {
@@ -150,14 +200,26 @@ export function plantOverTime(context: Context, surveys: readonly SurveyLine[], 
       measured += n;
       of += m;
     }
-    return { survey: survey.id, date: dayText(survey.day), conditions, measured, of, ...ledgerAt(context, survey.day, context.plant.surveys[s - 1]?.day ?? null) };
+    return {
+      survey: survey.id,
+      date: dayText(survey.day),
+      conditions,
+      measured,
+      of,
+      ...ledgerAt(context, survey.day, context.plant.surveys[s - 1]?.day ?? null),
+    };
   });
 }
 
 /** The ledger as it stood on the day of a survey; `before` is the day of the survey before it. */
-function ledgerAt(context: Context, day: Day, before: Day | null): Pick<PlantOverTime, 'open_actions' | 'closed_actions' | 'closure_days' | 'repeats'> {
+function ledgerAt(
+  context: Context,
+  day: Day,
+  before: Day | null,
+): Pick<PlantOverTime, 'open_actions' | 'closed_actions' | 'closure_days' | 'repeats'> {
   const raised = context.plant.actions.filter((a) => a.raised === null || a.raised <= day);
-  const isClosed = (a: LedgerAction): a is LedgerAction & { closed: Day } => (a.status === 'done' || a.status === 'rejected') && a.closed !== null && a.closed <= day;
+  const isClosed = (a: LedgerAction): a is LedgerAction & { closed: Day } =>
+    (a.status === 'done' || a.status === 'rejected') && a.closed !== null && a.closed <= day;
   const closed = raised.filter(isClosed);
   const lately = closed.flatMap((a) => (a.raised === null || (before !== null && a.closed <= before) ? [] : [a.closed - a.raised]));
   return {

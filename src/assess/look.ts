@@ -55,7 +55,8 @@ interface Judged {
 export function zoneFor(context: Context, track: Track, reading: Reading & { value: number }, limits: LimitsInForce): Judged {
   const { policy } = context;
   const noLimits = limits.ab === null && limits.bc === null && limits.cd === null;
-  if (limits.conflict !== null) return { zone: null, noZone: { key: 'assess.nozone.conflict', facts: { conflict: limits.conflict } }, byRatio: true };
+  if (limits.conflict !== null)
+    return { zone: null, noZone: { key: 'assess.nozone.conflict', facts: { conflict: limits.conflict } }, byRatio: true };
   if (limits.otherDetection) {
     const facts = { detection: track.series.detection, limit_detection: limits.set?.detection ?? null };
     return { zone: null, noZone: { key: 'assess.nozone.detection', facts }, byRatio: true };
@@ -75,7 +76,13 @@ export function zoneFor(context: Context, track: Track, reading: Reading & { val
 }
 
 /** Ratio class by section 2; null where floor, baseline or scale give none. */
-export function ratioClassFor(context: Context, track: Track, value: number, reading: Reading, baseline: Baseline | null): RatioClass | null {
+export function ratioClassFor(
+  context: Context,
+  track: Track,
+  value: number,
+  reading: Reading,
+  baseline: Baseline | null,
+): RatioClass | null {
   const row = pointRow(track, reading.day);
   const floor = floorFor(track.series, row, context.policy);
   if (row.scale === 'none' || floor === null || !carriesRatio(baseline)) return null;
@@ -85,5 +92,7 @@ export function ratioClassFor(context: Context, track: Track, value: number, rea
 /** The three steps as ratios, whatever the scale. */
 export function ratioSteps(context: Context, scale: 'linear' | 'dB'): readonly [number, number, number] {
   const p = context.policy;
-  return scale === 'dB' ? [ratioOfDb(p['2.db.b']), ratioOfDb(p['2.db.c']), ratioOfDb(p['2.db.d'])] : [p['2.ratio.b'], p['2.ratio.c'], p['2.ratio.d']];
+  return scale === 'dB'
+    ? [ratioOfDb(p['2.db.b']), ratioOfDb(p['2.db.c']), ratioOfDb(p['2.db.d'])]
+    : [p['2.ratio.b'], p['2.ratio.c'], p['2.ratio.d']];
 }

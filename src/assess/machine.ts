@@ -60,7 +60,9 @@ function closer(context: Context, a: Verdict, b: Verdict): number {
 }
 
 const byName = (a: Track, b: Track): number =>
-  naturalOrder(a.series.point, b.series.point) || naturalOrder(a.series.quantity, b.series.quantity) || naturalOrder(a.series.detection ?? '', b.series.detection ?? '');
+  naturalOrder(a.series.point, b.series.point) ||
+  naturalOrder(a.series.quantity, b.series.quantity) ||
+  naturalOrder(a.series.detection ?? '', b.series.detection ?? '');
 
 /** The verdict that governs a condition, or null when nothing is assessed. */
 export function governing(context: Context, verdicts: readonly Verdict[]): Verdict | null {
@@ -91,10 +93,17 @@ function missLevel(misses: number, standing: Standing): Level {
 
 /** True where a machine has been measured and neither a limit nor a baseline says anything about it. */
 const nothingToJudgeBy = (verdicts: readonly Verdict[]): boolean =>
-  verdicts.some((v) => v.look !== null) && verdicts.every((v) => v.condition === null && (v.look === null || (v.look.baseline === null && v.look.limits.set === null)));
+  verdicts.some((v) => v.look !== null) &&
+  verdicts.every((v) => v.condition === null && (v.look === null || (v.look.baseline === null && v.look.limits.set === null)));
 
 /** Level of a machine: the worst rule over its points, then misses, then M3. */
-export function assessMachine(context: Context, machine: Machine, verdicts: readonly Verdict[], standing: Standing, spare: RecordMachine['spare']): Assessed {
+export function assessMachine(
+  context: Context,
+  machine: Machine,
+  verdicts: readonly Verdict[],
+  standing: Standing,
+  spare: RecordMachine['spare'],
+): Assessed {
   const { language } = context.plant.settings;
   const leading = [...verdicts].sort(byUrgency(context))[0] ?? null;
   let computed = leading?.level ?? NO_LEVEL;
@@ -123,7 +132,10 @@ function quietReason(context: Context, verdicts: readonly Verdict[]): { reason: 
   const unseen = verdicts.find((v) => v.look !== null && v.look.noZone !== null)?.look?.noZone ?? null;
   if (worst === null && unseen !== null) return { reason: say(language, unseen.key, unseen.facts), facts: unseen.facts };
   if (worst === null || worst.heldFrom === null) {
-    const status = whyNot(verdicts.map((v) => v.track), context.current);
+    const status = whyNot(
+      verdicts.map((v) => v.track),
+      context.current,
+    );
     return { reason: say(language, status === null ? 'assess.reason.none' : 'assess.reason.not_measured', { status }), facts: { status } };
   }
   return reasonOf(context, { ...worst, level: { urgency: null, rule: 'M1' } });
@@ -133,7 +145,8 @@ function quietReason(context: Context, verdicts: readonly Verdict[]): { reason: 
 function overrideOf(context: Context, machine: Machine, computed: Level): Override | null {
   const day = dayAt(context, context.current);
   for (const finding of context.plant.surveys[context.current]?.findings ?? []) {
-    if (finding.machine !== machine.id || finding.urgency === null || finding.overrideBy === null || finding.overrideReason === null) continue;
+    if (finding.machine !== machine.id || finding.urgency === null || finding.overrideBy === null || finding.overrideReason === null)
+      continue;
     if (finding.closed !== null || (finding.overrideUntil !== null && finding.overrideUntil < day)) continue;
     return {
       urgency: finding.urgency,
@@ -148,7 +161,8 @@ function overrideOf(context: Context, machine: Machine, computed: Level): Overri
 
 const distinctDoubts = (verdicts: readonly Verdict[]): Doubt[] => {
   const byKind = new Map<string, Doubt>();
-  for (const verdict of verdicts) for (const doubt of verdict.look?.doubts ?? []) if (!byKind.has(doubt.kind)) byKind.set(doubt.kind, doubt);
+  for (const verdict of verdicts)
+    for (const doubt of verdict.look?.doubts ?? []) if (!byKind.has(doubt.kind)) byKind.set(doubt.kind, doubt);
   return [...byKind.values()];
 };
 
@@ -224,7 +238,10 @@ export function componentLines(context: Context, assessed: Assessed): RecordComp
     const own = assessed.verdicts.filter((v) => v.track.component === component);
     const worst = governing(context, own);
     const limits = (worst?.look ?? worst?.heldFrom ?? own.find((v) => v.look !== null)?.look)?.limits ?? null;
-    const row = component.rows.reduce((a, b) => (b.validFrom === null || b.validFrom <= day ? b : a), component.rows[0] as (typeof component.rows)[number]);
+    const row = component.rows.reduce(
+      (a, b) => (b.validFrom === null || b.validFrom <= day ? b : a),
+      component.rows[0] as (typeof component.rows)[number],
+    );
     return {
       machine: assessed.machine.id,
       component: component.id,
@@ -233,7 +250,8 @@ export function componentLines(context: Context, assessed: Assessed): RecordComp
       condition: worst?.condition ?? 'not assessed',
       governed_by: worst === null ? null : keyOf(worst.track),
       limit_set: limits?.set?.id ?? null,
-      limit_reason: limits === null ? say(language, 'assess.nozone.not_measured', {}) : say(language, limits.reason.key, limits.reason.facts),
+      limit_reason:
+        limits === null ? say(language, 'assess.nozone.not_measured', {}) : say(language, limits.reason.key, limits.reason.facts),
       power_kw: row.powerKw,
       speed_rpm: limits?.ratedRpm ?? row.speedRpm,
     };

@@ -62,7 +62,20 @@ function sistersLine(context: Context, track: Track): RecordMeasurement['sisters
 
 type Taken = Pick<
   RecordMeasurement,
-  'state' | 'speed_rpm' | 'load_pct' | 'instrument' | 'measured_by' | 'taken_at' | 'remark' | 'phase' | 'status' | 'value' | 'typed' | 'typed_unit' | 'bound' | 'source'
+  | 'state'
+  | 'speed_rpm'
+  | 'load_pct'
+  | 'instrument'
+  | 'measured_by'
+  | 'taken_at'
+  | 'remark'
+  | 'phase'
+  | 'status'
+  | 'value'
+  | 'typed'
+  | 'typed_unit'
+  | 'bound'
+  | 'source'
 >;
 
 function takenOf(reading: Reading | null, track: Track, context: Context): Taken {
@@ -107,7 +120,10 @@ function judgedOf(context: Context, track: Track, look: Look | null, reading: Re
     };
   }
   const bounded = boundZone(track, reading, limits);
-  const because = bounded !== null ? null : say(language, reading?.bound === '<' || reading?.bound === '>' ? 'assess.nozone.bound' : 'assess.nozone.not_measured', {});
+  const because =
+    bounded !== null
+      ? null
+      : say(language, reading?.bound === '<' || reading?.bound === '>' ? 'assess.nozone.bound' : 'assess.nozone.not_measured', {});
   return { zone: bounded, ratio_class: null, zone_basis: bounded === null ? null : basis, no_zone_because: because, near_boundary: null };
 }
 
@@ -118,7 +134,12 @@ function boundZone(track: Track, reading: Reading | null, limits: LimitsInForce)
   return value === null || limits.otherDetection ? null : zoneOfBound(reading.bound, value, limits);
 }
 
-function limitsOf(context: Context, track: Track, limits: LimitsInForce, baseline: Baseline | null): Pick<RecordMeasurement, 'limit_set' | 'limit_reason' | 'limits' | 'baseline'> {
+function limitsOf(
+  context: Context,
+  track: Track,
+  limits: LimitsInForce,
+  baseline: Baseline | null,
+): Pick<RecordMeasurement, 'limit_set' | 'limit_reason' | 'limits' | 'baseline'> {
   const { ab, bc, cd, set } = limits;
   const { alarm, trip } = alarmTrip(limits, baseline, context.policy);
   return {
@@ -127,7 +148,15 @@ function limitsOf(context: Context, track: Track, limits: LimitsInForce, baselin
     limits:
       set === null || limits.otherDetection
         ? null
-        : { ab, bc, cd, alarm, trip, of: { ab: set.ab, bc: set.bc, cd: set.cd, unit: set.unit, detection: set.detection ?? track.series.detection }, by: limits.by },
+        : {
+            ab,
+            bc,
+            cd,
+            alarm,
+            trip,
+            of: { ab: set.ab, bc: set.bc, cd: set.cd, unit: set.unit, detection: set.detection ?? track.series.detection },
+            by: limits.by,
+          },
     baseline: baseline === null ? null : { value: baseline.value, from: baseline.from, n: baseline.n, provisional: baseline.provisional },
   };
 }
@@ -166,7 +195,13 @@ function historyOf(context: Context, track: Track, current: Reading | null): His
   const elsewhere = track.series.readings.some((r) => r.place.file !== context.plant.surveys[r.survey]?.place?.file);
   return {
     value: track.readings.map((r) => (r === null || r.bound === '<' ? null : r.value)),
-    ...(unusual ? { typed: track.readings.map((r) => (r === null || r.typed === null ? null : r.typedUnit === null ? r.typed : `${r.typed} ${r.typedUnit}`)) } : {}),
+    ...(unusual
+      ? {
+          typed: track.readings.map((r) =>
+            r === null || r.typed === null ? null : r.typedUnit === null ? r.typed : `${r.typed} ${r.typedUnit}`,
+          ),
+        }
+      : {}),
     why,
     line: track.readings.map((r) => r?.place.line ?? null),
     ...(elsewhere ? { file: track.readings.map((r) => r?.place.file ?? null) } : {}),

@@ -27,10 +27,17 @@ export function notesOf(context: Context, track: Track, look: Look | null, limit
   if (look.zone !== null && limits.byOurChoice) add('axial');
   if (alarmTrip(limits, look.baseline, policy).baselineAboveCap) add('baseline_above_cap');
   if (look.baseline?.provisional === true) add('baseline_provisional');
-  if (look.previous !== null && look.previous.speedRpm === null && look.reading.speedRpm !== null && speedTakenAsFixed(track, look.previous, look.reading)) add('speed_taken_as_fixed');
+  if (
+    look.previous !== null &&
+    look.previous.speedRpm === null &&
+    look.reading.speedRpm !== null &&
+    speedTakenAsFixed(track, look.previous, look.reading)
+  )
+    add('speed_taken_as_fixed');
   notes.push(...historyNotes(context, track, look, trend));
   const background = backgroundOf(track, look);
-  if (background !== null && exceeds(background, policy['2.background.share'] * look.value)) add('background', { background, unit: track.series.unit });
+  if (background !== null && exceeds(background, policy['2.background.share'] * look.value))
+    add('background', { background, unit: track.series.unit });
   if (pointRow(track, look.reading.day).measuredOn === null && track.series.quantity === 'displacement') add('place_unknown');
   return notes;
 }

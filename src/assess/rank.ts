@@ -46,14 +46,16 @@ export function rankedActions(context: Context, drafts: readonly DraftAction[]):
 /** Settled actions (verified, or done and not yet measured without a level) stand at the end with rank 0. */
 const isSettled = (draft: DraftAction): boolean => draft.status === 'done' && draft.computed.urgency === null;
 
-const byName = (a: DraftAction, b: DraftAction): number => naturalOrder(a.assessed.machine.id, b.assessed.machine.id) || naturalOrder(a.id, b.id);
+const byName = (a: DraftAction, b: DraftAction): number =>
+  naturalOrder(a.assessed.machine.id, b.assessed.machine.id) || naturalOrder(a.id, b.id);
 
 function compareKeys(a: RankKey, b: RankKey): number {
   for (const criterion of CRITERIA) if (a[criterion] !== b[criterion]) return b[criterion] - a[criterion];
   return 0;
 }
 
-const urgencyOf = (draft: DraftAction): RecordAction['urgency'] => draft.override?.urgency ?? draft.computed.urgency ?? (draft.origin === 'drafted' ? draft.assessed.urgency : null);
+const urgencyOf = (draft: DraftAction): RecordAction['urgency'] =>
+  draft.override?.urgency ?? draft.computed.urgency ?? (draft.origin === 'drafted' ? draft.assessed.urgency : null);
 
 const statedDue = (draft: DraftAction): Day | null => draft.ledger?.due ?? draft.finding?.due ?? null;
 
@@ -100,7 +102,10 @@ function aboveBecause(context: Context, key: RankKey, next: RankKey, below: Draf
 function actionLine(context: Context, draft: DraftAction, rank: number, above: string | null): RecordAction {
   const { finding, ledger, assessed, verdict } = draft;
   const urgency = urgencyOf(draft);
-  const told = verdict === null || (draft.computed.rule === 'M2' && assessed.urgencyBy === null) ? { reason: assessed.reason, facts: assessed.facts } : reasonOf(context, verdict);
+  const told =
+    verdict === null || (draft.computed.rule === 'M2' && assessed.urgencyBy === null)
+      ? { reason: assessed.reason, facts: assessed.facts }
+      : reasonOf(context, verdict);
   const due = dueDay(context, draft);
   return {
     rank,
@@ -181,12 +186,16 @@ function draftedWork(context: Context, draft: DraftAction): string {
   const { rule } = draft.computed;
   const condition = draft.verdict?.condition ?? null;
   const point = draft.verdict?.track.series.point ?? '';
-  const alarm = draft.verdict?.look == null ? null : alarmTrip(draft.verdict.look.limits, draft.verdict.look.baseline, context.policy).alarm;
+  const alarm =
+    draft.verdict?.look == null ? null : alarmTrip(draft.verdict.look.limits, draft.verdict.look.baseline, context.policy).alarm;
   const unit = draft.verdict === null ? '' : unitWords(draft.verdict.track);
   if (rule === 'M1' && draft.verdict?.look != null) return say(language, 'assess.work.repeat', { point });
   if (rule === 'M2' || rule === 'M1') return say(language, 'assess.work.measure', {});
   if (rule === 'M3') return say(language, 'assess.work.limits', {});
-  if (draft.computed.urgency === 'watch') return alarm === null ? say(language, 'assess.work.watch', { point }) : say(language, 'assess.work.watch.alarm', shownFacts(context.plant.settings.units, { point, alarm, unit }));
+  if (draft.computed.urgency === 'watch')
+    return alarm === null
+      ? say(language, 'assess.work.watch', { point })
+      : say(language, 'assess.work.watch.alarm', shownFacts(context.plant.settings.units, { point, alarm, unit }));
   if (draft.computed.urgency === 'now') return say(language, 'assess.work.now', {});
   return say(language, condition !== null && 'CD'.includes(condition.slice(-1)) ? 'assess.work.repair' : 'assess.work.find', { point });
 }

@@ -16,10 +16,12 @@ export interface Reason {
   readonly facts: Facts;
 }
 
-export const unitWords = (track: Track): string => (track.series.detection === null ? track.series.unit : `${track.series.unit} ${track.series.detection}`);
+export const unitWords = (track: Track): string =>
+  track.series.detection === null ? track.series.unit : `${track.series.unit} ${track.series.detection}`;
 
 /** The point with the component where there is more than one. */
-export const pointWords = (track: Track): string => (track.component.implicit ? track.series.point : `${track.component.id} ${track.series.point}`);
+export const pointWords = (track: Track): string =>
+  track.component.implicit ? track.series.point : `${track.component.id} ${track.series.point}`;
 
 /** Facts of a look that sentences may name; every number in the unit and detection of the series. */
 export function factsOf(context: Context, track: Track, look: Look, movement: Movement): Facts {
@@ -52,7 +54,8 @@ export function factsOf(context: Context, track: Track, look: Look, movement: Mo
     changed_on: movement.trend?.changed_on ?? null,
     changed_by: movement.trend?.changed_by ?? null,
     closing: closing?.what ?? null,
-    likely: movement.outlook === null || 'none' in movement.outlook || movement.outlook.likely === null ? null : dayText(movement.outlook.likely),
+    likely:
+      movement.outlook === null || 'none' in movement.outlook || movement.outlook.likely === null ? null : dayText(movement.outlook.likely),
     boundary: movement.outlook === null || 'none' in movement.outlook ? null : movement.outlook.boundary,
   };
 }
@@ -61,7 +64,11 @@ const finite = (value: number): number | null => (Number.isFinite(value) ? value
 
 /** How it moved, in words: `assess.travel.<travel>.<by>`. */
 export function travelWords(context: Context, facts: Facts): string {
-  return say(context.plant.settings.language, `assess.travel.${facts['travel'] ?? 'steady'}.${facts['by']}`, shownFacts(context.plant.settings.units, facts));
+  return say(
+    context.plant.settings.language,
+    `assess.travel.${facts['travel'] ?? 'steady'}.${facts['by']}`,
+    shownFacts(context.plant.settings.units, facts),
+  );
 }
 
 /** Sentence for the level of a verdict. */
@@ -72,8 +79,15 @@ export function reasonOf(context: Context, verdict: Verdict): Reason {
   if (look === null || verdict.movement === null) return { reason: say(language, 'assess.reason.none', {}), facts: {} };
   const facts: Facts = { ...factsOf(context, track, look, verdict.movement), rule: level.rule };
   const kind = look.zone !== null ? 'zone' : look.ratioClass !== null ? 'class' : 'shown';
-  const parts = [say(language, `assess.reason.${kind}`, { ...shownFacts(context.plant.settings.units, facts), travel_words: travelWords(context, facts), limit_words: limitWords(context, facts) })];
-  if (level.rule === 'R1' || level.rule === 'H1' || level.rule === 'K1' || level.rule === 'F1') parts.push(say(language, `assess.reason.${level.rule}`, facts));
+  const parts = [
+    say(language, `assess.reason.${kind}`, {
+      ...shownFacts(context.plant.settings.units, facts),
+      travel_words: travelWords(context, facts),
+      limit_words: limitWords(context, facts),
+    }),
+  ];
+  if (level.rule === 'R1' || level.rule === 'H1' || level.rule === 'K1' || level.rule === 'F1')
+    parts.push(say(language, `assess.reason.${level.rule}`, facts));
   const among = context.sisters.get(track);
   if (among?.outlier === true) parts.push(say(language, 'assess.reason.S1', { n: among.n, db: among.dbAboveMedian }));
   if (doubtedHigh(look)) parts.push(say(language, 'assess.reason.M4', facts));
@@ -106,5 +120,9 @@ function limitWords(context: Context, facts: Facts): string {
   const limit = name === undefined ? null : (facts[name] ?? null);
   const above = facts['condition'] === 'C' || facts['condition'] === 'D';
   if (limit === null || name === undefined) return '';
-  return say(context.plant.settings.language, above ? 'assess.limit.above' : 'assess.limit.below', shownFacts(context.plant.settings.units, { boundary: `${name[0]}/${name[1]}`.toUpperCase(), limit, unit: facts['unit'] ?? '' }));
+  return say(
+    context.plant.settings.language,
+    above ? 'assess.limit.above' : 'assess.limit.below',
+    shownFacts(context.plant.settings.units, { boundary: `${name[0]}/${name[1]}`.toUpperCase(), limit, unit: facts['unit'] ?? '' }),
+  );
 }

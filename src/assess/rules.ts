@@ -11,9 +11,14 @@ const INDICATIONS = ['I1', 'I2', 'I3', 'I4', 'I5', 'I6', 'I7', 'I8', 'I9', 'I10'
 export function ruleLines(language: Language): RuleLine[] {
   const line = (id: string, mark: Mark): RuleLine => ({ id, mark, about: say(language, `assess.rule.${id}`), levels: [] });
   return [
-    ...tableRows().map(({ rule, zone, travel, levels }): RuleLine => ({
-      id: rule, mark: 'own', about: say(language, 'assess.rule.table', { zone, travel: say(language, `term.${travel}`) }), levels: levels.map((l) => l ?? ''),
-    })),
+    ...tableRows().map(
+      ({ rule, zone, travel, levels }): RuleLine => ({
+        id: rule,
+        mark: 'own',
+        about: say(language, 'assess.rule.table', { zone, travel: say(language, `term.${travel}`) }),
+        levels: levels.map((l) => l ?? ''),
+      }),
+    ),
     ...URGENCY.map((id) => line(id, 'own')),
     ...DOUBT_KINDS.map((id) => line(id, 'own')),
     ...INDICATIONS.map((id) => line(id, 'common practice')),

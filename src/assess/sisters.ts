@@ -19,7 +19,17 @@ function sisterKey(track: Track, look: Look): string | null {
   const point = pointRow(track, day);
   const component = componentRow(track, day);
   const { series } = track;
-  return [family, component.kind, point.location ?? series.point, point.direction, state, point.support ?? component.support, series.quantity, series.unit, series.detection].join('\u0000');
+  return [
+    family,
+    component.kind,
+    point.location ?? series.point,
+    point.direction,
+    state,
+    point.support ?? component.support,
+    series.quantity,
+    series.unit,
+    series.detection,
+  ].join('\u0000');
 }
 
 export function sistersOf(context: Context): Map<Track, Sisterhood> {

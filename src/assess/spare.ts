@@ -22,7 +22,8 @@ function proofOf(context: Context, twin: Machine): Proof {
   const last = lastMeasured(tracks, context.current);
   if (last < 0) return { proven: false, key: 'assess.spare.never', facts: { machine: twin.id } };
   const date = dayText(dayAt(context, last));
-  if (last < context.current && whyNot(tracks, context.current) === 'under work') return { proven: false, key: 'assess.spare.work', facts: { machine: twin.id } };
+  if (last < context.current && whyNot(tracks, context.current) === 'under work')
+    return { proven: false, key: 'assess.spare.work', facts: { machine: twin.id } };
   const interval = intervalOf(context, twin);
   const age = dayAt(context, context.current) - dayAt(context, last);
   if (interval === null ? last < context.current : age > interval + graceDays(context, interval)) {
@@ -48,5 +49,10 @@ export function spareOf(context: Context, machine: Machine): RecordMachine['spar
   }
   const proofs = twins.map((twin) => ({ twin, proof: proofOf(context, twin) }));
   const best = proofs.find((p) => p.proof.proven) ?? (proofs[0] as (typeof proofs)[number]);
-  return { machine: best.twin.id, proven: best.proof.proven, reason: say(language, best.proof.key, best.proof.facts), facts: best.proof.facts };
+  return {
+    machine: best.twin.id,
+    proven: best.proof.proven,
+    reason: say(language, best.proof.key, best.proof.facts),
+    facts: best.proof.facts,
+  };
 }

@@ -4,7 +4,19 @@
  */
 import type { Day } from '../plant/day.ts';
 import type { Policy } from '../plant/policy.ts';
-import { type Component, type ComponentRow, inForce, type LedgerAction, type Machine, type MachineRow, type Plant, type PlantEvent, type PointRow, type Reading, type Series } from '../plant/types.ts';
+import {
+  type Component,
+  type ComponentRow,
+  inForce,
+  type LedgerAction,
+  type Machine,
+  type MachineRow,
+  type Plant,
+  type PlantEvent,
+  type PointRow,
+  type Reading,
+  type Series,
+} from '../plant/types.ts';
 import type { Doubt, Facts, RatioClass, Zone } from '../record/types.ts';
 import type { LimitsInForce } from './limits-in-force.ts';
 import type { Sisterhood } from './sisterhood.ts';
@@ -108,7 +120,8 @@ function isUniform(series: Series, component: Component, policy: Policy): boolea
   const seesMounting = highHz === null || highHz > policy['3.mounting.above'];
   let [slowest, fastest, least, most] = [Number.POSITIVE_INFINITY, 0, Number.POSITIVE_INFINITY, 0];
   for (const r of series.readings) {
-    if (r.lowHz !== null || r.highHz !== null || r.sensor !== null || r.state !== first.state || (r.instrument !== null && seesMounting)) return false;
+    if (r.lowHz !== null || r.highHz !== null || r.sensor !== null || r.state !== first.state || (r.instrument !== null && seesMounting))
+      return false;
     if (r.speedRpm === null && drive === 'variable') return false;
     if (r.speedRpm !== null) [slowest, fastest] = [Math.min(slowest, r.speedRpm), Math.max(fastest, r.speedRpm)];
     if (r.loadPct !== null) [least, most] = [Math.min(least, r.loadPct), Math.max(most, r.loadPct)];

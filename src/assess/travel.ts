@@ -13,7 +13,21 @@ import { type Context, doubtedLow, type Look, pointRow, type Track } from './tra
 import { lastThreeOverBaseline, trendOf } from './trend.ts';
 
 /** What decided: the last part of the sentence `assess.travel.<travel>.<by>`. */
-export type TravelBy = 'forecast' | 'change' | 'ratio' | 'trend' | 'baseline' | 'baseline ratio' | 'last three' | 'level' | 'vector' | 'event' | 'second reading' | 'doubt' | 'first' | 'none';
+export type TravelBy =
+  | 'forecast'
+  | 'change'
+  | 'ratio'
+  | 'trend'
+  | 'baseline'
+  | 'baseline ratio'
+  | 'last three'
+  | 'level'
+  | 'vector'
+  | 'event'
+  | 'second reading'
+  | 'doubt'
+  | 'first'
+  | 'none';
 
 export interface Movement {
   readonly travel: Travel | null;
@@ -52,7 +66,8 @@ export function movementOf(context: Context, track: Track, look: Look): Movement
   const outlook = doubtedLow(look) ? null : outlookOf(context, track, look, trend);
   const done = (travel: Travel | null, by: TravelBy): Movement => ({ travel, by, trend, vector, outlook, without: travel });
   if (doubtedLow(look)) return done('held', 'doubt');
-  if (look.zone === null && look.ratioClass === null && (floor === null || row.scale === 'none') && look.limits.q === null) return done(null, 'none');
+  if (look.zone === null && look.ratioClass === null && (floor === null || row.scale === 'none') && look.limits.q === null)
+    return done(null, 'none');
   if (look.previous === null) return done(isBad(look) ? 'step' : 'steady', 'first');
   const c: Compared = {
     x: look.value,
@@ -64,7 +79,8 @@ export function movementOf(context: Context, track: Track, look: Look): Movement
     ratios: row.scale !== 'none' && carriesRatio(look.baseline),
   };
   const up = fast(context, c) ?? rising(context, c, trend) ?? step(context, c, look, standsOff, vector) ?? level(context, c, trend);
-  const plain = up !== null ? done(up.travel, up.by) : look.explainedFall === null ? done('steady', 'none') : done('falling', look.explainedFall);
+  const plain =
+    up !== null ? done(up.travel, up.by) : look.explainedFall === null ? done('steady', 'none') : done('falling', look.explainedFall);
   const isNear = plain.travel !== 'fast' && outlook !== null && crossesSoon(context, track, look, outlook);
   return isNear ? { ...plain, travel: 'fast', by: 'forecast' } : plain;
 }
@@ -89,13 +105,20 @@ function rising(context: Context, { x, p, q, scale, loud, ratios }: Compared, tr
 }
 
 /** Too far below the last reading to be part of a rise. */
-const sagged = (context: Context, { x, p, scale }: Pick<Compared, 'x' | 'p' | 'scale'>): boolean => exceeds(ratioOfDb(-context.policy['5.rising.sag']), ratio(x, p, scale));
+const sagged = (context: Context, { x, p, scale }: Pick<Compared, 'x' | 'p' | 'scale'>): boolean =>
+  exceeds(ratioOfDb(-context.policy['5.rising.sag']), ratio(x, p, scale));
 
 /** A real rise that was one step: the level it reached is carried, though the baseline does not tell it. */
 const level = (context: Context, compared: Compared, trend: Trend | null): Up =>
   trend?.kind === 'plateau' && trend.changed_on != null && !sagged(context, compared) ? { travel: 'step', by: 'level' } : null;
 
-function step(context: Context, { x, q, scale, loud, heard, ratios }: Compared, look: Look, standsOff: boolean, vector: Change['vector']): Up {
+function step(
+  context: Context,
+  { x, q, scale, loud, heard, ratios }: Compared,
+  look: Look,
+  standsOff: boolean,
+  vector: Change['vector'],
+): Up {
   const { policy } = context;
   const baseline = look.baseline;
   if (baseline !== null && q !== null && heard && risesBy(x, baseline.value, q)) return { travel: 'step', by: 'baseline' };

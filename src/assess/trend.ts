@@ -17,7 +17,13 @@ const DAYS_PER_YEAR = 365.25;
 const HOURS_PER_DAY = 24;
 
 /** `fromBaseline`: the last three stand clear of the baseline; it makes a trend that is not real a step. */
-export function trendOf(readings: readonly (Reading & { value: number })[], scale: Scale, floor: number | null, stepped: boolean, policy: Policy): Trend | null {
+export function trendOf(
+  readings: readonly (Reading & { value: number })[],
+  scale: Scale,
+  floor: number | null,
+  stepped: boolean,
+  policy: Policy,
+): Trend | null {
   const n = readings.length;
   if (n < policy['5.trend.count'] || scale === 'none') return null;
   const logs = readings.map((r) => logAmplitude(r.value, scale));
@@ -31,14 +37,20 @@ export function trendOf(readings: readonly (Reading & { value: number })[], scal
   const significant = !exceeds(twoSidedP, policy['5.trend.p']) && slope > 0;
   const real = significant && reaches(rise, policy['5.trend.rise']) && floor !== null && reaches(last, floor);
   const step = significant || stepped ? stepBefore(times, logs as number[], policy) : null;
-  const plateau = isPlateau(readings, scale, policy) || (step !== null && !exceeds(dbOfLog((logs[n - 1] as number) - step.after), policy['5.plateau.top']));
+  const plateau =
+    isPlateau(readings, scale, policy) ||
+    (step !== null && !exceeds(dbOfLog((logs[n - 1] as number) - step.after), policy['5.plateau.top']));
   const kind = real ? (plateau ? 'plateau' : 'ramp') : significant ? 'small' : stepped ? 'step' : 'none';
   // A rise that goes on is no step, though its readings may lie in two heaps with a gap between.
   const told = kind === 'ramp' ? null : step;
   return {
     kind,
     db_per_year: dbOfLog(slope) * DAYS_PER_YEAR,
-    slope_per_year: (theilSenSlope(times, readings.map((r) => r.value)) ?? 0) * DAYS_PER_YEAR,
+    slope_per_year:
+      (theilSenSlope(
+        times,
+        readings.map((r) => r.value),
+      ) ?? 0) * DAYS_PER_YEAR,
     rise,
     p: twoSidedP,
     n,
@@ -61,7 +73,8 @@ function timesInDays(readings: readonly Reading[]): number[] {
   const hours = readings.map((r) => r.runningHours);
   const first = hours[0];
   const last = hours[hours.length - 1];
-  const onHours = hours.every((h) => h !== null) && first !== undefined && first !== null && last !== undefined && last !== null && last > first;
+  const onHours =
+    hours.every((h) => h !== null) && first !== undefined && first !== null && last !== undefined && last !== null && last > first;
   return onHours ? hours.map((h) => (h as number) / HOURS_PER_DAY) : readings.map((r) => r.day);
 }
 

@@ -54,7 +54,12 @@ export function tableLevel(condition: Zone | RatioClass, travel: Travel, critica
 }
 
 /** Every row of the table with its zone and travel, for print: critical, essential, general, then the same with a proven spare. */
-export const tableRows = (): { readonly rule: string; readonly zone: string; readonly travel: Travel; readonly levels: readonly (Urgency | null)[] }[] =>
+export const tableRows = (): {
+  readonly rule: string;
+  readonly zone: string;
+  readonly travel: Travel;
+  readonly levels: readonly (Urgency | null)[];
+}[] =>
   Object.entries(TABLE).map(([rule, levels]) => {
     const travel = (Object.keys(ROW_OF) as Travel[]).find((t) => t !== 'held' && ROW_OF[t] === Number(rule[1])) as Travel;
     return { rule, zone: rule[0] as string, travel, levels };

@@ -69,12 +69,14 @@ export function verify(context: Context, action: LedgerAction): Verification | n
   if (subject === null) return null;
   const { track, look } = subject;
   const limit = action.verifyBelow ?? targetOf(context, look);
-  const target = limit === null ? null : { point: track.series.point, quantity: track.series.quantity, value: limit, unit: unitWords(track) };
+  const target =
+    limit === null ? null : { point: track.series.point, quantity: track.series.quantity, value: limit, unit: unitWords(track) };
   const before = pair(look.value, look.reading.day);
   if (action.status !== 'done' || action.closed === null) return { target, before, after: null, result: 'not yet measured' };
   const readings = readingsAfter(context, track, look.reading, action.closed);
   const last = readings[readings.length - 1];
-  if (last === undefined || limit === null) return { target, before, after: last === undefined ? null : pair(last.value, last.day), result: 'not yet measured' };
+  if (last === undefined || limit === null)
+    return { target, before, after: last === undefined ? null : pair(last.value, last.day), result: 'not yet measured' };
   const below = readings.filter((r) => !exceeds(r.value, limit));
   const needed = onlyGreased(track, raised, action.closed) ? 2 : 1;
   const proof = below[needed - 1];
@@ -87,6 +89,11 @@ export function verifiedNow(context: Context, machine: string): boolean {
   const today = context.plant.surveys[context.current];
   return (context.closedActions.get(machine) ?? []).some((action) => {
     const verification = verify(context, action);
-    return verification?.result === 'verified' && today !== undefined && verification.after !== null && verification.after.date >= dayText(today.from);
+    return (
+      verification?.result === 'verified' &&
+      today !== undefined &&
+      verification.after !== null &&
+      verification.after.date >= dayText(today.from)
+    );
   });
 }

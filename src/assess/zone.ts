@@ -28,7 +28,11 @@ export function zoneOf(value: number, limits: Boundaries): Zone | null {
 export function nearBoundary(value: number, limits: Boundaries, share: number): string | null {
   let found: string | null = null;
   let nearest = share;
-  for (const [name, boundary] of [['A/B', limits.ab], ['B/C', limits.bc], ['C/D', limits.cd]] as const) {
+  for (const [name, boundary] of [
+    ['A/B', limits.ab],
+    ['B/C', limits.bc],
+    ['C/D', limits.cd],
+  ] as const) {
     if (boundary === null || boundary <= 0) continue;
     const distance = Math.abs(value - boundary) / boundary;
     if (!exceeds(distance, nearest)) {
@@ -48,7 +52,11 @@ export interface Band {
 }
 
 /** Lower edge that the set needs at this speed: published sets from 10 Hz need 2 Hz up to 600 r/min (ISO 20816-3). */
-export function neededLowHz(limits: LimitsInForce, rpm: number | null, slow: { readonly speedRpm: number; readonly lowHz: number }): number | null {
+export function neededLowHz(
+  limits: LimitsInForce,
+  rpm: number | null,
+  slow: { readonly speedRpm: number; readonly lowHz: number },
+): number | null {
   const low = limits.set?.lowHz ?? null;
   if (low === null || limits.set?.published !== true || rpm === null || exceeds(rpm, slow.speedRpm)) return low;
   return Math.min(low, slow.lowHz);

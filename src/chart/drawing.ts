@@ -3,9 +3,19 @@
  * PDF operators. Inks are names of the brand's palette, never colours, so that site (light and dark) and PDF agree.
  */
 export type Ink =
-  | 'ink' | 'quiet' | 'rule' | 'paper' | 'teal'
-  | 'zone-a' | 'zone-b' | 'zone-c' | 'zone-d'
-  | 'band-a' | 'band-b' | 'band-c' | 'band-d';
+  | 'ink'
+  | 'quiet'
+  | 'rule'
+  | 'paper'
+  | 'teal'
+  | 'zone-a'
+  | 'zone-b'
+  | 'zone-c'
+  | 'zone-d'
+  | 'band-a'
+  | 'band-b'
+  | 'band-c'
+  | 'band-d';
 
 export interface PathShape {
   readonly kind: 'path';

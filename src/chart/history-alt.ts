@@ -6,7 +6,10 @@ import type { HistoryInput } from './series.ts';
 export function historyAlt(input: HistoryInput, newBaselineAt: readonly number[]): string {
   const language = input.language ?? 'en';
   const named: readonly (readonly [string, number | null])[] = [
-    ['A/B', input.ab], ['B/C', input.bc], ['C/D', input.cd], [say(language, 'chart.alarm'), input.alarm],
+    ['A/B', input.ab],
+    ['B/C', input.bc],
+    ['C/D', input.cd],
+    [say(language, 'chart.alarm'), input.alarm],
   ];
   const lines = named.flatMap(([name, value]) => (value === null ? [] : [`${name} ${limitNumber(language, value)}`]));
   if (input.baseline !== null) lines.push(`${say(language, 'chart.baseline')} ${formatNumber(language, input.baseline)}`);
@@ -17,6 +20,7 @@ export function historyAlt(input: HistoryInput, newBaselineAt: readonly number[]
   if (newBaselineAt.some((i) => i > 0)) parts.push(say(language, 'chart.gaps'));
   if (input.held) parts.push(say(language, 'chart.held'));
   const { forecast } = input;
-  if (forecast !== null && forecast !== undefined) parts.push(say(language, forecast.latest === null ? 'chart.forecast_open' : 'chart.forecast', { ...forecast }));
+  if (forecast !== null && forecast !== undefined)
+    parts.push(say(language, forecast.latest === null ? 'chart.forecast_open' : 'chart.forecast', { ...forecast }));
   return parts.join(' ');
 }

@@ -31,11 +31,16 @@ export function historyChart(input: HistoryInput): Drawing {
   const ticks = ticksOf(input, top);
   const lines = limitLines(input, top);
   const frame: Frame = {
-    left: Math.max(30, roomOf(ticks.map((t) => t.text)) + 9), top: 22, right: width - Math.max(46, roomOf(lines.map((l) => l.text)) + 6), bottom: height - 18,
+    left: Math.max(30, roomOf(ticks.map((t) => t.text)) + 9),
+    top: 22,
+    right: width - Math.max(46, roomOf(lines.map((l) => l.text)) + 6),
+    bottom: height - 18,
   };
   const first = days[0] ?? 0;
   const last = Math.max(days[days.length - 1] ?? first, forecastEnd(input) ?? first);
-  const time = scaleLinear().domain([first, Math.max(last, first + 1)]).range([frame.left + 16, frame.right - 8]);
+  const time = scaleLinear()
+    .domain([first, Math.max(last, first + 1)])
+    .range([frame.left + 16, frame.right - 8]);
   const x: Scale = (index) => (first === last ? (frame.left + frame.right) / 2 : time(days[index] ?? first));
   const y = valueScale(top, frame);
   const shapes: Shape[] = [
@@ -86,7 +91,10 @@ function zoneLetters(input: HistoryInput, y: Scale, frame: Frame, top: number): 
 }
 
 const ticksOf = (input: HistoryInput, top: number): { readonly value: number; readonly text: string }[] =>
-  scaleLinear().domain([0, top]).ticks(4).map((value) => ({ value, text: plainNumber(input.language ?? 'en', value) }));
+  scaleLinear()
+    .domain([0, top])
+    .ticks(4)
+    .map((value) => ({ value, text: plainNumber(input.language ?? 'en', value) }));
 
 interface LimitLine {
   readonly text: string;
@@ -107,13 +115,27 @@ function limitLines(input: HistoryInput, top: number): LimitLine[] {
     { text: say(language, 'chart.baseline'), value: input.baseline, dash: [0.8, 1.8], ink: 'quiet', width: 0.7 },
   ];
   return marks
-    .flatMap((m) => (m.value === null || m.value > top ? [] : [{ ...m, value: m.value, text: `${m.text} ${m.ink === 'quiet' ? formatNumber(language, m.value) : limitNumber(language, m.value)}` }]))
+    .flatMap((m) =>
+      m.value === null || m.value > top
+        ? []
+        : [
+            {
+              ...m,
+              value: m.value,
+              text: `${m.text} ${m.ink === 'quiet' ? formatNumber(language, m.value) : limitNumber(language, m.value)}`,
+            },
+          ],
+    )
     .sort((a, b) => a.value - b.value);
 }
 
 /** Lines with their names at the right; labels that would collide move apart, inside the frame. */
 function lineShapes(lines: readonly LimitLine[], y: Scale, frame: Frame): Shape[] {
-  const at = apart(lines.map((l) => y(l.value) + SIZE * 0.35), SIZE + 0.5, frame.top + SIZE * 0.7);
+  const at = apart(
+    lines.map((l) => y(l.value) + SIZE * 0.35),
+    SIZE + 0.5,
+    frame.top + SIZE * 0.7,
+  );
   return [
     ...lines.map((l) => stroke(line(frame.left, y(l.value), frame.right, y(l.value)), l.ink, l.width, l.dash)),
     ...lines.map((l, i) => label(frame.right + 4, at[i] ?? 0, l.text, SIZE, 'start', l.ink === 'ink' ? 'ink' : 'quiet')),
@@ -181,7 +203,10 @@ function forecastRange(input: HistoryInput, x: Scale, y: Scale, frame: Frame, to
   if (earliest === null) return [];
   const latest = forecast.latest === null ? null : parseDay(forecast.latest);
   const [left, right, middle] = [x(earliest), latest === null ? frame.right : x(latest), y(forecast.value)];
-  const shapes: Shape[] = [fill(rectangle(left, middle - 2, Math.max(1, right - left), 4), 'quiet'), stroke(line(left, middle - 4, left, middle + 4), 'ink', 0.8)];
+  const shapes: Shape[] = [
+    fill(rectangle(left, middle - 2, Math.max(1, right - left), 4), 'quiet'),
+    stroke(line(left, middle - 4, left, middle + 4), 'ink', 0.8),
+  ];
   if (latest !== null) shapes.push(stroke(line(right, middle - 4, right, middle + 4), 'ink', 0.8));
   return shapes;
 }

@@ -49,11 +49,19 @@ export function plantOverTime(input: OverTimeInput): Drawing {
   const { width, height, dates } = input;
   const [left, right, top, bottom] = [26, width - 26, 6, height - 18];
   const totals = input.counts.map((c) => Object.values(c).reduce((a, b) => a + b, 0));
-  const y = scaleLinear().domain([0, Math.max(1, ...totals)]).range([bottom, top]);
-  const x = scaleBand<number>().domain(dates.map((_, i) => i)).range([left, right]).paddingInner(0.28).paddingOuter(0.2);
+  const y = scaleLinear()
+    .domain([0, Math.max(1, ...totals)])
+    .range([bottom, top]);
+  const x = scaleBand<number>()
+    .domain(dates.map((_, i) => i))
+    .range([left, right])
+    .paddingInner(0.28)
+    .paddingOuter(0.2);
   const columnWidth = Math.min(x.bandwidth(), WIDEST);
   const shapes: Shape[] = [];
-  const columns = input.counts.map((counts, i): Column => ({ left: (x(i) ?? left) + (x.bandwidth() - columnWidth) / 2, width: columnWidth, counts }));
+  const columns = input.counts.map(
+    (counts, i): Column => ({ left: (x(i) ?? left) + (x.bandwidth() - columnWidth) / 2, width: columnWidth, counts }),
+  );
   for (const column of columns) shapes.push(...columnShapes(column, y));
   const last = columns[columns.length - 1];
   if (last !== undefined) shapes.push(...lettersBeside(last, y, top));
@@ -102,7 +110,10 @@ function columnShapes({ left, width, counts }: Column, y: (value: number) => num
     if (!hasRoom(drawn, width)) return shapes;
     const middle = part.letter === 'C' ? left + width * 0.61 : left + width / 2;
     if (part.letter === 'B') shapes.push(fill(rectangle(middle - 9, (low + high) / 2 - 4.2, 18, 8.4), part.band));
-    return [...shapes, label(middle, (low + high) / 2 + 2.4, `${part.letter} ${count}`, SIZE, 'middle', part.letter === 'D' ? 'paper' : 'ink')];
+    return [
+      ...shapes,
+      label(middle, (low + high) / 2 + 2.4, `${part.letter} ${count}`, SIZE, 'middle', part.letter === 'D' ? 'paper' : 'ink'),
+    ];
   });
 }
 
@@ -120,6 +131,10 @@ const hasRoom = ({ low, high }: Drawn, width: number): boolean => low - high >= 
 /** Letters at the right of the last column for its parts that have no room inside, so that the thinnest has one. */
 function lettersBeside(column: Column, y: (value: number) => number, top: number): Shape[] {
   const parts = partsOf(column.counts, y).filter((drawn) => !hasRoom(drawn, column.width));
-  const at = apart(parts.map(({ low, high }) => (low + high) / 2 + 2.4), SIZE, top + 2);
+  const at = apart(
+    parts.map(({ low, high }) => (low + high) / 2 + 2.4),
+    SIZE,
+    top + 2,
+  );
   return parts.map(({ part, count }, i) => label(column.left + column.width + 4, at[i] ?? 0, `${part.letter} ${count}`, SIZE));
 }

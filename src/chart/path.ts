@@ -33,7 +33,8 @@ export class PathPen {
 
 export const line = (x1: number, y1: number, x2: number, y2: number): string => `M${pair(x1, y1)}L${pair(x2, y2)}`;
 
-export const rectangle = (x: number, y: number, width: number, height: number): string => `M${pair(x, y)}L${pair(x + width, y)}L${pair(x + width, y + height)}L${pair(x, y + height)}Z`;
+export const rectangle = (x: number, y: number, width: number, height: number): string =>
+  `M${pair(x, y)}L${pair(x + width, y)}L${pair(x + width, y + height)}L${pair(x, y + height)}Z`;
 
 /** How far the handles of a quarter circle stand out (4/3 (√2 − 1)). */
 const HANDLE = (4 / 3) * (Math.SQRT2 - 1);

@@ -48,8 +48,14 @@ export function polarPlot(input: PolarInput): Drawing {
   };
   const shapes = grid(input, plane);
   const start = from === null ? null : place(from);
-  if (start !== null && q !== null && q > 0) shapes.push(stroke(circle(start.x, start.y, (q / plane.most) * plane.radius), 'quiet', 0.6, [2, 2]));
-  if (start !== null) shapes.push(stroke(line(plane.middle, plane.middle, start.x, start.y), 'quiet', 0.9), dot(start.x, start.y, 2, 'paper'), ring(start.x, start.y, 2, 'quiet', 0.9));
+  if (start !== null && q !== null && q > 0)
+    shapes.push(stroke(circle(start.x, start.y, (q / plane.most) * plane.radius), 'quiet', 0.6, [2, 2]));
+  if (start !== null)
+    shapes.push(
+      stroke(line(plane.middle, plane.middle, start.x, start.y), 'quiet', 0.9),
+      dot(start.x, start.y, 2, 'paper'),
+      ring(start.x, start.y, 2, 'quiet', 0.9),
+    );
   if (to !== null) {
     const end = place(to);
     shapes.push(stroke(line(plane.middle, plane.middle, end.x, end.y), 'ink', 1.1));
@@ -62,7 +68,12 @@ export function polarPlot(input: PolarInput): Drawing {
 /** A round number over the largest amplitude. */
 export function ringValue(reach: number): number {
   if (!Number.isFinite(reach) || reach <= 0) return 1;
-  return scaleLinear().domain([0, reach * 1.06]).nice(4).domain()[1] ?? reach;
+  return (
+    scaleLinear()
+      .domain([0, reach * 1.06])
+      .nice(4)
+      .domain()[1] ?? reach
+  );
 }
 
 function grid(input: PolarInput, { middle, radius, most }: Plane): Shape[] {

@@ -30,7 +30,12 @@ export interface HistoryInput extends Omit<SeriesInput, 'newBaselineAt'> {
   readonly baseline: number | null;
   readonly events: readonly { readonly date: string; readonly label: string; readonly newBaseline?: boolean }[];
   /** When the line is likely to reach `value`, which the boundary names; a null end is beyond the horizon. */
-  readonly forecast?: { readonly boundary: string; readonly value: number; readonly earliest: string; readonly latest: string | null } | null;
+  readonly forecast?: {
+    readonly boundary: string;
+    readonly value: number;
+    readonly earliest: string;
+    readonly latest: string | null;
+  } | null;
   readonly unit: string;
   readonly language?: Language;
   readonly width: number;
@@ -110,7 +115,9 @@ export function runsOf(input: SeriesInput, x: (index: number) => number, y: (val
   return { runs, hollow, last };
 }
 
-const path = d3line<Point>().x((p) => p.x).y((p) => p.y);
+const path = d3line<Point>()
+  .x((p) => p.x)
+  .y((p) => p.y);
 
 /** The line of each run; a run of one is a dot. */
 export function runShapes(runs: readonly (readonly Point[])[], width: number, radius: number): Shape[] {

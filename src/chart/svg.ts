@@ -17,7 +17,8 @@ function shapeText(shape: Shape): string {
   const width = shape.stroke === null ? '' : ` stroke-width="${Math.round(shape.strokeWidth * 100) / 100}"`;
   const dash = shape.dash.length === 0 ? '' : ` stroke-dasharray="${shape.dash.join(' ')}"`;
   const { circle } = shape;
-  if (circle !== undefined) return `<circle class="${fillClass}${strokeClass}"${width} cx="${circle[0]}" cy="${circle[1]}" r="${circle[2]}"/>`;
+  if (circle !== undefined)
+    return `<circle class="${fillClass}${strokeClass}"${width} cx="${circle[0]}" cy="${circle[1]}" r="${circle[2]}"/>`;
   return `<path class="${fillClass}${strokeClass}"${width}${dash} d="${shape.d}"/>`;
 }
 

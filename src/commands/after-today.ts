@@ -10,7 +10,15 @@ export function afterToday(plant: Plant, today: string): Problem[] {
   const look = (what: string, day: Day | null, place: Place | null): void => {
     if (day === null || day <= last) return;
     const message = `${what} is dated ${dayText(day)}, later than today (${today}).`;
-    late.push({ code: 'date-after-today', severity: 'warning', file: place?.file ?? '', line: place?.line ?? null, column: null, message, hint: 'Check the year, and the order of day and month.' });
+    late.push({
+      code: 'date-after-today',
+      severity: 'warning',
+      file: place?.file ?? '',
+      line: place?.line ?? null,
+      column: null,
+      message,
+      hint: 'Check the year, and the order of day and month.',
+    });
   };
   for (const survey of plant.surveys) {
     look(`Survey ${survey.id}`, survey.to, survey.place);

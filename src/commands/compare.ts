@@ -12,7 +12,9 @@ import { printable } from './problems.ts';
 export const compare: Command = {
   usage: 'compare <records..>',
   describe: 'the years side by side: what changed, what was restated, what became of each action',
-  positionals: { records: { describe: 'a plant folder with issued reports, or record.json files and issued folders', type: 'string', array: true } },
+  positionals: {
+    records: { describe: 'a plant folder with issued reports, or record.json files and issued folders', type: 'string', array: true },
+  },
   options: {
     out: { describe: 'output folder: new, empty or made by swayfolio; <plant>/out/compare where not given', type: 'string' },
     csv: { describe: 'comparison.csv too; without a folder to write to, on stdout', type: 'boolean' },
@@ -24,7 +26,8 @@ export const compare: Command = {
     const { writeComparison } = await import('../record/comparison.ts');
     const found = await gather(paths, shell, version);
     const target = out ?? (found.plant === null ? null : `${found.plant}/out/compare`);
-    if (target === null && !csv && !json) throw new UserError('There is no folder to write to.', 'Give --out DIR, or --csv or --json for stdout.', 2);
+    if (target === null && !csv && !json)
+      throw new UserError('There is no folder to write to.', 'Give --out DIR, or --csv or --json for stdout.', 2);
     if (target !== null) shell.claimFolder(target);
     const comparison = compareRecords(found.records, { today: found.today, toolVersion: version, exceeds, notes: found.notes });
     const text = writeComparison(comparison);
@@ -68,8 +71,11 @@ async function gather(paths: readonly string[], shell: Shell, version: string): 
     const archive = shell.exists(`${path}/issued`) ? `${path}/issued` : path;
     const issues = shell.exists(`${path}/record.json`) || shell.folders(archive).length === 0 ? [] : issuesIn(archive, shell);
     if (shell.exists(`${path}/record.json`)) add(path, `${path}/record.json`);
-    else if (issues.length > 0) for (const issue of issues) add(paths.length === 1 ? `issued/${issue.name}` : `${archive}/${issue.name}`, `${archive}/${issue.name}/record.json`);
-    else if (shell.exists(`${path}/plant.yaml`)) throw new UserError(`${path} has no issued report.`, 'Issue one by: swayfolio issue, or name record.json files.');
+    else if (issues.length > 0)
+      for (const issue of issues)
+        add(paths.length === 1 ? `issued/${issue.name}` : `${archive}/${issue.name}`, `${archive}/${issue.name}/record.json`);
+    else if (shell.exists(`${path}/plant.yaml`))
+      throw new UserError(`${path} has no issued report.`, 'Issue one by: swayfolio issue, or name record.json files.');
     else throw new UserError(`${path} holds no record and no issued report.`, 'Give a plant folder, issued folders, or record.json files.');
   }
   const plant = plants.length === 1 ? (plants[0] ?? null) : null;
@@ -91,10 +97,19 @@ async function assessedToday(plant: string, shell: Shell, version: string): Prom
   const read = readPlant(shell, plant);
   if (read.plant !== null) return { today: assess(read.plant, { survey: null, toolVersion: version }), notes: [] };
   const errors = read.problems.filter((problem) => problem.severity === 'error').length;
-  return { today: null, notes: [`The plant folder has ${errors} errors as it stands; the limits and policy of today are those of the last record.`] };
+  return {
+    today: null,
+    notes: [`The plant folder has ${errors} errors as it stands; the limits and policy of today are those of the last record.`],
+  };
 }
 
-async function files(comparison: Comparison, text: string, plant: string | null, csv: boolean, shell: Shell): Promise<Iterable<OutputFile>> {
+async function files(
+  comparison: Comparison,
+  text: string,
+  plant: string | null,
+  csv: boolean,
+  shell: Shell,
+): Promise<Iterable<OutputFile>> {
   const { loadAssets } = await import('../shell/assets.ts');
   const { comparisonPdf } = await import('../pdf/comparison.ts');
   const { comparisonSite } = await import('../site/comparison.ts');
@@ -119,5 +134,7 @@ function told(c: Comparison, out: string, csv: boolean): string {
     `  actions without proof    ${c.actions.filter((a) => a.flags.some((flag) => flag.startsWith('closed'))).length} of ${c.actions.length}`,
     `  ${out}: comparison.pdf, site/index.html, comparison.json${csv ? ', comparison.csv' : ''}`,
     ...c.notes,
-  ].map((line) => `${printable(line)}\n`).join('');
+  ]
+    .map((line) => `${printable(line)}\n`)
+    .join('');
 }

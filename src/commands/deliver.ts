@@ -38,7 +38,8 @@ export async function deliver(recordText: string, assets: Assets, options: Argum
     yield { path: 'report.pdf', bytes: pdf.bytes };
     progress('writing the site');
     const pages = site(record, proved, { pdf: true, recordText, ...ofMachine });
-    for (const file of options['single-file'] === true ? [singleFile(pages)] : pages) yield { path: `site/${file.path}`, bytes: file.bytes };
+    for (const file of options['single-file'] === true ? [singleFile(pages)] : pages)
+      yield { path: `site/${file.path}`, bytes: file.bytes };
   }
 }
 
@@ -46,7 +47,11 @@ function checkMachine(record: SwayfolioRecord, machine: string): void {
   const ids = record.machines.map((line) => line.machine);
   if (ids.includes(machine)) return;
   const near = nearestWord(machine, ids);
-  throw new UserError(`The record of survey ${record.survey.id} has no machine ${machine}.`, near === null ? null : `The nearest is ${near}.`, 2);
+  throw new UserError(
+    `The record of survey ${record.survey.id} has no machine ${machine}.`,
+    near === null ? null : `The nearest is ${near}.`,
+    2,
+  );
 }
 
 /** A file that is no longer what the record was made from is not attached as its input. */
@@ -56,5 +61,9 @@ function provedAssets(record: SwayfolioRecord, assets: Assets): Assets {
     const hash = hashes.get(path);
     return bytes === null || hash === undefined || hash === createHash('sha256').update(bytes).digest('hex') ? bytes : null;
   };
-  return { ...assets, input: (path) => (hashes.has(path) ? proved(path, assets.input(path)) : null), picture: (path) => proved(path, assets.picture(path)) };
+  return {
+    ...assets,
+    input: (path) => (hashes.has(path) ? proved(path, assets.input(path)) : null),
+    picture: (path) => proved(path, assets.picture(path)),
+  };
 }

@@ -22,10 +22,18 @@ export const draft: Command = {
       shell.stdout(`Nothing to draft: every exception of survey ${record.survey.id} has its finding or action.\n`);
       return 0;
     }
-    const { bytes, lacking } = appended(() => appendRows(shell.exists(path) ? shell.read(path) : null, FINDINGS_HEAD, rows, findingsHeader), path);
+    const { bytes, lacking } = appended(
+      () => appendRows(shell.exists(path) ? shell.read(path) : null, FINDINGS_HEAD, rows, findingsHeader),
+      path,
+    );
     shell.replaceFile(path, bytes);
-    if (lacking.length > 0) shell.stderr(`${path} has no column for ${lacking.map((name) => name.replace('finding_text', 'finding (the second, for the text)')).join(', ')}: that text was left out.\n`);
-    shell.stdout(`${rows.length === 1 ? 'One row was' : `${rows.length} rows were`} added to ${path}: ${rows.map((row) => row.machine).join(', ')}. They are drafts by rule: read, change and confirm them.\n`);
+    if (lacking.length > 0)
+      shell.stderr(
+        `${path} has no column for ${lacking.map((name) => name.replace('finding_text', 'finding (the second, for the text)')).join(', ')}: that text was left out.\n`,
+      );
+    shell.stdout(
+      `${rows.length === 1 ? 'One row was' : `${rows.length} rows were`} added to ${path}: ${rows.map((row) => row.machine).join(', ')}. They are drafts by rule: read, change and confirm them.\n`,
+    );
     return 0;
   },
 };
@@ -33,7 +41,10 @@ export const draft: Command = {
 /** The folder of a survey is its id; one that names an hour cannot be a folder on every disk. */
 function homeOf(survey: string): string {
   if (/^[\w.-]+$/.test(survey)) return survey;
-  throw new UserError(`Survey ${survey} can have no folder of its own for findings.`, 'Give its readings a survey_date without an hour, or keep it in a folder surveys/<date>/.');
+  throw new UserError(
+    `Survey ${survey} can have no folder of its own for findings.`,
+    'Give its readings a survey_date without an hour, or keep it in a folder surveys/<date>/.',
+  );
 }
 
 function appended<T>(make: () => T, path: string): T {

@@ -25,7 +25,8 @@ export const issue: Command = {
   async run(given, context) {
     const { shell, version } = context;
     const folder = (given.plant ?? '').replace(/(?<=[^/])\/+$/, '');
-    const key = given.sign === undefined ? null : (await import('../archive/ssh-key.ts')).readSigningKey(shell.read(given.sign), given.sign);
+    const key =
+      given.sign === undefined ? null : (await import('../archive/ssh-key.ts')).readSigningKey(shell.read(given.sign), given.sign);
     const { readSoundPlant } = await import('./sound-plant.ts');
     const { assess } = await import('../assess/assess.ts');
     const { assertSignedFor } = await import('../archive/issue.ts');
@@ -60,9 +61,13 @@ async function issueInto(folder: string, record: SwayfolioRecord, { given, key, 
   const archive = `${folder}/issued`;
   const issues = issuesIn(archive, shell);
   const file = nextIssue(archive, issues, record, {
-    survey: record.survey.id, reason: given.reason ?? null, today: shell.today(), signedBy: key === null ? null : fingerprint(key.publicBlob),
+    survey: record.survey.id,
+    reason: given.reason ?? null,
+    today: shell.today(),
+    signedBy: key === null ? null : fingerprint(key.publicBlob),
   });
-  const replaced = file.replaces === null ? null : readRecord(new TextDecoder().decode(shell.read(`${archive}/${file.replaces}/record.json`)));
+  const replaced =
+    file.replaces === null ? null : readRecord(new TextDecoder().decode(shell.read(`${archive}/${file.replaces}/record.json`)));
   const changes = replaced === null ? null : changesSince(replaced, readRecord(writeRecord(record)));
   const due = record.plant.retention === null ? undefined : dueFor(issues, record.plant.retention, file.issued_on);
   const text = writeRecord({ ...record, issue: headOf(file, changes === null ? null : printedChanges(changes), due) });
@@ -71,7 +76,12 @@ async function issueInto(folder: string, record: SwayfolioRecord, { given, key, 
   const delivery = await deliver(text, loadAssets(folder), {}, shell.progress);
   let manifestHash = '';
   const all = both(delivery.files, inputFiles(folder, delivery.record, shell));
-  claim.publish(folderOf(file), frozenFiles(all, file, key, (hash) => { manifestHash = hash; }));
+  claim.publish(
+    folderOf(file),
+    frozenFiles(all, file, key, (hash) => {
+      manifestHash = hash;
+    }),
+  );
   shell.progress('');
   shell.stdout(told(`${archive}/${folderOf(file)}`, file, delivery, manifestHash, changes));
   return 0;
@@ -81,7 +91,11 @@ async function issueInto(folder: string, record: SwayfolioRecord, { given, key, 
 function refuseKeysAmong(folder: string, shell: Shell): void {
   for (const path of shell.list(folder).files) {
     const head = new TextDecoder('latin1').decode(shell.read(`${folder}/${path}`).subarray(0, 200));
-    if (/-----BEGIN [A-Z ]*PRIVATE KEY-----/.test(head)) throw new UserError(`${folder}/${path} is a private key; the plant folder's files are frozen into the issued report.`, 'Move it out of the plant folder.');
+    if (/-----BEGIN [A-Z ]*PRIVATE KEY-----/.test(head))
+      throw new UserError(
+        `${folder}/${path} is a private key; the plant folder's files are frozen into the issued report.`,
+        'Move it out of the plant folder.',
+      );
   }
 }
 
@@ -96,14 +110,28 @@ function* inputFiles(folder: string, record: SwayfolioRecord, shell: Shell): Ite
   for (const path of shell.list(folder).files) {
     const bytes = shell.read(`${folder}/${path}`);
     const hash = hashes.get(path);
-    if (hash !== undefined && hash !== sha256(bytes)) throw new UserError(`${folder}/${path} was changed while its report was made.`, 'Run again when nobody writes to it; nothing was issued.');
+    if (hash !== undefined && hash !== sha256(bytes))
+      throw new UserError(
+        `${folder}/${path} was changed while its report was made.`,
+        'Run again when nobody writes to it; nothing was issued.',
+      );
     hashes.delete(path);
     yield { path: `inputs/${path}`, bytes };
   }
-  for (const path of hashes.keys()) throw new UserError(`${folder}/${path} was taken away while its report was made.`, 'Run again when nobody writes to it; nothing was issued.');
+  for (const path of hashes.keys())
+    throw new UserError(
+      `${folder}/${path} was taken away while its report was made.`,
+      'Run again when nobody writes to it; nothing was issued.',
+    );
 }
 
-function told(at: string, file: IssueFile, { pages, record }: Delivery, manifestHash: string, changes: readonly Difference[] | null): string {
+function told(
+  at: string,
+  file: IssueFile,
+  { pages, record }: Delivery,
+  manifestHash: string,
+  changes: readonly Difference[] | null,
+): string {
   return [
     `Issued survey ${file.survey} as number ${file.number}, revision ${file.revision}, on ${file.issued_on}: ${at}`,
     `  report.pdf (${pages} pages), site/, record.json, work-list.csv, inputs/`,
@@ -113,7 +141,9 @@ function told(at: string, file: IssueFile, { pages, record }: Delivery, manifest
     ...(file.signed_by === null ? [] : [`  signed by          ${file.signed_by}`]),
     ...retentionLines(record),
     '  Keep the hash of its manifest apart from the archive: it proves the last issue, which no later one names.',
-  ].map((line) => `${printable(line)}\n`).join('');
+  ]
+    .map((line) => `${printable(line)}\n`)
+    .join('');
 }
 
 function retentionLines({ plant, issue }: SwayfolioRecord): readonly string[] {

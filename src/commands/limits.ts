@@ -15,8 +15,15 @@ export const limits: Command = {
     const all = publishedSets();
     const sets = id === undefined ? all : all.filter((set) => set.id === id);
     if (sets.length === 0) {
-      const near = nearestWord(id ?? '', all.map((set) => set.id));
-      throw new UserError(`There is no limit set ${id}.`, near === null ? 'Run swayfolio limits for the list.' : `The nearest is ${near}.`, 2);
+      const near = nearestWord(
+        id ?? '',
+        all.map((set) => set.id),
+      );
+      throw new UserError(
+        `There is no limit set ${id}.`,
+        near === null ? 'Run swayfolio limits for the list.' : `The nearest is ${near}.`,
+        2,
+      );
     }
     shell.stdout(json ? `${JSON.stringify(sets.map(asJson), null, 2)}\n` : asText(sets));
     return 0;
@@ -26,10 +33,15 @@ export const limits: Command = {
 /** A set of several quantities stands under its id once. */
 function asText(sets: readonly LimitSet[]): string {
   const heads = sets.map((set) => [set.id, `  ${set.title}`, `  ${sourceOf(set)}`].join('\n'));
-  return sets.map((set, index) => `${heads[index] === heads[index - 1] ? '' : `${index === 0 ? '' : '\n'}${heads[index]}\n`}  ${boundariesOf(set)}\n`).join('');
+  return sets
+    .map(
+      (set, index) => `${heads[index] === heads[index - 1] ? '' : `${index === 0 ? '' : '\n'}${heads[index]}\n`}  ${boundariesOf(set)}\n`,
+    )
+    .join('');
 }
 
-const sourceOf = (set: LimitSet): string => `${[set.source, set.edition, set.table].filter((part) => part !== null && part !== '').join(', ')}; ${set.confidence}`;
+const sourceOf = (set: LimitSet): string =>
+  `${[set.source, set.edition, set.table].filter((part) => part !== null && part !== '').join(', ')}; ${set.confidence}`;
 
 function boundariesOf(set: LimitSet): string {
   const boundary = (name: string, value: number | null): string => `${name} ${value ?? '–'}`;
@@ -41,10 +53,23 @@ function boundariesOf(set: LimitSet): string {
 /** In the names of the record's limit_sets. */
 function asJson(set: LimitSet): object {
   return {
-    id: set.id, title: set.title, basis: set.basis, source: set.source, edition: set.edition, table: set.table, confidence: set.confidence,
-    quantity: set.quantity, unit: set.unit, detection: set.detection, measured_on: set.measuredOn, low_hz: set.lowHz, high_hz: set.highHz,
+    id: set.id,
+    title: set.title,
+    basis: set.basis,
+    source: set.source,
+    edition: set.edition,
+    table: set.table,
+    confidence: set.confidence,
+    quantity: set.quantity,
+    unit: set.unit,
+    detection: set.detection,
+    measured_on: set.measuredOn,
+    low_hz: set.lowHz,
+    high_hz: set.highHz,
     boundaries: { ab: set.ab, bc: set.bc, cd: set.cd, alarm: set.alarm, trip: set.trip },
-    valid_from: dayOrNull(set.validFrom), approved_by: set.approvedBy, approved_on: dayOrNull(set.approvedOn),
+    valid_from: dayOrNull(set.validFrom),
+    approved_by: set.approvedBy,
+    approved_on: dayOrNull(set.approvedOn),
   };
 }
 

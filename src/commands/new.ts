@@ -20,7 +20,9 @@ export const newCommand: Command = {
     if (survey === undefined) {
       const { newPlant } = await import('../survey/new.ts');
       shell.createFolder(folder, newPlant());
-      shell.stdout(`Made ${folder}: a plant with a survey of invented readings. Replace them by yours, then run: swayfolio report ${folder}\n`);
+      shell.stdout(
+        `Made ${folder}: a plant with a survey of invented readings. Replace them by yours, then run: swayfolio report ${folder}\n`,
+      );
       return 0;
     }
     if (!/^\d{4}-\d{2}-\d{2}$/.test(survey) || parseDay(survey) === null) {
@@ -32,7 +34,10 @@ export const newCommand: Command = {
     const { nextSurvey } = await import('../survey/new.ts');
     const { assess } = await import('../assess/assess.ts');
     const home = `surveys/${survey}/`;
-    shell.createFolder(`${folder}/${home}`, below(home, nextSurvey(plant, survey, alarmsOf(assess(plant, { survey: null, toolVersion: version })))));
+    shell.createFolder(
+      `${folder}/${home}`,
+      below(home, nextSurvey(plant, survey, alarmsOf(assess(plant, { survey: null, toolVersion: version })))),
+    );
     shell.stdout(`Made ${folder}/${home}. Fill in readings.csv, then run: swayfolio report ${folder}\n`);
     return 0;
   },
@@ -43,7 +48,12 @@ async function madeFrom(folder: string, from: readonly string[], survey: string 
   if (survey !== undefined) throw new UserError('--from and --survey do not go together.', 'Make the plant by --from first.', 2);
   const exports = from.map((path) => ({ name: nameOf(path), bytes: shell.read(path) }));
   const twice = exports.find((file, i) => exports.findIndex((other) => other.name.toLowerCase() === file.name.toLowerCase()) !== i);
-  if (exports.length === 0 || twice !== undefined) throw new UserError(twice === undefined ? '--from names no file.' : `Two of the files are called ${twice.name}.`, 'Name each export once; rename one of two of the same name.', 2);
+  if (exports.length === 0 || twice !== undefined)
+    throw new UserError(
+      twice === undefined ? '--from names no file.' : `Two of the files are called ${twice.name}.`,
+      'Name each export once; rename one of two of the same name.',
+      2,
+    );
   const { plantFrom } = await import('../survey/from.ts');
   const { files, questions } = plantFrom(exports, nameOf(shell.absolute(folder)));
   shell.createFolder(folder, files);
@@ -52,7 +62,11 @@ async function madeFrom(folder: string, from: readonly string[], survey: string 
   shell.stdout(`Made ${folder}: the exports are copied into surveys/, the mapping of their columns stands in plant.yaml.\n`);
   for (const question of questions) shell.stdout(`question: ${printable(question)}\n`);
   shell.stdout(problemText(problems));
-  shell.stdout(questions.length === 0 ? `${nextStep(folder, problems)}\n` : `Next: answer the ${questions.length === 1 ? 'question' : `${questions.length} questions`} in ${folder}/plant.yaml, then run: swayfolio check ${folder}\n`);
+  shell.stdout(
+    questions.length === 0
+      ? `${nextStep(folder, problems)}\n`
+      : `Next: answer the ${questions.length === 1 ? 'question' : `${questions.length} questions`} in ${folder}/plant.yaml, then run: swayfolio check ${folder}\n`,
+  );
   return 0;
 }
 
@@ -61,7 +75,8 @@ const nameOf = (path: string): string => path.replaceAll('\\', '/').replace(/\/+
 /** ALARM of each series at the last survey, to stand beside the blanks of the next. */
 function alarmsOf(record: SwayfolioRecord): Map<string, number> {
   const alarms = new Map<string, number>();
-  for (const m of record.measurements) if (m.limits?.alarm != null) alarms.set([m.machine, m.point, m.quantity, m.detection ?? ''].join('\u0000'), m.limits.alarm);
+  for (const m of record.measurements)
+    if (m.limits?.alarm != null) alarms.set([m.machine, m.point, m.quantity, m.detection ?? ''].join('\u0000'), m.limits.alarm);
   return alarms;
 }
 

@@ -41,7 +41,13 @@ function linesOf(problem: Problem): readonly string[] {
 
 /** `2 errors, 1 warning`; `no problems`. */
 export function countText(counts: ProblemCounts): string {
-  const parts = ([['error', counts.errors], ['warning', counts.warnings], ['note', counts.notes]] as const)
+  const parts = (
+    [
+      ['error', counts.errors],
+      ['warning', counts.warnings],
+      ['note', counts.notes],
+    ] as const
+  )
     .filter(([, count]) => count > 0)
     .map(([word, count]) => `${count} ${word}${count === 1 ? '' : 's'}`);
   return parts.length === 0 ? 'no problems' : parts.join(', ');
@@ -51,12 +57,18 @@ export function countText(counts: ProblemCounts): string {
 export function nextStep(folder: string, problems: readonly Problem[]): string {
   const errors = problems.filter((problem) => problem.severity === 'error');
   const [first] = errors;
-  if (first === undefined) return printable(`Next: ${problems.some((problem) => problem.severity === 'warning') ? 'read the warnings above, then run: ' : ''}swayfolio report ${folder}`);
+  if (first === undefined)
+    return printable(
+      `Next: ${problems.some((problem) => problem.severity === 'warning') ? 'read the warnings above, then run: ' : ''}swayfolio report ${folder}`,
+    );
   const others = errors.length === 1 ? '' : ` and the ${errors.length - 1} after it`;
   return printable(`Next: mend ${placeOf(first)}${others}, then run again: swayfolio check ${folder}`);
 }
 
-const placeOf = (problem: Problem): string => [problem.file === '' ? '.' : problem.file, problem.line, problem.line === null ? null : problem.column].filter((part) => part !== null).join(':');
+const placeOf = (problem: Problem): string =>
+  [problem.file === '' ? '.' : problem.file, problem.line, problem.line === null ? null : problem.column]
+    .filter((part) => part !== null)
+    .join(':');
 
 /** Input may hold control characters: on a terminal they would move the cursor or ring. */
 export function printable(text: string): string {

@@ -28,7 +28,11 @@ export const report: Command = {
 };
 
 /** The record as text alone, so that the plant it was made from is let go before the writers begin. */
-async function assessedRecord(folder: string, given: Arguments, { shell, version }: Context): Promise<{ survey: string; text: string } | null> {
+async function assessedRecord(
+  folder: string,
+  given: Arguments,
+  { shell, version }: Context,
+): Promise<{ survey: string; text: string } | null> {
   const { readSoundPlant } = await import('./sound-plant.ts');
   const { assess } = await import('../assess/assess.ts');
   const { writeRecord } = await import('../record/write.ts');

@@ -15,7 +15,11 @@ export function verdictLines(verdicts: readonly Verdict[], strangers: readonly s
   for (const stranger of strangers) lines.push(`${stranger}: ADDED, no issue of swayfolio`);
   const bad = verdicts.filter((verdict) => !verdict.isSound).length;
   const strange = strangers.length === 0 ? '' : `; ${strangers.length} beside them ${strangers.length === 1 ? 'is' : 'are'} no issue`;
-  lines.push(isSound ? `${verdicts.length} of ${verdicts.length} as issued.` : `${verdicts.length - bad} of ${verdicts.length} as issued, ${bad} with differences${strange}.`);
+  lines.push(
+    isSound
+      ? `${verdicts.length} of ${verdicts.length} as issued.`
+      : `${verdicts.length - bad} of ${verdicts.length} as issued, ${bad} with differences${strange}.`,
+  );
   return lines.map((line) => `${printable(line)}\n`).join('');
 }
 
@@ -40,7 +44,9 @@ function reproductionLines(reproduction: Reproduction): string[] {
     `  record     ${differences.length === 0 ? 'reproduced from the frozen inputs' : `DIFFERS from what the frozen inputs give today, in ${differences.length} places`}`,
     ...differences.map((difference) => `    ${difference.kind}: ${today(difference)}`),
     ...versions.map((difference) => `    version: ${today(difference)}`),
-    ...(wording.length === 0 ? [] : [`    wording alone, in ${wording.length} places`, ...wording.map((difference) => `      ${today(difference)}`)]),
+    ...(wording.length === 0
+      ? []
+      : [`    wording alone, in ${wording.length} places`, ...wording.map((difference) => `      ${today(difference)}`)]),
   ];
 }
 

@@ -12,7 +12,9 @@ import { verdictLines } from './verdict.ts';
 export const verify: Command = {
   usage: 'verify <issued..>',
   describe: 'is an issued report unaltered, and does its record come out again?',
-  positionals: { issued: { describe: 'issued folders; an archive issued/ or its plant stands for all in it', type: 'string', array: true } },
+  positionals: {
+    issued: { describe: 'issued folders; an archive issued/ or its plant stands for all in it', type: 'string', array: true },
+  },
   options: { key: { describe: 'public key file of who should have signed', type: 'string' }, json: jsonOption },
   async run({ issued = [], key, json = false }, { shell, version }) {
     const { verifyIssue } = await import('../archive/verify.ts');
@@ -43,7 +45,8 @@ async function foldersOf(named: readonly string[], shell: Shell): Promise<{ fold
     const archive = shell.exists(`${at}/issued`) ? `${at}/issued` : at;
     const below = shell.folders(archive).filter((folder) => !folder.startsWith('.'));
     const issues = below.filter((folder) => ISSUE_FOLDER.test(folder));
-    if (issues.length === 0) throw new UserError(`${name} holds no issued report.`, 'Name an issued folder, or the folder issued/ of a plant.');
+    if (issues.length === 0)
+      throw new UserError(`${name} holds no issued report.`, 'Name an issued folder, or the folder issued/ of a plant.');
     for (const folder of issues) folders.add(`${archive}/${folder}`);
     strangers.push(...below.filter((folder) => !ISSUE_FOLDER.test(folder)).map((folder) => `${archive}/${folder}`));
   }
@@ -75,7 +78,8 @@ async function assessing(shell: Shell, version: string): Promise<Question['asses
     try {
       const { plant, problems } = readPlant(shell, inputs);
       const error = problems.find((problem) => problem.severity === 'error');
-      if (plant === null) return { none: `the frozen inputs have errors: ${error?.file ?? ''}:${error?.line ?? ''} ${error?.message ?? ''}` };
+      if (plant === null)
+        return { none: `the frozen inputs have errors: ${error?.file ?? ''}:${error?.line ?? ''} ${error?.message ?? ''}` };
       return { text: writeRecord({ ...assess(plant, { survey: frozen.survey, toolVersion: version }), issue: frozen.issue }) };
     } catch (error) {
       if (error instanceof UserError) return { none: error.message };

@@ -13,7 +13,10 @@ export function writeDelivery(delivery: Delivery, out: string, { json = false, q
   shell.progress('');
   const machines = machinesByUrgency(delivery.record);
   const { warnings } = countProblems(delivery.record.problems);
-  if (json) shell.stdout(`${JSON.stringify({ survey: delivery.record.survey.id, out, pages: delivery.pages, files: paths, machines, warnings }, null, 2)}\n`);
+  if (json)
+    shell.stdout(
+      `${JSON.stringify({ survey: delivery.record.survey.id, out, pages: delivery.pages, files: paths, machines, warnings }, null, 2)}\n`,
+    );
   else if (!quiet) shell.stdout(summary(delivery, out, machines));
 }
 

@@ -35,7 +35,15 @@ const none = (rule: string, facts: Facts = {}): RuleAnswer => ({ set: null, rule
 
 /** Kinds outside every built-in set [recalled]. */
 const OUTSIDE: ReadonlySet<Kind> = new Set([
-  'displacement pump', 'screw compressor', 'lobe blower', 'vacuum pump', 'reciprocating', 'hydro turbine', 'gas turbine', 'screen', 'other',
+  'displacement pump',
+  'screw compressor',
+  'lobe blower',
+  'vacuum pump',
+  'reciprocating',
+  'hydro turbine',
+  'gas turbine',
+  'screen',
+  'other',
 ]);
 
 const SPEED_RANGE_RPM = [120, 30000] as const;
@@ -50,7 +58,8 @@ const FAN_MOST_KW = 300;
 
 export function chooseByRule(q: RuleQuestion): RuleAnswer {
   const { row } = q;
-  if (q.quantity !== 'velocity' && q.quantity !== 'displacement') return q.quantity === 'acceleration' ? none('acceleration') : none('own_quantity', { quantity: q.quantity });
+  if (q.quantity !== 'velocity' && q.quantity !== 'displacement')
+    return q.quantity === 'acceleration' ? none('acceleration') : none('own_quantity', { quantity: q.quantity });
   if (row.kind === null) return none('kind');
   if (OUTSIDE.has(row.kind)) return none('outside', { kind: row.kind });
   if (q.coupledToReciprocating) return none('reciprocating');
@@ -87,7 +96,10 @@ function forPump(q: RuleQuestion): RuleAnswer {
   if (pumpCategory === null) return none('pump_category');
   if (powerKw === null) return none('power', { kind });
   if (powerKw <= PUMP_LEAST_KW) return none('small', { power_kw: powerKw, least: PUMP_LEAST_KW, source: 'ISO 10816-7' });
-  return rowOf(pumpSetId(pumpCategory, powerKw > PUMP_STEP_KW), q, kind === 'motor' ? 'pump_motor' : 'pump', { category: pumpCategory, power_kw: powerKw });
+  return rowOf(pumpSetId(pumpCategory, powerKw > PUMP_STEP_KW), q, kind === 'motor' ? 'pump_motor' : 'pump', {
+    category: pumpCategory,
+    power_kw: powerKw,
+  });
 }
 
 function forGear(q: RuleQuestion): RuleAnswer {
@@ -95,12 +107,15 @@ function forGear(q: RuleQuestion): RuleAnswer {
   if (rating === null) return none('gear_rating');
   const set = gearSet(rating);
   if (set === null) return none('gear_ladder', { rating });
-  return q.quantity === 'velocity' ? { set, rule: 'limits.rule.gear', facts: { rating } } : none('quantity', { quantity: q.quantity, source: 'ISO 20816-9 by VR rating' });
+  return q.quantity === 'velocity'
+    ? { set, rule: 'limits.rule.gear', facts: { rating } }
+    : none('quantity', { quantity: q.quantity, source: 'ISO 20816-9 by VR rating' });
 }
 
 function forLargeTurbine(q: RuleQuestion): RuleAnswer {
   if (q.speedRpm === null) return none('turbine_speed');
-  const id = q.speedRpm === 3000 || q.speedRpm === 3600 ? 'iso20816-2-3000' : q.speedRpm === 1500 || q.speedRpm === 1800 ? 'iso20816-2-1500' : null;
+  const id =
+    q.speedRpm === 3000 || q.speedRpm === 3600 ? 'iso20816-2-3000' : q.speedRpm === 1500 || q.speedRpm === 1800 ? 'iso20816-2-1500' : null;
   return id === null ? none('turbine_speed') : rowOf(id, q, 'large_turbine', { speed_rpm: q.speedRpm });
 }
 
@@ -118,7 +133,14 @@ function byGroup(q: RuleQuestion): RuleAnswer {
   const group = kind === 'motor' || kind === 'generator' ? electricalGroup(q) : powerGroup(q);
   if ('set' in group) return group;
   if (q.support === null) return none('support');
-  const facts = { kind, group: group.group, support: q.support, power_kw: powerKw, shaft_height_mm: q.row.shaftHeightMm, speed_rpm: q.speedRpm };
+  const facts = {
+    kind,
+    group: group.group,
+    support: q.support,
+    power_kw: powerKw,
+    shaft_height_mm: q.row.shaftHeightMm,
+    speed_rpm: q.speedRpm,
+  };
   return rowOf(groupSetId(group.group, q.support), q, q.speedRpm === null ? `${group.by}_speed_unknown` : group.by, facts);
 }
 
@@ -132,7 +154,9 @@ function electricalGroup(q: RuleQuestion): Group | RuleAnswer {
   }
   if (powerKw === null) return none('shaft_height_and_power');
   if (powerKw > q.policy.group1MinKw) return { group: 1, by: 'power' };
-  return powerKw <= q.policy.group2MaxKw ? { group: 2, by: 'power' } : none('shaft_height', { power_kw: powerKw, least: q.policy.group2MaxKw, most: q.policy.group1MinKw });
+  return powerKw <= q.policy.group2MaxKw
+    ? { group: 2, by: 'power' }
+    : none('shaft_height', { power_kw: powerKw, least: q.policy.group2MaxKw, most: q.policy.group1MinKw });
 }
 
 function powerGroup(q: RuleQuestion): Group | RuleAnswer {
@@ -141,4 +165,5 @@ function powerGroup(q: RuleQuestion): Group | RuleAnswer {
   return { group: powerKw > GROUP_1_ABOVE_KW ? 1 : 2, by: 'power' };
 }
 
-export const isLargeTurbine = (row: ComponentRow): boolean => row.kind === 'steam turbine' && row.powerKw !== null && row.powerKw > LARGE_TURBINE_KW;
+export const isLargeTurbine = (row: ComponentRow): boolean =>
+  row.kind === 'steam turbine' && row.powerKw !== null && row.powerKw > LARGE_TURBINE_KW;

@@ -12,15 +12,30 @@ import type { AppliedSet, LimitChoice, LimitQuestion, LimitSet } from './types.t
 
 export { ownLimits };
 
-const conflictOf = (conflict: string): LimitChoice => ({ set: null, rule: 'limits.none.conflict', facts: { conflict }, conflict, byOurChoice: false });
+const conflictOf = (conflict: string): LimitChoice => ({
+  set: null,
+  rule: 'limits.none.conflict',
+  facts: { conflict },
+  conflict,
+  byOurChoice: false,
+});
 
-const without = (rule: string, facts: LimitChoice['facts'] = {}): LimitChoice => ({ set: null, rule, facts, conflict: null, byOurChoice: false });
+const without = (rule: string, facts: LimitChoice['facts'] = {}): LimitChoice => ({
+  set: null,
+  rule,
+  facts,
+  conflict: null,
+  byOurChoice: false,
+});
 
 /** The one set for a series on a day, or none, with the reason as key and facts. Throws nothing. */
 export function chooseLimits(q: LimitQuestion): LimitChoice {
   const point = inForce(q.series.rows, q.day);
   const component = inForce(q.component.rows, q.day);
-  for (const [name, by] of [[point.limitSet, 'point'], [component.limitSet, 'component']] as const) {
+  for (const [name, by] of [
+    [point.limitSet, 'point'],
+    [component.limitSet, 'component'],
+  ] as const) {
     if (name === null) continue;
     const named = byName(q, point, name, by);
     if (named !== null) return named;
@@ -42,7 +57,13 @@ function byName(q: LimitQuestion, point: PointRow, name: string, by: 'point' | '
   const found = inForceFor(own.length > 0 ? own : (published ?? []), q.series, point.measuredOn, q.day, by === 'point');
   if (found === null) return null;
   if ('conflict' in found) return conflictOf(found.conflict);
-  return { set: found.set, rule: `limits.named.${by}`, facts: { limit_set: name, title: found.set.title, basis: found.set.basis }, conflict: null, byOurChoice: false };
+  return {
+    set: found.set,
+    rule: `limits.named.${by}`,
+    facts: { limit_set: name, title: found.set.title, basis: found.set.basis },
+    conflict: null,
+    byOurChoice: false,
+  };
 }
 
 /** Rows of a built-in set; null for the shaft formulas where the rated speed is unknown. */
@@ -67,7 +88,13 @@ function byApplication(q: LimitQuestion, point: PointRow, kind: string | null): 
     const found = inForceFor(sets, q.series, point.measuredOn, q.day, rank === 'point');
     if (found === null) continue;
     if ('conflict' in found) return conflictOf(found.conflict);
-    return { set: found.set, rule: `limits.own.${rank}`, facts: { limit_set: found.set.id, title: found.set.title, basis: found.set.basis }, conflict: null, byOurChoice: false };
+    return {
+      set: found.set,
+      rule: `limits.own.${rank}`,
+      facts: { limit_set: found.set.id, title: found.set.title, basis: found.set.basis },
+      conflict: null,
+      byOurChoice: false,
+    };
   }
   return null;
 }

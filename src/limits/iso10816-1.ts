@@ -2,7 +2,14 @@
 import { type Standard, velocitySet } from './published-set.ts';
 import type { LimitSet } from './types.ts';
 
-const standard: Standard = { source: 'ISO 10816-1 (withdrawn; quoted second-hand)', edition: '1995', table: 'Annex B', confidence: 'confirmed', lowHz: 10, highHz: 1000 };
+const standard: Standard = {
+  source: 'ISO 10816-1 (withdrawn; quoted second-hand)',
+  edition: '1995',
+  table: 'Annex B',
+  confidence: 'confirmed',
+  lowHz: 10,
+  highHz: 1000,
+};
 
 export const CLASS_SETS: readonly LimitSet[] = [
   velocitySet(standard, 'iso10816-1-class1', 'Class I, small machines, motors to 15 kW', [0.71, 1.8, 4.5]),

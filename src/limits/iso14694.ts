@@ -5,7 +5,14 @@
 import { publishedSet, type Standard } from './published-set.ts';
 import type { LimitSet } from './types.ts';
 
-const standard: Standard = { source: 'ISO 14694 (recalled; start-up, ALARM, SHUTDOWN mapped by our own choice)', edition: '2003', table: 'in situ', confidence: 'recalled', lowHz: 10, highHz: 1000 };
+const standard: Standard = {
+  source: 'ISO 14694 (recalled; start-up, ALARM, SHUTDOWN mapped by our own choice)',
+  edition: '2003',
+  table: 'in situ',
+  confidence: 'recalled',
+  lowHz: 10,
+  highHz: 1000,
+};
 
 const ROWS = [
   { category: 'BV-2', rigid: [5.6, 9.0, null], flexible: [9.0, 14.0, null] },
@@ -14,13 +21,21 @@ const ROWS = [
   { category: 'BV-5', rigid: [1.8, 4.0, 5.6], flexible: [2.8, 5.6, 7.1] },
 ] as const;
 
-export const fanSetId = (category: string, support: 'rigid' | 'flexible'): string => `iso14694-${category.toLowerCase().replace('-', '')}-${support}`;
+export const fanSetId = (category: string, support: 'rigid' | 'flexible'): string =>
+  `iso14694-${category.toLowerCase().replace('-', '')}-${support}`;
 
 export const FAN_SETS: readonly LimitSet[] = ROWS.flatMap((row) =>
   (['rigid', 'flexible'] as const).map((support) => {
     const [ab, bc, cd] = row[support];
     return publishedSet(standard, {
-      id: fanSetId(row.category, support), title: `Fans in situ, ${row.category}, ${support} mounting`, quantity: 'velocity', unit: 'mm/s', detection: 'rms', ab, bc, cd,
+      id: fanSetId(row.category, support),
+      title: `Fans in situ, ${row.category}, ${support} mounting`,
+      quantity: 'velocity',
+      unit: 'mm/s',
+      detection: 'rms',
+      ab,
+      bc,
+      cd,
     });
   }),
 );

@@ -2,7 +2,14 @@
 import { publishedSet, type Standard, velocitySet } from './published-set.ts';
 import type { LimitSet } from './types.ts';
 
-const standard: Standard = { source: 'ISO 20816-9 (quoted second-hand)', edition: '2020', table: 'rating ladder', confidence: 'one source', lowHz: 10, highHz: 1000 };
+const standard: Standard = {
+  source: 'ISO 20816-9 (quoted second-hand)',
+  edition: '2020',
+  table: 'rating ladder',
+  confidence: 'one source',
+  lowHz: 10,
+  highHz: 1000,
+};
 /** No band is at hand for acceleration and shaft displacement. */
 const unbanded: Standard = { ...standard, table: 'rating ladder', lowHz: null, highHz: null };
 
@@ -26,7 +33,16 @@ function accelerationSet(ratingAr: number): LimitSet | null {
   const triple = rungs(ratingAr);
   if (triple === null) return null;
   const [ab, bc, cd] = triple;
-  return publishedSet(unbanded, { id: `iso20816-9-ar${ratingAr}`, title: `Gear units, rating AR ${ratingAr}`, quantity: 'acceleration', unit: 'm/s²', detection: 'true peak', ab, bc, cd });
+  return publishedSet(unbanded, {
+    id: `iso20816-9-ar${ratingAr}`,
+    title: `Gear units, rating AR ${ratingAr}`,
+    quantity: 'acceleration',
+    unit: 'm/s²',
+    detection: 'true peak',
+    ab,
+    bc,
+    cd,
+  });
 }
 
 /** Shaft displacement by DR rating, µm peak-to-peak; by name only. */
@@ -35,8 +51,20 @@ function displacementRatingSet(ratingDr: number): LimitSet | null {
   if (triple === null) return null;
   const [ab, bc, cd] = triple;
   return publishedSet(unbanded, {
-    id: `iso20816-9-dr${ratingDr}`, title: `Gear units, rating DR ${ratingDr}`, quantity: 'displacement', unit: 'µm', detection: 'true peak-to-peak', measuredOn: 'shaft relative', ab, bc, cd,
+    id: `iso20816-9-dr${ratingDr}`,
+    title: `Gear units, rating DR ${ratingDr}`,
+    quantity: 'displacement',
+    unit: 'µm',
+    detection: 'true peak-to-peak',
+    measuredOn: 'shaft relative',
+    ab,
+    bc,
+    cd,
   });
 }
 
-export const GEAR_SETS: readonly LimitSet[] = RATING_LADDER.flatMap((rating) => [gearSet(rating), accelerationSet(rating), displacementRatingSet(rating)]).filter((set) => set !== null);
+export const GEAR_SETS: readonly LimitSet[] = RATING_LADDER.flatMap((rating) => [
+  gearSet(rating),
+  accelerationSet(rating),
+  displacementRatingSet(rating),
+]).filter((set) => set !== null);

@@ -53,7 +53,13 @@ export type Found = { readonly set: LimitSet } | { readonly conflict: string } |
  * The one set of a list that is in force for a series on a day: of its quantity and measuring place, the last valid_from
  * up to that day, of the same detection before another. Two that remain are a conflict.
  */
-export function inForceFor(sets: readonly LimitSet[], series: Series, measuredOn: MeasuredOn | null, day: Day, namedAtPoint = false): Found {
+export function inForceFor(
+  sets: readonly LimitSet[],
+  series: Series,
+  measuredOn: MeasuredOn | null,
+  day: Day,
+  namedAtPoint = false,
+): Found {
   // What shakes a pipe or a frame is no bearing: limits reach it only where they say so, or where the point itself names them.
   const isElsewhere = !namedAtPoint && (measuredOn === 'pipe' || measuredOn === 'structure');
   const isThere = (s: LimitSet): boolean => (s.measuredOn === null ? !isElsewhere : measuredOn === null || s.measuredOn === measuredOn);

@@ -57,8 +57,24 @@ export function publishedSet(standard: Standard, row: Row): LimitSet {
 type Triple = readonly [number, number, number];
 
 /** A set of velocity boundaries in mm/s r.m.s. */
-export const velocitySet = (standard: Standard, id: string, title: string, [ab, bc, cd]: Triple, confidence?: Standard['confidence']): LimitSet =>
-  publishedSet(standard, { id, title, quantity: 'velocity', unit: 'mm/s', detection: 'rms', ab, bc, cd, ...(confidence === undefined ? {} : { confidence }) });
+export const velocitySet = (
+  standard: Standard,
+  id: string,
+  title: string,
+  [ab, bc, cd]: Triple,
+  confidence?: Standard['confidence'],
+): LimitSet =>
+  publishedSet(standard, {
+    id,
+    title,
+    quantity: 'velocity',
+    unit: 'mm/s',
+    detection: 'rms',
+    ab,
+    bc,
+    cd,
+    ...(confidence === undefined ? {} : { confidence }),
+  });
 
 /** A set of displacement boundaries in µm r.m.s. */
 export const displacementSet = (standard: Standard, id: string, title: string, [ab, bc, cd]: Triple): LimitSet =>

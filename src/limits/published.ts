@@ -7,7 +7,15 @@ import { INDUSTRIAL_SETS, SHAFT_FORMULAS } from './iso20816-3.ts';
 import { GEAR_SETS } from './iso20816-9.ts';
 import type { LimitSet } from './types.ts';
 
-const ALL: readonly LimitSet[] = [...INDUSTRIAL_SETS, ...LARGE_TURBINE_SETS, ...PUMP_SETS, ...CLASS_SETS, ...FAN_SETS, ...GEAR_SETS, ...ACCEPTANCE_SETS];
+const ALL: readonly LimitSet[] = [
+  ...INDUSTRIAL_SETS,
+  ...LARGE_TURBINE_SETS,
+  ...PUMP_SETS,
+  ...CLASS_SETS,
+  ...FAN_SETS,
+  ...GEAR_SETS,
+  ...ACCEPTANCE_SETS,
+];
 
 const BY_ID = new Map<string, LimitSet[]>();
 for (const set of ALL) {

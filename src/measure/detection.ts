@@ -15,7 +15,10 @@ const PEAK_TO_PEAK = /^(pk-pk|p-p|pp|pk-to-pk|peak-to-peak|peak-peak|peaktopeak|
  * A detection from what was typed. `peak` and `peak-to-peak` without "calculated" or "true" mean what the plant says they
  * mean; where it says nothing they are ambiguous, and the one who asks must ask back. null: no detection at all.
  */
-export function parseDetection(text: string, peakMeans: 'calculated' | 'true' | null): { readonly detection: Detection } | { readonly ambiguous: 'peak' | 'peak-to-peak' } | null {
+export function parseDetection(
+  text: string,
+  peakMeans: 'calculated' | 'true' | null,
+): { readonly detection: Detection } | { readonly ambiguous: 'peak' | 'peak-to-peak' } | null {
   const typed = text.normalize('NFC').trim().toLowerCase().replace(/\s+/g, ' ');
   if (/^(rms|r\.m\.s\.?|true rms|effective|eff\.?)$/.test(typed)) return { detection: 'rms' };
   if (/^(mean|average|avg)$/.test(typed)) return { detection: 'mean' };

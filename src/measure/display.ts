@@ -34,20 +34,45 @@ export function graduationOf(text: string): Graduation {
 }
 
 /** Its text again. */
-export const graduationText = (graduation: Graduation): string => (graduation.detection === null ? graduation.unit : `${graduation.unit} ${graduation.detection}`);
+export const graduationText = (graduation: Graduation): string =>
+  graduation.detection === null ? graduation.unit : `${graduation.unit} ${graduation.detection}`;
 
 /** Facts whose number is in the unit that stands beside them as `unit`. */
 const IN_UNIT: ReadonlySet<string> = new Set([
-  'value', 'previous', 'rise', 'baseline', 'rise_baseline', 'vector', 'ab', 'bc', 'cd', 'q', 'limit', 'alarm', 'background', 'least', 'most', 'other', 'axial', 'radial', 'vertical', 'horizontal', 'change',
+  'value',
+  'previous',
+  'rise',
+  'baseline',
+  'rise_baseline',
+  'vector',
+  'ab',
+  'bc',
+  'cd',
+  'q',
+  'limit',
+  'alarm',
+  'background',
+  'least',
+  'most',
+  'other',
+  'axial',
+  'radial',
+  'vertical',
+  'horizontal',
+  'change',
 ]);
 
 /** Facts as they are said: the numbers that stand in `unit`, and `unit`, in display units. The facts on record stay. */
-export function shownFacts<T>(units: DisplayUnits, facts: { readonly [name: string]: T }): { readonly [name: string]: T | number | string } {
+export function shownFacts<T>(
+  units: DisplayUnits,
+  facts: { readonly [name: string]: T },
+): { readonly [name: string]: T | number | string } {
   const { unit } = facts;
   if (typeof unit !== 'string') return facts;
   const shown = shownAs(units, graduationOf(unit));
   if (shown.factor === 1) return facts;
   const told: Record<string, T | number | string> = {};
-  for (const [name, value] of Object.entries(facts)) told[name] = typeof value === 'number' && IN_UNIT.has(name) ? value * shown.factor : value;
+  for (const [name, value] of Object.entries(facts))
+    told[name] = typeof value === 'number' && IN_UNIT.has(name) ? value * shown.factor : value;
   return { ...told, unit: graduationText(shown) };
 }

@@ -12,7 +12,12 @@ export interface RollingBearing {
 }
 
 /** BPFO, BPFI, FTF and BSF (once per element turn) as multiples of the inner ring's speed; the outer ring stands still. */
-export function bearingOrders(bearing: RollingBearing): { readonly bpfo: number; readonly bpfi: number; readonly ftf: number; readonly bsf: number } {
+export function bearingOrders(bearing: RollingBearing): {
+  readonly bpfo: number;
+  readonly bpfi: number;
+  readonly ftf: number;
+  readonly bsf: number;
+} {
   const r = (bearing.elementDiameter / bearing.pitchDiameter) * Math.cos((bearing.contactAngleDeg * Math.PI) / 180);
   return {
     bpfo: (bearing.elements / 2) * (1 - r),

@@ -7,7 +7,11 @@ export interface Graduation {
 }
 
 /** Calculated figures are r.m.s. times these by definition: they are labelled calculated because they are no more than that. */
-const OF_RMS: Partial<Readonly<Record<Detection, number>>> = { rms: 1, 'calculated peak': Math.SQRT2, 'calculated peak-to-peak': 2 * Math.SQRT2 };
+const OF_RMS: Partial<Readonly<Record<Detection, number>>> = {
+  rms: 1,
+  'calculated peak': Math.SQRT2,
+  'calculated peak-to-peak': 2 * Math.SQRT2,
+};
 
 /**
  * What a limit in `from` is multiplied by to stand in `to`. exact: unit conversion only; sine: also between r.m.s. and the

@@ -35,8 +35,23 @@ const MILLIMETRE = ['mm', 'millimeter', 'millimetre', 'millimeters', 'millimetre
 const INCH = ['in', 'inch', 'inches', '"'];
 const METRE = ['m', 'meter', 'metre', 'meters', 'metres'];
 const PER_SECOND = ['/s', '/sec', '/second', 's-1', 's^-1', '*s-1', '*s^-1', '.s-1'];
-const PER_SECOND_SQUARED = ['/s2', '/s^2', '/s**2', '/s/s', '/sec2', '/sec^2', '/sec/sec', '/second2', 's-2', 's^-2', '*s-2', '*s^-2', '.s-2'];
-const joined = (lengths: readonly string[], rates: readonly string[]): string[] => lengths.flatMap((length) => rates.map((rate) => length + rate));
+const PER_SECOND_SQUARED = [
+  '/s2',
+  '/s^2',
+  '/s**2',
+  '/s/s',
+  '/sec2',
+  '/sec^2',
+  '/sec/sec',
+  '/second2',
+  's-2',
+  's^-2',
+  '*s-2',
+  '*s^-2',
+  '.s-2',
+];
+const joined = (lengths: readonly string[], rates: readonly string[]): string[] =>
+  lengths.flatMap((length) => rates.map((rate) => length + rate));
 
 /** Spellings by canonical symbol, folded as by `fold`. `mms` is none: it is typed for mm and for mm/s. */
 const SPELLINGS: Readonly<Record<UnitSymbol, readonly string[]>> = {
@@ -55,7 +70,8 @@ const SPELLINGS: Readonly<Record<UnitSymbol, readonly string[]>> = {
 };
 
 const BY_SPELLING = new Map<string, UnitSymbol>();
-for (const [symbol, spellings] of Object.entries(SPELLINGS)) for (const spelling of spellings) BY_SPELLING.set(spelling, symbol as UnitSymbol);
+for (const [symbol, spellings] of Object.entries(SPELLINGS))
+  for (const spelling of spellings) BY_SPELLING.set(spelling, symbol as UnitSymbol);
 
 /**
  * One form for all ways to type a unit: both code points of µ, raised digits and minus signs, middle dots, blanks and case
@@ -87,7 +103,10 @@ export function parseUnit(text: string): Unit | null {
 /** The known symbol nearest to an unknown spelling, of one quantity where given; null when nothing is near. */
 export function nearestUnit(text: string, quantity?: string): string | null {
   const spellings = [...BY_SPELLING.entries()].filter(([, symbol]) => quantity === undefined || UNITS[symbol].quantity === quantity);
-  const near = nearestWord(fold(text), spellings.map(([spelling]) => spelling));
+  const near = nearestWord(
+    fold(text),
+    spellings.map(([spelling]) => spelling),
+  );
   return near === null ? null : (BY_SPELLING.get(near) ?? null);
 }
 
@@ -102,7 +121,8 @@ export function unitFactor(from: string, to: string): number | null {
 }
 
 /** Canonical symbols of a quantity, for hints. */
-export const unitsOf = (quantity: KnownQuantity): UnitSymbol[] => (Object.keys(UNITS) as UnitSymbol[]).filter((s) => UNITS[s].quantity === quantity);
+export const unitsOf = (quantity: KnownQuantity): UnitSymbol[] =>
+  (Object.keys(UNITS) as UnitSymbol[]).filter((s) => UNITS[s].quantity === quantity);
 
 export type FrequencyUnit = 'Hz' | 'CPM' | 'r/min';
 

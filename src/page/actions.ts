@@ -80,24 +80,47 @@ export function actionView(format: Format, action: RecordAction): ActionView {
 
 function carriedText(format: Format, action: RecordAction): string {
   if (action.carried_from === null) return action.times_reported > 1 ? format.say('view.reported', { times: action.times_reported }) : '';
-  const confirmed = action.confirmed === null ? format.say('view.carried.unconfirmed') : format.say('view.carried.confirmed', { date: format.date(action.confirmed) });
-  const stale = action.confirmed === null && action.times_reported >= 3 ? format.say('view.carried.stale', { times: action.times_reported }) : '';
+  const confirmed =
+    action.confirmed === null
+      ? format.say('view.carried.unconfirmed')
+      : format.say('view.carried.confirmed', { date: format.date(action.confirmed) });
+  const stale =
+    action.confirmed === null && action.times_reported >= 3 ? format.say('view.carried.stale', { times: action.times_reported }) : '';
   return format.say('view.carried', { from: action.carried_from, confirmed, stale });
 }
 
-export function overrideText(format: Format, action: { readonly override: RecordAction['override']; readonly computed_urgency: RecordAction['computed_urgency'] }): string {
+export function overrideText(
+  format: Format,
+  action: { readonly override: RecordAction['override']; readonly computed_urgency: RecordAction['computed_urgency'] },
+): string {
   const o = action.override;
   if (o === null) return '';
-  const until = o.until === null ? format.say('view.override.no_expiry') : format.say('view.override.until', { date: format.date(o.until) });
+  const until =
+    o.until === null ? format.say('view.override.no_expiry') : format.say('view.override.until', { date: format.date(o.until) });
   const reason = `${o.reason}${/[.!?]$/.test(o.reason) ? '' : '.'}`;
-  return format.say('view.override', { urgency: format.urgency(o.urgency), by: o.by, until, reason, computed: format.urgency(action.computed_urgency) });
+  return format.say('view.override', {
+    urgency: format.urgency(o.urgency),
+    by: o.by,
+    until,
+    reason,
+    computed: format.urgency(action.computed_urgency),
+  });
 }
 
 function verificationText(format: Format, action: RecordAction): string {
   const v = action.verification;
   if (v === null) return '';
   const result = format.say(`view.result.${v.result}`);
-  const target = v.target === null ? `${result}:` : format.say('view.verify.target', { result, point: v.target.point, quantity: v.target.quantity, value: v.target.value, unit: v.target.unit });
+  const target =
+    v.target === null
+      ? `${result}:`
+      : format.say('view.verify.target', {
+          result,
+          point: v.target.point,
+          quantity: v.target.quantity,
+          value: v.target.value,
+          unit: v.target.unit,
+        });
   const before = v.before === null ? '' : format.say('view.verify.before', { value: v.before.value, date: format.date(v.before.date) });
   const after = v.after === null ? '' : format.say('view.verify.after', { value: v.after.value, date: format.date(v.after.date) });
   return `${target}${before}${after}.`;
@@ -106,7 +129,10 @@ function verificationText(format: Format, action: RecordAction): string {
 function causeText(format: Format, action: RecordAction): string {
   if (action.likely_cause === null) return '';
   const cause = action.likely_cause;
-  const told = action.confidence === null ? format.say('view.cause', { cause }) : format.say('view.cause.sure', { cause, confidence: format.term(action.confidence) });
+  const told =
+    action.confidence === null
+      ? format.say('view.cause', { cause })
+      : format.say('view.cause.sure', { cause, confidence: format.term(action.confidence) });
   return action.less_likely === null ? told : `${told} ${format.say('view.cause.less', { less: action.less_likely })}`;
 }
 
@@ -119,4 +145,5 @@ function practicalText(format: Format, action: RecordAction): string {
 }
 
 /** Ranked ones in order. */
-export const rankedViews = (format: Format): ActionView[] => format.record.actions.filter((a) => a.rank > 0).map((a) => actionView(format, a));
+export const rankedViews = (format: Format): ActionView[] =>
+  format.record.actions.filter((a) => a.rank > 0).map((a) => actionView(format, a));

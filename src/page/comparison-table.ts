@@ -15,9 +15,18 @@ export interface Chapter {
 }
 
 /** Dates do not break at their hyphens. */
-export const cell = (text: string | number): Cell => ({ text: String(text).replace(/(\d{4})-(\d{2})-(\d{2})(?![\d/])/g, '$1\u2011$2\u2011$3') });
+export const cell = (text: string | number): Cell => ({
+  text: String(text).replace(/(\d{4})-(\d{2})-(\d{2})(?![\d/])/g, '$1\u2011$2\u2011$3'),
+});
 
-export function chapter(id: string, title: string, lead: string, none: string, columns: readonly string[], rows: readonly (readonly Cell[])[]): Chapter {
+export function chapter(
+  id: string,
+  title: string,
+  lead: string,
+  none: string,
+  columns: readonly string[],
+  rows: readonly (readonly Cell[])[],
+): Chapter {
   return { id, title, lead, none, columns, hasRows: rows.length > 0, rows: rows.map(([head = cell(''), ...cells]) => ({ head, cells })) };
 }
 
@@ -36,4 +45,14 @@ export function placeText({ record, file, line, date, instrument, person }: Plac
   return [at, date ?? '', instrument ?? 'instrument not stated', person ?? 'person not stated'].filter((t) => t !== '').join('; ');
 }
 
-export const seriesName = ({ machine, point, quantity, detection }: { readonly machine: string; readonly point: string; readonly quantity: string; readonly detection: string | null }): string => `${machine} ${point} ${quantity}${detection === null ? '' : ` ${detection}`}`;
+export const seriesName = ({
+  machine,
+  point,
+  quantity,
+  detection,
+}: {
+  readonly machine: string;
+  readonly point: string;
+  readonly quantity: string;
+  readonly detection: string | null;
+}): string => `${machine} ${point} ${quantity}${detection === null ? '' : ` ${detection}`}`;

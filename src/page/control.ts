@@ -1,10 +1,9 @@
-/** The control page, people and instruments, coverage, changes, method: what an auditor asks for. */
-import { fromHz } from '../measure/units.ts';
-import type { LimitSetLine, RuleLine } from '../record/types.ts';
+/** The control page, people and instruments, coverage, changes: what an auditor asks for. */
 import { unitTerm } from '../words/terms.ts';
 import { slugOf } from './file-name.ts';
 import type { Format } from './format.ts';
-import { decisionOfAll, issueChanges, issueFields } from './issue.ts';
+import { issueChanges, issueFields } from './issue.ts';
+import { approval } from './method.ts';
 
 export interface FieldView {
   readonly label: string;
@@ -31,11 +30,17 @@ export interface ControlView {
 
 export function controlView(format: Format): ControlView {
   const { plant, survey, issue, tool, policy_hash: hash } = format.record;
-  const span = survey.from === survey.to ? format.date(survey.from) : format.say('view.span', { from: format.date(survey.from), to: format.date(survey.to) });
+  const span =
+    survey.from === survey.to
+      ? format.date(survey.from)
+      : format.say('view.span', { from: format.date(survey.from), to: format.date(survey.to) });
   return {
     plant: plant.plant,
     title: format.say('view.title'),
-    status: issue === null ? format.say('view.draft') : format.say('view.issued', { number: issue.number, revision: issue.revision, date: format.date(issue.issued_on) }),
+    status:
+      issue === null
+        ? format.say('view.draft')
+        : format.say('view.issued', { number: issue.number, revision: issue.revision, date: format.date(issue.issued_on) }),
     fields: [
       ...field(format.say('view.client'), plant.client),
       ...field(format.say('view.site'), plant.site),
@@ -68,87 +73,42 @@ export function controlView(format: Format): ControlView {
 export function peopleView(format: Format) {
   const { survey } = format.record;
   return {
-    people: survey.people.map((p) => ({ name: p.name, role: p.role ?? '', category: p.category ?? '', certificate: p.certificate ?? '', expires: format.date(p.expires), ended: p.expires !== null && p.expires < survey.to })),
-    instruments: survey.instruments.map((i) => ({
-      id: i.id, make: [i.make, i.model].filter((t) => t !== null).join(' '), serial: i.serial ?? '', band: i.band ?? '', calibrated: format.date(i.calibrated_on), due: format.date(i.calibration_due),
-      lapsed: i.calibration_due !== null && i.calibration_due < survey.to, laboratory: i.laboratory ?? '',
+    people: survey.people.map((p) => ({
+      name: p.name,
+      role: p.role ?? '',
+      category: p.category ?? '',
+      certificate: p.certificate ?? '',
+      expires: format.date(p.expires),
+      ended: p.expires !== null && p.expires < survey.to,
     })),
-    conditions: [...field(format.say('view.field_check'), survey.field_check), ...field(format.say('view.process'), survey.process), ...field(format.say('view.weather'), survey.weather), ...field(format.say('view.remarks'), survey.remarks)],
+    instruments: survey.instruments.map((i) => ({
+      id: i.id,
+      make: [i.make, i.model].filter((t) => t !== null).join(' '),
+      serial: i.serial ?? '',
+      band: i.band ?? '',
+      calibrated: format.date(i.calibrated_on),
+      due: format.date(i.calibration_due),
+      lapsed: i.calibration_due !== null && i.calibration_due < survey.to,
+      laboratory: i.laboratory ?? '',
+    })),
+    conditions: [
+      ...field(format.say('view.field_check'), survey.field_check),
+      ...field(format.say('view.process'), survey.process),
+      ...field(format.say('view.weather'), survey.weather),
+      ...field(format.say('view.remarks'), survey.remarks),
+    ],
     hasPeople: survey.people.length > 0,
     hasInstruments: survey.instruments.length > 0,
     hasConditions: [survey.field_check, survey.process, survey.weather, survey.remarks].some((t) => t !== null),
   };
 }
 
-/** A boundary as its source prints it; one that was computed, to three digits. */
-const boundary = (format: Format, value: number | null): string => (value === null ? '–' : Math.round(value * 1000) / 1000 === value ? format.plain(value) : format.number(value));
-
-function limitView(format: Format, set: LimitSetLine) {
-  const { ab, bc, cd } = set.boundaries;
-  const frequency = format.record.plant.frequency_unit;
-  const edge = (hz: number | null): string => (hz === null ? '…' : format.plain(fromHz(hz, frequency)));
-  const band = set.low_hz === null && set.high_hz === null ? '' : `${format.say('view.span', { from: edge(set.low_hz), to: edge(set.high_hz) })} ${frequency}`;
-  return {
-    id: set.id,
-    anchor: `limit-${slugOf(set.id)}`,
-    title: set.title,
-    quantity: format.term(set.quantity),
-    unit: format.unit(set.unit, set.detection),
-    ab: boundary(format, ab),
-    bc: boundary(format, bc),
-    cd: boundary(format, cd),
-    band,
-    basis: format.term(set.basis),
-    source: [set.source, set.edition, set.table].filter((t) => t !== null).join(', '),
-    confidence: set.confidence === null ? approval(format, set) : format.say(`view.sure.${set.confidence}`),
-  };
-}
-
-function approval(format: Format, set: LimitSetLine): string {
-  const by = set.approved_by === null ? format.say('view.approval.none') : format.say('view.approval.by', { by: set.approved_by });
-  const on = set.approved_on === null ? by : format.say('view.approval.on', { by, date: format.date(set.approved_on) });
-  return set.valid_from === null ? on : `${on}${format.say('view.approval.valid', { date: format.date(set.valid_from) })}`;
-}
-
 /** Statuses that kept a machine from being measured, joined in the record. */
-const whyText = (format: Format, why: string): string => why.split(', ').map((word) => format.term(word)).join(', ');
-
-export function methodView(format: Format) {
-  const { record } = format;
-  const rules = record.rules ?? [];
-  const rule = (r: RuleLine) => ({ id: r.id, mark: format.term(r.mark), about: format.ruleAbout(r) });
-  const level = (r: RuleLine, column: number): string => format.term(r.levels[column] ?? '');
-  return {
-    sets: record.limit_sets.map((set) => limitView(format, set)),
-    hasSets: record.limit_sets.length > 0,
-    policy: record.policy.map((p) => ({ id: p.id, value: format.plain(p.value), unit: format.term(p.unit), mark: format.term(p.mark), about: format.policyAbout(p), changed: p.overridden })),
-    hash: record.policy_hash,
-    urgencyRules: rules.filter((r) => r.levels.length > 0).map((r) => ({ ...rule(r), critical: level(r, 0), essential: level(r, 1), general: level(r, 2), spare: [3, 4, 5].map((i) => level(r, i)).join(' / ') })),
-    otherRules: rules.filter((r) => r.levels.length === 0).map(rule),
-    hasRules: rules.length > 0,
-    decision: decisionOfAll(format),
-    problems: record.problems.filter((p) => p.severity !== 'note').map((p) => ({ place: p.line === null ? p.file : `${p.file}:${p.line}`, message: p.message })),
-    hasProblems: record.problems.some((p) => p.severity !== 'note'),
-    inputs: record.inputs.map((i) => ({ path: i.path, bytes: String(i.bytes), sha256: i.sha256 })),
-  };
-}
-
-const WORST_FIRST = ['D', 'C', 'B', 'A', 'r-D', 'r-C', 'r-B', 'r-A', 'not assessed'] as const;
-
-/** Machines by condition, coverage and the ledger at each survey. */
-export function overTimeView(format: Format) {
-  const { plant_over_time: lines } = format.record;
-  const rows = lines.map((line) => ({
-    survey: format.survey(line.survey),
-    conditions: WORST_FIRST.filter((c) => line.conditions[c] > 0).map((c) => `${line.conditions[c]} ${format.term(c)}`).join(', '),
-    points: format.say('view.n_of_m', { n: line.measured, of: line.of }),
-    open: String(line.open_actions),
-    repeats: line.repeats === undefined ? '' : String(line.repeats),
-    closed: String(line.closed_actions),
-    closureDays: line.closure_days == null ? '' : format.plain(line.closure_days),
-  }));
-  return { rows, hasRows: rows.length > 1 };
-}
+const whyText = (format: Format, why: string): string =>
+  why
+    .split(', ')
+    .map((word) => format.term(word))
+    .join(', ');
 
 export function coverageView(format: Format) {
   const { coverage } = format.record;
@@ -166,9 +126,18 @@ export function coverageView(format: Format) {
     next: format.date(c.next_due),
     interval: c.interval_days === null ? '' : String(Math.round(c.interval_days)),
   });
-  const byDue = [...coverage].filter((c) => c.next_due !== null).sort((a, b) => ((a.next_due as string) < (b.next_due as string) ? -1 : a.next_due === b.next_due ? 0 : 1));
+  const byDue = [...coverage]
+    .filter((c) => c.next_due !== null)
+    .sort((a, b) => ((a.next_due as string) < (b.next_due as string) ? -1 : a.next_due === b.next_due ? 0 : 1));
   const open = coverage.filter((c) => c.status !== 'measured');
-  return { missed: missed.map(view), hasMissed: missed.length > 0, open: open.map(view), hasOpen: open.length > 0, due: byDue.map(view), hasDue: byDue.length > 0 };
+  return {
+    missed: missed.map(view),
+    hasMissed: missed.length > 0,
+    open: open.map(view),
+    hasOpen: open.length > 0,
+    due: byDue.map(view),
+    hasDue: byDue.length > 0,
+  };
 }
 
 /** What changed since the survey before: limits, baselines, points. */
@@ -177,35 +146,83 @@ export function changesView(format: Format) {
   const before = record.surveys[record.surveys.length - 2]?.date ?? '';
   const rows: { what: string; text: string }[] = [];
   for (const set of record.limit_sets) {
-    if (set.valid_from !== null && set.valid_from > before && set.valid_from <= record.survey.to) rows.push({ what: format.say('view.limit', { id: set.id }), text: format.say('view.limit.changed', { title: set.title, bc: format.number(set.boundaries.bc), unit: set.unit, date: format.date(set.valid_from), approval: approval(format, set) }) });
+    if (set.valid_from !== null && set.valid_from > before && set.valid_from <= record.survey.to)
+      rows.push({
+        what: format.say('view.limit', { id: set.id }),
+        text: format.say('view.limit.changed', {
+          title: set.title,
+          bc: format.number(set.boundaries.bc),
+          unit: set.unit,
+          date: format.date(set.valid_from),
+          approval: approval(format, set),
+        }),
+      });
   }
   for (const machine of record.machines) {
     for (const event of machine.events) {
       if (event.date <= before) continue;
-      const where = [event.component, event.point, event.quantity === null ? null : format.term(event.quantity)].filter((t) => t !== null).join(' ');
+      const where = [event.component, event.point, event.quantity === null ? null : format.term(event.quantity)]
+        .filter((t) => t !== null)
+        .join(' ');
       const serial = event.serial_in === null ? '' : format.say('view.serials', { out: event.serial_out ?? '?', in: event.serial_in });
-      const told = format.say(where === '' ? 'view.event' : 'view.event.of', { date: format.date(event.date), event: format.term(event.event), where });
-      rows.push({ what: machine.machine, text: `${told}${serial}${event.new_baseline ? `; ${format.say('view.new_baseline')}` : ''}${event.notes === null ? '' : `: ${event.notes}`}` });
+      const told = format.say(where === '' ? 'view.event' : 'view.event.of', {
+        date: format.date(event.date),
+        event: format.term(event.event),
+        where,
+      });
+      rows.push({
+        what: machine.machine,
+        text: `${told}${serial}${event.new_baseline ? `; ${format.say('view.new_baseline')}` : ''}${event.notes === null ? '' : `: ${event.notes}`}`,
+      });
     }
   }
   for (const r of record.plant.renames ?? []) {
-    if (r.since !== null && r.since > before && r.since <= record.survey.to) rows.push({ what: r.machine ?? r.old, text: format.say('view.rename', { kind: format.term(r.kind), old: r.old, new: r.new, date: format.date(r.since) }) });
+    if (r.since !== null && r.since > before && r.since <= record.survey.to)
+      rows.push({
+        what: r.machine ?? r.old,
+        text: format.say('view.rename', { kind: format.term(r.kind), old: r.old, new: r.new, date: format.date(r.since) }),
+      });
   }
   rows.push(...unitChanges(format));
-  for (const p of record.policy.filter((line) => line.overridden)) rows.push({ what: format.say('view.policy', { id: p.id }), text: format.say('view.policy.set', { value: format.plain(p.value), unit: format.term(p.unit), about: format.policyAbout(p) }) });
+  for (const p of record.policy.filter((line) => line.overridden))
+    rows.push({
+      what: format.say('view.policy', { id: p.id }),
+      text: format.say('view.policy.set', { value: format.plain(p.value), unit: format.term(p.unit), about: format.policyAbout(p) }),
+    });
   return { rows, hasRows: rows.length > 0 };
 }
 
 /** Readings typed in another unit than their point's. */
 function unitChanges(format: Format): { what: string; text: string }[] {
-  return format.asRead.measurements.flatMap((m) => (m.typed_unit === null ? [] : [{ what: m.machine, text: format.say('view.unit_change', { point: m.point, quantity: m.quantity, typed: `${m.typed} ${m.typed_unit}`, unit: format.unit(m.unit, m.detection) }) }]));
+  return format.asRead.measurements.flatMap((m) =>
+    m.typed_unit === null
+      ? []
+      : [
+          {
+            what: m.machine,
+            text: format.say('view.unit_change', {
+              point: m.point,
+              quantity: m.quantity,
+              typed: `${m.typed} ${m.typed_unit}`,
+              unit: format.unit(m.unit, m.detection),
+            }),
+          },
+        ],
+  );
 }
 
 export function acceptedView(format: Format) {
   const rows = format.record.machines.flatMap((m) =>
     m.accepted.map((a) => ({
-      machine: m.machine, point: [a.point, a.quantity === null ? null : format.term(a.quantity)].filter((t) => t !== null).join(' ') || format.say('view.all_points'), upTo: `${format.number(a.up_to)} ${unitTerm(format.language, a.unit ?? '')}`.trim(), until: format.date(a.until), by: a.by ?? format.say('view.not_stated'),
-      reason: a.reason ?? '', state: format.say(a.in_force ? 'view.in_force' : 'view.no_longer'),
+      machine: m.machine,
+      point:
+        [a.point, a.quantity === null ? null : format.term(a.quantity)].filter((t) => t !== null).join(' ') ||
+        format.say('view.all_points'),
+      upTo: `${format.number(a.up_to)} ${unitTerm(format.language, a.unit ?? '')}`.trim(),
+      until: format.date(a.until),
+      by: a.by ?? format.say('view.not_stated'),
+      reason: a.reason ?? '',
+      state: format.say(a.in_force ? 'view.in_force' : 'view.no_longer'),
     })),
   );
   return { rows, hasRows: rows.length > 0 };
@@ -220,6 +237,11 @@ export function noticesView(format: Format) {
 export function limitsToSetView(format: Format) {
   const rows = format.record.measurements
     .filter((m) => m.status === 'measured' && m.zone === null && m.ratio_class === null && m.baseline === null && m.limit_set === null)
-    .map((m) => ({ machine: m.machine, point: m.point, quantity: `${format.term(m.quantity)}, ${format.unit(m.unit, m.detection)}`, because: m.no_zone_because ?? '' }));
+    .map((m) => ({
+      machine: m.machine,
+      point: m.point,
+      quantity: `${format.term(m.quantity)}, ${format.unit(m.unit, m.detection)}`,
+      because: m.no_zone_because ?? '',
+    }));
   return { rows, hasRows: rows.length > 0 };
 }

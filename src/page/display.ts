@@ -7,7 +7,8 @@ export function inDisplayUnits(record: SwayfolioRecord): SwayfolioRecord {
   const shown = new Map<string, Shown>();
   for (const m of record.measurements) shown.set(keyOf(m.machine, m), shownAs(units, m));
   if ([...shown.values()].every((s) => s.factor === 1)) return record;
-  const follow = (machine: string, key: SeriesKey | null): SeriesKey | null => (key === null ? null : { ...key, detection: shown.get(keyOf(machine, key))?.detection ?? key.detection });
+  const follow = (machine: string, key: SeriesKey | null): SeriesKey | null =>
+    key === null ? null : { ...key, detection: shown.get(keyOf(machine, key))?.detection ?? key.detection };
   return {
     ...record,
     machines: record.machines.map((m) => machineIn(record, m, follow)),
@@ -20,7 +21,11 @@ const keyOf = (machine: string, key: SeriesKey): string => `${machine}\u001f${ke
 
 const times = (value: number | null, factor: number): number | null => (value === null ? null : value * factor);
 
-function machineIn(record: SwayfolioRecord, m: RecordMachine, follow: (machine: string, key: SeriesKey | null) => SeriesKey | null): RecordMachine {
+function machineIn(
+  record: SwayfolioRecord,
+  m: RecordMachine,
+  follow: (machine: string, key: SeriesKey | null) => SeriesKey | null,
+): RecordMachine {
   const accepted = m.accepted.map((a) => {
     if (a.unit === null) return a;
     const s = shownAs(record.plant.units, graduationOf(a.unit));
@@ -34,21 +39,47 @@ function actionIn(record: SwayfolioRecord, a: RecordAction): RecordAction {
   const s = shownAs(record.plant.units, graduationOf(v?.target?.unit ?? a.unit ?? ''));
   if (s.factor === 1) return a;
   const point = <T extends { readonly value: number }>(p: T | null): T | null => (p === null ? null : { ...p, value: p.value * s.factor });
-  const verification = v === null ? null : { ...v, target: v.target === null ? null : { ...v.target, value: v.target.value * s.factor, unit: graduationText(s) }, before: point(v.before), after: point(v.after) };
-  return { ...a, value: times(a.value, s.factor), limit: times(a.limit, s.factor), unit: a.unit === null ? null : graduationText(s), verification };
+  const verification =
+    v === null
+      ? null
+      : {
+          ...v,
+          target: v.target === null ? null : { ...v.target, value: v.target.value * s.factor, unit: graduationText(s) },
+          before: point(v.before),
+          after: point(v.after),
+        };
+  return {
+    ...a,
+    value: times(a.value, s.factor),
+    limit: times(a.limit, s.factor),
+    unit: a.unit === null ? null : graduationText(s),
+    verification,
+  };
 }
 
 function measurementIn(m: RecordMeasurement, s: Shown): RecordMeasurement {
   const f = s.factor;
   if (f === 1) return m;
   const change = (c: RecordMeasurement['change']): RecordMeasurement['change'] =>
-    c === null ? null : { ...c, absolute: c.absolute * f, vector: c.vector === null ? null : { ...c.vector, amplitude: c.vector.amplitude * f } };
+    c === null
+      ? null
+      : { ...c, absolute: c.absolute * f, vector: c.vector === null ? null : { ...c.vector, amplitude: c.vector.amplitude * f } };
   return {
     ...m,
     unit: s.unit,
     detection: s.detection,
     value: times(m.value, f),
-    limits: m.limits === null ? null : { ...m.limits, ab: times(m.limits.ab, f), bc: times(m.limits.bc, f), cd: times(m.limits.cd, f), alarm: times(m.limits.alarm, f), trip: times(m.limits.trip, f) },
+    limits:
+      m.limits === null
+        ? null
+        : {
+            ...m.limits,
+            ab: times(m.limits.ab, f),
+            bc: times(m.limits.bc, f),
+            cd: times(m.limits.cd, f),
+            alarm: times(m.limits.alarm, f),
+            trip: times(m.limits.trip, f),
+          },
     baseline: m.baseline === null ? null : { ...m.baseline, value: m.baseline.value * f },
     previous: m.previous === null ? null : { ...m.previous, value: m.previous.value * f },
     change: change(m.change),

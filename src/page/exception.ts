@@ -35,7 +35,12 @@ export interface ExceptionView {
   readonly cannotSee: string;
   readonly events: readonly { readonly date: string; readonly text: string }[];
   readonly hasEvents: boolean;
-  readonly components: readonly { readonly id: string; readonly kind: string; readonly condition: ReturnType<Format['condition']>; readonly limits: string }[];
+  readonly components: readonly {
+    readonly id: string;
+    readonly kind: string;
+    readonly condition: ReturnType<Format['condition']>;
+    readonly limits: string;
+  }[];
 }
 
 export function exceptionView(format: Format, charts: Charts, machine: RecordMachine): ExceptionView {
@@ -44,7 +49,9 @@ export function exceptionView(format: Format, charts: Charts, machine: RecordMac
   const actions = format.record.actions.filter((a) => a.machine === machine.machine).map((a) => actionView(format, a));
   const hasHistory = main?.history.value.some((v) => v !== null) === true;
   const polars = measurements.filter((m) => (m.phase?.amplitude ?? null) !== null);
-  const spoken = machine.criticality_stated ? format.term(machine.criticality) : format.say('view.criticality_taken', { criticality: format.term(machine.criticality) });
+  const spoken = machine.criticality_stated
+    ? format.term(machine.criticality)
+    : format.say('view.criticality_taken', { criticality: format.term(machine.criticality) });
   return {
     machine: machineView(format, charts, machine),
     title: machine.name === null ? machine.machine : `${machine.machine}, ${machine.name}`,
@@ -61,7 +68,8 @@ export function exceptionView(format: Format, charts: Charts, machine: RecordMac
     get historyAlt() {
       return main === null || !hasHistory ? '' : charts.drawing('history', seriesId(main)).alt;
     },
-    historyCaption: main === null ? '' : `${main.point} ${format.term(main.quantity)}, ${format.unit(main.unit, main.detection)}: ${main.limit_reason}`,
+    historyCaption:
+      main === null ? '' : `${main.point} ${format.term(main.quantity)}, ${format.unit(main.unit, main.detection)}: ${main.limit_reason}`,
     remarks: main === null || main.notes.length === 0 ? '' : `${main.point} ${main.quantity}: ${main.notes.join(' ')}`,
     polars: polars.map((m) => ({
       key: seriesId(m),
@@ -72,7 +80,12 @@ export function exceptionView(format: Format, charts: Charts, machine: RecordMac
     })),
     photos: format.record.survey.photos
       .filter((p) => p.machine === machine.machine)
-      .map((p) => ({ path: p.path, file: photoFile(p.path), alt: p.caption ?? format.say('view.photo', { machine: machine.machine }), caption: p.caption ?? '' })),
+      .map((p) => ({
+        path: p.path,
+        file: photoFile(p.path),
+        alt: p.caption ?? format.say('view.photo', { machine: machine.machine }),
+        caption: p.caption ?? '',
+      })),
     doubts: machine.doubts.map((d) => d.message),
     hasDoubts: machine.doubts.length > 0,
     indications: machine.indications.map((i) => ({ rule: i.rule, message: i.message, confirm: i.confirm })),
@@ -80,21 +93,39 @@ export function exceptionView(format: Format, charts: Charts, machine: RecordMac
     forecast: main === null ? '' : forecastText(format, main),
     decision: decisionText(format, measurements),
     cannotSee: machine.cannot_see.join('; '),
-    events: machine.events.map((e) => ({ date: format.date(e.date), text: `${format.term(e.event)}${e.notes === null ? '' : `: ${e.notes}`}${e.new_baseline ? ` (${format.say('view.new_baseline')})` : ''}` })),
+    events: machine.events.map((e) => ({
+      date: format.date(e.date),
+      text: `${format.term(e.event)}${e.notes === null ? '' : `: ${e.notes}`}${e.new_baseline ? ` (${format.say('view.new_baseline')})` : ''}`,
+    })),
     hasEvents: machine.events.length > 0,
     components: format.record.components
       .filter((c) => c.machine === machine.machine && !c.implicit)
-      .map((c) => ({ id: c.component, kind: c.kind === null ? '' : format.term(c.kind), condition: format.condition(c.condition), limits: c.limit_reason })),
+      .map((c) => ({
+        id: c.component,
+        kind: c.kind === null ? '' : format.term(c.kind),
+        condition: format.condition(c.condition),
+        limits: c.limit_reason,
+      })),
   };
 }
 
 /** The forecast of the governing reading in words; nothing where there is no real trend to speak of. */
 function forecastText(format: Format, m: RecordMeasurement): string {
   const { forecast } = m;
-  if (forecast === null || 'none' in forecast) return forecast === null || m.trend === null || m.trend.kind !== 'ramp' ? '' : format.say('view.no_forecast', { point: m.point, quantity: m.quantity, none: forecast.none });
+  if (forecast === null || 'none' in forecast)
+    return forecast === null || m.trend === null || m.trend.kind !== 'ramp'
+      ? ''
+      : format.say('view.no_forecast', { point: m.point, quantity: m.quantity, none: forecast.none });
   const likely = forecast.likely === null ? format.say('view.forecast.beyond') : format.date(forecast.likely);
   const latest = forecast.latest === null ? format.say('view.forecast.open') : format.date(forecast.latest);
-  return format.say('view.forecast', { point: m.point, quantity: m.quantity, boundary: forecast.boundary, likely, earliest: format.date(forecast.earliest), latest });
+  return format.say('view.forecast', {
+    point: m.point,
+    quantity: m.quantity,
+    boundary: forecast.boundary,
+    likely,
+    earliest: format.date(forecast.earliest),
+    latest,
+  });
 }
 
 /** Name of a photo on the site. */

@@ -47,7 +47,10 @@ export class Format {
 
   measurement(machine: string, key: SeriesKey | null): RecordMeasurement | null {
     if (key === null) return null;
-    return this.measurementsOf(machine).find((m) => m.point === key.point && m.quantity === key.quantity && m.detection === key.detection) ?? null;
+    return (
+      this.measurementsOf(machine).find((m) => m.point === key.point && m.quantity === key.quantity && m.detection === key.detection) ??
+      null
+    );
   }
 
   say(key: string, facts = {}): string {
@@ -127,7 +130,9 @@ export class Format {
   }
 
   condition(condition: Condition | null): ConditionView {
-    return condition === null || condition === 'not assessed' ? { mark: 'none', text: this.term('not assessed'), isAssessed: false } : { mark: condition, text: condition, isAssessed: true };
+    return condition === null || condition === 'not assessed'
+      ? { mark: 'none', text: this.term('not assessed'), isAssessed: false }
+      : { mark: condition, text: condition, isAssessed: true };
   }
 
   /** Condition of a machine, with how much of it was measured where that was not all. */

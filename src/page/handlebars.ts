@@ -16,7 +16,12 @@ export class Templates {
   readonly #compiled = new Map<string, Render>();
 
   constructor(sources: ReadonlyMap<string, string>, language: Language = 'en') {
-    this.#sources = new Map([...sources].map(([path, source]) => [path, path.endsWith('.hbs') ? withWords(path.replace(/\.hbs$/, ''), source, language) : source]));
+    this.#sources = new Map(
+      [...sources].map(([path, source]) => [
+        path,
+        path.endsWith('.hbs') ? withWords(path.replace(/\.hbs$/, ''), source, language) : source,
+      ]),
+    );
     for (const [path, source] of this.#sources) {
       if (!path.endsWith('.hbs')) continue;
       const name = path.replace(/\.hbs$/, '');
@@ -50,7 +55,11 @@ export class Templates {
 /** `[[key]]` is the sentence `page.key` of the language, in place before the template is read. */
 function withWords(name: string, source: string, language: Language): string {
   return source.replace(/\[\[([^\]\n]*)\]\]/g, (_, key: string, at: number) => {
-    if (!hasSentence(language, `page.${key}`)) throw new UserError(`Template ${name}, line ${source.slice(0, at).split('\n').length}: there are no words "${key}".`, 'The words that a template may use are the page.* keys of templates/words/en/page.json.');
+    if (!hasSentence(language, `page.${key}`))
+      throw new UserError(
+        `Template ${name}, line ${source.slice(0, at).split('\n').length}: there are no words "${key}".`,
+        'The words that a template may use are the page.* keys of templates/words/en/page.json.',
+      );
     return sentenceOf(language, `page.${key}`).replaceAll('&', '&amp;').replaceAll('<', '&lt;').replaceAll('"', '&quot;');
   });
 }
@@ -61,39 +70,55 @@ function check(name: string, source: string, sources: ReadonlyMap<string, string
   try {
     tree = Handlebars.parse(source);
   } catch (error) {
-    throw new UserError(`Template ${name} cannot be read: ${(error as Error).message.split('\n')[0]}`, 'Mend it, or remove it from templates/ to use the built-in one.');
+    throw new UserError(
+      `Template ${name} cannot be read: ${(error as Error).message.split('\n')[0]}`,
+      'Mend it, or remove it from templates/ to use the built-in one.',
+    );
   }
+  const refuse: Refuse = (node, what, hint) => {
+    throw new UserError(`Template ${name}, line ${node.loc.start.line}: ${what}.`, hint);
+  };
   const visitor = new Handlebars.Visitor();
+  holdOutput(visitor, refuse);
+  holdCalls(visitor, refuse, sources);
+  visitor.accept(tree);
+}
+
+type Refuse = (node: hbs.AST.Node, what: string, hint: string) => never;
+
+const KNOWN_HELPERS = 'Only if, unless, each and with are known.';
+
+/** What is printed: escaped fields of the view, and text that is seen. */
+function holdOutput(visitor: Handlebars.Visitor, refuse: Refuse): void {
   visitor.MustacheStatement = (mustache) => {
-    if (!mustache.escaped) throw new UserError(`Template ${name}, line ${mustache.loc.start.line}: output must be escaped.`, 'Write {{name}}, never {{{name}}} or {{&name}}.');
-    if (mustache.params.length > 0) throw new UserError(`Template ${name}, line ${mustache.loc.start.line}: there is no such helper.`, 'Only if, unless, each and with are known.');
+    if (!mustache.escaped) refuse(mustache, 'output must be escaped', 'Write {{name}}, never {{{name}}} or {{&name}}.');
+    if (mustache.params.length > 0) refuse(mustache, 'there is no such helper', KNOWN_HELPERS);
     Handlebars.Visitor.prototype.MustacheStatement.call(visitor, mustache);
   };
   visitor.PathExpression = (path) => {
     const foreign = path.parts.find((part) => part in Object.prototype);
-    if (foreign !== undefined) throw new UserError(`Template ${name}, line ${path.loc.start.line}: "${foreign}" is no field.`, 'A template may print only the fields of its view.');
+    if (foreign !== undefined) refuse(path, `"${foreign}" is no field`, 'A template may print only the fields of its view.');
   };
+  // Cautions inside a comment would be in the page and yet not be seen.
+  visitor.ContentStatement = (content) => {
+    if (content.value.includes('<!--')) refuse(content, 'HTML comments are not allowed', 'Write {{! … }}, which is not printed.');
+  };
+}
+
+/** What is called: the four block helpers, and partials that are there. */
+function holdCalls(visitor: Handlebars.Visitor, refuse: Refuse, sources: ReadonlyMap<string, string>): void {
   visitor.BlockStatement = (block) => {
     const helper = (block.path as hbs.AST.PathExpression).original;
-    if (!HELPERS.has(helper)) throw new UserError(`Template ${name}, line ${block.loc.start.line}: there is no helper "${helper}".`, 'Only if, unless, each and with are known.');
+    if (!HELPERS.has(helper)) refuse(block, `there is no helper "${helper}"`, KNOWN_HELPERS);
     Handlebars.Visitor.prototype.BlockStatement.call(visitor, block);
   };
   visitor.PartialStatement = (partial) => {
     const called = (partial.name as hbs.AST.PathExpression).original;
-    if (!sources.has(`${called}.hbs`)) throw new UserError(`Template ${name}, line ${partial.loc.start.line}: there is no partial "${called}".`, 'Partials are named by their path, such as shared/cautions.');
+    if (!sources.has(`${called}.hbs`))
+      refuse(partial, `there is no partial "${called}"`, 'Partials are named by their path, such as shared/cautions.');
   };
-  // Cautions inside a comment would be in the page and yet not be seen.
-  visitor.ContentStatement = (content) => {
-    if (content.value.includes('<!--')) throw new UserError(`Template ${name}, line ${content.loc.start.line}: HTML comments are not allowed.`, 'Write {{! … }}, which is not printed.');
-  };
-  visitor.SubExpression = (call) => {
-    throw new UserError(`Template ${name}, line ${call.loc.start.line}: nothing may be called in brackets.`, 'Print the fields of the view as they are.');
-  };
-  visitor.PartialBlockStatement = (partial) => {
-    throw new UserError(`Template ${name}, line ${partial.loc.start.line}: a partial takes no block.`, 'Write {{> shared/cautions}}.');
-  };
-  visitor.DecoratorBlock = (decorator) => {
-    throw new UserError(`Template ${name}, line ${decorator.loc.start.line}: no partial may be made inside a template.`, 'Put it into a file of its own in templates/.');
-  };
-  visitor.accept(tree);
+  visitor.SubExpression = (call) => refuse(call, 'nothing may be called in brackets', 'Print the fields of the view as they are.');
+  visitor.PartialBlockStatement = (partial) => refuse(partial, 'a partial takes no block', 'Write {{> shared/cautions}}.');
+  visitor.DecoratorBlock = (decorator) =>
+    refuse(decorator, 'no partial may be made inside a template', 'Put it into a file of its own in templates/.');
 }

@@ -8,8 +8,13 @@ export function issueFields(format: Format): readonly { readonly label: string; 
   const { issue, plant } = format.record;
   if (issue === null) return [];
   const fields = [{ label: format.say('view.previous_manifest'), value: issue.previous_manifest ?? format.say('view.first_issue') }];
-  if (issue.replaces !== null) fields.unshift({ label: format.say('view.replaces'), value: format.say('view.replaces.text', { issue: issue.replaces, reason: issue.reason ?? '' }) });
-  if (plant.retention !== null && issue.retention_due !== undefined) fields.push({ label: format.say('view.due'), value: dueText(format, issue.retention_due) });
+  if (issue.replaces !== null)
+    fields.unshift({
+      label: format.say('view.replaces'),
+      value: format.say('view.replaces.text', { issue: issue.replaces, reason: issue.reason ?? '' }),
+    });
+  if (plant.retention !== null && issue.retention_due !== undefined)
+    fields.push({ label: format.say('view.due'), value: dueText(format, issue.retention_due) });
   return fields;
 }
 
@@ -27,7 +32,9 @@ export const isUncertaintyStated = (format: Format): boolean => format.record.po
 export function decisionText(format: Format, measurements: readonly RecordMeasurement[]): string {
   const used = new Set(measurements.flatMap((m) => (m.limit_set === null ? [] : [m.limit_set])));
   const sets = format.record.limit_sets.filter((set) => used.has(set.id));
-  const named = new Set(sets.map((set) => `${set.id} (${[set.source, set.edition, set.table].filter((part) => part !== null).join(', ') || set.title})`));
+  const named = new Set(
+    sets.map((set) => `${set.id} (${[set.source, set.edition, set.table].filter((part) => part !== null).join(', ') || set.title})`),
+  );
   return ruleText(format, named.size === 0 ? format.say('view.decision.none') : [...named].join('; '));
 }
 
@@ -37,6 +44,8 @@ export const decisionOfAll = (format: Format): string => ruleText(format, format
 function ruleText(format: Format, sets: string): string {
   const share = format.record.policy.find((line) => line.id === NEAR)?.value ?? 0;
   const percent = format.plain(Math.round(share * 1000) / 10);
-  const uncertainty = isUncertaintyStated(format) ? format.say('view.decision.stated', { percent }) : format.say('view.decision.tolerance', { percent });
+  const uncertainty = isUncertaintyStated(format)
+    ? format.say('view.decision.stated', { percent })
+    : format.say('view.decision.tolerance', { percent });
   return format.say('view.decision', { sets, uncertainty });
 }

@@ -33,7 +33,10 @@ export interface MachineView {
 /** The reading that governs a machine: of its level, else of its condition, else its first with history. */
 export function governingMeasurement(format: Format, machine: RecordMachine): RecordMeasurement | null {
   return (
-    format.measurement(machine.machine, machine.urgency_by) ?? format.measurement(machine.machine, machine.governed_by) ?? format.measurementsOf(machine.machine).find((m) => m.history.value.some((v) => v !== null)) ?? null
+    format.measurement(machine.machine, machine.urgency_by) ??
+    format.measurement(machine.machine, machine.governed_by) ??
+    format.measurementsOf(machine.machine).find((m) => m.history.value.some((v) => v !== null)) ??
+    null
   );
 }
 
@@ -107,7 +110,10 @@ export interface ReadingView {
 export function readingView(format: Format, m: RecordMeasurement): ReadingView {
   const condition = format.condition(m.zone ?? m.ratio_class);
   const held = m.held === null ? '' : format.say('view.last_zone', { zone: format.term(m.held.zone), date: format.date(m.held.date) });
-  const near = m.near_boundary === null ? '' : format.say(isUncertaintyStated(format) ? 'view.near.stated' : 'view.near', { boundary: m.near_boundary });
+  const near =
+    m.near_boundary === null
+      ? ''
+      : format.say(isUncertaintyStated(format) ? 'view.near.stated' : 'view.near', { boundary: m.near_boundary });
   const set = m.limits;
   const boundaries = set === null ? '' : [set.ab, set.bc, set.cd].map((v) => (v === null ? '–' : format.number(v))).join('\u00a0/\u00a0');
   const doubts = m.doubts.map((d) => d.message);
@@ -124,7 +130,10 @@ export function readingView(format: Format, m: RecordMeasurement): ReadingView {
     condition,
     conditionNote: [held, near].filter((t) => t !== '').join('; '),
     change: changeText(format, m),
-    baseline: m.baseline === null ? '' : `${format.number(m.baseline.value)}${m.baseline.provisional ? ` (${format.say('view.provisional')})` : ''}`,
+    baseline:
+      m.baseline === null
+        ? ''
+        : `${format.number(m.baseline.value)}${m.baseline.provisional ? ` (${format.say('view.provisional')})` : ''}`,
     limits: boundaries,
     alarm: set?.alarm == null ? '' : format.number(set.alarm),
     travel: m.travel === null ? '' : format.term(m.travel),

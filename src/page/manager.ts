@@ -34,7 +34,8 @@ export interface ManagerView {
 }
 
 const ORDER: readonly Condition[] = ['D', 'r-D', 'C', 'r-C', 'B', 'r-B', 'A', 'r-A', 'not assessed'];
-const BAD = (condition: Condition | null): number => (condition === null || condition === 'not assessed' ? ORDER.length : ORDER.indexOf(condition));
+const BAD = (condition: Condition | null): number =>
+  condition === null || condition === 'not assessed' ? ORDER.length : ORDER.indexOf(condition);
 
 const MOST_NAMES = 6;
 
@@ -55,7 +56,11 @@ export function managerView(format: Format): ManagerView {
     plant: record.plant.plant,
     survey: record.survey.id,
     headline: headline(format, week.length, month.length, stop.length),
-    groups: [group(format, 'this_week', week, most.week), group(format, 'this_month', month, most.month), group(format, 'next_stop', stop, most.stop)],
+    groups: [
+      group(format, 'this_week', week, most.week),
+      group(format, 'this_month', month, most.month),
+      group(format, 'next_stop', stop, most.stop),
+    ],
     counts: countViews(format),
     coverage: coverageText(format),
     lines: changedLines(format, overrides),
@@ -69,19 +74,33 @@ function headline(format: Format, week: number, month: number, stop: number): st
 
 function group(format: Format, title: 'this_week' | 'this_month' | 'next_stop', actions: readonly ActionView[], most: number): ActionGroup {
   const left = actions.length - most;
-  return { title: format.say(`view.${title}`), actions: actions.slice(0, most), isEmpty: actions.length === 0, more: left > 0 ? format.say('view.more', { n: left }) : '' };
+  return {
+    title: format.say(`view.${title}`),
+    actions: actions.slice(0, most),
+    isEmpty: actions.length === 0,
+    more: left > 0 ? format.say('view.more', { n: left }) : '',
+  };
 }
 
 function countViews(format: Format): CountView[] {
   const { plant_over_time: lines, surveys } = format.record;
   const now = lines[lines.length - 1];
-  const before = lines.slice(0, -1).filter((_, i) => surveys[i]?.kind !== 're-measurement').pop();
+  const before = lines
+    .slice(0, -1)
+    .filter((_, i) => surveys[i]?.kind !== 're-measurement')
+    .pop();
   const count = (line: typeof now, condition: Condition): string => (line === undefined ? '–' : String(line.conditions[condition]));
   return (['D', 'C', 'B', 'A', 'not assessed'] as const).map((zone) => {
     const ratio = zone === 'not assessed' ? zone : (`r-${zone}` as const);
     const hasClass = ratio !== zone;
     return {
-      condition: format.condition(zone), label: format.say(`view.zone.${zone}`), now: count(now, zone), before: count(before, zone), hasClass, classed: format.condition(ratio), classNow: hasClass ? count(now, ratio) : '',
+      condition: format.condition(zone),
+      label: format.say(`view.zone.${zone}`),
+      now: count(now, zone),
+      before: count(before, zone),
+      hasClass,
+      classed: format.condition(ratio),
+      classNow: hasClass ? count(now, ratio) : '',
       classBefore: hasClass ? count(before, ratio) : '',
     };
   });
@@ -94,24 +113,41 @@ function coverageText(format: Format): string {
   const partly = due.filter((c) => c.status === 'partly measured').length;
   const missed = due.filter((c) => c.status === 'not measured').length;
   const excused = due.filter((c) => c.status === 'excused').length;
-  const parts = [['partly', partly], ['excused', excused], ['missed', missed]] as const;
+  const parts = [
+    ['partly', partly],
+    ['excused', excused],
+    ['missed', missed],
+  ] as const;
   const rest = parts.map(([key, n]) => (n > 0 ? format.say(`view.coverage.${key}`, { n }) : '')).join('');
   return format.say('view.coverage', { whole, due: due.length, rest });
 }
 
 const names = (format: Format, list: readonly string[]): string =>
-  list.length > MOST_NAMES ? format.say('view.and_more', { names: list.slice(0, MOST_NAMES).join(', '), n: list.length - MOST_NAMES }) : list.join(', ');
+  list.length > MOST_NAMES
+    ? format.say('view.and_more', { names: list.slice(0, MOST_NAMES).join(', '), n: list.length - MOST_NAMES })
+    : list.join(', ');
 
 function changedLines(format: Format, overrides: readonly RecordMachine[]): { title: string; text: string }[] {
   const { record } = format;
-  const worse = record.machines.filter((m) => m.previous_condition !== null && BAD(m.condition) < BAD(m.previous_condition) && m.measured_of[0] > 0);
+  const worse = record.machines.filter(
+    (m) => m.previous_condition !== null && BAD(m.condition) < BAD(m.previous_condition) && m.measured_of[0] > 0,
+  );
   const fresh = record.actions.filter((a) => a.rank > 0 && a.urgency !== 'watch' && a.times_reported === 1).map((a) => a.machine);
   const verified = record.actions.filter((a) => a.verification?.result === 'verified').map((a) => a.machine);
   const failed = record.actions.filter((a) => a.verification?.result === 'not verified').map((a) => a.machine);
-  const overdue = record.actions.filter((a) => a.overdue_days !== null).map((a) => format.say('view.days', { machine: a.machine, days: a.overdue_days }));
-  const missed = record.coverage.filter((c) => c.status === 'not measured').map((c) => (c.misses_in_a_row > 1 ? format.say('view.in_a_row', { machine: c.machine, times: c.misses_in_a_row }) : c.machine));
+  const overdue = record.actions
+    .filter((a) => a.overdue_days !== null)
+    .map((a) => format.say('view.days', { machine: a.machine, days: a.overdue_days }));
+  const missed = record.coverage
+    .filter((c) => c.status === 'not measured')
+    .map((c) => (c.misses_in_a_row > 1 ? format.say('view.in_a_row', { machine: c.machine, times: c.misses_in_a_row }) : c.machine));
   const limits = record.machines.filter((m) => m.rule === 'M3').map((m) => m.machine);
-  const step = (m: RecordMachine): string => format.say('view.step', { machine: m.machine, from: format.term(m.previous_condition ?? 'not assessed'), to: format.term(m.condition) });
+  const step = (m: RecordMachine): string =>
+    format.say('view.step', {
+      machine: m.machine,
+      from: format.term(m.previous_condition ?? 'not assessed'),
+      to: format.term(m.condition),
+    });
   const lines = [
     ['new', names(format, [...new Set(fresh)])],
     ['worse', names(format, worse.map(step))],
@@ -126,4 +162,5 @@ function changedLines(format: Format, overrides: readonly RecordMachine[]): { ti
 }
 
 /** Settled actions, after the ranked ones. */
-export const settledViews = (format: Format): ActionView[] => format.record.actions.filter((a) => a.rank === 0).map((a) => actionView(format, a));
+export const settledViews = (format: Format): ActionView[] =>
+  format.record.actions.filter((a) => a.rank === 0).map((a) => actionView(format, a));

@@ -54,11 +54,19 @@ export function pictureOf(context: BlockContext, figure: Element, width: number)
   if (chart !== undefined) {
     const drawing = context.chart(chart, key);
     const scale = Math.min(1, width / drawing.width, (context.pageHeight - CAPTION_ROOM) / drawing.height);
-    return { width: drawing.width * scale, height: drawing.height * scale, draw: (pen, node, x, y) => pen.drawing(node, drawing, x, y, scale) };
+    return {
+      width: drawing.width * scale,
+      height: drawing.height * scale,
+      draw: (pen, node, x, y) => pen.drawing(node, drawing, x, y, scale),
+    };
   }
   const image = context.picture(photo !== undefined ? 'photo' : 'logo', photo ?? logo ?? key);
   const scale = Math.min(width / image.width, (photo !== undefined ? PHOTO_HEIGHT : LOGO_HEIGHT) / image.height);
-  return { width: image.width * scale, height: image.height * scale, draw: (pen, node, x, y) => pen.image(node, image, x, y, image.width * scale, image.height * scale) };
+  return {
+    width: image.width * scale,
+    height: image.height * scale,
+    draw: (pen, node, x, y) => pen.image(node, image, x, y, image.width * scale, image.height * scale),
+  };
 }
 
 export function altOf(context: BlockContext, figure: Element): string {

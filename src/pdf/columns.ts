@@ -19,7 +19,9 @@ export function columnWidths(needs: readonly Need[], available: number, padding:
   const natural = needs.map((n) => n.natural + padding);
   const total = natural.reduce((a, b) => a + b, 0);
   if (total <= available) return withRest(needs, natural, available - total);
-  const least = needs.map((n) => (n.kind === 'text' ? Math.min(n.least, available * LONGEST_WORD) : Math.max(n.least, Math.min(n.natural, UNBROKEN))) + padding);
+  const least = needs.map(
+    (n) => (n.kind === 'text' ? Math.min(n.least, available * LONGEST_WORD) : Math.max(n.least, Math.min(n.natural, UNBROKEN))) + padding,
+  );
   const sum = least.reduce((a, b) => a + b, 0);
   if (sum >= available) return shrunk(needs, least, sum - available);
   return shared(natural, least, available - sum);
@@ -27,7 +29,8 @@ export function columnWidths(needs: readonly Need[], available: number, padding:
 
 /** Text columns give way first, the widest before the others, down to a few letters; then all. */
 function shrunk(needs: readonly Need[], least: readonly number[], excess: number): number[] {
-  const levelled = (most: number): number[] => least.map((w, i) => (needs[i]?.kind === 'text' ? Math.min(w, Math.max(most, NARROWEST)) : w));
+  const levelled = (most: number): number[] =>
+    least.map((w, i) => (needs[i]?.kind === 'text' ? Math.min(w, Math.max(most, NARROWEST)) : w));
   const saved = (most: number): number => least.reduce((sum, w, i) => sum + w - (levelled(most)[i] as number), 0);
   let [low, high] = [NARROWEST, Math.max(...least)];
   for (let round = 0; round < 40; round += 1) {

@@ -27,7 +27,14 @@ export interface Reference {
 
 /** The members of pdfkit's document that are used here. */
 interface Base {
-  readonly page: { readonly width: number; readonly height: number; readonly dictionary: Reference; readonly content: Reference; readonly fonts: Record<string, Reference>; readonly xobjects: Record<string, Reference> };
+  readonly page: {
+    readonly width: number;
+    readonly height: number;
+    readonly dictionary: Reference;
+    readonly content: Reference;
+    readonly fonts: Record<string, Reference>;
+    readonly xobjects: Record<string, Reference>;
+  };
   readonly outline: Outline;
   readonly _root: Reference;
   readonly _info: Reference;
@@ -109,7 +116,14 @@ export class PackedDocument extends BaseDocument {
       subset: profile === 'PDF/A-1b' ? 'PDF/A-1b' : 'PDF/A-3b',
       lang: language,
       displayTitle: true,
-      info: { Title: new XmpText(title), Author: new XmpText(author), Subject: new XmpText(subject), Producer: 'swayfolio', Creator: 'swayfolio', CreationDate: dateOf(date) },
+      info: {
+        Title: new XmpText(title),
+        Author: new XmpText(author),
+        Subject: new XmpText(subject),
+        Producer: 'swayfolio',
+        Creator: 'swayfolio',
+        CreationDate: dateOf(date),
+      },
     });
     this.#packs = !isFirst;
     this.outline.options = { expanded: true };
@@ -199,12 +213,27 @@ export class PackedDocument extends BaseDocument {
   }
 
   /** An attached file as PDF/A-3 has it: an associated file of the document, with its day and size. */
-  attach(file: { readonly name: string; readonly mime: string; readonly description: string; readonly bytes: Uint8Array }, date: string): void {
+  attach(
+    file: { readonly name: string; readonly mime: string; readonly description: string; readonly bytes: Uint8Array },
+    date: string,
+  ): void {
     const made = dateOf(date);
-    const stream = this.ref({ Type: 'EmbeddedFile', Subtype: file.mime.replace('/', '#2F'), Filter: 'FlateDecode', Params: { Size: file.bytes.length, CreationDate: made, ModDate: made } });
+    const stream = this.ref({
+      Type: 'EmbeddedFile',
+      Subtype: file.mime.replace('/', '#2F'),
+      Filter: 'FlateDecode',
+      Params: { Size: file.bytes.length, CreationDate: made, ModDate: made },
+    });
     stream.end(deflateSync(file.bytes, { level: ATTACHED_LEVEL }));
     const [name, description] = [new String(file.name), new String(file.description)];
-    const spec = this.ref({ Type: 'Filespec', AFRelationship: file.name === 'record.json' ? 'Source' : 'Data', F: name, UF: name, Desc: description, EF: { F: stream } });
+    const spec = this.ref({
+      Type: 'Filespec',
+      AFRelationship: file.name === 'record.json' ? 'Source' : 'Data',
+      F: name,
+      UF: name,
+      Desc: description,
+      EF: { F: stream },
+    });
     spec.end();
     this.addNamedEmbeddedFile(file.name, spec);
     this.catalogue['AF'] = [...((this.catalogue['AF'] as Reference[] | undefined) ?? []), spec];
@@ -227,7 +256,11 @@ export class PackedDocument extends BaseDocument {
     const count = this._offsets.length + 1;
     const rows = deflate(this.#crossReferences(count));
     const hex = [...this._id].map((b) => b.toString(16).padStart(2, '0')).join('');
-    this.#stream(id, `<< /Type /XRef /Size ${count} /W [1 4 2] /Root ${this._root} /Info ${this._info} /ID [<${hex}> <${hex}>] /Filter /FlateDecode /Length ${rows.length} >>`, rows);
+    this.#stream(
+      id,
+      `<< /Type /XRef /Size ${count} /W [1 4 2] /Root ${this._root} /Info ${this._info} /ID [<${hex}> <${hex}>] /Filter /FlateDecode /Length ${rows.length} >>`,
+      rows,
+    );
     super._write('startxref');
     super._write(`${at}`);
     super._write('%%EOF');

@@ -37,9 +37,31 @@ const RTL = '\\u0590-\\u065f\\u066a-\\u06ef\\u06fa-\\u08ff\\ufb1d-\\ufdff\\ufe70
 const RIGHT_TO_LEFT = new RegExp(`[${RTL}]`);
 /** Runs of a right-to-left word: its letters; words and numbers of the other direction; single signs. */
 const RUNS = new RegExp(`[${RTL}\\u200c\\u200d]+|(?![${RTL}])[\\p{L}\\p{N}](?:(?![${RTL}])[\\p{L}\\p{M}\\p{N}.,:])*(?<![.,:])|.`, 'gsu');
-const MIRRORED: Readonly<Record<string, string>> = { '(': ')', ')': '(', '[': ']', ']': '[', '{': '}', '}': '{', '<': '>', '>': '<', '«': '»', '»': '«' };
+const MIRRORED: Readonly<Record<string, string>> = {
+  '(': ')',
+  ')': '(',
+  '[': ']',
+  ']': '[',
+  '{': '}',
+  '}': '{',
+  '<': '>',
+  '>': '<',
+  '«': '»',
+  '»': '«',
+};
 /** Characters without a form of their own (soft hyphen, zero-width and direction marks, variation selectors): not printed, so they cannot turn a text round. */
-const UNSEEN_RANGES = ['\\u00ad', '\\u034f', '\\u061c', '\\u180b-\\u180f', '\\u200b', '\\u200e\\u200f', '\\u202a-\\u202e', '\\u2060-\\u206f', '\\ufe00-\\ufe0f', '\\ufeff'];
+const UNSEEN_RANGES = [
+  '\\u00ad',
+  '\\u034f',
+  '\\u061c',
+  '\\u180b-\\u180f',
+  '\\u200b',
+  '\\u200e\\u200f',
+  '\\u202a-\\u202e',
+  '\\u2060-\\u206f',
+  '\\ufe00-\\ufe0f',
+  '\\ufeff',
+];
 const UNSEEN = new RegExp(`[${UNSEEN_RANGES.join('')}]|(?:\\udb40[\\udc00-\\uddef])`, 'g');
 const JOINERS = /[\u200c\u200d]/g;
 
@@ -74,7 +96,9 @@ export class Type {
 
   #word(text: string, index: number, bold: boolean): SetWord {
     const rightToLeft = RIGHT_TO_LEFT.test(text);
-    const pieces = rightToLeft ? inVisualRuns(text).flatMap((run) => this.#pieces(run, index, bold)) : this.#pieces(text.replace(JOINERS, ''), index, bold);
+    const pieces = rightToLeft
+      ? inVisualRuns(text).flatMap((run) => this.#pieces(run, index, bold))
+      : this.#pieces(text.replace(JOINERS, ''), index, bold);
     let width = 0;
     for (const p of pieces) width += p.width;
     return { pieces, width, rightToLeft };

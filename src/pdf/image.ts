@@ -101,7 +101,15 @@ function jpegImage(bytes: Uint8Array, name: string): PdfImage {
 }
 
 function imageObject(document: PackedDocument, width: number, height: number, space: string, filter: string, data: Uint8Array): Reference {
-  const ref = document.ref({ Type: 'XObject', Subtype: 'Image', Width: width, Height: height, ColorSpace: space, BitsPerComponent: 8, Filter: filter });
+  const ref = document.ref({
+    Type: 'XObject',
+    Subtype: 'Image',
+    Width: width,
+    Height: height,
+    ColorSpace: space,
+    BitsPerComponent: 8,
+    Filter: filter,
+  });
   ref.end(data);
   return ref;
 }
@@ -124,7 +132,13 @@ interface Png {
 function readPng(bytes: Uint8Array): Png {
   if (bytes.length < 33) throw new ImageError('the PNG is broken');
   const view = new DataView(bytes.buffer, bytes.byteOffset, bytes.length);
-  const [width, height, depth, colour, interlace] = [view.getUint32(16), view.getUint32(20), bytes[24] as number, bytes[25] as number, bytes[28]];
+  const [width, height, depth, colour, interlace] = [
+    view.getUint32(16),
+    view.getUint32(20),
+    bytes[24] as number,
+    bytes[25] as number,
+    bytes[28],
+  ];
   if (DEPTHS[colour]?.includes(depth) !== true || width === 0 || height === 0) throw new ImageError('the PNG is broken');
   if (interlace !== 0) throw new ImageError('the PNG is interlaced');
   const data: Uint8Array[] = [];
@@ -187,7 +201,12 @@ function sampleOf(rows: Uint8Array, row: number, first: number, depth: number): 
   };
 }
 
-function pixelOf({ palette, clear }: Png, sample: (channel: number) => number, colour: number, depth: number): readonly [number, number, number, number] {
+function pixelOf(
+  { palette, clear }: Png,
+  sample: (channel: number) => number,
+  colour: number,
+  depth: number,
+): readonly [number, number, number, number] {
   const first = sample(0);
   if (colour === 3) return [palette[first * 3] ?? 0, palette[first * 3 + 1] ?? 0, palette[first * 3 + 2] ?? 0, clear[first] ?? 255];
   // tRNS holds 16 bits a channel; of those of 16 bits the upper eight are compared, as they are all that is kept.

@@ -112,13 +112,26 @@ function markOf(condition: string, size: number): Drawing {
 }
 
 export function plainText(element: Element): string {
-  return element.children.map((c) => (typeof c === 'string' ? c : plainText(c))).join('').replace(/[ \t\r\n\f]+/g, ' ').trim();
+  return element.children
+    .map((c) => (typeof c === 'string' ? c : plainText(c)))
+    .join('')
+    .replace(/[ \t\r\n\f]+/g, ' ')
+    .trim();
 }
 
 function wordOf(context: InlineContext, text: string, now: Current): Word {
   const set = context.type.set(text, now);
   return {
-    kind: 'word', text, set, width: (set.width * now.size) / 1000, size: now.size, ink: now.ink, rise: now.rise, link: now.link, node: now.node, style: { bold: now.bold, italic: now.italic },
+    kind: 'word',
+    text,
+    set,
+    width: (set.width * now.size) / 1000,
+    size: now.size,
+    ink: now.ink,
+    rise: now.rise,
+    link: now.link,
+    node: now.node,
+    style: { bold: now.bold, italic: now.italic },
   };
 }
 

@@ -25,14 +25,34 @@ const WITH_INLINE = new Set(['h1', 'h2', 'h3', 'p', 'li', 'th', 'td', 'figcaptio
 const EMPTY = new Set(['br', 'col']);
 
 const ATTRIBUTES: Readonly<Record<string, readonly string[]>> = {
-  section: ['id', 'class'], h1: ['id'], h2: ['id'], h3: ['id'], p: ['class', 'id'], col: ['class'], th: ['scope', 'colspan'], td: ['colspan'], tr: ['id'],
-  figure: ['data-chart', 'data-photo', 'data-logo', 'data-key', 'data-alt'], a: ['href'], span: ['data-page', 'data-mark'],
+  section: ['id', 'class'],
+  h1: ['id'],
+  h2: ['id'],
+  h3: ['id'],
+  p: ['class', 'id'],
+  col: ['class'],
+  th: ['scope', 'colspan'],
+  td: ['colspan'],
+  tr: ['id'],
+  figure: ['data-chart', 'data-photo', 'data-logo', 'data-key', 'data-alt'],
+  a: ['href'],
+  span: ['data-page', 'data-mark'],
 };
-const FORMS: Readonly<Record<string, RegExp>> = { scope: /^(row|col)$/, colspan: /^[1-9]\d?$/, 'data-mark': /^((r-)?[A-D]|none)$/, 'data-page': /./ };
-const CLASSES: Readonly<Record<string, readonly string[]>> = { section: ['page', 'keep'], p: ['lead', 'note', 'caution'], col: ['text', 'number', 'mark', 'chart'] };
+const FORMS: Readonly<Record<string, RegExp>> = {
+  scope: /^(row|col)$/,
+  colspan: /^[1-9]\d?$/,
+  'data-mark': /^((r-)?[A-D]|none)$/,
+  'data-page': /./,
+};
+const CLASSES: Readonly<Record<string, readonly string[]>> = {
+  section: ['page', 'keep'],
+  p: ['lead', 'note', 'caution'],
+  col: ['text', 'number', 'mark', 'chart'],
+};
 
 const allowed = (parent: string, tag: string): boolean => {
-  if (WITH_INLINE.has(parent)) return INLINE.has(tag) || (parent === 'td' && tag === 'figure') || ((parent === 'td' || parent === 'li') && tag === 'p');
+  if (WITH_INLINE.has(parent))
+    return INLINE.has(tag) || (parent === 'td' && tag === 'figure') || ((parent === 'td' || parent === 'li') && tag === 'p');
   return parent === 'figure' ? tag === 'figcaption' : (CHILDREN[parent]?.has(tag) ?? false);
 };
 
@@ -77,18 +97,24 @@ export function parseMarkup(template: string, html: string): Element[] {
   parser.write(html);
   parser.end();
   if (open.length !== 1) fail(`<${(open[open.length - 1] as Element).tag}> is never closed`);
-  for (const [, tag = ''] of html.replace(/<!--.*?-->/gs, '').matchAll(/<\/([^\s>]*)/g)) closed.set(tag.toLowerCase(), (closed.get(tag.toLowerCase()) ?? 0) - 1);
+  for (const [, tag = ''] of html.replace(/<!--.*?-->/gs, '').matchAll(/<\/([^\s>]*)/g))
+    closed.set(tag.toLowerCase(), (closed.get(tag.toLowerCase()) ?? 0) - 1);
   for (const [tag, count] of closed) if (count < 0) fail(`</${tag}> closes nothing`);
   return root.children as Element[];
 }
 
 /** A figure in a cell stands alone there and has no caption; it is of one kind. */
 function checkFigures(element: Element, fail: (what: string) => never): void {
-  if (element.tag === 'figure' && ['data-chart', 'data-photo', 'data-logo'].filter((name) => element.attributes[name] !== undefined).length !== 1) fail('<figure> needs one of data-chart, data-photo, data-logo');
+  if (
+    element.tag === 'figure' &&
+    ['data-chart', 'data-photo', 'data-logo'].filter((name) => element.attributes[name] !== undefined).length !== 1
+  )
+    fail('<figure> needs one of data-chart, data-photo, data-logo');
   if (element.tag !== 'td') return;
   const figure = element.children.find((c): c is Element => typeof c !== 'string' && c.tag === 'figure');
   if (figure === undefined) return;
-  if (element.children.some((c) => c !== figure && (typeof c !== 'string' || /[^ \t\r\n\f]/.test(c)))) fail('<figure> stands with something else in a <td>');
+  if (element.children.some((c) => c !== figure && (typeof c !== 'string' || /[^ \t\r\n\f]/.test(c))))
+    fail('<figure> stands with something else in a <td>');
   if (figure.children.length > 0) fail('<figcaption> may not stand in a <td>');
 }
 

@@ -147,13 +147,24 @@ export class Pen {
     this.marked(node, () => this.#run(run, x + shift(), y, page));
   }
 
-  #link(group: { readonly node: Node | null; readonly tokens: readonly Token[] }, y: number, left: number, leftShift: Shift | null, right: number, rightShift: Shift | null): void {
+  #link(
+    group: { readonly node: Node | null; readonly tokens: readonly Token[] },
+    y: number,
+    left: number,
+    leftShift: Shift | null,
+    right: number,
+    rightShift: Shift | null,
+  ): void {
     const word = group.tokens.find((t): t is Word => t.kind === 'word' && t.link !== null);
     if (word === undefined) return;
     const target = word.link as string;
     this.#want(target);
     const [top, bottom] = [y - word.size * 0.85, y + word.size * 0.3];
-    this.#draft(this.page).links.push({ box: () => [left + (leftShift?.() ?? 0), top, right + (rightShift?.() ?? 0), bottom], target, node: group.node });
+    this.#draft(this.page).links.push({
+      box: () => [left + (leftShift?.() ?? 0), top, right + (rightShift?.() ?? 0), bottom],
+      target,
+      node: group.node,
+    });
   }
 
   #want(target: string): void {
@@ -205,11 +216,30 @@ export class Pen {
   }
 
   /** Plain text at a baseline, for headers, footers and labels of drawings. */
-  text(node: Node | null, text: string, x: number, y: number, size: number, ink: string, bold: boolean, anchor: 'start' | 'middle' | 'end' = 'start', page = this.page): void {
+  text(
+    node: Node | null,
+    text: string,
+    x: number,
+    y: number,
+    size: number,
+    ink: string,
+    bold: boolean,
+    anchor: 'start' | 'middle' | 'end' = 'start',
+    page = this.page,
+  ): void {
     this.marked(node, this.textOperators(text, x, y, size, ink, bold, anchor, page), page);
   }
 
-  textOperators(text: string, x: number, y: number, size: number, ink: string, bold: boolean, anchor: 'start' | 'middle' | 'end', page = this.page): string {
+  textOperators(
+    text: string,
+    x: number,
+    y: number,
+    size: number,
+    ink: string,
+    bold: boolean,
+    anchor: 'start' | 'middle' | 'end',
+    page = this.page,
+  ): string {
     const style = { bold, italic: false };
     const set: SetWord = this.#type.set(text, style);
     const width = (set.width * size) / 1000;
@@ -220,7 +250,9 @@ export class Pen {
   /** A drawing scaled by `scale` with its upper left corner at x, y. */
   drawing(node: Node | null, drawing: Drawing, x: number, y: number, scale: number): void {
     let content = `q ${n(scale)} 0 0 ${n(scale)} ${n(x)} ${n(y)} cm\n${toPdfOperators(drawing, this.#inks)}\n`;
-    for (const shape of drawing.shapes) if (shape.kind === 'text') content += `${this.textOperators(shape.text, shape.x, shape.y, shape.size, shape.fill, shape.bold, shape.anchor)}\n`;
+    for (const shape of drawing.shapes)
+      if (shape.kind === 'text')
+        content += `${this.textOperators(shape.text, shape.x, shape.y, shape.size, shape.fill, shape.bold, shape.anchor)}\n`;
     this.marked(node, `${content}Q`);
   }
 

@@ -54,11 +54,21 @@ async function layOut(input: PdfInput, document: PackedDocument): Promise<Job> {
   };
   for (const { template, html } of input.sections) {
     pen.template = template;
-    const context: BlockContext = { type, structure, tagged: input.tags, width: flow.width, pageHeight: flow.pageHeight, template, chart: input.chart, picture };
+    const context: BlockContext = {
+      type,
+      structure,
+      tagged: input.tags,
+      width: flow.width,
+      pageHeight: flow.pageHeight,
+      template,
+      chart: input.chart,
+      picture,
+    };
     for (const section of parseMarkup(template, html)) flow.add(sectionBoxes(context, section, structure.root));
     await turn();
   }
-  for (const [id, template] of pen.wanted) if (!pen.targets.has(id)) throw new Error(`Template ${template}: a link leads to "${id}", which is nowhere in the document.`);
+  for (const [id, template] of pen.wanted)
+    if (!pen.targets.has(id)) throw new Error(`Template ${template}: a link leads to "${id}", which is nowhere in the document.`);
   structure.reservePages(pen.pages.length);
   return { pen, structure, images };
 }
@@ -69,7 +79,10 @@ function readImage(bytes: Uint8Array, key: string, name: string): PdfImage {
     return imageOf(bytes, name);
   } catch (error) {
     if (!(error instanceof ImageError)) throw error;
-    throw new UserError(`The picture ${key} cannot be printed: ${error.message}.`, 'Save it anew as JPEG in colour or grey, or as PNG without interlacing.');
+    throw new UserError(
+      `The picture ${key} cannot be printed: ${error.message}.`,
+      'Save it anew as JPEG in colour or grey, or as PNG without interlacing.',
+    );
   }
 }
 
@@ -99,7 +112,8 @@ async function writePages(input: PdfInput, document: PackedDocument, job: Job): 
     draft.pieces.length = 0;
     if (input.tags) document.page.dictionary.data['StructParents'] = page;
     if (input.tags) document.page.dictionary.data['Tabs'] = 'S';
-    for (const [id, target] of targets[page] ?? []) document.addNamedDestination(names.get(id) as string, 'XYZ', 0, Math.max(0, target.y - 8), null);
+    for (const [id, target] of targets[page] ?? [])
+      document.addNamedDestination(names.get(id) as string, 'XYZ', 0, Math.max(0, target.y - 8), null);
     writeLinks(document, draft.links, names, structure, page, height, input.tags);
     await turn();
   }
@@ -126,7 +140,15 @@ function figureBoxes(structure: Structure, height: number): void {
   visit(structure.root);
 }
 
-function writeLinks(document: PackedDocument, links: readonly PageLink[], names: ReadonlyMap<string, string>, structure: Structure, page: number, height: number, tags: boolean): void {
+function writeLinks(
+  document: PackedDocument,
+  links: readonly PageLink[],
+  names: ReadonlyMap<string, string>,
+  structure: Structure,
+  page: number,
+  height: number,
+  tags: boolean,
+): void {
   const annotations: { toString(): string }[] = [];
   for (const link of links) {
     const id = document.allocate();
@@ -134,7 +156,10 @@ function writeLinks(document: PackedDocument, links: readonly PageLink[], names:
     const rect = [left, height - bottom, right, height - top].map((v) => v.toFixed(2)).join(' ');
     const key = tags && link.node !== null ? ` /StructParent ${structure.link(link.node, page, id)}` : '';
     const contents = link.node?.alt == null ? '' : ` /Contents ${pdfText(link.node.alt)}`;
-    document.pack(id, `<< /Type /Annot /Subtype /Link /Rect [${rect}] /Border [0 0 0] /F 4 /Dest (${names.get(link.target)})${contents}${key} >>`);
+    document.pack(
+      id,
+      `<< /Type /Annot /Subtype /Link /Rect [${rect}] /Border [0 0 0] /F 4 /Dest (${names.get(link.target)})${contents}${key} >>`,
+    );
     annotations.push({ toString: () => `${id} 0 R`, [Symbol.toStringTag]: 'Reference' } as { toString(): string });
   }
   if (annotations.length > 0) document.page.dictionary.data['Annots'] = annotations;

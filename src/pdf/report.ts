@@ -6,7 +6,8 @@ import { inks } from '../brand/brand.ts';
 import type { Assets } from '../page/assets.ts';
 import { rankedViews } from '../page/actions.ts';
 import { Charts } from '../page/charts.ts';
-import { acceptedView, changesView, controlView, coverageView, limitsToSetView, methodView, noticesView, overTimeView, peopleView } from '../page/control.ts';
+import { acceptedView, changesView, controlView, coverageView, limitsToSetView, noticesView, peopleView } from '../page/control.ts';
+import { methodView, overTimeView } from '../page/method.ts';
 import { exceptionView } from '../page/exception.ts';
 import { Format } from '../page/format.ts';
 import { Templates } from '../page/handlebars.ts';
@@ -70,10 +71,22 @@ function* withCautions(record: SwayfolioRecord, sections: Iterable<PdfSection>):
     for (const caution of missing) if (section.html.includes(caution)) missing.delete(caution);
     yield section;
   }
-  if (missing.size > 0) throw new UserError('The templates of this plant leave out the cautions; no report is made without them.', 'Keep {{> shared/cautions}} in templates/pdf/end.hbs.');
+  if (missing.size > 0)
+    throw new UserError(
+      'The templates of this plant leave out the cautions; no report is made without them.',
+      'Keep {{> shared/cautions}} in templates/pdf/end.hbs.',
+    );
 }
 
-const ESCAPES: Readonly<Record<string, string>> = { '&': '&amp;', '<': '&lt;', '>': '&gt;', '"': '&quot;', "'": '&#x27;', '`': '&#x60;', '=': '&#x3D;' };
+const ESCAPES: Readonly<Record<string, string>> = {
+  '&': '&amp;',
+  '<': '&lt;',
+  '>': '&gt;',
+  '"': '&quot;',
+  "'": '&#x27;',
+  '`': '&#x60;',
+  '=': '&#x3D;',
+};
 const escaped = (text: string): string => text.replace(/[&<>"'`=]/g, (c) => ESCAPES[c] as string);
 
 function* sectionsOf(format: Format, charts: Charts, templates: Templates, options: ReportOptions): Iterable<PdfSection> {
@@ -86,17 +99,33 @@ function* sectionsOf(format: Format, charts: Charts, templates: Templates, optio
   if (options.machine !== undefined) {
     const machine = record.machines.find((m) => m.machine === options.machine) as RecordMachine;
     yield render('exception', { ...exceptionView(format, charts, machine), startsPage: true });
-    yield render('end', { ...cautions, coverage: { ...cautions.coverage, due: cautions.coverage.due.filter((c) => c.machine === machine.machine) } });
+    yield render('end', {
+      ...cautions,
+      coverage: { ...cautions.coverage, due: cautions.coverage.due.filter((c) => c.machine === machine.machine) },
+    });
     return;
   }
   const exceptions = record.machines.filter((m) => m.urgency !== null);
-  const ordered = byRank(exceptions, actions.map((a) => a.machine));
+  const ordered = byRank(
+    exceptions,
+    actions.map((a) => a.machine),
+  );
   const bodies = options.brief === true ? [] : ordered;
   const shown = new Set(bodies.map((m) => m.machine));
-  const unlinked = <T extends { readonly machineAnchor: string; readonly machine: string }>(list: readonly T[]) => list.map((v) => (shown.has(v.machine) ? v : { ...v, machineAnchor: 'ranked' }));
+  const unlinked = <T extends { readonly machineAnchor: string; readonly machine: string }>(list: readonly T[]) =>
+    list.map((v) => (shown.has(v.machine) ? v : { ...v, machineAnchor: 'ranked' }));
   if (options.brief !== true) yield render('control', { control: controlView(format), contents: contentsOf(format, bodies.length > 0) });
-  yield render('manager', { manager: { ...manager, groups: manager.groups.map((g) => ({ ...g, actions: unlinked(g.actions) })) }, hasLines: manager.lines.length > 0 });
-  yield render('ranked', { actions: unlinked(actions), hasActions: actions.length > 0, settled, hasSettled: settled.length > 0, notices: noticesView(format) });
+  yield render('manager', {
+    manager: { ...manager, groups: manager.groups.map((g) => ({ ...g, actions: unlinked(g.actions) })) },
+    hasLines: manager.lines.length > 0,
+  });
+  yield render('ranked', {
+    actions: unlinked(actions),
+    hasActions: actions.length > 0,
+    settled,
+    hasSettled: settled.length > 0,
+    notices: noticesView(format),
+  });
   if (options.brief !== true) yield* bodySections(format, charts, render, bodies);
   yield render('end', cautions);
 }
@@ -111,10 +140,14 @@ function* bodySections(format: Format, charts: Charts, render: Render, exception
   let first = true;
   for (const machine of exceptions) {
     const section = render('exception', { ...exceptionView(format, charts, machine), startsPage: first });
-    yield first ? { ...section, html: section.html.replace('<h2', `<h1 id="exceptions">${format.say('view.chapter.exceptions')}</h1><h2`) } : section;
+    yield first
+      ? { ...section, html: section.html.replace('<h2', `<h1 id="exceptions">${format.say('view.chapter.exceptions')}</h1><h2`) }
+      : section;
     first = false;
   }
-  const changed = record.machines.flatMap((m, i) => (m.previous_condition !== null && m.previous_condition !== m.condition ? [machines[i] as object] : []));
+  const changed = record.machines.flatMap((m, i) =>
+    m.previous_condition !== null && m.previous_condition !== m.condition ? [machines[i] as object] : [],
+  );
   yield render('peer-check', { changed, hasChanged: changed.length > 0 });
   yield render('method', { method: methodView(format), people: peopleView(format), limitsToSet: limitsToSetView(format) });
   yield render('data-head', {});
@@ -135,9 +168,16 @@ function byRank(machines: readonly RecordMachine[], order: readonly string[]): R
 /** Chapters of the report; each id is that of a section. */
 function contentsOf(format: Format, hasExceptions: boolean): { id: string; title: string }[] {
   const chapters = [
-    ['manager', 'page.what_to_do_first'], ['ranked', 'page.ranked_actions'], ['coverage', 'view.chapter.coverage'], ['machines', 'page.all_machines'],
+    ['manager', 'page.what_to_do_first'],
+    ['ranked', 'page.ranked_actions'],
+    ['coverage', 'view.chapter.coverage'],
+    ['machines', 'page.all_machines'],
     ...(hasExceptions ? [['exceptions', 'view.chapter.exceptions']] : []),
-    ['peer-check', 'page.peer_check'], ['method', 'page.method_limits_and_policy'], ['people', 'page.people_and_instruments'], ['data', 'page.the_data_of_this_survey'], ['next', 'page.due_next'],
+    ['peer-check', 'page.peer_check'],
+    ['method', 'page.method_limits_and_policy'],
+    ['people', 'page.people_and_instruments'],
+    ['data', 'page.the_data_of_this_survey'],
+    ['next', 'page.due_next'],
     ['cautions', 'page.cautions'],
   ] as const;
   return chapters.map(([id = '', key = '']) => ({ id, title: format.say(key) }));
@@ -146,14 +186,26 @@ function contentsOf(format: Format, hasExceptions: boolean): { id: string; title
 /** The record, and the inputs while they are small enough together; else their hashes in the record must do. */
 function attachmentsOf(format: Format, assets: Assets, recordText: string): PdfAttachment[] {
   const { record } = format;
-  const files: PdfAttachment[] = [{ name: 'record.json', mime: 'application/json', description: format.say('view.pdf.record'), bytes: new TextEncoder().encode(recordText) }];
+  const files: PdfAttachment[] = [
+    {
+      name: 'record.json',
+      mime: 'application/json',
+      description: format.say('view.pdf.record'),
+      bytes: new TextEncoder().encode(recordText),
+    },
+  ];
   const total = record.inputs.reduce((sum, input) => sum + input.bytes, 0);
   if (total > MOST_ATTACHED_BYTES) return files;
   record.inputs.forEach((input, i) => {
     const bytes = assets.input(input.path);
     if (bytes === null) return;
     const end = /\.([a-z0-9]+)$/i.exec(input.path)?.[1]?.toLowerCase() ?? 'bin';
-    files.push({ name: `input-${String(i + 1).padStart(4, '0')}.${end}`, mime: end === 'csv' ? 'text/csv' : 'application/octet-stream', description: format.say('view.pdf.input', { path: input.path }), bytes });
+    files.push({
+      name: `input-${String(i + 1).padStart(4, '0')}.${end}`,
+      mime: end === 'csv' ? 'text/csv' : 'application/octet-stream',
+      description: format.say('view.pdf.input', { path: input.path }),
+      bytes,
+    });
   });
   return files;
 }

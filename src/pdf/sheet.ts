@@ -12,7 +12,15 @@ export interface TextStyle {
   readonly before: number;
 }
 
-const style = (size: number, leading: number, before: number, more: Partial<TextStyle> = {}): TextStyle => ({ size, leading, before, bold: false, italic: false, ink: 'ink', ...more });
+const style = (size: number, leading: number, before: number, more: Partial<TextStyle> = {}): TextStyle => ({
+  size,
+  leading,
+  before,
+  bold: false,
+  italic: false,
+  ink: 'ink',
+  ...more,
+});
 
 export const STYLES = {
   h1: style(20, 24, 26, { bold: true }),

@@ -32,7 +32,8 @@ export interface Row {
   readonly anchor: string | null;
 }
 
-export const elements = (parent: Element, tag: string): Element[] => parent.children.filter((c): c is Element => typeof c !== 'string' && c.tag === tag);
+export const elements = (parent: Element, tag: string): Element[] =>
+  parent.children.filter((c): c is Element => typeof c !== 'string' && c.tag === tag);
 
 export function rowsOf(context: BlockContext, part: Element, parent: Node, kinds: readonly Kind[], isHead: boolean): Row[] {
   return elements(part, 'tr').map((row) => {
@@ -51,15 +52,34 @@ export function rowsOf(context: BlockContext, part: Element, parent: Node, kinds
 function cellOf(context: BlockContext, cell: Element, row: Node, column: number, kind: Kind, isHead: boolean): Cell {
   const span = Number(cell.attributes['colspan'] ?? 1);
   const isTh = cell.tag === 'th';
-  const node = context.structure.node(isTh ? 'TH' : 'TD', row, { ...(isTh ? { scope: cell.attributes['scope'] === 'row' ? ('Row' as const) : ('Column' as const) } : {}), colspan: span });
+  const node = context.structure.node(isTh ? 'TH' : 'TD', row, {
+    ...(isTh ? { scope: cell.attributes['scope'] === 'row' ? ('Row' as const) : ('Column' as const) } : {}),
+    colspan: span,
+  });
   const figure = cell.children.find((c): c is Element => typeof c !== 'string' && c.tag === 'figure');
   if (figure !== undefined) {
     const figureNode = context.structure.node('Figure', node, { alt: altOf(context, figure) });
-    return { tokens: [], node, column, span, figure: { element: figure, picture: pictureOf(context, figure, WIDEST_FIGURE), node: figureNode }, point: null, isHead };
+    return {
+      tokens: [],
+      node,
+      column,
+      span,
+      figure: { element: figure, picture: pictureOf(context, figure, WIDEST_FIGURE), node: figureNode },
+      point: null,
+      isHead,
+    };
   }
   const style = isHead ? STYLES.th : isTh ? { ...STYLES.td, bold: true } : STYLES.td;
   const tokens = tokensOf(context, cell.children, style, node);
-  return { tokens, node, column, span, figure: null, point: kind === 'number' && !isHead && span === 1 ? decimalParts(context, tokens) : null, isHead };
+  return {
+    tokens,
+    node,
+    column,
+    span,
+    figure: null,
+    point: kind === 'number' && !isHead && span === 1 ? decimalParts(context, tokens) : null,
+    isHead,
+  };
 }
 
 /** Signs before a number and its digits before the decimal point, thousands apart by a narrow or no-break blank. */

@@ -22,13 +22,21 @@ export function tableBoxes(context: BlockContext, table: Element, parent: Node):
   const node = context.structure.node('Table', parent);
   const head = elements(table, 'thead').flatMap((part) => rowsOf(context, part, context.structure.node('THead', node), kinds, true));
   const body = elements(table, 'tbody').flatMap((part) => rowsOf(context, part, context.structure.node('TBody', node), kinds, false));
-  const columns = [...head, ...body].reduce((most, r) => Math.max(most, r.cells.reduce((sum, c) => sum + c.span, 0)), kinds.length);
+  const columns = [...head, ...body].reduce(
+    (most, r) =>
+      Math.max(
+        most,
+        r.cells.reduce((sum, c) => sum + c.span, 0),
+      ),
+    kinds.length,
+  );
   const all = Array.from({ length: columns }, (_, i) => kinds[i] ?? 'text');
   const grid = gridOf(context, all, [...head, ...body]);
   const headRows = head.map((row) => laidRow(context, grid, row));
   const splitFrom = context.pageHeight * SPLIT_FROM;
   const headHeight = headRows.reduce((sum, r) => sum + r.height, 0);
-  const repeat = headRows.length === 0 ? null : { height: headHeight, draw: (pen: Pen, x: number, y: number) => drawRows(pen, headRows, x, y, true) };
+  const repeat =
+    headRows.length === 0 ? null : { height: headHeight, draw: (pen: Pen, x: number, y: number) => drawRows(pen, headRows, x, y, true) };
   const boxes: Box[] = headRows.map((row, i) => rowBox(row, i === 0 ? 8 : 0, splitFrom, null));
   body.forEach((row, i) => {
     const box = rowBox(laidRow(context, grid, row), boxes.length === 0 ? 8 : 0, splitFrom, repeat);
@@ -68,10 +76,21 @@ function laidRow(context: BlockContext, grid: Grid, row: Row): LaidRow {
     const align = kind === 'number' ? (cell.point === null ? 'right' : 'point') : 'left';
     const room = width - PAD.x * 2;
     const lines = cell.figure === null ? linesOf(context, cell.tokens, room) : [];
-    const figure = cell.figure !== null && cell.figure.picture.width > room ? { ...cell.figure, picture: pictureOf(context, cell.figure.element, room) } : cell.figure;
+    const figure =
+      cell.figure !== null && cell.figure.picture.width > room
+        ? { ...cell.figure, picture: pictureOf(context, cell.figure.element, room) }
+        : cell.figure;
     const pointX = x + width - PAD.x - (grid.afters[cell.column] as number);
     const numeralsEnd = pointX + (grid.digits[cell.column] as number);
-    return { cell: figure === cell.figure ? cell : { ...cell, figure }, x, width, lines, align: lines.length > 1 && align === 'point' ? 'right' : align, pointX, numeralsEnd };
+    return {
+      cell: figure === cell.figure ? cell : { ...cell, figure },
+      x,
+      width,
+      lines,
+      align: lines.length > 1 && align === 'point' ? 'right' : align,
+      pointX,
+      numeralsEnd,
+    };
   });
   const width = grid.widths.reduce((a, b) => a + b, 0);
   return { cells, isHead: row.isHead, leading, width, height: heightOf(cells, leading) };
@@ -95,7 +114,11 @@ function rowBox(row: LaidRow, before: number, splitFrom: number, header: Box['he
       const count = Math.min(Math.floor((room - PAD.y * 2 + 0.01) / row.leading), tallest - LEAST_LINES);
       if (count < LEAST_LINES || least > room + 0.01) return null;
       const part = (from: number, to: number, withFigures: boolean): LaidRow => {
-        const cells = row.cells.map((c) => ({ ...c, lines: c.lines.slice(from, to), cell: withFigures ? c.cell : { ...c.cell, figure: null } }));
+        const cells = row.cells.map((c) => ({
+          ...c,
+          lines: c.lines.slice(from, to),
+          cell: withFigures ? c.cell : { ...c.cell, figure: null },
+        }));
         return { ...row, cells, height: heightOf(cells, row.leading) };
       };
       return [rowBox(part(0, count, true), before, splitFrom, header), rowBox(part(count, tallest, false), 0, splitFrom, header)];

@@ -4,7 +4,27 @@
  */
 import { type PackedDocument, pdfText, type Reference } from './document.ts';
 
-export type Role = 'Document' | 'Sect' | 'H1' | 'H2' | 'H3' | 'P' | 'L' | 'LI' | 'LBody' | 'Lbl' | 'Table' | 'THead' | 'TBody' | 'TR' | 'TH' | 'TD' | 'Figure' | 'Caption' | 'Link' | 'Span';
+export type Role =
+  | 'Document'
+  | 'Sect'
+  | 'H1'
+  | 'H2'
+  | 'H3'
+  | 'P'
+  | 'L'
+  | 'LI'
+  | 'LBody'
+  | 'Lbl'
+  | 'Table'
+  | 'THead'
+  | 'TBody'
+  | 'TR'
+  | 'TH'
+  | 'TD'
+  | 'Figure'
+  | 'Caption'
+  | 'Link'
+  | 'Span';
 
 export interface Node {
   readonly role: Role;
@@ -40,8 +60,21 @@ export class Structure {
     this.root = this.node('Document', null);
   }
 
-  node(role: Role, parent: Node | null, more: { readonly alt?: string; readonly scope?: 'Row' | 'Column'; readonly colspan?: number } = {}): Node {
-    const node: Node = { role, parent, kids: [], alt: more.alt ?? null, scope: more.scope ?? null, colspan: more.colspan ?? 1, box: null, id: 0 };
+  node(
+    role: Role,
+    parent: Node | null,
+    more: { readonly alt?: string; readonly scope?: 'Row' | 'Column'; readonly colspan?: number } = {},
+  ): Node {
+    const node: Node = {
+      role,
+      parent,
+      kids: [],
+      alt: more.alt ?? null,
+      scope: more.scope ?? null,
+      colspan: more.colspan ?? 1,
+      box: null,
+      id: 0,
+    };
     parent?.kids.push(node);
     return node;
   }
@@ -80,9 +113,15 @@ export class Structure {
     number(this.root);
     for (const node of nodes) document.pack(node.id, elementText(node, treeRoot, pages));
     const parents = document.allocate();
-    const keyed = [...this.#pages.map((marked, page) => `${page} [${marked.map((n) => `${n.id} 0 R`).join(' ')}]`), ...this.#links.map((n, i) => `${this.#pages.length + i + 1} ${n.id} 0 R`)];
+    const keyed = [
+      ...this.#pages.map((marked, page) => `${page} [${marked.map((n) => `${n.id} 0 R`).join(' ')}]`),
+      ...this.#links.map((n, i) => `${this.#pages.length + i + 1} ${n.id} 0 R`),
+    ];
     document.pack(parents, `<< /Nums [${keyed.join('\n')}] >>`);
-    document.pack(treeRoot, `<< /Type /StructTreeRoot /K ${this.root.id} 0 R /ParentTree ${parents} 0 R /ParentTreeNextKey ${this.#pages.length + this.#links.length + 1} >>`);
+    document.pack(
+      treeRoot,
+      `<< /Type /StructTreeRoot /K ${this.root.id} 0 R /ParentTree ${parents} 0 R /ParentTreeNextKey ${this.#pages.length + this.#links.length + 1} >>`,
+    );
     return treeRoot;
   }
 }
@@ -108,7 +147,9 @@ function elementText(node: Node, treeRoot: number, pages: readonly Reference[]):
 function kidText(kid: Node['kids'][number], pages: readonly Reference[]): string {
   if ('role' in kid) return `${kid.id} 0 R`;
   const page = pages[kid.page] as Reference;
-  return 'mcid' in kid ? `<< /Type /MCR /Pg ${page.id} 0 R /MCID ${kid.mcid} >>` : `<< /Type /OBJR /Pg ${page.id} 0 R /Obj ${kid.annotation} 0 R >>`;
+  return 'mcid' in kid
+    ? `<< /Type /MCR /Pg ${page.id} 0 R /MCID ${kid.mcid} >>`
+    : `<< /Type /OBJR /Pg ${page.id} 0 R /Obj ${kid.annotation} 0 R >>`;
 }
 
 function attributesText(node: Node): string {

@@ -53,7 +53,11 @@ export const POLICY_DEFAULTS = {
   '5.rising.sag': own(2, 'dB', 'a real trend is rising only while the reading is not more than this below the last one'),
   '5.step.factor': own(1.6, '×', 'ratio to the baseline from which travel is step'),
   '5.step.median': own(1.35, '×', 'ratio of the median of the last three to the baseline from which travel is step'),
-  '5.step.scatter': own(0.1, 'neper', 'scatter of repeated readings taken at least, where steps are parted from it (levels by least squares, Schwarz criterion)'),
+  '5.step.scatter': own(
+    0.1,
+    'neper',
+    'scatter of repeated readings taken at least, where steps are parted from it (levels by least squares, Schwarz criterion)',
+  ),
   '5.falling.factor': own(1.6, '×', 'ratio down since last time from which travel is falling or held'),
   '5.plateau.count': own(6, 'readings', 'readings needed to call a plateau'),
   '5.plateau.rise': own(2, 'dB', 'the two before the last stand at least this over the three before them'),

@@ -3,8 +3,24 @@ export const CRITICALITIES = ['critical', 'essential', 'general'] as const;
 export type Criticality = (typeof CRITICALITIES)[number];
 
 export const KINDS = [
-  'motor', 'generator', 'fan', 'pump', 'displacement pump', 'compressor', 'screw compressor', 'lobe blower', 'vacuum pump',
-  'reciprocating', 'gearbox', 'steam turbine', 'gas turbine', 'hydro turbine', 'mixer', 'roll', 'screen', 'other',
+  'motor',
+  'generator',
+  'fan',
+  'pump',
+  'displacement pump',
+  'compressor',
+  'screw compressor',
+  'lobe blower',
+  'vacuum pump',
+  'reciprocating',
+  'gearbox',
+  'steam turbine',
+  'gas turbine',
+  'hydro turbine',
+  'mixer',
+  'roll',
+  'screen',
+  'other',
 ] as const;
 export type Kind = (typeof KINDS)[number];
 
@@ -16,7 +32,16 @@ export type Direction = (typeof DIRECTIONS)[number];
 
 /** `missing` is never typed: it is what coverage calls a reading that was due and is not there. */
 export const STATUSES = [
-  'measured', 'stopped', 'no access', 'unsafe', 'guard fitted', 'under work', 'locked out', 'not due', 'faulty', 'over range',
+  'measured',
+  'stopped',
+  'no access',
+  'unsafe',
+  'guard fitted',
+  'under work',
+  'locked out',
+  'not due',
+  'faulty',
+  'over range',
 ] as const;
 export type Status = (typeof STATUSES)[number];
 

@@ -11,8 +11,14 @@ const DATE = /^\d{4}-\d{2}-\d{2}$/;
 const isText = (v: unknown): boolean => typeof v === 'string';
 const isNumber = (v: unknown): boolean => typeof v === 'number' && Number.isFinite(v);
 const isObject = (v: unknown): v is Fields => typeof v === 'object' && v !== null && !Array.isArray(v);
-const isListOf = (of: (v: unknown) => boolean) => (v: unknown): boolean => Array.isArray(v) && v.every(of);
-const isMapOf = (of: (v: unknown) => boolean) => (v: unknown): boolean => isObject(v) && Object.values(v).every(of);
+const isListOf =
+  (of: (v: unknown) => boolean) =>
+  (v: unknown): boolean =>
+    Array.isArray(v) && v.every(of);
+const isMapOf =
+  (of: (v: unknown) => boolean) =>
+  (v: unknown): boolean =>
+    isObject(v) && Object.values(v).every(of);
 const isFact = (v: unknown): boolean => v === null || typeof v !== 'object' || isListOf((item) => isText(item) || isNumber(item))(v);
 
 /** Test and name of each plain kind. */
@@ -60,9 +66,12 @@ function fieldFault(value: unknown, field: Field, parent: string): string | null
     const words = WORDS[field.of] ?? [];
     return words.includes(value as string) ? null : told(value, field, parent, words.join(', '));
   }
-  if (field.name === 'forecast' && isObject(value)) return objectFault(value, value['none'] === undefined ? FORECAST_DATES : FORECAST_NONE, path);
-  if (field.kind === 'o') return value === undefined ? told(value, field, parent, 'an object') : objectFault(value, OBJECTS[field.of] ?? [], path);
-  if (field.kind === 'U') return isObject(value) ? firstFault(Object.entries(value), UNIT_FIELDS, path) : told(value, field, parent, 'units by quantity');
+  if (field.name === 'forecast' && isObject(value))
+    return objectFault(value, value['none'] === undefined ? FORECAST_DATES : FORECAST_NONE, path);
+  if (field.kind === 'o')
+    return value === undefined ? told(value, field, parent, 'an object') : objectFault(value, OBJECTS[field.of] ?? [], path);
+  if (field.kind === 'U')
+    return isObject(value) ? firstFault(Object.entries(value), UNIT_FIELDS, path) : told(value, field, parent, 'units by quantity');
   if (!Array.isArray(value)) return told(value, field, parent, 'a list');
   return firstFault(value.entries(), OBJECTS[field.of] ?? [], path);
 }

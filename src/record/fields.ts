@@ -140,4 +140,6 @@ export const fieldsOf = (line: string): readonly Field[] => line.split(/\s+/).ma
 
 export const RECORD_FIELDS: readonly Field[] = fieldsOf(TOP);
 /** The parsed table. */
-export const OBJECTS: Readonly<Record<string, readonly Field[]>> = Object.fromEntries(Object.entries(FIELDS).map(([name, line]) => [name, fieldsOf(line)]));
+export const OBJECTS: Readonly<Record<string, readonly Field[]>> = Object.fromEntries(
+  Object.entries(FIELDS).map(([name, line]) => [name, fieldsOf(line)]),
+);

@@ -11,7 +11,13 @@ export interface Limits {
   readonly alarm: number | null;
   readonly trip: number | null;
   /** The set's own numbers. */
-  readonly of: { readonly ab: number | null; readonly bc: number | null; readonly cd: number | null; readonly unit: string; readonly detection: Detection | null };
+  readonly of: {
+    readonly ab: number | null;
+    readonly bc: number | null;
+    readonly cd: number | null;
+    readonly unit: string;
+    readonly detection: Detection | null;
+  };
   /** exact: unit conversion only; sine: an r.m.s. set on a calculated peak. */
   readonly by: 'exact' | 'sine';
 }
@@ -41,7 +47,13 @@ export interface Trend {
 }
 
 export type Forecast =
-  | { readonly boundary: string; readonly earliest: DateText; readonly likely: DateText | null; readonly latest: DateText | null; readonly range: number }
+  | {
+      readonly boundary: string;
+      readonly earliest: DateText;
+      readonly likely: DateText | null;
+      readonly latest: DateText | null;
+      readonly range: number;
+    }
   | { readonly none: string };
 
 /** Columns aligned to `surveys[]`; a null value is no number at that survey. `why` tells, by index, why a reading is not comparable or absent. */

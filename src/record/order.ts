@@ -11,7 +11,9 @@ const names = (fields: readonly Field[]): Order => fields.map((f) => f.name);
 export const RECORD: Order = names(RECORD_FIELDS);
 
 /** Order by the name of the key under which an object, or each object of a list, stands. */
-export const ORDERS: Readonly<Record<string, Order>> = Object.fromEntries(Object.entries(OBJECTS).map(([name, fields]) => [name, names(fields)]));
+export const ORDERS: Readonly<Record<string, Order>> = Object.fromEntries(
+  Object.entries(OBJECTS).map(([name, fields]) => [name, names(fields)]),
+);
 
 /** Maps whose keys are data (machine ids, quantities, facts, survey indices); written in the order of their keys by code unit. */
 export const MAPS: ReadonlySet<string> = new Set(['conditions', 'units', 'facts', 'why', 'sisters']);

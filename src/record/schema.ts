@@ -13,13 +13,18 @@ const FACT: Schema = { type: ['string', 'number', 'boolean', 'null', 'array'], i
 const mapOf = (values: Schema): Schema => ({ type: 'object', additionalProperties: values });
 
 const PLAIN: Readonly<Record<string, Schema>> = {
-  s: TEXT, n: { type: 'number' }, i: { type: 'integer' }, b: { type: 'boolean' },
+  s: TEXT,
+  n: { type: 'number' },
+  i: { type: 'integer' },
+  b: { type: 'boolean' },
   d: { type: 'string', pattern: '^\\d{4}-\\d{2}-\\d{2}$' },
   S: { type: 'array', items: TEXT },
   V: { type: 'array', items: { type: ['number', 'null'] } },
   T: { type: 'array', items: { type: ['string', 'null'] } },
   P: { type: 'array', items: { type: 'integer' }, minItems: 2, maxItems: 2 },
-  F: mapOf(FACT), C: mapOf({ enum: WORDS['condition'] }), W: mapOf(TEXT),
+  F: mapOf(FACT),
+  C: mapOf({ enum: WORDS['condition'] }),
+  W: mapOf(TEXT),
   I: { type: 'object', propertyNames: { enum: WORDS['condition'] }, additionalProperties: { type: 'integer' } },
 };
 
@@ -46,7 +51,9 @@ function objectSchema(fields: readonly Field[]): Schema {
 /** A forecast is dates, all of them, or the reason why there are none. */
 function forecastSchema(fields: readonly Field[]): Schema {
   const whole = fields.map((field) => ({ ...field, orAbsent: false }));
-  return { anyOf: [objectSchema(whole.filter((field) => field.name !== 'none')), objectSchema(whole.filter((field) => field.name === 'none'))] };
+  return {
+    anyOf: [objectSchema(whole.filter((field) => field.name !== 'none')), objectSchema(whole.filter((field) => field.name === 'none'))],
+  };
 }
 
 /** What the table cannot say of the keys at the top. */
@@ -63,6 +70,8 @@ export function recordJsonSchema(): Schema {
     title: 'record.json of a swayfolio report',
     ...top,
     properties: { ...(top['properties'] as Schema), ...AT_TOP },
-    $defs: Object.fromEntries(Object.entries(OBJECTS).map(([name, fields]) => [name, name === 'forecast' ? forecastSchema(fields) : objectSchema(fields)])),
+    $defs: Object.fromEntries(
+      Object.entries(OBJECTS).map(([name, fields]) => [name, name === 'forecast' ? forecastSchema(fields) : objectSchema(fields)]),
+    ),
   };
 }

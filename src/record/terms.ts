@@ -12,10 +12,19 @@ export type Status = TypedStatus | 'missing';
 /** Dates are `YYYY-MM-DD`. */
 export type DateText = string;
 
-
 export const DOUBT_KINDS = [
-  'unit-factor', 'impossible', 'swapped-points', 'swapped-machines', 'identical', 'near-zero', 'all-down', 'unexplained-fall',
-  'retake-differs', 'date', 'calibration', 'qualification',
+  'unit-factor',
+  'impossible',
+  'swapped-points',
+  'swapped-machines',
+  'identical',
+  'near-zero',
+  'all-down',
+  'unexplained-fall',
+  'retake-differs',
+  'date',
+  'calibration',
+  'qualification',
 ] as const;
 export type DoubtKind = (typeof DOUBT_KINDS)[number];
 

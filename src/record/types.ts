@@ -51,7 +51,13 @@ export interface RecordPlant {
   readonly frequency_unit: 'Hz' | 'CPM';
   readonly next_stops: readonly { readonly date: DateText; readonly area: string | null }[];
   /** Ids that were changed, and since when; absent in early records. */
-  readonly renames?: readonly { readonly kind: 'machine' | 'component' | 'point'; readonly machine: string | null; readonly old: string; readonly new: string; readonly since: DateText | null }[];
+  readonly renames?: readonly {
+    readonly kind: 'machine' | 'component' | 'point';
+    readonly machine: string | null;
+    readonly old: string;
+    readonly new: string;
+    readonly since: DateText | null;
+  }[];
   readonly retention: string | null;
   readonly distribution: readonly string[];
 }
@@ -106,8 +112,18 @@ export interface RecordSurvey {
   readonly issue_date: DateText | null;
   readonly reviewed_by: string | null;
   readonly approved_by: string | null;
-  readonly notified: readonly { readonly who: string; readonly when: string | null; readonly how: string | null; readonly about: string | null }[];
-  readonly photos: readonly { readonly path: string; readonly machine: string; readonly point: string | null; readonly caption: string | null }[];
+  readonly notified: readonly {
+    readonly who: string;
+    readonly when: string | null;
+    readonly how: string | null;
+    readonly about: string | null;
+  }[];
+  readonly photos: readonly {
+    readonly path: string;
+    readonly machine: string;
+    readonly point: string | null;
+    readonly caption: string | null;
+  }[];
 }
 
 /** Any survey up to this one; history columns are aligned to the list of them. */

@@ -41,7 +41,9 @@ function numberText(value: number, path: string, key: string): string {
 function mapText(value: Fields, key: string, path: string): string {
   const order = MAP_VALUES[key];
   const item = (v: unknown, name: string): string =>
-    order !== undefined && v !== null && typeof v === 'object' ? fieldsText(v as Fields, order, `${path}.${name}`) : text(v, name, `${path}.${name}`);
+    order !== undefined && v !== null && typeof v === 'object'
+      ? fieldsText(v as Fields, order, `${path}.${name}`)
+      : text(v, name, `${path}.${name}`);
   const keys = Object.keys(value).sort((a, b) => (a < b ? -1 : 1));
   return `{${keys.map((name) => `${JSON.stringify(name)}:${item(value[name], name)}`).join(',')}}`;
 }

@@ -26,12 +26,18 @@ export function loadAssets(plantFolder: string | null): Assets {
   return {
     templates: loadTemplates(plantFolder),
     pdfFonts: {
-      regular: sans('Regular'), bold: sans('Bold'), italic: sans('It'), boldItalic: sans('BoldIt'),
-      fallback: dejavu(''), fallbackBold: dejavu('-Bold'),
+      regular: sans('Regular'),
+      bold: sans('Bold'),
+      italic: sans('It'),
+      boldItalic: sans('BoldIt'),
+      fallback: dejavu(''),
+      fallbackBold: dejavu('-Bold'),
     },
     siteFonts: new Map([
-      ['source-sans-regular.woff2', web('Regular')], ['source-sans-bold.woff2', web('Bold')],
-      ['source-sans-italic.woff2', web('It')], ['source-sans-bold-italic.woff2', web('BoldIt')],
+      ['source-sans-regular.woff2', web('Regular')],
+      ['source-sans-bold.woff2', web('Bold')],
+      ['source-sans-italic.woff2', web('It')],
+      ['source-sans-bold-italic.woff2', web('BoldIt')],
     ]),
     picture: below,
     input: below,
@@ -45,11 +51,15 @@ function loadTemplates(plantFolder: string | null): ReadonlyMap<string, string> 
   if (theirs === null) return templates;
   for (const path of templatePaths(theirs)) {
     if (!templates.has(path)) {
-      throw new UserError(`templates/${path} overrides nothing: swayfolio has no template of that name.`, `It has ${[...templates.keys()].join(', ')}.`);
+      throw new UserError(
+        `templates/${path} overrides nothing: swayfolio has no template of that name.`,
+        `It has ${[...templates.keys()].join(', ')}.`,
+      );
     }
     templates.set(path, readFileSync(join(theirs, path), 'utf8'));
   }
   return templates;
 }
 
-const templatePaths = (folder: string): readonly string[] => realShell.list(folder).files.filter((path) => !path.startsWith('words/') && !path.endsWith('.md'));
+const templatePaths = (folder: string): readonly string[] =>
+  realShell.list(folder).files.filter((path) => !path.startsWith('words/') && !path.endsWith('.md'));

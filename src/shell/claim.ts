@@ -5,7 +5,20 @@
  * dead claim one alone can make that folder, and one that comes late makes a folder that nobody looks at. The last of the
  * row holds the claim.
  */
-import { chmodSync, closeSync, existsSync, fsyncSync, mkdirSync, openSync, readdirSync, readFileSync, renameSync, rmSync, statSync, writeFileSync } from 'node:fs';
+import {
+  chmodSync,
+  closeSync,
+  existsSync,
+  fsyncSync,
+  mkdirSync,
+  openSync,
+  readdirSync,
+  readFileSync,
+  renameSync,
+  rmSync,
+  statSync,
+  writeFileSync,
+} from 'node:fs';
 import { hostname } from 'node:os';
 import { join } from 'node:path';
 import { UserError } from './types.ts';
@@ -89,7 +102,10 @@ function ownerOf(claim: string): string | null {
 }
 
 const taken = (folder: string, owner: Owner | null): UserError =>
-  new UserError(`Another swayfolio${owner === null ? '' : ` (process ${Number.parseInt(owner.token, 10)})`} is issuing into ${folder}.`, 'Wait until it is done, then run again; nothing was issued.');
+  new UserError(
+    `Another swayfolio${owner === null ? '' : ` (process ${Number.parseInt(owner.token, 10)})`} is issuing into ${folder}.`,
+    'Wait until it is done, then run again; nothing was issued.',
+  );
 
 function isAtWork({ folder, token }: Owner): boolean {
   try {

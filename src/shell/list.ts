@@ -46,7 +46,10 @@ export function listEverything(folder: string): { files: string[]; others: strin
 
 export function foldersIn(folder: string): string[] {
   if (!existsSync(folder)) return [];
-  return readdirSync(folder, { withFileTypes: true }).filter((entry) => entry.isDirectory()).map((entry) => entry.name).sort(byCodeUnit);
+  return readdirSync(folder, { withFileTypes: true })
+    .filter((entry) => entry.isDirectory())
+    .map((entry) => entry.name)
+    .sort(byCodeUnit);
 }
 
 /** A file, or a link to a file of this same folder; pipes, sockets and links to folders are neither (a loop, or a wait without end). */

@@ -28,7 +28,11 @@ function refuseForeign(path: string, out: string): void {
     throw new UserError(`The output folder ${out} is a file.`, 'Name a folder that is new, empty, or made by swayfolio.', 2);
   }
   if (!existsSync(path) || existsSync(join(path, MARKER)) || readdirSync(path).length === 0) return;
-  throw new UserError(`The output folder ${out} holds files that swayfolio did not make.`, 'Name one that is new, empty, or made by swayfolio; nothing was written.', 2);
+  throw new UserError(
+    `The output folder ${out} holds files that swayfolio did not make.`,
+    'Name one that is new, empty, or made by swayfolio; nothing was written.',
+    2,
+  );
 }
 
 export function replaceFolder(out: string, files: Iterable<OutputFile>): void {
@@ -72,7 +76,8 @@ export function replaceFile(path: string, bytes: Uint8Array): void {
 export function createFolder(out: string, files: Iterable<OutputFile>): void {
   const isNew = !existsSync(out);
   if (!isNew && !statSync(out).isDirectory()) throw new UserError(`${out} is a file.`, 'Name a folder that is new or empty.', 2);
-  if (!isNew && readdirSync(out).length > 0) throw new UserError(`The folder ${out} is not empty.`, 'Name a folder that is new or empty; nothing was written.', 2);
+  if (!isNew && readdirSync(out).length > 0)
+    throw new UserError(`The folder ${out} is not empty.`, 'Name a folder that is new or empty; nothing was written.', 2);
   try {
     mkdirSync(out, { recursive: true });
     writeInto(out, files);
@@ -109,7 +114,10 @@ function putRight(path: string): void {
     if (match === null) continue;
     const leftOver = join(parent, name);
     if (isAtWork(Number(match[2]), leftOver)) {
-      throw new UserError(`Another swayfolio (process ${match[2]}) is writing to ${path}.`, `Wait for it; if it is not so, remove ${leftOver}.`);
+      throw new UserError(
+        `Another swayfolio (process ${match[2]}) is writing to ${path}.`,
+        `Wait for it; if it is not so, remove ${leftOver}.`,
+      );
     }
     if (match[1] === 'old' && !existsSync(path)) renameSync(leftOver, path);
     else if (existsSync(join(leftOver, MARKER)) || readdirSync(leftOver).length === 0) removeMade(leftOver);
@@ -128,9 +136,16 @@ function isAtWork(pid: number, leftOver: string): boolean {
 }
 
 const DISK_TROUBLE: Readonly<Record<string, string>> = {
-  EACCES: 'the folder may not be written to', EPERM: 'the folder may not be written to', EROFS: 'the disk is read-only',
-  ENOSPC: 'the disk is full', EDQUOT: 'the disk quota is used up', ENAMETOOLONG: 'the name is too long', ENOTDIR: 'a part of the path is a file',
-  EEXIST: 'a part of the path is a file', ENOTEMPTY: 'another run wrote it meanwhile', ENOENT: 'another run took it away meanwhile',
+  EACCES: 'the folder may not be written to',
+  EPERM: 'the folder may not be written to',
+  EROFS: 'the disk is read-only',
+  ENOSPC: 'the disk is full',
+  EDQUOT: 'the disk quota is used up',
+  ENAMETOOLONG: 'the name is too long',
+  ENOTDIR: 'a part of the path is a file',
+  EEXIST: 'a part of the path is a file',
+  ENOTEMPTY: 'another run wrote it meanwhile',
+  ENOENT: 'another run took it away meanwhile',
 };
 
 export function asUserError(error: unknown, out: string, hint = 'Nothing was changed; name another folder by --out.'): unknown {

@@ -7,8 +7,14 @@ import { claimFolder, createFolder, replaceFile, replaceFolder } from './replace
 import { type Shell, UserError } from './types.ts';
 
 const WHY: Readonly<Record<string, string>> = {
-  ENOENT: 'it does not exist', EACCES: 'reading it is not permitted', EPERM: 'reading it is not permitted', EISDIR: 'it is a folder', ENOTDIR: 'it is not a folder',
-  ELOOP: 'its links run in a circle', ENAMETOOLONG: 'its name is too long', EMFILE: 'too many files are open',
+  ENOENT: 'it does not exist',
+  EACCES: 'reading it is not permitted',
+  EPERM: 'reading it is not permitted',
+  EISDIR: 'it is a folder',
+  ENOTDIR: 'it is not a folder',
+  ELOOP: 'its links run in a circle',
+  ENAMETOOLONG: 'its name is too long',
+  EMFILE: 'too many files are open',
 };
 
 /** Runs `access` and turns what the disk refuses into a UserError. */
@@ -26,10 +32,11 @@ export const realShell: Shell = {
   list: (folder) => orUserError(folder, () => listFiles(folder)),
   listAll: (folder) => orUserError(folder, () => listEverything(folder)),
   folders: (folder) => orUserError(folder, () => foldersIn(folder)),
-  read: (path) => orUserError(path, () => {
-    if (!statSync(path).isFile()) throw new UserError(`Cannot read ${path}: it is no file.`, 'Name a file.');
-    return readFileSync(path);
-  }),
+  read: (path) =>
+    orUserError(path, () => {
+      if (!statSync(path).isFile()) throw new UserError(`Cannot read ${path}: it is no file.`, 'Name a file.');
+      return readFileSync(path);
+    }),
   exists: (path) => existsSync(path),
   absolute: (path) => resolve(path).replaceAll('\\', '/'),
   claimFolder: (out) => void claimFolder(out),

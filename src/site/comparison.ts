@@ -17,9 +17,22 @@ export function* comparisonSite(comparison: Comparison, assets: Assets): Iterabl
   const page = (path: string, title: string, model: object): OutputFile => {
     const { plant, from, to, cautions, tool, records } = comparison;
     const bytes = templates.render('site/comparison', {
-      language: 'en', title, plant, survey: `${from} to ${to}`, status: `comparison of ${records.length} records`, up: '', nav: links.map((link) => ({ ...link, isHere: link.href === path })), cautions, tool: `${tool.name} ${tool.version}`, ...model,
+      language: 'en',
+      title,
+      plant,
+      survey: `${from} to ${to}`,
+      status: `comparison of ${records.length} records`,
+      up: '',
+      nav: links.map((link) => ({ ...link, isHere: link.href === path })),
+      cautions,
+      tool: `${tool.name} ${tool.version}`,
+      ...model,
     });
-    if (cautions.some((caution) => !bytes.includes(Handlebars.escapeExpression(caution)))) throw new UserError('The template site/comparison leaves out the cautions; no site is made without them.', 'Keep {{> site/foot}} at its end.');
+    if (cautions.some((caution) => !bytes.includes(Handlebars.escapeExpression(caution))))
+      throw new UserError(
+        'The template site/comparison leaves out the cautions; no site is made without them.',
+        'Keep {{> site/foot}} at its end.',
+      );
     return { path, bytes };
   };
   yield page('index.html', 'The years side by side', { chapter: null, ...first });

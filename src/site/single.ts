@@ -22,14 +22,20 @@ export function singleFile(files: Iterable<OutputFile>): OutputFile {
   const style = styleWithFonts(others);
   const script = textOf(others, 'script.js');
   const paths = new Set(pages.map((p) => p.path));
-  const articles = pages.map((page) => `<article id="${idOf(page.path)}">${within(page.path, contentOf(page), paths, others)}</article>`).join('\n');
+  const articles = pages
+    .map((page) => `<article id="${idOf(page.path)}">${within(page.path, contentOf(page), paths, others)}</article>`)
+    .join('\n');
   const policy = `default-src 'none'; img-src data:; font-src data:; style-src '${hashOf(style)}'; script-src '${hashOf(script)}'; base-uri 'none'; form-action 'none'`;
   const frame = within('', first.html.replace(CONTENT, '<main id="content">\u0000</main>'), paths, others)
     .replace(/<meta http-equiv="Content-Security-Policy"[^>]*>/, `<meta http-equiv="Content-Security-Policy" content="${policy}">`)
     .replace(/<link rel="stylesheet"[^>]*>/, () => `<style>${style}</style>`)
     .replace(/<script src="[^"]*"><\/script>/, () => `<script>${script}</script>`)
     .replaceAll(' aria-current="page"', '');
-  if (!frame.includes(policy) || !frame.includes(style)) throw new UserError('The templates site/head and site/foot of this plant have lost the policy or the style sheet.', 'Keep their <meta>, <link> and <script> lines as in the built-in ones.');
+  if (!frame.includes(policy) || !frame.includes(style))
+    throw new UserError(
+      'The templates site/head and site/foot of this plant have lost the policy or the style sheet.',
+      'Keep their <meta>, <link> and <script> lines as in the built-in ones.',
+    );
   return { path: 'index.html', bytes: frame.replace('\u0000', () => articles) };
 }
 
@@ -40,7 +46,8 @@ const idIn = (path: string, id: string): string => (path === '' || path === LIST
 
 function contentOf(page: { readonly path: string; readonly html: string }): string {
   const found = CONTENT.exec(page.html)?.[1];
-  if (found === undefined) throw new UserError(`The page ${page.path} has no <main id="content">.`, 'Keep {{> site/head}} and {{> site/foot}} in the template.');
+  if (found === undefined)
+    throw new UserError(`The page ${page.path} has no <main id="content">.`, 'Keep {{> site/head}} and {{> site/foot}} in the template.');
   return found;
 }
 
@@ -56,7 +63,8 @@ function within(path: string, html: string, paths: ReadonlySet<string>, others: 
     .replace(/(<img[^>]*? src=")([^"]*)"/g, (_, head: string, src: string) => `${head}${pictureAt(others, resolved(path, src))}"`);
 }
 
-const resolved = (path: string, to: string): string => (path.includes('/') && to.startsWith('../') ? to.slice(3) : `${path.includes('/') ? path.slice(0, path.lastIndexOf('/') + 1) : ''}${to}`);
+const resolved = (path: string, to: string): string =>
+  path.includes('/') && to.startsWith('../') ? to.slice(3) : `${path.includes('/') ? path.slice(0, path.lastIndexOf('/') + 1) : ''}${to}`;
 
 /** Where a link leads within the one file; null where it leads out of the site. */
 function target(path: string, href: string, paths: ReadonlySet<string>): string | null {
@@ -77,7 +85,10 @@ function textOf(files: ReadonlyMap<string, string | Uint8Array>, path: string): 
 }
 
 function styleWithFonts(files: ReadonlyMap<string, string | Uint8Array>): string {
-  return textOf(files, 'style.css').replace(/url\('(fonts\/[^']*)'\)/g, (_, path: string) => `url('data:font/woff2;base64,${base64(files.get(path) ?? '')}')`);
+  return textOf(files, 'style.css').replace(
+    /url\('(fonts\/[^']*)'\)/g,
+    (_, path: string) => `url('data:font/woff2;base64,${base64(files.get(path) ?? '')}')`,
+  );
 }
 
 function pictureAt(files: ReadonlyMap<string, string | Uint8Array>, path: string): string {

@@ -7,7 +7,8 @@ import { toSvg } from '../chart/svg.ts';
 import { rankedViews } from '../page/actions.ts';
 import type { Assets } from '../page/assets.ts';
 import { Charts, seriesId } from '../page/charts.ts';
-import { acceptedView, changesView, controlView, coverageView, methodView, noticesView, overTimeView, peopleView } from '../page/control.ts';
+import { acceptedView, changesView, controlView, coverageView, noticesView, peopleView } from '../page/control.ts';
+import { methodView, overTimeView } from '../page/method.ts';
 import { exceptionView, photoFile } from '../page/exception.ts';
 import { Format } from '../page/format.ts';
 import { Templates } from '../page/handlebars.ts';
@@ -39,7 +40,9 @@ const PAGES = [
 
 /** A drawing as markup that needs no escaping: svg.ts escapes its words, the rest of it is numbers. */
 const svgOf = (charts: Charts, kind: string, m: RecordMeasurement, decorative = false): Handlebars.SafeString =>
-  new Handlebars.SafeString(toSvg(charts.drawing(kind, seriesId(m)), { decorative, ...(kind === 'sparkline' ? { className: 'spark' } : {}) }));
+  new Handlebars.SafeString(
+    toSvg(charts.drawing(kind, seriesId(m)), { decorative, ...(kind === 'sparkline' ? { className: 'spark' } : {}) }),
+  );
 
 export function* site(record: SwayfolioRecord, assets: Assets, options: SiteOptions): Iterable<OutputFile> {
   const format = new Format(record);
@@ -49,7 +52,8 @@ export function* site(record: SwayfolioRecord, assets: Assets, options: SiteOpti
   yield* furniture(record, assets, pages);
   if (only === undefined) yield* listPages(format, charts, pages, options);
   else yield pages.page('index', 'index.html', format.say('page.what_to_do_first'), firstPage(format));
-  for (const machine of format.record.machines) if (only === undefined || machine.machine === only) yield machinePage(format, charts, pages, machine);
+  for (const machine of format.record.machines)
+    if (only === undefined || machine.machine === only) yield machinePage(format, charts, pages, machine);
   for (const photo of record.survey.photos) {
     const bytes = only === undefined || photo.machine === only ? assets.picture(photo.path) : null;
     if (bytes !== null) yield { path: `photos/${photoFile(photo.path)}`, bytes: withoutMetadata(bytes) };
@@ -75,7 +79,8 @@ class Pages {
       title,
       plant: plant.plant,
       survey: format.survey(survey.id),
-      status: issue === null ? format.say('view.draft.site') : format.say('view.revision', { number: issue.number, revision: issue.revision }),
+      status:
+        issue === null ? format.say('view.draft.site') : format.say('view.revision', { number: issue.number, revision: issue.revision }),
       up,
       nav: PAGES.map((p) => ({ href: p.href, label: format.say(p.label), isHere: p.href === path })),
       cautions,
@@ -83,7 +88,11 @@ class Pages {
       ...model,
     });
     const missing = cautions.find((c) => !html.includes(Handlebars.escapeExpression(c)));
-    if (missing !== undefined) throw new UserError(`The template site/${template} leaves out the cautions; no site is made without them.`, 'Keep {{> site/foot}} at its end.');
+    if (missing !== undefined)
+      throw new UserError(
+        `The template site/${template} leaves out the cautions; no site is made without them.`,
+        'Keep {{> site/foot}} at its end.',
+      );
     return { path, bytes: html };
   }
 }
@@ -104,11 +113,30 @@ function* listPages(format: Format, charts: Charts, pages: Pages, options: SiteO
   const actions = rankedViews(format);
   const settled = settledViews(format);
   yield pages.page('index', 'index.html', format.say('page.what_to_do_first'), first);
-  yield pages.page('actions', 'actions.html', format.say('page.ranked_actions'), { actions, hasActions: actions.length > 0, settled, hasSettled: settled.length > 0 });
+  yield pages.page('actions', 'actions.html', format.say('page.ranked_actions'), {
+    actions,
+    hasActions: actions.length > 0,
+    settled,
+    hasSettled: settled.length > 0,
+  });
   yield pages.page('machines', 'machines.html', format.say('page.machines'), machineList(format, charts));
-  yield pages.page('coverage', 'coverage.html', format.say('page.coverage'), { ...first, coverage: coverageView(format), overTime: overTimeView(format), accepted: acceptedView(format), changes: changesView(format), notices: noticesView(format) });
-  yield pages.page('method', 'method.html', format.say('page.method_and_limits'), { method: methodView(format), people: peopleView(format) });
-  yield pages.page('downloads', 'downloads.html', format.say('page.downloads'), { hasPdf: options.pdf, method: methodView(format), control: controlView(format) });
+  yield pages.page('coverage', 'coverage.html', format.say('page.coverage'), {
+    ...first,
+    coverage: coverageView(format),
+    overTime: overTimeView(format),
+    accepted: acceptedView(format),
+    changes: changesView(format),
+    notices: noticesView(format),
+  });
+  yield pages.page('method', 'method.html', format.say('page.method_and_limits'), {
+    method: methodView(format),
+    people: peopleView(format),
+  });
+  yield pages.page('downloads', 'downloads.html', format.say('page.downloads'), {
+    hasPdf: options.pdf,
+    method: methodView(format),
+    control: controlView(format),
+  });
 }
 
 function machineList(format: Format, charts: Charts): object {
@@ -122,15 +150,25 @@ function machineList(format: Format, charts: Charts): object {
   const order = ['D', 'r-D', 'C', 'r-C', 'B', 'r-B', 'A', 'r-A', 'none'];
   const marks = [...new Set(machines.map((m) => m.condition.mark))].sort((a, b) => order.indexOf(a) - order.indexOf(b));
   const conditions = marks.map((mark) => ({ mark, text: mark === 'none' ? format.term('not assessed') : mark }));
-  return { machines, areas, conditions, urgencies: URGENCIES.map((u) => format.urgency(u)).filter((u) => machines.some((m) => m.urgency === u)) };
+  return {
+    machines,
+    areas,
+    conditions,
+    urgencies: URGENCIES.map((u) => format.urgency(u)).filter((u) => machines.some((m) => m.urgency === u)),
+  };
 }
 
 function machinePage(format: Format, charts: Charts, pages: Pages, machine: RecordMachine): OutputFile {
   const view = exceptionView(format, charts, machine);
   const measurements = format.measurementsOf(machine.machine);
   const main = governingMeasurement(format, machine);
-  const readings = measurements.map((m, i) => ({ view: view.readings[i], svg: m.history.value.some((v) => v !== null) ? svgOf(charts, 'sparkline', m) : '' }));
-  const polars = measurements.filter((m) => m.phase !== null && m.phase.amplitude !== null).map((m, i) => ({ svg: svgOf(charts, 'polar', m), caption: view.polars[i]?.caption ?? '' }));
+  const readings = measurements.map((m, i) => ({
+    view: view.readings[i],
+    svg: m.history.value.some((v) => v !== null) ? svgOf(charts, 'sparkline', m) : '',
+  }));
+  const polars = measurements
+    .filter((m) => m.phase !== null && m.phase.amplitude !== null)
+    .map((m, i) => ({ svg: svgOf(charts, 'polar', m), caption: view.polars[i]?.caption ?? '' }));
   return pages.page('machine', view.machine.page, view.title, {
     view,
     history: view.hasHistory && main !== null ? svgOf(charts, 'history', main) : '',

@@ -1,10 +1,15 @@
 /** The style sheet's colours from the brand; the rest of it is templates/site/style.css. */
 import { inks } from '../brand/brand.ts';
 
-const rules = (palette: Readonly<Record<string, string>>): string => Object.entries(palette).map(([ink, hex]) => `--${ink}:${hex};`).join('');
+const rules = (palette: Readonly<Record<string, string>>): string =>
+  Object.entries(palette)
+    .map(([ink, hex]) => `--${ink}:${hex};`)
+    .join('');
 
 const classes = (palette: Readonly<Record<string, string>>): string =>
-  Object.keys(palette).map((ink) => `.f-${ink}{fill:var(--${ink})}.s-${ink}{stroke:var(--${ink})}`).join('\n');
+  Object.keys(palette)
+    .map((ink) => `.f-${ink}{fill:var(--${ink})}.s-${ink}{stroke:var(--${ink})}`)
+    .join('\n');
 
 /** Colours by ink, light and dark, and the fill and stroke classes of drawings. */
 export function inkStyles(accent: string | null): string {

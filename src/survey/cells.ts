@@ -25,7 +25,10 @@ export function plainNumber(text: string): number | NumberFault {
 }
 
 const NUMBER_FAULTS: Readonly<Record<NumberFault, readonly [string, string]>> = {
-  comma: ['is written with a comma', 'Write the decimal sign as a dot and no thousands sign, or map the file in the import section of plant.yaml.'],
+  comma: [
+    'is written with a comma',
+    'Write the decimal sign as a dot and no thousands sign, or map the file in the import section of plant.yaml.',
+  ],
   infinite: ['is not finite', 'Give the number read, or leave it blank and say why in status.'],
   'no number': ['is no number', 'Give a number such as 2.35, or leave it blank.'],
 };
@@ -107,7 +110,12 @@ export class Cells {
     if ('sign' in found) return plainNumber(plainForm(text, found.sign));
     if (found.doubt === 'mixed') return plainNumber(text);
     const line = lineAt(this.table, found.row);
-    this.#problems.error('decimal-sign', { file: this.table.file, line, column: columnAt(this.table, found.row, column) }, `The column "${column}" reads two ways: ${bothReadings(found.text)}.`, 'State decimal: comma or decimal: dot for this file in the import section of plant.yaml.');
+    this.#problems.error(
+      'decimal-sign',
+      { file: this.table.file, line, column: columnAt(this.table, found.row, column) },
+      `The column "${column}" reads two ways: ${bothReadings(found.text)}.`,
+      'State decimal: comma or decimal: dot for this file in the import section of plant.yaml.',
+    );
     return 'doubt';
   }
 
@@ -121,7 +129,10 @@ export class Cells {
     const kept = this.#signs.get(column);
     if (kept !== undefined) return kept;
     const at = this.table.column(column);
-    const found = columnSign(this.table.rows.map((row) => row[at] ?? ''), this.table.foreign);
+    const found = columnSign(
+      this.table.rows.map((row) => row[at] ?? ''),
+      this.table.foreign,
+    );
     this.#signs.set(column, found);
     return found;
   }
@@ -141,7 +152,12 @@ export class Cells {
     const found = words.find((w) => w.toLowerCase() === folded);
     if (found !== undefined) return found;
     const near = nearestWord(text, words);
-    this.error('unknown-word', column, `"${column}" is "${text}", which is none of: ${words.join(', ')}.`, near === null ? null : `The nearest is "${near}".`);
+    this.error(
+      'unknown-word',
+      column,
+      `"${column}" is "${text}", which is none of: ${words.join(', ')}.`,
+      near === null ? null : `The nearest is "${near}".`,
+    );
     return null;
   }
 
@@ -151,6 +167,9 @@ export class Cells {
   }
 
   list(column: string): string[] {
-    return (this.text(column) ?? '').split(/[;,]/).map((t) => t.trim()).filter((t) => t !== '');
+    return (this.text(column) ?? '')
+      .split(/[;,]/)
+      .map((t) => t.trim())
+      .filter((t) => t !== '');
   }
 }

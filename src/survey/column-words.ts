@@ -2,25 +2,148 @@
 import type { Column } from './mapping.ts';
 
 const WORDS: Partial<Record<Column, readonly string[]>> = {
-  machine: ['machine', 'machine id', 'machine name', 'asset', 'asset id', 'asset name', 'equipment', 'equipment id', 'tag', 'tag no', 'maschine', 'anlage', 'aggregat', 'maschinen-nr', 'equipo', 'máquina', 'maquina', 'activo', 'équipement', 'equipement', 'repère'],
-  point: ['point', 'point id', 'point name', 'measurement point', 'measuring point', 'meas point', 'position', 'pos', 'place', 'bearing', 'messpunkt', 'messstelle', 'messort', 'punkt', 'lager', 'lagerstelle', 'punto', 'punto de medida', 'punto de medición', 'posición', 'rodamiento', 'cojinete', 'point de mesure', 'palier'],
+  machine: [
+    'machine',
+    'machine id',
+    'machine name',
+    'asset',
+    'asset id',
+    'asset name',
+    'equipment',
+    'equipment id',
+    'tag',
+    'tag no',
+    'maschine',
+    'anlage',
+    'aggregat',
+    'maschinen-nr',
+    'equipo',
+    'máquina',
+    'maquina',
+    'activo',
+    'équipement',
+    'equipement',
+    'repère',
+  ],
+  point: [
+    'point',
+    'point id',
+    'point name',
+    'measurement point',
+    'measuring point',
+    'meas point',
+    'position',
+    'pos',
+    'place',
+    'bearing',
+    'messpunkt',
+    'messstelle',
+    'messort',
+    'punkt',
+    'lager',
+    'lagerstelle',
+    'punto',
+    'punto de medida',
+    'punto de medición',
+    'posición',
+    'rodamiento',
+    'cojinete',
+    'point de mesure',
+    'palier',
+  ],
   direction: ['direction', 'axis', 'dir', 'richtung', 'messrichtung', 'dirección', 'direccion', 'eje', 'axe', 'sens'],
-  value: ['value', 'reading', 'overall', 'level', 'amplitude', 'overall value', 'wert', 'messwert', 'gesamtwert', 'kennwert', 'valor', 'lectura', 'nivel', 'valor global', 'valeur', 'mesure', 'niveau', 'valeur globale', 'niveau global'],
+  value: [
+    'value',
+    'reading',
+    'overall',
+    'level',
+    'amplitude',
+    'overall value',
+    'wert',
+    'messwert',
+    'gesamtwert',
+    'kennwert',
+    'valor',
+    'lectura',
+    'nivel',
+    'valor global',
+    'valeur',
+    'mesure',
+    'niveau',
+    'valeur globale',
+    'niveau global',
+  ],
   unit: ['unit', 'units', 'uom', 'einheit', 'einheiten', 'unidad', 'unidades', 'unité', 'unités', 'unite'],
   detection: ['detection', 'signal detection', 'detektion', 'detección', 'deteccion', 'détection'],
   quantity: ['quantity', 'parameter', 'measurement type', 'messgröße', 'größe', 'magnitud', 'parámetro', 'grandeur', 'paramètre'],
-  taken_at: ['taken_at', 'taken at', 'date', 'date/time', 'date time', 'datetime', 'timestamp', 'time stamp', 'measured on', 'measured at', 'when', 'datum', 'datum/zeit', 'messdatum', 'zeitpunkt', 'fecha', 'fecha y hora', 'fecha de medición', 'date de mesure', 'date et heure', 'horodatage'],
+  taken_at: [
+    'taken_at',
+    'taken at',
+    'date',
+    'date/time',
+    'date time',
+    'datetime',
+    'timestamp',
+    'time stamp',
+    'measured on',
+    'measured at',
+    'when',
+    'datum',
+    'datum/zeit',
+    'messdatum',
+    'zeitpunkt',
+    'fecha',
+    'fecha y hora',
+    'fecha de medición',
+    'date de mesure',
+    'date et heure',
+    'horodatage',
+  ],
   status: ['status', 'zustand', 'estado', 'état', 'statut'],
-  remark: ['remark', 'remarks', 'note', 'notes', 'comment', 'comments', 'bemerkung', 'bemerkungen', 'kommentar', 'observaciones', 'observación', 'comentario', 'remarque', 'remarques', 'commentaire'],
+  remark: [
+    'remark',
+    'remarks',
+    'note',
+    'notes',
+    'comment',
+    'comments',
+    'bemerkung',
+    'bemerkungen',
+    'kommentar',
+    'observaciones',
+    'observación',
+    'comentario',
+    'remarque',
+    'remarques',
+    'commentaire',
+  ],
   instrument: ['instrument', 'collector', 'messgerät', 'gerät', 'instrumento', 'appareil'],
-  measured_by: ['measured by', 'analyst', 'operator', 'technician', 'prüfer', 'messtechniker', 'técnico', 'medido por', 'technicien', 'mesuré par'],
+  measured_by: [
+    'measured by',
+    'analyst',
+    'operator',
+    'technician',
+    'prüfer',
+    'messtechniker',
+    'técnico',
+    'medido por',
+    'technicien',
+    'mesuré par',
+  ],
   survey_date: ['survey', 'survey date', 'route date'],
 };
 
 const BY_WORD = new Map<string, Column>();
 for (const [column, words] of Object.entries(WORDS)) for (const word of words) BY_WORD.set(word, column as Column);
 
-const fold = (name: string): string => name.normalize('NFC').toLowerCase().replace(/\s*[([].*$/, '').replace(/[_\s]+/g, ' ').replace(/[.:]+$/, '').trim();
+const fold = (name: string): string =>
+  name
+    .normalize('NFC')
+    .toLowerCase()
+    .replace(/\s*[([].*$/, '')
+    .replace(/[_\s]+/g, ' ')
+    .replace(/[.:]+$/, '')
+    .trim();
 
 /** A speed only where its unit stands by it. */
 const SPEED = /(?:speed|drehzahl|velocidad|vitesse|^)\W*\(?(?:rpm|r\/min|1\/min|min-1|u\/min|tr\/min)\)?$/i;
@@ -45,7 +168,9 @@ export function directionOfName(name: string): 'horizontal' | 'vertical' | 'axia
 const QUANTITIES: ReadonlyMap<string, string> = new Map([
   ...['vel', 'velocity', 'schwinggeschwindigkeit', 'geschwindigkeit', 'velocidad', 'vitesse'].map((word) => [word, 'velocity'] as const),
   ...['disp', 'displacement', 'schwingweg', 'weg', 'desplazamiento', 'déplacement'].map((word) => [word, 'displacement'] as const),
-  ...['acc', 'accel', 'acceleration', 'beschleunigung', 'schwingbeschleunigung', 'aceleración', 'accélération'].map((word) => [word, 'acceleration'] as const),
+  ...['acc', 'accel', 'acceleration', 'beschleunigung', 'schwingbeschleunigung', 'aceleración', 'accélération'].map(
+    (word) => [word, 'acceleration'] as const,
+  ),
 ]);
 
 export const quantityOfWord = (text: string): string | null => QUANTITIES.get(fold(text)) ?? null;

@@ -76,12 +76,24 @@ function otherDelimiter(file: string, text: string, first: readonly string[], re
 export function recordsOf(file: string, text: string, delimiter: string, problems: Problems): string[][] | null {
   try {
     // A quote inside a field that does not begin with one is an inch sign or a second of arc, not a fault.
-    return parse(text, { relax_column_count: true, relax_quotes: true, skip_empty_lines: false, delimiter, ...(text.includes('\r') ? { record_delimiter: ['\r\n', '\n', '\r'] } : {}) }) as string[][];
+    return parse(text, {
+      relax_column_count: true,
+      relax_quotes: true,
+      skip_empty_lines: false,
+      delimiter,
+      ...(text.includes('\r') ? { record_delimiter: ['\r\n', '\n', '\r'] } : {}),
+    }) as string[][];
   } catch (error) {
     if (!(error instanceof CsvError)) throw error;
     const line = typeof error['lines'] === 'number' ? error['lines'] : null;
-    const what = error.code === 'CSV_QUOTE_NOT_CLOSED' ? 'A quoted field is opened and never closed.' : 'A quote stands where none can stand.';
-    problems.error('csv-quotes', { file, line, column: null }, what, 'Put a field that holds a comma, a quote or a line end in double quotes, and double each quote inside it.');
+    const what =
+      error.code === 'CSV_QUOTE_NOT_CLOSED' ? 'A quoted field is opened and never closed.' : 'A quote stands where none can stand.';
+    problems.error(
+      'csv-quotes',
+      { file, line, column: null },
+      what,
+      'Put a field that holds a comma, a quote or a line end in double quotes, and double each quote inside it.',
+    );
     return null;
   }
 }
@@ -99,12 +111,27 @@ export function linesOf(text: string, records: readonly (readonly string[])[]): 
   return lines;
 }
 
-function headerIsSound(file: string, header: readonly string[], known: readonly string[], required: readonly string[], problems: Problems): boolean {
+function headerIsSound(
+  file: string,
+  header: readonly string[],
+  known: readonly string[],
+  required: readonly string[],
+  problems: Problems,
+): boolean {
   const place = { file, line: 1 };
   const lone = header.length === 1 ? (header[0] as string) : '';
-  for (const [sign, name] of [[';', 'semicolons'], ['\t', 'tabs'], ['|', 'bars']] as const) {
+  for (const [sign, name] of [
+    [';', 'semicolons'],
+    ['\t', 'tabs'],
+    ['|', 'bars'],
+  ] as const) {
     if (!lone.includes(sign)) continue;
-    problems.error('delimiter', { ...place, column: 1 }, `The columns are parted by ${name}, not by commas.`, 'Save the file comma separated, or map it in the import section of plant.yaml.');
+    problems.error(
+      'delimiter',
+      { ...place, column: 1 },
+      `The columns are parted by ${name}, not by commas.`,
+      'Save the file comma separated, or map it in the import section of plant.yaml.',
+    );
     return false;
   }
   let sound = true;
@@ -115,19 +142,36 @@ function headerIsSound(file: string, header: readonly string[], known: readonly 
     }
     if (known.includes(name)) return;
     const near = nearestWord(name, known);
-    problems.add('note', 'unknown-column', { ...place, column: i + 1 }, name === '' ? 'A column has no name; it is left out.' : `The column "${name}" is not known; it is left out.`, near === null ? null : `The nearest is "${near}".`);
+    problems.add(
+      'note',
+      'unknown-column',
+      { ...place, column: i + 1 },
+      name === '' ? 'A column has no name; it is left out.' : `The column "${name}" is not known; it is left out.`,
+      near === null ? null : `The nearest is "${near}".`,
+    );
   });
   for (const name of required) {
     if (header.includes(name)) continue;
     const near = nearestWord(name, header);
-    problems.error('missing-column', place, `The column "${name}" is missing.`, near === null ? 'Add it to the first line.' : `Is it the one called "${near}"?`);
+    problems.error(
+      'missing-column',
+      place,
+      `The column "${name}" is missing.`,
+      near === null ? 'Add it to the first line.' : `Is it the one called "${near}"?`,
+    );
     sound = false;
   }
   return sound;
 }
 
 /** Rows without blank lines; a row with too many fields is an error, one with too few is filled with blanks and warned of. */
-function wholeRows(file: string, records: readonly (readonly string[])[], lines: readonly number[] | null, width: number, problems: Problems): { rows: (readonly string[])[]; rowLines: number[] | null } {
+function wholeRows(
+  file: string,
+  records: readonly (readonly string[])[],
+  lines: readonly number[] | null,
+  width: number,
+  problems: Problems,
+): { rows: (readonly string[])[]; rowLines: number[] | null } {
   const rows: (readonly string[])[] = [];
   const rowLines: number[] = [];
   let plain = lines === null;
@@ -144,11 +188,23 @@ function wholeRows(file: string, records: readonly (readonly string[])[], lines:
       continue;
     }
     if (record.length > width && record.slice(width).some((field) => field.trim() !== '')) {
-      problems.error('too-many-fields', { file, line, column: width + 1 }, `The row has ${record.length} fields, the first line ${width}.`, 'A field that holds a comma must stand in double quotes.');
+      problems.error(
+        'too-many-fields',
+        { file, line, column: width + 1 },
+        `The row has ${record.length} fields, the first line ${width}.`,
+        'A field that holds a comma must stand in double quotes.',
+      );
       plain = false;
       continue;
     }
-    if (record.length < width) problems.add('warning', 'too-few-fields', { file, line, column: record.length }, `The row has ${record.length} fields, the first line ${width}; the rest is taken as blank.`, 'Add the commas that are missing.');
+    if (record.length < width)
+      problems.add(
+        'warning',
+        'too-few-fields',
+        { file, line, column: record.length },
+        `The row has ${record.length} fields, the first line ${width}; the rest is taken as blank.`,
+        'Add the commas that are missing.',
+      );
     rows.push(record.length < width ? [...record, ...new Array<string>(width - record.length).fill('')] : record.slice(0, width));
     rowLines.push(line);
   }

@@ -13,7 +13,10 @@ export function likelyOriginal(id: string, known: readonly string[]): string | n
   return found.length === 1 ? (found[0] as string) : null;
 }
 
-const sameNumber = (value: number) => (known: string): boolean => NUMBER.test(known) && Number(known) === value;
+const sameNumber =
+  (value: number) =>
+  (known: string): boolean =>
+    NUMBER.test(known) && Number(known) === value;
 
 /** A known id such as 3-2, 3/2, 2.3 or MAR-2 that reads as the date which stands there now. */
 function dateOf(id: string): ((known: string) => boolean) | null {

@@ -10,7 +10,18 @@ const NAMED = /^(\d{1,2})[-/. ]{1,2}(\p{L}{3,10})\.?[-/. ]{1,2}(\d{4})(.*)$/u;
 const TIME = /^[T ,]*(\d{1,2})[:.](\d{2})(?:[:.](\d{2})(?:[.,]\d{1,6})?)?\s*([ap])?\.?(?:m\.?)?$/i;
 /** First letters of the months in English, German, Spanish and French. */
 const MONTHS: readonly (readonly string[])[] = [
-  ['jan', 'jän', 'ene'], ['feb', 'fév', 'fev'], ['mar', 'mär', 'mrz'], ['apr', 'abr', 'avr'], ['may', 'mai'], ['jun', 'juin'], ['jul', 'juil'], ['aug', 'ago', 'aoû', 'aou'], ['sep'], ['oct', 'okt'], ['nov'], ['dec', 'dez', 'dic', 'déc'],
+  ['jan', 'jän', 'ene'],
+  ['feb', 'fév', 'fev'],
+  ['mar', 'mär', 'mrz'],
+  ['apr', 'abr', 'avr'],
+  ['may', 'mai'],
+  ['jun', 'juin'],
+  ['jul', 'juil'],
+  ['aug', 'ago', 'aoû', 'aou'],
+  ['sep'],
+  ['oct', 'okt'],
+  ['nov'],
+  ['dec', 'dez', 'dic', 'déc'],
 ];
 
 /** A date in the plain form, with its time where it has one; null where the text is no date in that order. */
@@ -46,11 +57,15 @@ function dated(year: number, month: number, day: number, rest: string): string |
   return parseDay(plain) === null ? null : plain;
 }
 
-export type ColumnOrder = { readonly order: DateOrder } | { readonly row: number; readonly text: string; readonly readings: readonly string[] };
+export type ColumnOrder =
+  | { readonly order: DateOrder }
+  | { readonly row: number; readonly text: string; readonly readings: readonly string[] };
 
 /** The one order in which each cell is a date. A cell that is one in none is passed over: it is told at its own place. */
 export function columnOrder(cells: readonly string[]): ColumnOrder {
-  const filled = cells.map((text, row) => ({ text, row })).filter(({ text }) => text.trim() !== '' && (['ymd', 'dmy', 'mdy'] as const).some((order) => plainDate(text, order) !== null));
+  const filled = cells
+    .map((text, row) => ({ text, row }))
+    .filter(({ text }) => text.trim() !== '' && (['ymd', 'dmy', 'mdy'] as const).some((order) => plainDate(text, order) !== null));
   const fitting = (['ymd', 'dmy', 'mdy'] as const).filter((order) => filled.every(({ text }) => plainDate(text, order) !== null));
   const different = filled.find(({ text }) => new Set(fitting.map((order) => plainDate(text, order))).size > 1);
   if (different === undefined) return { order: fitting[0] ?? 'ymd' };

@@ -23,7 +23,16 @@ export interface FoundSurvey {
   readonly photos: readonly string[];
 }
 
-export const PLANT_TABLES = ['machines.csv', 'components.csv', 'points.csv', 'limits.csv', 'events.csv', 'actions.csv', 'renames.csv', 'accepted.csv'] as const;
+export const PLANT_TABLES = [
+  'machines.csv',
+  'components.csv',
+  'points.csv',
+  'limits.csv',
+  'events.csv',
+  'actions.csv',
+  'renames.csv',
+  'accepted.csv',
+] as const;
 
 export function findFiles(files: readonly string[], isMapped: (path: string) => boolean = () => false): Found {
   const surveys = new Map<string, OpenSurvey>();
@@ -39,8 +48,7 @@ export function findFiles(files: readonly string[], isMapped: (path: string) => 
     else if (isMapped(path)) {
       imports.push(path);
       if (parts[0] === 'surveys' && parts.length >= 3) surveyAt(surveys, parts[1] as string);
-    }
-    else if (parts.length === 1 && (PLANT_TABLES as readonly string[]).includes(name)) tables.add(name);
+    } else if (parts.length === 1 && (PLANT_TABLES as readonly string[]).includes(name)) tables.add(name);
     else if (parts[0] === 'surveys' && parts.length === 2 && name.endsWith('.csv')) histories.push(path);
     else if (parts[0] === 'surveys' && parts.length >= 3) {
       const survey = surveyAt(surveys, parts[1] as string);

@@ -23,12 +23,23 @@ export interface Grid {
 const LOOK = 65_536;
 
 /** `fits` counts how many of the columns asked for a grid has in one of its first rows. */
-export function gridOf(file: string, bytes: Uint8Array, mapping: MappedFile, fits: (rows: readonly GridRow[]) => number, problems: Problems): Grid | null {
+export function gridOf(
+  file: string,
+  bytes: Uint8Array,
+  mapping: MappedFile,
+  fits: (rows: readonly GridRow[]) => number,
+  problems: Problems,
+): Grid | null {
   if (isWorkbook(file)) return workbookGrid(file, bytes, mapping.sheet, problems);
   const text = textOf(file, bytes, problems, mapping.encoding);
   if (text === null) return null;
   if (text.trim() === '') {
-    problems.error('empty-file', { file, line: null }, 'The file is empty.', 'Export it again, or remove it and its entry in the import section of plant.yaml.');
+    problems.error(
+      'empty-file',
+      { file, line: null },
+      'The file is empty.',
+      'Export it again, or remove it and its entry in the import section of plant.yaml.',
+    );
     return null;
   }
   const delimiter = mapping.delimiter === null ? likeliest(file, text, fits) : DELIMITERS[mapping.delimiter];

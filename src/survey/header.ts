@@ -13,10 +13,17 @@ export const NOTHING: Typed = { unit: null, detection: null, quantity: null };
 
 /** `mm/s RMS`, `mm/s`, `rms mm/s`, `g pk`: the whole text must be understood. */
 export function unitText(text: string): Typed | null {
-  const words = text.normalize('NFC').trim().split(/[\s,;]+/).filter((w) => w !== '');
+  const words = text
+    .normalize('NFC')
+    .trim()
+    .split(/[\s,;]+/)
+    .filter((w) => w !== '');
   if (words.length === 0 || words.length > 6) return null;
   for (let cut = words.length; cut >= 0; cut -= 1) {
-    for (const [a, b] of [[words.slice(0, cut), words.slice(cut)], [words.slice(cut), words.slice(0, cut)]] as const) {
+    for (const [a, b] of [
+      [words.slice(0, cut), words.slice(cut)],
+      [words.slice(cut), words.slice(0, cut)],
+    ] as const) {
       const [unit, detection] = [a.join(' '), b.join(' ')];
       const known = unit === '' ? null : parseUnit(unit);
       if (unit !== '' && known === null) continue;

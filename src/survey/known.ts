@@ -13,7 +13,13 @@ export interface Ledgers {
   readonly accepted: readonly Accepted[];
 }
 
-export function mendLedgers(ledgers: Ledgers, machines: readonly Machine[], surveys: readonly Survey[], names: Names, problems: Problems): Ledgers & { readonly surveys: readonly Survey[] } {
+export function mendLedgers(
+  ledgers: Ledgers,
+  machines: readonly Machine[],
+  surveys: readonly Survey[],
+  names: Names,
+  problems: Problems,
+): Ledgers & { readonly surveys: readonly Survey[] } {
   const book = new Book(machines, names, problems);
   const ids = new Set<string>();
   for (const { id, place } of ledgers.actions) {
@@ -21,10 +27,13 @@ export function mendLedgers(ledgers: Ledgers, machines: readonly Machine[], surv
     ids.add(id);
   }
   const points = new Map(machines.map((m) => [m.id, [...new Set(m.series.map((s) => s.point))]]));
-  for (const row of ledgers.limits) if (row.appliesMachine !== null && row.place !== null) book.machine(row.appliesMachine, row.validFrom, row.place);
+  for (const row of ledgers.limits)
+    if (row.appliesMachine !== null && row.place !== null) book.machine(row.appliesMachine, row.validFrom, row.place);
   return {
     limits: ledgers.limits,
-    events: ledgers.events.map((e) => ({ ...e, ...book.inside(e.machine, e.component, e.point, e.day, e.place) })).sort((a, b) => a.day - b.day || a.place.line - b.place.line),
+    events: ledgers.events
+      .map((e) => ({ ...e, ...book.inside(e.machine, e.component, e.point, e.day, e.place) }))
+      .sort((a, b) => a.day - b.day || a.place.line - b.place.line),
     actions: ledgers.actions.map((a) => {
       const { machine, point } = book.inside(a.machine, null, a.verifyPoint, a.raised, a.place);
       return { ...a, machine, verifyPoint: point };
@@ -61,10 +70,20 @@ class Book {
     return found;
   }
 
-  inside(machineId: string, componentId: string | null, pointId: string | null, day: Day | null, place: Place): { machine: string; component: string | null; point: string | null } {
+  inside(
+    machineId: string,
+    componentId: string | null,
+    pointId: string | null,
+    day: Day | null,
+    place: Place,
+  ): { machine: string; component: string | null; point: string | null } {
     const machine = this.machine(machineId, day, place);
     if (machine === null) return { machine: machineId, component: componentId, point: pointId };
-    return { machine: machine.id, component: this.#component(machine, componentId, day, place), point: this.#point(machine, pointId, day, place) };
+    return {
+      machine: machine.id,
+      component: this.#component(machine, componentId, day, place),
+      point: this.#point(machine, pointId, day, place),
+    };
   }
 
   #component(machine: Machine, id: string | null, day: Day | null, place: Place): string | null {

@@ -5,11 +5,41 @@ import type { Cells } from './cells.ts';
 import type { Problems } from './problems.ts';
 
 export const COMPONENT_COLUMNS = [
-  'kind', 'power_kw', 'speed_rpm', 'speed_ratio', 'speed_min', 'speed_max', 'drive', 'support', 'shaft_height_mm', 'bearings', 'orientation', 'rotor', 'pump_category',
-  'fan_category', 'gear_rating', 'limit_set', 'serial', 'make_limits', 'notes', 'valid_from',
+  'kind',
+  'power_kw',
+  'speed_rpm',
+  'speed_ratio',
+  'speed_min',
+  'speed_max',
+  'drive',
+  'support',
+  'shaft_height_mm',
+  'bearings',
+  'orientation',
+  'rotor',
+  'pump_category',
+  'fan_category',
+  'gear_rating',
+  'limit_set',
+  'serial',
+  'make_limits',
+  'notes',
+  'valid_from',
 ] as const;
 export const MACHINES_COLUMNS = [
-  'machine', 'name', 'area', 'route', 'criticality', 'spare_group', 'relief', 'interval_days', 'next_stop', 'in_service_from', 'removed_on', 'family', ...COMPONENT_COLUMNS,
+  'machine',
+  'name',
+  'area',
+  'route',
+  'criticality',
+  'spare_group',
+  'relief',
+  'interval_days',
+  'next_stop',
+  'in_service_from',
+  'removed_on',
+  'family',
+  ...COMPONENT_COLUMNS,
 ] as const;
 export const COMPONENTS_COLUMNS = ['machine', 'component', ...COMPONENT_COLUMNS] as const;
 
@@ -68,16 +98,51 @@ function gearRating(cells: Cells, text: string): number | null {
 }
 
 export const NO_COMPONENT_ROW: ComponentRow = {
-  validFrom: null, place: null, kind: null, powerKw: null, speedRpm: null, speedRatio: null, speedMinRpm: null, speedMaxRpm: null, drive: null, support: null, shaftHeightMm: null,
-  bearings: null, orientation: null, rotor: null, pumpCategory: null, fanCategory: null, gearRatingVr: null, limitSet: null, serial: null, makeLimits: null, notes: null,
+  validFrom: null,
+  place: null,
+  kind: null,
+  powerKw: null,
+  speedRpm: null,
+  speedRatio: null,
+  speedMinRpm: null,
+  speedMaxRpm: null,
+  drive: null,
+  support: null,
+  shaftHeightMm: null,
+  bearings: null,
+  orientation: null,
+  rotor: null,
+  pumpCategory: null,
+  fanCategory: null,
+  gearRatingVr: null,
+  limitSet: null,
+  serial: null,
+  makeLimits: null,
+  notes: null,
 };
 
 export const NO_MACHINE_ROW: MachineRow = {
-  validFrom: null, place: null, name: null, area: null, route: null, criticality: null, spareGroup: null, relief: true, intervalDays: null, nextStop: null, inServiceFrom: null,
-  removedOn: null, family: null, notes: null,
+  validFrom: null,
+  place: null,
+  name: null,
+  area: null,
+  route: null,
+  criticality: null,
+  spareGroup: null,
+  relief: true,
+  intervalDays: null,
+  nextStop: null,
+  inServiceFrom: null,
+  removedOn: null,
+  family: null,
+  notes: null,
 };
 
-export const implicitComponent = (machine: string, rows: readonly ComponentRow[]): Component => ({ id: machine, implicit: true, rows: rows.length === 0 ? [NO_COMPONENT_ROW] : rows });
+export const implicitComponent = (machine: string, rows: readonly ComponentRow[]): Component => ({
+  id: machine,
+  implicit: true,
+  rows: rows.length === 0 ? [NO_COMPONENT_ROW] : rows,
+});
 
 /** Rows of one thing in the order they come into force; two from one day are an error that names both places. */
 export function inOrder<T extends Dated>(rows: readonly T[], what: string, problems: Problems): T[] {
@@ -87,7 +152,12 @@ export function inOrder<T extends Dated>(rows: readonly T[], what: string, probl
     const before = sorted[i - 1];
     if (before === undefined || start(before.validFrom) !== start(row.validFrom) || row.place === null) return;
     const other = before.place as Place;
-    problems.error('two-in-force', { ...row.place, column: 1 }, `${what} has two rows in force from the same day; the other is ${other.file}:${other.line}.`, 'Give the later one its valid_from, or remove one.');
+    problems.error(
+      'two-in-force',
+      { ...row.place, column: 1 },
+      `${what} has two rows in force from the same day; the other is ${other.file}:${other.line}.`,
+      'Give the later one its valid_from, or remove one.',
+    );
   });
   return sorted;
 }

@@ -37,8 +37,13 @@ interface Head {
 
 /** Names of the file's columns that a mapping speaks of. */
 function wanted(mapping: MappedFile): string[] {
-  const texts = [...Object.values(mapping.columns).map((text) => (text.includes('{') ? text : `{${text}}`)), ...Object.values(mapping.wide).flatMap((own) => Object.values(own))];
-  return [...new Set([...texts.flatMap((text) => [...text.matchAll(PART)].map((m) => (m[1] as string).trim())), ...Object.keys(mapping.wide)])];
+  const texts = [
+    ...Object.values(mapping.columns).map((text) => (text.includes('{') ? text : `{${text}}`)),
+    ...Object.values(mapping.wide).flatMap((own) => Object.values(own)),
+  ];
+  return [
+    ...new Set([...texts.flatMap((text) => [...text.matchAll(PART)].map((m) => (m[1] as string).trim())), ...Object.keys(mapping.wide)]),
+  ];
 }
 
 /** Index of a column by its name, or by its place as #3; −1 where it is not there. */
@@ -47,7 +52,8 @@ function indexOf(names: readonly string[], name: string): number {
   return place === null ? names.indexOf(name) : Number(place[1]) <= names.length ? Number(place[1]) - 1 : -1;
 }
 
-const countOf = (head: Head | null, mapping: MappedFile): number => (head === null ? -1 : [...wanted(mapping), 'machine', 'point', 'value'].filter((name) => indexOf(head.names, name) >= 0).length);
+const countOf = (head: Head | null, mapping: MappedFile): number =>
+  head === null ? -1 : [...wanted(mapping), 'machine', 'point', 'value'].filter((name) => indexOf(head.names, name) >= 0).length;
 
 /** The line of the column names: as stated, else the first of the top that has the most of the columns asked for. */
 function headOf(rows: readonly GridRow[], mapping: MappedFile): Head | null {
@@ -68,10 +74,25 @@ function allThere(file: string, head: Head, mapping: MappedFile, problems: Probl
     const again = head.names.indexOf(name, head.names.indexOf(name) + 1);
     if (indexOf(head.names, name) < 0) {
       const near = nearestWord(name, head.names);
-      problems.error('import-column', place, `The mapping speaks of the column "${name}", which this file has not.`, near === null || near === '' ? `Its columns: ${head.names.filter((n) => n !== '').slice(0, 30).join(', ')}.` : `The nearest is "${near}".`);
+      problems.error(
+        'import-column',
+        place,
+        `The mapping speaks of the column "${name}", which this file has not.`,
+        near === null || near === ''
+          ? `Its columns: ${head.names
+              .filter((n) => n !== '')
+              .slice(0, 30)
+              .join(', ')}.`
+          : `The nearest is "${near}".`,
+      );
       sound = false;
     } else if (again >= 0 && !name.startsWith('#') && name !== '') {
-      problems.error('import-column', { ...place, column: again + 1 }, `The column "${name}" is there twice.`, `Name them in the mapping by their places, #${head.names.indexOf(name) + 1} and #${again + 1}.`);
+      problems.error(
+        'import-column',
+        { ...place, column: again + 1 },
+        `The column "${name}" is there twice.`,
+        `Name them in the mapping by their places, #${head.names.indexOf(name) + 1} and #${again + 1}.`,
+      );
       sound = false;
     }
   }
@@ -96,22 +117,36 @@ function partOf(names: readonly string[], text: string): Part {
   if (!text.includes('{')) return { from: at + 1, text: (cells) => cells[at] ?? '' };
   const pieces = text.split(PART).map((piece, i) => (i % 2 === 0 ? piece : indexOf(names, piece.trim())));
   const first = pieces.find((piece) => typeof piece === 'number');
-  return { from: typeof first === 'number' ? first + 1 : null, text: (cells) => pieces.map((piece) => (typeof piece === 'number' ? (cells[piece] ?? '').trim() : piece)).join('') };
+  return {
+    from: typeof first === 'number' ? first + 1 : null,
+    text: (cells) => pieces.map((piece) => (typeof piece === 'number' ? (cells[piece] ?? '').trim() : piece)).join(''),
+  };
 }
 
-const literal = (names: readonly string[], text: string): Part => (text.includes('{') ? partOf(names, text) : { from: null, text: () => text });
+const literal = (names: readonly string[], text: string): Part =>
+  text.includes('{') ? partOf(names, text) : { from: null, text: () => text };
 
 function layoutOf(head: Head, grid: Grid, mapping: MappedFile): Layout {
   const base = new Map<Column, Part>();
   const isWide = Object.keys(mapping.wide).length > 0;
-  for (const name of READINGS_COLUMNS) if (head.names.includes(name) && !(isWide && name === 'value')) base.set(name, partOf(head.names, name));
+  for (const name of READINGS_COLUMNS)
+    if (head.names.includes(name) && !(isWide && name === 'value')) base.set(name, partOf(head.names, name));
   for (const [name, text] of Object.entries(mapping.columns)) base.set(name as Column, partOf(head.names, text));
   for (const [name, text] of Object.entries(mapping.constants)) base.set(name as Column, { from: null, text: () => text });
   const below = mapping.units_row === 'yes' ? (grid.rows[head.at + 1]?.cells ?? []) : null;
-  const typedAt = (at: number): Typed => (at < 0 ? NOTHING : below === null ? headerUnits(head.names[at] ?? '') : (unitText(below[at] ?? '') ?? headerUnits(head.names[at] ?? '')));
+  const typedAt = (at: number): Typed =>
+    at < 0
+      ? NOTHING
+      : below === null
+        ? headerUnits(head.names[at] ?? '')
+        : (unitText(below[at] ?? '') ?? headerUnits(head.names[at] ?? ''));
   const wide = Object.entries(mapping.wide).map(([name, own]) => {
     const at = indexOf(head.names, name);
-    return { at, typed: typedAt(at), own: new Map(Object.entries(own).map(([column, text]) => [column as Column, literal(head.names, text)])) };
+    return {
+      at,
+      typed: typedAt(at),
+      own: new Map(Object.entries(own).map(([column, text]) => [column as Column, literal(head.names, text)])),
+    };
   });
   const value = base.get('value');
   return { base, wide, valueUnits: value?.from == null ? NOTHING : typedAt(value.from - 1) };
@@ -120,11 +155,26 @@ function layoutOf(head: Head, grid: Grid, mapping: MappedFile): Layout {
 /** The least that a reading needs: machine, point, value; and a survey where none is stated. */
 function isWhole(file: string, head: Head, layout: Layout, dated: boolean, problems: Problems): boolean {
   const has = (name: Column): boolean => layout.base.has(name) || (layout.wide.length > 0 && layout.wide.every(({ own }) => own.has(name)));
-  const missing = ([['machine', has('machine')], ['point', has('point')], ['value', layout.wide.length > 0 || layout.base.has('value')], ['survey_date', dated || has('survey_date') || has('taken_at')]] as const).filter(([, there]) => !there);
+  const missing = (
+    [
+      ['machine', has('machine')],
+      ['point', has('point')],
+      ['value', layout.wide.length > 0 || layout.base.has('value')],
+      ['survey_date', dated || has('survey_date') || has('taken_at')],
+    ] as const
+  ).filter(([, there]) => !there);
   for (const [name] of missing) {
     const near = nearestWord(name, head.names);
-    const columns = head.names.filter((n) => n !== '').slice(0, 30).join(', ');
-    problems.error('import-column', { file, line: head.line }, `The mapping does not say where "${name}" stands.`, `${near === null || near === '' ? `Name its column under columns, or give it under constants${name === 'survey_date' ? ', or state survey' : ''}.` : `Is it "${near}"?`} The columns here: ${columns}.`);
+    const columns = head.names
+      .filter((n) => n !== '')
+      .slice(0, 30)
+      .join(', ');
+    problems.error(
+      'import-column',
+      { file, line: head.line },
+      `The mapping does not say where "${name}" stands.`,
+      `${near === null || near === '' ? `Name its column under columns, or give it under constants${name === 'survey_date' ? ', or state survey' : ''}.` : `Is it "${near}"?`} The columns here: ${columns}.`,
+    );
   }
   return missing.length === 0;
 }
@@ -136,13 +186,27 @@ function* bodyOf(grid: Grid, head: Head, mapping: MappedFile): Generator<GridRow
     const first = row.cells.find((cell) => cell.trim() !== '');
     if (first === undefined) continue;
     if (mapping.footer !== null && first.trim().startsWith(mapping.footer)) return;
-    if (row.cells.length === head.names.length && row.cells.every((cell, c) => (cellText(cell) ?? '').replace(/\s+/g, ' ') === head.names[c])) continue;
+    if (
+      row.cells.length === head.names.length &&
+      row.cells.every((cell, c) => (cellText(cell) ?? '').replace(/\s+/g, ' ') === head.names[c])
+    )
+      continue;
     yield row;
   }
 }
 
 function tableOf(file: string, grid: Grid, head: Head, layout: Layout, mapping: MappedFile, problems: Problems): Table | null {
-  const header: Column[] = [...new Set<Column>(['value', 'quantity', 'detection', 'unit', 'taken_at', ...layout.base.keys(), ...layout.wide.flatMap(({ own }) => [...own.keys()])])];
+  const header: Column[] = [
+    ...new Set<Column>([
+      'value',
+      'quantity',
+      'detection',
+      'unit',
+      'taken_at',
+      ...layout.base.keys(),
+      ...layout.wide.flatMap(({ own }) => [...own.keys()]),
+    ]),
+  ];
   if (layout.base.has('taken_at') && !layout.base.has('survey_date')) header.push('survey_date');
   const index = new Map(header.map((name, i) => [name, i]));
   const rows: string[][] = [];
@@ -170,7 +234,16 @@ function tableOf(file: string, grid: Grid, head: Head, layout: Layout, mapping: 
     for (const column of layout.wide) if ((row.cells[column.at] ?? '').trim() !== '') add(row, column.own, column);
   }
   const column = (name: string): number => header.indexOf(name as Column);
-  const table: Table = { file, header, rows, lines, column, decimal: mapping.decimal ?? (grid.plain ? 'dot' : null), foreign: true, from: (row, name) => places[row]?.[column(name)] ?? places[row]?.[column(name === 'survey_date' ? 'taken_at' : 'value')] ?? null };
+  const table: Table = {
+    file,
+    header,
+    rows,
+    lines,
+    column,
+    decimal: mapping.decimal ?? (grid.plain ? 'dot' : null),
+    foreign: true,
+    from: (row, name) => places[row]?.[column(name)] ?? places[row]?.[column(name === 'survey_date' ? 'taken_at' : 'value')] ?? null,
+  };
   return datesIn(table, rows, mapping, problems) ? table : null;
 }
 
@@ -205,7 +278,12 @@ function datesIn(table: Table, rows: readonly string[][], mapping: MappedFile, p
       continue;
     }
     const place = { file: table.file, line: table.lines?.[found.row] ?? null, column: table.from?.(found.row, name) ?? null };
-    problems.error('date-order', place, `The dates of this column read in more than one way: "${found.text}" is ${found.readings.join(', or ')}.`, 'State dates: dmy, mdy or ymd for this file in the import section of plant.yaml.');
+    problems.error(
+      'date-order',
+      place,
+      `The dates of this column read in more than one way: "${found.text}" is ${found.readings.join(', or ')}.`,
+      'State dates: dmy, mdy or ymd for this file in the import section of plant.yaml.',
+    );
     sound = false;
   }
   const [survey, taken] = [table.column('survey_date'), table.column('taken_at')];

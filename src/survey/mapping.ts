@@ -12,9 +12,22 @@ export const DATE_ORDERS = ['ymd', 'dmy', 'mdy'] as const;
 export type DateOrder = (typeof DATE_ORDERS)[number];
 export type Column = (typeof READINGS_COLUMNS)[number];
 
-const words = <const W extends readonly [string, ...string[]]>(list: W) => z.enum(list, { error: `is none of: ${list.join(', ')}` }).nullable().default(null);
-const text = z.string().transform((v) => v.normalize('NFC').trim() || null).nullable().default(null);
-const whole = z.string().regex(/^\d{1,4}$/, { error: 'is no whole number' }).transform(Number).nullable().default(null);
+const words = <const W extends readonly [string, ...string[]]>(list: W) =>
+  z
+    .enum(list, { error: `is none of: ${list.join(', ')}` })
+    .nullable()
+    .default(null);
+const text = z
+  .string()
+  .transform((v) => v.normalize('NFC').trim() || null)
+  .nullable()
+  .default(null);
+const whole = z
+  .string()
+  .regex(/^\d{1,4}$/, { error: 'is no whole number' })
+  .transform(Number)
+  .nullable()
+  .default(null);
 const filled = z.string().transform((v) => v.normalize('NFC').trim());
 const column = z.enum(READINGS_COLUMNS, { error: `is none of: ${READINGS_COLUMNS.join(', ')}` });
 const byColumn = z.partialRecord(column, filled).default({});
@@ -41,7 +54,9 @@ export type MappedFile = z.output<typeof mappedFile>;
 
 export const importSchema = z.strictObject({
   span_days: whole,
-  states: z.record(z.string().transform(foldState), z.enum(STATES as [State, ...State[]], { error: `is none of: ${STATES.join(', ')}` })).default({}),
+  states: z
+    .record(z.string().transform(foldState), z.enum(STATES as [State, ...State[]], { error: `is none of: ${STATES.join(', ')}` }))
+    .default({}),
   files: z.array(mappedFile).default([]),
 });
 
@@ -75,19 +90,35 @@ function fitsName(pattern: string, name: string): boolean {
 export function importJsonSchema(): object {
   const string = { type: ['string', 'number'] };
   const of = (list: readonly string[]): object => ({ enum: [...list] });
-  const columns = { type: 'object', properties: Object.fromEntries(READINGS_COLUMNS.map((name) => [name, string])), additionalProperties: false };
+  const columns = {
+    type: 'object',
+    properties: Object.fromEntries(READINGS_COLUMNS.map((name) => [name, string])),
+    additionalProperties: false,
+  };
   const file = {
     file: { type: 'string', description: 'path in the plant folder; * stands for any part of a name' },
     sheet: { ...string, description: 'sheet of a workbook' },
-    survey: { ...string, description: 'survey that every row belongs to; else survey_date, the folder of the file, or the day of taken_at' },
-    encoding: of(ENCODINGS), delimiter: of(Object.keys(DELIMITERS)), decimal: of(['dot', 'comma']), dates: of(DATE_ORDERS), peak_means: of(['calculated', 'true']),
+    survey: {
+      ...string,
+      description: 'survey that every row belongs to; else survey_date, the folder of the file, or the day of taken_at',
+    },
+    encoding: of(ENCODINGS),
+    delimiter: of(Object.keys(DELIMITERS)),
+    decimal: of(['dot', 'comma']),
+    dates: of(DATE_ORDERS),
+    peak_means: of(['calculated', 'true']),
     header: { ...string, description: 'line of the column names; else the first line that has them all' },
     units_row: { enum: ['yes', 'no', true, false], description: 'the line below the column names holds their units' },
     footer: { ...string, description: 'the rows from the one that begins so are left out' },
     columns: { ...columns, description: 'our column: the column of the file, #3 for the third, or a text with {columns} in it' },
     constants: { ...columns, description: 'our column: the same text in each row' },
     wide: { type: 'object', additionalProperties: columns, description: 'each column of values by its name, with what its values are' },
-    names: { type: 'object', properties: Object.fromEntries(READINGS_COLUMNS.map((name) => [name, { type: 'object', additionalProperties: string }])), additionalProperties: false, description: 'our column: text in the file: text in the plant' },
+    names: {
+      type: 'object',
+      properties: Object.fromEntries(READINGS_COLUMNS.map((name) => [name, { type: 'object', additionalProperties: string }])),
+      additionalProperties: false,
+      description: 'our column: text in the file: text in the plant',
+    },
   };
   return {
     type: ['object', 'null'],

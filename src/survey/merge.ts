@@ -53,7 +53,10 @@ export class Joiner {
 
   #open(key: string, series: OpenSeries): OpenSeries {
     this.series.set(key, series);
-    for (const [map, name] of [[this.#byMachine, series.machine], [this.#byPoint, `${series.machine}\u0000${series.point}`]] as const) {
+    for (const [map, name] of [
+      [this.#byMachine, series.machine],
+      [this.#byPoint, `${series.machine}\u0000${series.point}`],
+    ] as const) {
       const list = map.get(name);
       if (list === undefined) map.set(name, [series]);
       else list.push(series);
@@ -92,7 +95,13 @@ export class Joiner {
     const series = this.#find(entry, cells, machine, point, component);
     if (series === null) return;
     if (entry.reading.value === null && entry.reading.bound === null && entry.reading.status === 'measured') {
-      this.#problems.add('note', 'blank-value', { ...cells.place, column: null }, 'The row has neither a value nor a status; it counts as not read.', 'Give the value, or say in status why there is none.');
+      this.#problems.add(
+        'note',
+        'blank-value',
+        { ...cells.place, column: null },
+        'The row has neither a value nor a status; it counts as not read.',
+        'Give the value, or say in status why there is none.',
+      );
       return;
     }
     const reading = this.#inSeriesUnit(entry, cells, series, survey, day);
@@ -100,7 +109,12 @@ export class Joiner {
     const takes = series.takes.get(survey) ?? [];
     const twin = takes.find((t) => t.order === entry.retake);
     if (twin !== undefined) {
-      cells.error('duplicate-reading', 'point', `The same reading stands at ${placeText(twin.reading.place)} too.`, 'Remove one, or mark the later one in "retake".');
+      cells.error(
+        'duplicate-reading',
+        'point',
+        `The same reading stands at ${placeText(twin.reading.place)} too.`,
+        'Remove one, or mark the later one in "retake".',
+      );
       return;
     }
     takes.push({ order: entry.retake, reading });
@@ -111,14 +125,29 @@ export class Joiner {
     const exact = entry.quantity === null ? undefined : this.series.get(seriesKey(machine, point, entry.quantity, entry.detection));
     if (exact !== undefined) return exact;
     const there = this.#byPoint.get(`${machine}\u0000${point}`) ?? [];
-    const fitting = there.filter((s) => (entry.quantity === null || s.quantity === entry.quantity) && (entry.detection === null || s.detection === entry.detection));
+    const fitting = there.filter(
+      (s) => (entry.quantity === null || s.quantity === entry.quantity) && (entry.detection === null || s.detection === entry.detection),
+    );
     if (fitting.length === 1 && (entry.quantity === null || entry.detection === null)) return fitting[0] as OpenSeries;
     if (!this.#pointsDeclared) return this.#bring(entry, cells, machine, point, component);
-    if (fitting.length > 1) cells.error('which-series', entry.quantity === null ? 'quantity' : 'detection', `The row does not say which of ${fitting.length} series of this point it is.`, 'Give quantity and detection.');
+    if (fitting.length > 1)
+      cells.error(
+        'which-series',
+        entry.quantity === null ? 'quantity' : 'detection',
+        `The row does not say which of ${fitting.length} series of this point it is.`,
+        'Give quantity and detection.',
+      );
     else {
       const known = there.map((s) => (s.detection === null ? s.quantity : `${s.quantity} ${s.detection}`)).join(', ');
       const what = [entry.quantity, entry.detection].filter((t) => t !== null).join(' ');
-      cells.error('wrong-detection', 'detection', `points.csv has no ${what} at point "${point}".`, known === '' ? 'Add it to points.csv.' : `It has: ${known}. A reading in another detection is another series; add it to points.csv.`);
+      cells.error(
+        'wrong-detection',
+        'detection',
+        `points.csv has no ${what} at point "${point}".`,
+        known === ''
+          ? 'Add it to points.csv.'
+          : `It has: ${known}. A reading in another detection is another series; add it to points.csv.`,
+      );
     }
     return null;
   }
@@ -128,18 +157,37 @@ export class Joiner {
     if (this.#pointsBroken) return null;
     const { quantity, detection, unitText } = entry;
     if (quantity === null) {
-      cells.error('blank', 'quantity', '"quantity" is blank and no points.csv says what is measured here.', 'Give velocity, displacement, acceleration or your own word.');
+      cells.error(
+        'blank',
+        'quantity',
+        '"quantity" is blank and no points.csv says what is measured here.',
+        'Give velocity, displacement, acceleration or your own word.',
+      );
       return null;
     }
     if (isKnownQuantity(quantity) && (detection === null || unitText === null)) {
       const column = detection === null ? 'detection' : 'unit';
-      cells.error('blank', column, `"${column}" is blank; a ${quantity} without it means nothing.`, 'Give it in the row, or in points.csv.');
+      cells.error(
+        'blank',
+        column,
+        `"${column}" is blank; a ${quantity} without it means nothing.`,
+        'Give it in the row, or in points.csv.',
+      );
       return null;
     }
     const unit = unitOf(cells, 'unit', unitText ?? '', quantity);
     if (unit === null) return null;
     const row = { ...PLAIN_POINT_ROW, place: cells.place };
-    return this.#open(seriesKey(machine, point, quantity, detection), { machine, component, point, quantity, detection, unit, rows: [row], takes: new Map() });
+    return this.#open(seriesKey(machine, point, quantity, detection), {
+      machine,
+      component,
+      point,
+      quantity,
+      detection,
+      unit,
+      rows: [row],
+      takes: new Map(),
+    });
   }
 
   #inSeriesUnit(entry: ReadingEntry, cells: Cells, series: OpenSeries, survey: number, day: Day): Reading | null {
@@ -155,7 +203,8 @@ export class Joiner {
     reading.day = day;
     if (factor !== 1 && reading.value !== null) reading.value *= factor;
     reading.typedUnit = factor === 1 && (unitText === null || typedUnit === series.unit) ? null : unitText;
-    if (phase !== null) reading.phase = { amplitude: phase.amplitude === null ? null : phase.amplitude * factor, lagDeg, reference: phase.reference };
+    if (phase !== null)
+      reading.phase = { amplitude: phase.amplitude === null ? null : phase.amplitude * factor, lagDeg, reference: phase.reference };
     return reading;
   }
 
@@ -171,14 +220,24 @@ export class Joiner {
   }
 
   #otherUnit(cells: Cells, text: string, series: OpenSeries): null {
-    cells.error('wrong-unit', 'unit', `The unit "${text}" is not that of ${series.quantity} here, "${series.unit}".`, "A plant's own quantity converts to nothing: give it in its own unit, or as a quantity of its own.");
+    cells.error(
+      'wrong-unit',
+      'unit',
+      `The unit "${text}" is not that of ${series.quantity} here, "${series.unit}".`,
+      "A plant's own quantity converts to nothing: give it in its own unit, or as a quantity of its own.",
+    );
     return null;
   }
 
   #oneConvention(entry: ReadingEntry, cells: Cells): boolean {
     this.convention ??= entry.convention;
     if (this.convention === entry.convention) return true;
-    cells.error('phase-convention', 'phase_convention', `Phase is a ${entry.convention} here and a ${this.convention} elsewhere.`, 'Keep one convention in a plant.');
+    cells.error(
+      'phase-convention',
+      'phase_convention',
+      `Phase is a ${entry.convention} here and a ${this.convention} elsewhere.`,
+      'Keep one convention in a plant.',
+    );
     return false;
   }
 
@@ -186,7 +245,14 @@ export class Joiner {
   spread(): void {
     for (const { machine, survey, reading } of this.#whole) {
       const all = this.seriesOf(machine);
-      if (all.length === 0) this.#problems.add('warning', 'whole-machine-unknown', { ...reading.place, column: null }, `The row speaks for machine "${machine}", of which no point is known.`, 'Add its points to points.csv.');
+      if (all.length === 0)
+        this.#problems.add(
+          'warning',
+          'whole-machine-unknown',
+          { ...reading.place, column: null },
+          `The row speaks for machine "${machine}", of which no point is known.`,
+          'Add its points to points.csv.',
+        );
       for (const series of all) if (!series.takes.has(survey)) series.takes.set(survey, [{ order: 0, reading }]);
     }
   }
@@ -194,7 +260,8 @@ export class Joiner {
   /** Closed series of a machine, in the order of points.csv, else by name. */
   close(machine: string): Series[] {
     const list = [...this.seriesOf(machine)];
-    if (!this.#pointsDeclared) list.sort((a, b) => compare(a.point, b.point) || compare(a.quantity, b.quantity) || compare(a.detection ?? '', b.detection ?? ''));
+    if (!this.#pointsDeclared)
+      list.sort((a, b) => compare(a.point, b.point) || compare(a.quantity, b.quantity) || compare(a.detection ?? '', b.detection ?? ''));
     return list.map((s) => ({
       machine: s.machine,
       component: s.component,
@@ -219,4 +286,3 @@ function lastTake(takes: readonly { readonly order: number; readonly reading: Re
   const last = sorted.pop() as Reading;
   return { ...last, retakes: sorted };
 }
-

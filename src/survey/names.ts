@@ -46,14 +46,31 @@ function follow(id: string, day: Day | null, exists: (id: string) => boolean, re
 }
 
 /** Tells an id that nothing bears. */
-export function tellUnknown(problems: Problems, place: { readonly file: string; readonly line: number; readonly column: number | null }, what: 'machine' | 'point' | 'component', id: string, where: string, known: readonly string[]): void {
+export function tellUnknown(
+  problems: Problems,
+  place: { readonly file: string; readonly line: number; readonly column: number | null },
+  what: 'machine' | 'point' | 'component',
+  id: string,
+  where: string,
+  known: readonly string[],
+): void {
   const near = nearestWord(id, known);
   const original = likelyOriginal(id, known);
   if (original !== null) {
-    problems.error(`unknown-${what}`, place, `There is no ${what} "${id}" ${where}.`, `A spreadsheet makes "${id}" of "${original}": that is the likely original. Write it back, and keep the column as text.`);
+    problems.error(
+      `unknown-${what}`,
+      place,
+      `There is no ${what} "${id}" ${where}.`,
+      `A spreadsheet makes "${id}" of "${original}": that is the likely original. Write it back, and keep the column as text.`,
+    );
     return;
   }
-  problems.error(`unknown-${what}`, place, `There is no ${what} "${id}" ${where}.`, near === null ? `Add it there, or mend the id.` : `The nearest is "${near}".`);
+  problems.error(
+    `unknown-${what}`,
+    place,
+    `There is no ${what} "${id}" ${where}.`,
+    near === null ? `Add it there, or mend the id.` : `The nearest is "${near}".`,
+  );
 }
 
 /** Ids that differ only in case are two things to us and one to most people. */
@@ -62,7 +79,14 @@ export function tellCaseTwins(problems: Problems, file: string, what: string, id
   for (const id of ids) {
     const folded = id.toLowerCase();
     const twin = seen.get(folded);
-    if (twin !== undefined && twin !== id) problems.add('warning', 'ids-differ-in-case', { file, line: null }, `The ${what}s "${twin}" and "${id}" differ only in case; they are taken as two.`, 'Make them one, or rename one of them.');
+    if (twin !== undefined && twin !== id)
+      problems.add(
+        'warning',
+        'ids-differ-in-case',
+        { file, line: null },
+        `The ${what}s "${twin}" and "${id}" differ only in case; they are taken as two.`,
+        'Make them one, or rename one of them.',
+      );
     seen.set(folded, id);
   }
 }

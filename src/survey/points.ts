@@ -8,8 +8,25 @@ import type { Problems } from './problems.ts';
 import { detectionOf, type PeakMeans, quantityOf, unitOf } from './quantities.ts';
 
 export const POINTS_COLUMNS = [
-  'machine', 'component', 'point', 'location', 'direction', 'measured_on', 'quantity', 'unit', 'detection', 'scale', 'low_hz', 'high_hz', 'support', 'limit_set', 'baseline',
-  'baseline_from', 'floor', 'notes', 'valid_from',
+  'machine',
+  'component',
+  'point',
+  'location',
+  'direction',
+  'measured_on',
+  'quantity',
+  'unit',
+  'detection',
+  'scale',
+  'low_hz',
+  'high_hz',
+  'support',
+  'limit_set',
+  'baseline',
+  'baseline_from',
+  'floor',
+  'notes',
+  'valid_from',
 ] as const;
 
 /** A row of points.csv with its key. */
@@ -24,7 +41,8 @@ export interface PointEntry {
   readonly cells: { readonly file: string; readonly line: number };
 }
 
-export const seriesKey = (machine: string, point: string, quantity: string, detection: string | null): string => `${machine}\u0000${point}\u0000${quantity}\u0000${detection ?? ''}`;
+export const seriesKey = (machine: string, point: string, quantity: string, detection: string | null): string =>
+  `${machine}\u0000${point}\u0000${quantity}\u0000${detection ?? ''}`;
 
 export interface PointEntries {
   readonly entries: readonly PointEntry[];
@@ -55,8 +73,15 @@ function pointEntry(cells: Cells, peakMeans: PeakMeans): PointEntry | null {
   const detection = detectionOf(cells, 'detection', quantity, peakMeans);
   if (detection === undefined) return null;
   if (isKnownQuantity(quantity)) {
-    if (detection === null) cells.error('blank', 'detection', `"detection" is blank; a ${quantity} without it means nothing.`, 'Give rms, calculated peak, true peak, calculated peak-to-peak or true peak-to-peak.');
-    if (unitText === null) cells.error('blank', 'unit', `"unit" is blank; a ${quantity} without it means nothing.`, 'Give the unit, such as mm/s.');
+    if (detection === null)
+      cells.error(
+        'blank',
+        'detection',
+        `"detection" is blank; a ${quantity} without it means nothing.`,
+        'Give rms, calculated peak, true peak, calculated peak-to-peak or true peak-to-peak.',
+      );
+    if (unitText === null)
+      cells.error('blank', 'unit', `"unit" is blank; a ${quantity} without it means nothing.`, 'Give the unit, such as mm/s.');
     if (detection === null || unitText === null) return null;
   }
   const unit = unitOf(cells, 'unit', unitText ?? '', quantity);
@@ -66,7 +91,8 @@ function pointEntry(cells: Cells, peakMeans: PeakMeans): PointEntry | null {
 function pointRow(cells: Cells, quantity: string | null): PointRow {
   const scale = cells.word('scale', ['linear', 'dB', 'none'] as const);
   const [lowHz, highHz] = [cells.number('low_hz', 0), cells.number('high_hz', 0)];
-  if (lowHz !== null && highHz !== null && lowHz >= highHz) cells.error('bad-band', 'high_hz', `The band from ${lowHz} to ${highHz} Hz is empty.`, 'Give low_hz below high_hz.');
+  if (lowHz !== null && highHz !== null && lowHz >= highHz)
+    cells.error('bad-band', 'high_hz', `The band from ${lowHz} to ${highHz} Hz is empty.`, 'Give low_hz below high_hz.');
   if (scale !== null && scale !== 'linear' && quantity !== null && isKnownQuantity(quantity)) {
     cells.error('wrong-scale', 'scale', `A ${quantity} is linear; scale "${scale}" is for a plant's own quantity.`, 'Leave scale blank.');
   }
@@ -96,6 +122,18 @@ export function inUnit(row: PointRow, from: string, to: string): PointRow {
 }
 
 export const PLAIN_POINT_ROW: PointRow = {
-  validFrom: null, place: null, location: null, direction: null, measuredOn: null, scale: 'linear', lowHz: null, highHz: null, support: null, limitSet: null, baseline: null,
-  baselineFrom: null, floor: null, notes: null,
+  validFrom: null,
+  place: null,
+  location: null,
+  direction: null,
+  measuredOn: null,
+  scale: 'linear',
+  lowHz: null,
+  highHz: null,
+  support: null,
+  limitSet: null,
+  baseline: null,
+  baselineFrom: null,
+  floor: null,
+  notes: null,
 };

@@ -5,7 +5,13 @@ export class Problems {
   readonly #list: Problem[] = [];
   readonly #told = new Set<string>();
 
-  add(severity: Problem['severity'], code: string, place: { readonly file: string; readonly line: number | null; readonly column?: number | null }, message: string, hint: string | null = null): void {
+  add(
+    severity: Problem['severity'],
+    code: string,
+    place: { readonly file: string; readonly line: number | null; readonly column?: number | null },
+    message: string,
+    hint: string | null = null,
+  ): void {
     const { file, line, column = null } = place;
     const key = `${code}\u0000${file}\u0000${line}\u0000${column}\u0000${message}`;
     if (this.#told.has(key)) return;
@@ -13,7 +19,12 @@ export class Problems {
     this.#list.push({ code, severity, file, line, column, message, hint });
   }
 
-  error(code: string, place: { readonly file: string; readonly line: number | null; readonly column?: number | null }, message: string, hint: string | null = null): void {
+  error(
+    code: string,
+    place: { readonly file: string; readonly line: number | null; readonly column?: number | null },
+    message: string,
+    hint: string | null = null,
+  ): void {
     this.add('error', code, place, message, hint);
   }
 

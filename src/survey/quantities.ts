@@ -22,7 +22,12 @@ export function unitOf(cells: Cells, column: string, text: string, quantity: str
   const near = nearestUnit(text, quantity);
   const known = `Units of ${quantity}: ${unitsOf(quantity).join(', ')}.`;
   const what = unit === null ? `The unit "${text}" is not known.` : `The unit "${text}" is one of ${unit.quantity}, not of ${quantity}.`;
-  cells.error(unit === null ? 'unknown-unit' : 'wrong-unit', column, what, near === null || unit !== null ? known : `The nearest is ${near}. ${known}`);
+  cells.error(
+    unit === null ? 'unknown-unit' : 'wrong-unit',
+    column,
+    what,
+    near === null || unit !== null ? known : `The nearest is ${near}. ${known}`,
+  );
   return null;
 }
 
@@ -33,15 +38,30 @@ export function detectionOf(cells: Cells, column: string, quantity: string, peak
   const parsed = parseDetection(text, peakMeans);
   if (parsed === null) {
     const near = nearestWord(text, DETECTIONS);
-    cells.error('unknown-word', column, `"${column}" is "${text}", which is none of: ${DETECTIONS.join(', ')}.`, near === null ? null : `The nearest is "${near}".`);
+    cells.error(
+      'unknown-word',
+      column,
+      `"${column}" is "${text}", which is none of: ${DETECTIONS.join(', ')}.`,
+      near === null ? null : `The nearest is "${near}".`,
+    );
     return undefined;
   }
   if ('ambiguous' in parsed) {
-    cells.error('which-peak', column, `"${text}" does not say whether the peak was calculated from r.m.s. or truly detected.`, 'Write "calculated" or "true" before it, or set peak_means in plant.yaml.');
+    cells.error(
+      'which-peak',
+      column,
+      `"${text}" does not say whether the peak was calculated from r.m.s. or truly detected.`,
+      'Write "calculated" or "true" before it, or set peak_means in plant.yaml.',
+    );
     return undefined;
   }
   if (parsed.detection === 'mean' && (quantity === 'velocity' || quantity === 'acceleration')) {
-    cells.error('wrong-detection', column, `A ${quantity} has no detection "mean": over a cycle it is nothing.`, 'Give rms, or a peak that says whether it is calculated or true.');
+    cells.error(
+      'wrong-detection',
+      column,
+      `A ${quantity} has no detection "mean": over a cycle it is nothing.`,
+      'Give rms, or a peak that says whether it is calculated or true.',
+    );
     return undefined;
   }
   return parsed.detection;

@@ -9,7 +9,19 @@ import type { Shell } from '../shell/types.ts';
 import { readTable, type Table } from './csv.ts';
 import { type Found, findFiles, PLANT_TABLES } from './find.ts';
 import { fits, type Imports, mappingOf, NO_IMPORTS } from './mapping.ts';
-import { ACCEPTED_COLUMNS, ACTIONS_COLUMNS, acceptedRow, actionRow, EVENTS_COLUMNS, eventRow, LIMITS_COLUMNS, limitRow, RENAMES_COLUMNS, renameRow, rowsOf } from './ledgers.ts';
+import {
+  ACCEPTED_COLUMNS,
+  ACTIONS_COLUMNS,
+  acceptedRow,
+  actionRow,
+  EVENTS_COLUMNS,
+  eventRow,
+  LIMITS_COLUMNS,
+  limitRow,
+  RENAMES_COLUMNS,
+  renameRow,
+  rowsOf,
+} from './ledgers.ts';
 import { COMPONENTS_COLUMNS, MACHINES_COLUMNS } from './machines.ts';
 import { Names } from './names.ts';
 import { POINTS_COLUMNS } from './points.ts';
@@ -51,16 +63,28 @@ export class Folder {
     const twin = this.#readings.get(own.sha256);
     this.#readings.set(own.sha256, twin ?? path);
     if (twin === undefined) return false;
-    this.problems.error('same-file-twice', { file: path, line: null }, `The file is byte for byte ${twin}: its readings are there already.`, 'Remove one of the two files.');
+    this.problems.error(
+      'same-file-twice',
+      { file: path, line: null },
+      `The file is byte for byte ${twin}: its readings are there already.`,
+      'Remove one of the two files.',
+    );
     return true;
   }
 
-  table(path: string, known: readonly string[], required: readonly string[], named?: (header: readonly string[]) => readonly string[]): Table | null {
+  table(
+    path: string,
+    known: readonly string[],
+    required: readonly string[],
+    named?: (header: readonly string[]) => readonly string[],
+  ): Table | null {
     return readTable(path, this.bytes(path), known, required, this.problems, named);
   }
 }
 
-const COLUMNS: Readonly<Record<(typeof PLANT_TABLES)[number], { readonly known: readonly string[]; readonly required: readonly string[] }>> = {
+const COLUMNS: Readonly<
+  Record<(typeof PLANT_TABLES)[number], { readonly known: readonly string[]; readonly required: readonly string[] }>
+> = {
   'machines.csv': { known: MACHINES_COLUMNS, required: ['machine'] },
   'components.csv': { known: COMPONENTS_COLUMNS, required: ['machine', 'component'] },
   'points.csv': { known: POINTS_COLUMNS, required: ['machine', 'point', 'quantity'] },
@@ -77,13 +101,22 @@ export type Tables = { readonly [name in (typeof PLANT_TABLES)[number]]: Table |
 export function readPlant(shell: ReadingShell, folder: string): { readonly plant: Plant | null; readonly problems: readonly Problem[] } {
   const problems = new Problems();
   const { files, refused } = shell.list(folder);
-  for (const path of refused) problems.add('warning', 'link-refused', { file: path, line: null }, 'A link that leaves the plant folder is not followed.', 'Copy the file into the folder.');
+  for (const path of refused)
+    problems.add(
+      'warning',
+      'link-refused',
+      { file: path, line: null },
+      'A link that leaves the plant folder is not followed.',
+      'Copy the file into the folder.',
+    );
   const reader = new Folder(shell, folder, problems);
   const { settings, policy, imports } = readSettings(files.includes('plant.yaml'), reader);
   const found = findFiles(files, (path) => mappingOf(imports, path) !== null);
   if (!isPlant(found, problems)) return { plant: null, problems: problems.sorted() };
   tellUnused(imports, found, problems);
-  const tables = Object.fromEntries(PLANT_TABLES.map((name) => [name, found.tables.has(name) ? reader.table(name, COLUMNS[name].known, COLUMNS[name].required) : null])) as unknown as Tables;
+  const tables = Object.fromEntries(
+    PLANT_TABLES.map((name) => [name, found.tables.has(name) ? reader.table(name, COLUMNS[name].known, COLUMNS[name].required) : null]),
+  ) as unknown as Tables;
   const names = new Names(rowsOf(tables['renames.csv'], problems, renameRow));
   const register = registerOf(found.tables.has('points.csv'), tables, settings.peakMeans, names, problems);
   const surveys = surveysOf(found, reader, register, settings.peakMeans, names, imports);
@@ -98,25 +131,52 @@ export function readPlant(shell: ReadingShell, folder: string): { readonly plant
   const told = problems.sorted();
   if (problems.anyError) return { plant: null, problems: told };
   const inputs = reader.inputs.sort((a, b) => (a.path < b.path ? -1 : 1));
-  return { plant: { settings, policy, machines, ...known, renames: rowsOf(tables['renames.csv'], problems, renameRow), problems: told, inputs }, problems: told };
+  return {
+    plant: { settings, policy, machines, ...known, renames: rowsOf(tables['renames.csv'], problems, renameRow), problems: told, inputs },
+    problems: told,
+  };
 }
 
 function isPlant(found: Found, problems: Problems): boolean {
-  for (const file of found.strangers) problems.add('note', 'unknown-file', { file, line: null }, 'The name of this file says nothing to swayfolio; it is left out.', null);
+  for (const file of found.strangers)
+    problems.add('note', 'unknown-file', { file, line: null }, 'The name of this file says nothing to swayfolio; it is left out.', null);
   const hasSurvey = found.histories.length > 0 || found.imports.length > 0 || found.surveys.length > 0;
   if (found.plantYaml === null && !hasSurvey) {
-    problems.error('no-plant', { file: '', line: null }, 'This folder is no plant: it has neither plant.yaml nor a survey.', 'Make one by: swayfolio new <folder>');
+    problems.error(
+      'no-plant',
+      { file: '', line: null },
+      'This folder is no plant: it has neither plant.yaml nor a survey.',
+      'Make one by: swayfolio new <folder>',
+    );
     return false;
   }
-  if (!hasSurvey) problems.error('no-survey', { file: 'surveys', line: null }, 'The plant has no survey.', 'Put readings into surveys/<date>/readings.csv, or a file with a survey_date column into surveys/.');
-  if (found.plantYaml === null) problems.add('warning', 'no-plant-yaml', { file: 'plant.yaml', line: null }, 'There is no plant.yaml: the plant has no name and every setting is the default.', 'Add a plant.yaml with a line: plant: Name of the plant');
+  if (!hasSurvey)
+    problems.error(
+      'no-survey',
+      { file: 'surveys', line: null },
+      'The plant has no survey.',
+      'Put readings into surveys/<date>/readings.csv, or a file with a survey_date column into surveys/.',
+    );
+  if (found.plantYaml === null)
+    problems.add(
+      'warning',
+      'no-plant-yaml',
+      { file: 'plant.yaml', line: null },
+      'There is no plant.yaml: the plant has no name and every setting is the default.',
+      'Add a plant.yaml with a line: plant: Name of the plant',
+    );
   return true;
 }
 
 function tellUnused(imports: Imports, found: Found, problems: Problems): void {
   for (const { file } of imports.files) {
     if (found.imports.some((path) => fits(file, path))) continue;
-    problems.error('import-no-file', { file: 'plant.yaml', line: null }, `The import section speaks of "${file}", and no file of that name is there.`, 'Give its path in the plant folder, such as surveys/2026-01-14/export.csv; * stands for any part of a name.');
+    problems.error(
+      'import-no-file',
+      { file: 'plant.yaml', line: null },
+      `The import section speaks of "${file}", and no file of that name is there.`,
+      'Give its path in the plant folder, such as surveys/2026-01-14/export.csv; * stands for any part of a name.',
+    );
   }
 }
 

@@ -14,8 +14,37 @@ import { type OwnStates, STATE_WORDS, stateOf } from './states.ts';
 import { detectionOf, type PeakMeans, quantityOf } from './quantities.ts';
 
 export const READINGS_COLUMNS = [
-  'machine', 'point', 'quantity', 'detection', 'value', 'unit', 'low_hz', 'high_hz', 'speed_rpm', 'load_pct', 'state', 'status', 'phase_deg', 'amplitude_1x', 'phase_ref', 'phase_convention',
-  'running_hours', 'taken_at', 'instrument', 'sensor', 'measured_by', 'retake', 'remark', 'survey_date', 'component', 'location', 'direction', 'measured_on', 'last_value', 'last_date', 'alarm',
+  'machine',
+  'point',
+  'quantity',
+  'detection',
+  'value',
+  'unit',
+  'low_hz',
+  'high_hz',
+  'speed_rpm',
+  'load_pct',
+  'state',
+  'status',
+  'phase_deg',
+  'amplitude_1x',
+  'phase_ref',
+  'phase_convention',
+  'running_hours',
+  'taken_at',
+  'instrument',
+  'sensor',
+  'measured_by',
+  'retake',
+  'remark',
+  'survey_date',
+  'component',
+  'location',
+  'direction',
+  'measured_on',
+  'last_value',
+  'last_date',
+  'alarm',
 ] as const;
 
 /** A row of readings.csv. `value` and the phase's amplitude are in the unit typed. */
@@ -35,10 +64,23 @@ export interface ReadingEntry {
 }
 
 /** Rows of one table in the order of the file; `survey` null means that each row names its own by survey_date. */
-export function readingEntries(table: Table, survey: string | null, peakMeans: PeakMeans, states: OwnStates, problems: Problems, take: (entry: ReadingEntry, cells: Cells) => void): void {
+export function readingEntries(
+  table: Table,
+  survey: string | null,
+  peakMeans: PeakMeans,
+  states: OwnStates,
+  problems: Problems,
+  take: (entry: ReadingEntry, cells: Cells) => void,
+): void {
   const cells = new Cells(table, problems);
   const has = (column: string): boolean => table.column(column) >= 0;
-  const columns: Columns = { phase: has('phase_deg'), band: has('low_hz') || has('high_hz'), retake: has('retake'), status: has('status'), taken: has('taken_at') };
+  const columns: Columns = {
+    phase: has('phase_deg'),
+    band: has('low_hz') || has('high_hz'),
+    retake: has('retake'),
+    status: has('status'),
+    taken: has('taken_at'),
+  };
   while (cells.next()) {
     const entry = entryOf(cells, survey, peakMeans, states, columns);
     if (entry !== null) take(entry, cells);
@@ -89,7 +131,12 @@ function surveyOf(cells: Cells): string | null {
   const text = cells.required('survey_date');
   if (text === null) return null;
   if (parseDay(text) !== null) return text;
-  cells.error('bad-date', 'survey_date', `"survey_date" is no date: ${text}.`, 'Write dates as YYYY-MM-DD, date-times as YYYY-MM-DD hh:mm.');
+  cells.error(
+    'bad-date',
+    'survey_date',
+    `"survey_date" is no date: ${text}.`,
+    'Write dates as YYYY-MM-DD, date-times as YYYY-MM-DD hh:mm.',
+  );
   return null;
 }
 
@@ -122,15 +169,33 @@ function typedValue(cells: Cells, typed: string, quantity: string | null, states
     const state = value === 'no number' ? stateOf(typed, states) : null;
     if (state !== null) return { number: null, bound: null, text: null, status: state === 'not read' ? null : state };
     const near = value === 'no number' ? nearestWord(typed, STATE_WORDS) : null;
-    const hint = value === 'comma' ? 'Write the decimal sign as a dot, or map the file in the import section of plant.yaml.' : `Give a number, a bound such as <0.2, or leave it blank and say why in status.${near === null ? '' : ` The nearest word known is "${near}".`}${value === 'infinite' ? '' : ' A word for a state is mapped in plant.yaml by import: { states: { word: status } }.'}`;
-    cells.error('bad-number', 'value', `"value" is ${value === 'infinite' ? 'not finite' : value === 'comma' ? 'written with a comma' : 'no number'}: ${typed}.`, hint);
+    const hint =
+      value === 'comma'
+        ? 'Write the decimal sign as a dot, or map the file in the import section of plant.yaml.'
+        : `Give a number, a bound such as <0.2, or leave it blank and say why in status.${near === null ? '' : ` The nearest word known is "${near}".`}${value === 'infinite' ? '' : ' A word for a state is mapped in plant.yaml by import: { states: { word: status } }.'}`;
+    cells.error(
+      'bad-number',
+      'value',
+      `"value" is ${value === 'infinite' ? 'not finite' : value === 'comma' ? 'written with a comma' : 'no number'}: ${typed}.`,
+      hint,
+    );
     return undefined;
   }
   if (value < 0 && (quantity === null || isKnownQuantity(quantity))) {
-    cells.error('negative', 'value', `"value" is negative: ${typed}. An amplitude never is.`, 'Check the sign; a gap or a position is a quantity of its own.');
+    cells.error(
+      'negative',
+      'value',
+      `"value" is negative: ${typed}. An amplitude never is.`,
+      'Check the sign; a gap or a position is a quantity of its own.',
+    );
     return undefined;
   }
-  return { number: bound === '<' ? null : value, bound, text: cells.table.decimal === 'dot' && bound === null ? typed : `${bound ?? ''}${cells.plainText('value', digits)}`, status: null };
+  return {
+    number: bound === '<' ? null : value,
+    bound,
+    text: cells.table.decimal === 'dot' && bound === null ? typed : `${bound ?? ''}${cells.plainText('value', digits)}`,
+    status: null,
+  };
 }
 
 function takenDay(cells: Cells, text: string): Day | null {

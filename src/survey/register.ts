@@ -54,12 +54,19 @@ export class Register {
     return ids.map((id) => {
       const open = this.machines.get(id) as OpenMachine;
       const rows = inOrder(open.rows, `Machine "${id}"`, this.#problems);
-      const components: Component[] = [...open.components.entries()].map(([name, list]) => ({ id: name, implicit: false, rows: inOrder(list, `Component "${name}" of "${id}"`, this.#problems) }));
-      const series = this.joiner.close(id).map((s) => ({ ...s, rows: inOrder(s.rows, `Point "${s.point}" of "${id}" (${s.quantity})`, this.#problems) }));
+      const components: Component[] = [...open.components.entries()].map(([name, list]) => ({
+        id: name,
+        implicit: false,
+        rows: inOrder(list, `Component "${name}" of "${id}"`, this.#problems),
+      }));
+      const series = this.joiner
+        .close(id)
+        .map((s) => ({ ...s, rows: inOrder(s.rows, `Point "${s.point}" of "${id}" (${s.quantity})`, this.#problems) }));
       return {
         id,
         rows: rows.length === 0 ? [NO_MACHINE_ROW] : rows,
-        components: components.length === 0 ? [implicitComponent(id, inOrder(open.ownComponent, `Machine "${id}"`, this.#problems))] : components,
+        components:
+          components.length === 0 ? [implicitComponent(id, inOrder(open.ownComponent, `Machine "${id}"`, this.#problems))] : components,
         series,
         declared: this.machinesDeclared,
       };
@@ -69,7 +76,11 @@ export class Register {
 
 /** A table that could not be read declares nothing: its own problem is told, not one for each id it would have held. */
 export function registerOf(hasPoints: boolean, tables: Tables, peakMeans: PeakMeans, names: Names, problems: Problems): Register {
-  const register = new Register(tables['machines.csv'] !== null, tables['points.csv'] !== null ? 'declared' : hasPoints ? 'broken' : 'absent', problems);
+  const register = new Register(
+    tables['machines.csv'] !== null,
+    tables['points.csv'] !== null ? 'declared' : hasPoints ? 'broken' : 'absent',
+    problems,
+  );
   readMachines(register, tables, problems);
   readComponents(register, tables, problems);
   readPoints(register, tables, peakMeans, names, problems);
@@ -99,7 +110,10 @@ function readComponents(register: Register, tables: Tables, problems: Problems):
     const row = componentRow(cells);
     if (machine === null || id === null) continue;
     const open = register.machine(machine);
-    if (open === null) tellUnknown(problems, { ...cells.place, column: table.column('machine') + 1 }, 'machine', machine, 'in machines.csv', [...register.machines.keys()]);
+    if (open === null)
+      tellUnknown(problems, { ...cells.place, column: table.column('machine') + 1 }, 'machine', machine, 'in machines.csv', [
+        ...register.machines.keys(),
+      ]);
     else open.components.set(id, [...(open.components.get(id) ?? []), row]);
   }
 }
@@ -117,7 +131,13 @@ function readPoints(register: Register, tables: Tables, peakMeans: PeakMeans, na
       tellUnknown(problems, place, 'machine', machine, 'in machines.csv', [...register.machines.keys()]);
       continue;
     }
-    const component = componentFor(register, machine, entry.component, { ...place, column: table.column('component') + 1 || null }, problems);
+    const component = componentFor(
+      register,
+      machine,
+      entry.component,
+      { ...place, column: table.column('component') + 1 || null },
+      problems,
+    );
     if (component === null) {
       register.joiner.markFaulty(machine, entry.point);
       continue;
@@ -130,16 +150,35 @@ function readPoints(register: Register, tables: Tables, peakMeans: PeakMeans, na
 }
 
 /** The component that a point belongs to; the machine itself where it has none of its own. */
-function componentFor(register: Register, machine: string, typed: string | null, place: { file: string; line: number; column: number | null }, problems: Problems): string | null {
+function componentFor(
+  register: Register,
+  machine: string,
+  typed: string | null,
+  place: { file: string; line: number; column: number | null },
+  problems: Problems,
+): string | null {
   const ids = register.componentIds(machine);
   const implicit = (register.machines.get(machine)?.components.size ?? 0) === 0;
   if (typed !== null && ids.includes(typed)) return typed;
   if (implicit) {
-    if (typed !== null) problems.add('warning', 'no-components', place, `The component "${typed}" of machine "${machine}" is in no components.csv; the machine is taken as one.`, 'Add its components to components.csv.');
+    if (typed !== null)
+      problems.add(
+        'warning',
+        'no-components',
+        place,
+        `The component "${typed}" of machine "${machine}" is in no components.csv; the machine is taken as one.`,
+        'Add its components to components.csv.',
+      );
     return machine;
   }
   if (typed === null && ids.length === 1) return ids[0] as string;
-  if (typed === null) problems.error('blank', place, `"component" is blank; machine "${machine}" has ${ids.length}: ${ids.join(', ')}.`, 'Say which one the point belongs to.');
+  if (typed === null)
+    problems.error(
+      'blank',
+      place,
+      `"component" is blank; machine "${machine}" has ${ids.length}: ${ids.join(', ')}.`,
+      'Say which one the point belongs to.',
+    );
   else tellUnknown(problems, place, 'component', typed, `of machine "${machine}" in components.csv`, ids);
   return null;
 }

@@ -18,7 +18,12 @@ function mapOf(yaml: YamlFile, keys: readonly string[], problems: Problems): Rec
   const { value } = yaml;
   if (value === null || value === undefined || value === '') return {};
   if (typeof value !== 'object' || Array.isArray(value)) {
-    problems.error('broken-yaml', { file: yaml.file, line: 1, column: 1 }, 'The file holds no names and values.', 'Each line is a name, a colon and a value.');
+    problems.error(
+      'broken-yaml',
+      { file: yaml.file, line: 1, column: 1 },
+      'The file holds no names and values.',
+      'Each line is a name, a colon and a value.',
+    );
     return null;
   }
   const known: Record<string, unknown> = {};
@@ -26,7 +31,13 @@ function mapOf(yaml: YamlFile, keys: readonly string[], problems: Problems): Rec
     if (keys.includes(key)) known[key] = item;
     else {
       const near = nearestWord(key, keys);
-      problems.add('note', 'unknown-key', yaml.place([key]), `"${key}" is not known; it is left out.`, near === null ? null : `The nearest is "${near}".`);
+      problems.add(
+        'note',
+        'unknown-key',
+        yaml.place([key]),
+        `"${key}" is not known; it is left out.`,
+        near === null ? null : `The nearest is "${near}".`,
+      );
     }
   }
   return known;
@@ -37,7 +48,12 @@ type Issues = { readonly issues: readonly { readonly path: readonly PropertyKey[
 function tell(yaml: YamlFile, error: Issues, problems: Problems): void {
   for (const issue of error.issues) {
     const path = issue.path.map((p) => (typeof p === 'symbol' ? String(p) : p));
-    problems.error('bad-value', yaml.place(path), `"${path.join('.')}"${issue.message.startsWith('is ') ? '' : ':'} ${issue.message}.`, HINT);
+    problems.error(
+      'bad-value',
+      yaml.place(path),
+      `"${path.join('.')}"${issue.message.startsWith('is ') ? '' : ':'} ${issue.message}.`,
+      HINT,
+    );
   }
 }
 
@@ -48,8 +64,20 @@ export interface Settings {
 }
 
 export const NO_SETTINGS: PlantSettings = {
-  plant: 'Plant not named', client: null, site: null, contract: null, procedure: null, contractor: { name: null, address: null, contact: null, logo: null, accent: null }, language: 'en', paper: 'A4',
-  units: {}, frequencyUnit: 'Hz', peakMeans: null, nextStops: [], retention: null, distribution: [],
+  plant: 'Plant not named',
+  client: null,
+  site: null,
+  contract: null,
+  procedure: null,
+  contractor: { name: null, address: null, contact: null, logo: null, accent: null },
+  language: 'en',
+  paper: 'A4',
+  units: {},
+  frequencyUnit: 'Hz',
+  peakMeans: null,
+  nextStops: [],
+  retention: null,
+  distribution: [],
 };
 
 export function settingsOf(yaml: YamlFile, problems: Problems): Settings {
@@ -62,7 +90,13 @@ export function settingsOf(yaml: YamlFile, problems: Problems): Settings {
     return none;
   }
   const { data } = parsed;
-  if (data.plant === null) problems.error('no-plant-name', yaml.place(['plant']), '"plant" is blank: the report needs its name.', 'Add a line: plant: Name of the plant');
+  if (data.plant === null)
+    problems.error(
+      'no-plant-name',
+      yaml.place(['plant']),
+      '"plant" is blank: the report needs its name.',
+      'Add a line: plant: Name of the plant',
+    );
   const { units, frequencyUnit } = displayUnits(yaml, data.units, data.peak_means, problems);
   checkAccent(yaml, data.contractor.accent, problems);
   return {
@@ -78,7 +112,9 @@ export function settingsOf(yaml: YamlFile, problems: Problems): Settings {
       units,
       frequencyUnit,
       peakMeans: data.peak_means,
-      nextStops: data.next_stops.flatMap((s) => (s === null ? [] : typeof s === 'number' ? [{ day: s, area: null }] : s.date === null ? [] : [{ day: s.date, area: s.area }])),
+      nextStops: data.next_stops.flatMap((s) =>
+        s === null ? [] : typeof s === 'number' ? [{ day: s, area: null }] : s.date === null ? [] : [{ day: s.date, area: s.area }],
+      ),
       retention: data.retention,
       distribution: data.distribution,
     },
@@ -91,23 +127,46 @@ export function settingsOf(yaml: YamlFile, problems: Problems): Settings {
 function checkAccent(yaml: YamlFile, accent: string | null, problems: Problems): void {
   if (accent === null) return;
   const readable = readableAccent(accent);
-  if (readable === null) problems.error('bad-value', yaml.place(['contractor', 'accent']), `The accent "${accent}" is no colour of the form #rrggbb.`, 'Give six digits after #, such as #0b6a6a, in quotes.');
-  else if (readable !== accent.toLowerCase()) problems.error('faint-colour', yaml.place(['contractor', 'accent']), `The accent ${accent} cannot be read on white paper: text needs a contrast of 4.5 to 1.`, `The nearest that passes is "${readable}".`);
+  if (readable === null)
+    problems.error(
+      'bad-value',
+      yaml.place(['contractor', 'accent']),
+      `The accent "${accent}" is no colour of the form #rrggbb.`,
+      'Give six digits after #, such as #0b6a6a, in quotes.',
+    );
+  else if (readable !== accent.toLowerCase())
+    problems.error(
+      'faint-colour',
+      yaml.place(['contractor', 'accent']),
+      `The accent ${accent} cannot be read on white paper: text needs a contrast of 4.5 to 1.`,
+      `The nearest that passes is "${readable}".`,
+    );
 }
 
-function displayUnits(yaml: YamlFile, given: Readonly<Record<string, { unit: string | null; detection: string | null }>>, peakMeans: 'calculated' | 'true' | null, problems: Problems) {
+function displayUnits(
+  yaml: YamlFile,
+  given: Readonly<Record<string, { unit: string | null; detection: string | null }>>,
+  peakMeans: 'calculated' | 'true' | null,
+  problems: Problems,
+) {
   const units: Record<string, { unit: string | null; detection: null | ReturnType<typeof detectionIn> }> = {};
   let frequencyUnit: 'Hz' | 'CPM' = 'Hz';
   const detectionIn = (text: string, quantity: string) => {
     const found = parseDetection(text, peakMeans);
     if (found !== null && 'detection' in found) return found.detection;
-    problems.error('unknown-word', yaml.place(['units', quantity]), `The detection "${text}" of ${quantity} is not known, or does not say which peak.`, 'Give rms, or a peak that says whether it is calculated or true.');
+    problems.error(
+      'unknown-word',
+      yaml.place(['units', quantity]),
+      `The detection "${text}" of ${quantity} is not known, or does not say which peak.`,
+      'Give rms, or a peak that says whether it is calculated or true.',
+    );
     return null;
   };
   for (const [quantity, { unit, detection }] of Object.entries(given)) {
     if (quantity === 'frequency') {
       const found = parseFrequencyUnit(unit ?? '');
-      if (found === null || found === 'r/min') problems.error('unknown-unit', yaml.place(['units', quantity]), `The frequency unit "${unit}" is not known.`, 'Give Hz or CPM.');
+      if (found === null || found === 'r/min')
+        problems.error('unknown-unit', yaml.place(['units', quantity]), `The frequency unit "${unit}" is not known.`, 'Give Hz or CPM.');
       else frequencyUnit = found;
       continue;
     }
@@ -124,7 +183,12 @@ function overridesOf(yaml: YamlFile, given: Readonly<Record<string, number>>, pr
     if (known !== undefined) overrides[known] = value;
     else {
       const near = nearestWord(id, POLICY_IDS);
-      problems.error('unknown-policy', yaml.place(['policy', id]), `There is no policy "${id}".`, near === null ? 'The report lists every id with its value.' : `The nearest is "${near}".`);
+      problems.error(
+        'unknown-policy',
+        yaml.place(['policy', id]),
+        `There is no policy "${id}".`,
+        near === null ? 'The report lists every id with its value.' : `The nearest is "${near}".`,
+      );
     }
   }
   return overrides;
@@ -133,8 +197,26 @@ function overridesOf(yaml: YamlFile, given: Readonly<Record<string, number>>, pr
 /** A survey without its own file: everything measured that day, nobody named. */
 export function bareSurvey(id: string, day: Day): Survey {
   return {
-    id, day, from: day, to: day, kind: 'routine', scope: { all: true, areas: [], routes: [], machines: [] }, people: [], instruments: [], sensors: [], fieldCheck: null, process: null, weather: null,
-    remarks: null, issueDate: null, reviewedBy: null, approvedBy: null, notified: [], findings: [], photos: [], place: null,
+    id,
+    day,
+    from: day,
+    to: day,
+    kind: 'routine',
+    scope: { all: true, areas: [], routes: [], machines: [] },
+    people: [],
+    instruments: [],
+    sensors: [],
+    fieldCheck: null,
+    process: null,
+    weather: null,
+    remarks: null,
+    issueDate: null,
+    reviewedBy: null,
+    approvedBy: null,
+    notified: [],
+    findings: [],
+    photos: [],
+    place: null,
   };
 }
 
@@ -150,7 +232,12 @@ export function surveyHead(id: string, yaml: YamlFile, problems: Problems): Surv
   const { data } = parsed;
   const day = parseDay(id) ?? data.to ?? data.from;
   if (day === null) {
-    problems.error('survey-without-date', yaml.place(['to']), `The survey "${id}" has no date: neither its folder's name nor "to" is one.`, 'Name the folder by the date, such as 2026-01-14.');
+    problems.error(
+      'survey-without-date',
+      yaml.place(['to']),
+      `The survey "${id}" has no date: neither its folder's name nor "to" is one.`,
+      'Name the folder by the date, such as 2026-01-14.',
+    );
     return null;
   }
   const from = data.from ?? Math.min(day, data.to ?? day);

@@ -9,7 +9,9 @@ const BY_SPACE = /^[1-9]\d{0,2}(?:[ '\u00a0\u202f\u2019]\d{3})+(?:[.,]\d+)?$/;
 export type DecimalSign = 'dot' | 'comma';
 
 /** `either`: every cell reads both ways; `mixed`: cells contradict each other; with the row that shows it. */
-export type ColumnSign = { readonly sign: DecimalSign } | { readonly doubt: 'either' | 'mixed'; readonly row: number; readonly text: string };
+export type ColumnSign =
+  | { readonly sign: DecimalSign }
+  | { readonly doubt: 'either' | 'mixed'; readonly row: number; readonly text: string };
 
 /** Digits and signs of a cell: no bound, sign or blank around. */
 const bare = (text: string): string => text.trim().replace(/^[<>≤≥]?\s*[+-]?\s*/, '');

@@ -29,14 +29,25 @@ interface Source {
 }
 
 /** All surveys, ascending by day then id; readings are joined by the way. */
-export function surveysOf(found: Found, reader: Folder, register: Register, peakMeans: PeakMeans, names: Names, imports: Imports): Survey[] {
+export function surveysOf(
+  found: Found,
+  reader: Folder,
+  register: Register,
+  peakMeans: PeakMeans,
+  names: Names,
+  imports: Imports,
+): Survey[] {
   const { problems } = reader;
   const heads = new Map<string, Survey>();
   const sources: Source[] = [];
   for (const folder of found.surveys) readFolder(folder, reader, heads, sources);
   const folders = new Set(heads.keys());
-  const inHistory = new Set([...found.histories.flatMap((file) => readHistory(file, reader, heads, sources)), ...found.imports.flatMap((file) => readMapped(file, imports, reader, heads, sources))]);
-  for (const folder of found.surveys) if (folder.readings === null && heads.has(folder.id) && !inHistory.has(folder.id)) tellEmpty(folder, problems);
+  const inHistory = new Set([
+    ...found.histories.flatMap((file) => readHistory(file, reader, heads, sources)),
+    ...found.imports.flatMap((file) => readMapped(file, imports, reader, heads, sources)),
+  ]);
+  for (const folder of found.surveys)
+    if (folder.readings === null && heads.has(folder.id) && !inHistory.has(folder.id)) tellEmpty(folder, problems);
   const joined = imports.span_days === null ? NO_JOINS : joinDays(heads, folders, imports.span_days);
   const states = new Map(Object.entries(imports.states));
   const surveys = [...heads.values()].sort((a, b) => a.day - b.day || (a.id < b.id ? -1 : 1));
@@ -62,12 +73,18 @@ function readFolder(folder: FoundSurvey, reader: Folder, heads: Map<string, Surv
   const yaml = folder.yaml === null ? null : readYaml(folder.yaml, reader.bytes(folder.yaml), problems);
   const day = parseDay(folder.id);
   if (folder.yaml === null && day === null) {
-    problems.error('survey-without-date', { file: `surveys/${folder.id}`, line: null }, `The survey folder "${folder.id}" is named by no date and has no survey.yaml that gives one.`, 'Name it by the date, such as 2026-01-14.');
+    problems.error(
+      'survey-without-date',
+      { file: `surveys/${folder.id}`, line: null },
+      `The survey folder "${folder.id}" is named by no date and has no survey.yaml that gives one.`,
+      'Name it by the date, such as 2026-01-14.',
+    );
     return;
   }
   const head = yaml === null ? (day === null ? null : bareSurvey(folder.id, day)) : surveyHead(folder.id, yaml, problems);
   if (head === null) return;
-  const findings = folder.findings === null ? null : reader.table(folder.findings, FINDINGS_COLUMNS, ['finding', 'machine'], findingsHeader);
+  const findings =
+    folder.findings === null ? null : reader.table(folder.findings, FINDINGS_COLUMNS, ['finding', 'machine'], findingsHeader);
   const table = folder.readings === null ? null : reader.table(folder.readings, READINGS_COLUMNS, ['machine', 'point', 'value']);
   const twin = table !== null && folder.readings !== null && table.rows.length > 0 && reader.isTwin(folder.readings);
   if (table !== null && !twin) sources.push({ table, survey: folder.id });
@@ -75,12 +92,22 @@ function readFolder(folder: FoundSurvey, reader: Folder, heads: Map<string, Surv
   const captions = folder.captions === null ? null : reader.table(folder.captions, ['photo', 'caption'], ['photo', 'caption']);
   for (const path of folder.photos) reader.bytes(path);
   const photos: Photo[] = folder.photos.map((path) => ({ path, machine: '', point: null, caption: captionOf(captions, path, problems) }));
-  heads.set(folder.id, { ...head, findings: rowsOf(findings, problems, findingRow), photos, place: { file: folder.readings ?? folder.yaml ?? `surveys/${folder.id}`, line: 1 } });
+  heads.set(folder.id, {
+    ...head,
+    findings: rowsOf(findings, problems, findingRow),
+    photos,
+    place: { file: folder.readings ?? folder.yaml ?? `surveys/${folder.id}`, line: 1 },
+  });
 }
 
 function tellEmpty(folder: FoundSurvey, problems: Problems): void {
   const place = { file: folder.readings ?? folder.yaml ?? `surveys/${folder.id}`, line: null };
-  problems.error('survey-without-readings', place, `The survey ${folder.id} has no readings.`, 'Fill in its readings.csv, or remove the folder.');
+  problems.error(
+    'survey-without-readings',
+    place,
+    `The survey ${folder.id} has no readings.`,
+    'Fill in its readings.csv, or remove the folder.',
+  );
 }
 
 function captionOf(captions: Table | null, path: string, problems: Problems): string | null {
@@ -94,7 +121,13 @@ function readHistory(file: string, reader: Folder, heads: Map<string, Survey>, s
   if (table === null) return [];
   if (reader.isTwin(file)) return [];
   sources.push({ table, survey: null });
-  if (table.rows.length === 0) reader.problems.error('survey-without-readings', { file, line: 1 }, 'The file has a first line and no readings.', 'Add the readings, or remove the file.');
+  if (table.rows.length === 0)
+    reader.problems.error(
+      'survey-without-readings',
+      { file, line: 1 },
+      'The file has a first line and no readings.',
+      'Add the readings, or remove the file.',
+    );
   return surveysIn(table, heads);
 }
 
@@ -108,14 +141,26 @@ function readMapped(file: string, imports: Imports, reader: Folder, heads: Map<s
   if (reader.isTwin(file)) return [];
   const table = mappedTable(file, bytes, mapping, survey !== null, reader.problems);
   if (table === null) return survey === null ? [] : [survey];
-  if (table.rows.length === 0) reader.problems.error('survey-without-readings', { file, line: null }, 'The file has no readings below its column names.', 'Check header, footer and wide in its mapping, or remove the file.');
+  if (table.rows.length === 0)
+    reader.problems.error(
+      'survey-without-readings',
+      { file, line: null },
+      'The file has no readings below its column names.',
+      'Check header, footer and wide in its mapping, or remove the file.',
+    );
   sources.push({ table, survey });
   if (survey === null) return surveysIn(table, heads);
   const day = parseDay(survey);
   const head = heads.get(survey);
   if (head?.place?.file === `surveys/${survey}`) heads.set(survey, { ...head, place: { file, line: 1 } });
   if (!heads.has(survey) && day !== null) heads.set(survey, { ...bareSurvey(survey, day), place: { file, line: 1 } });
-  if (!heads.has(survey)) reader.problems.error('bad-date', { file, line: null }, `The survey "${survey}" of its mapping is no date, and no folder in surveys/ bears that name.`, 'State survey as YYYY-MM-DD.');
+  if (!heads.has(survey))
+    reader.problems.error(
+      'bad-date',
+      { file, line: null },
+      `The survey "${survey}" of its mapping is no date, and no folder in surveys/ bears that name.`,
+      'State survey as YYYY-MM-DD.',
+    );
   return [survey];
 }
 
@@ -135,7 +180,15 @@ function surveysIn(table: Table, heads: Map<string, Survey>): string[] {
 }
 
 /** Today's ids of a row's machine and point; null with the problem told when there is none. */
-function idsOf(register: Register, names: Names, typedMachine: string, typedPoint: string | null, day: Day, cells: Cells, problems: Problems): { machine: string; point: string | null } | null {
+function idsOf(
+  register: Register,
+  names: Names,
+  typedMachine: string,
+  typedPoint: string | null,
+  day: Day,
+  cells: Cells,
+  problems: Problems,
+): { machine: string; point: string | null } | null {
   const machine = names.any ? names.machine(typedMachine, day, (id) => register.machines.has(id)) : typedMachine;
   if (register.machine(machine) === null) {
     tellUnknown(problems, cells.at('machine'), 'machine', machine, 'in machines.csv', [...register.machines.keys()]);
@@ -143,7 +196,9 @@ function idsOf(register: Register, names: Names, typedMachine: string, typedPoin
   }
   if (typedPoint === null) return { machine, point: null };
   if (register.joiner.isFaulty(machine, typedPoint)) return null;
-  const point = names.any ? names.inner('point', machine, typedPoint, day, (id) => register.joiner.pointsOf(machine).includes(id)) : typedPoint;
+  const point = names.any
+    ? names.inner('point', machine, typedPoint, day, (id) => register.joiner.pointsOf(machine).includes(id))
+    : typedPoint;
   if (register.joiner.knowsPoint(machine, point)) return { machine, point };
   tellUnknown(problems, cells.at('point'), 'point', point, `of machine "${machine}" in points.csv`, register.joiner.pointsOf(machine));
   return null;
@@ -156,7 +211,12 @@ function isOneRound(rounds: Map<string, string>, machine: string, survey: Survey
   const other = rounds.get(key);
   rounds.set(key, other ?? survey.id);
   if (other === undefined || other === survey.id) return true;
-  cells.error('round-split', 'survey_date', `Machine "${machine}" was read on one day under two survey dates, ${other} and ${survey.id}.`, 'Give every row of one round the same survey_date, or join them in plant.yaml by import: { span_days: 1 }.');
+  cells.error(
+    'round-split',
+    'survey_date',
+    `Machine "${machine}" was read on one day under two survey dates, ${other} and ${survey.id}.`,
+    'Give every row of one round the same survey_date, or join them in plant.yaml by import: { span_days: 1 }.',
+  );
   return false;
 }
 
@@ -166,7 +226,14 @@ export function placedPhotos(surveys: readonly Survey[], points: ReadonlyMap<str
     ...survey,
     photos: survey.photos.flatMap((photo) => {
       const placed = photoOf(photo.path, points, new Map());
-      if (placed === null) problems.add('warning', 'photo-of-nothing', { file: photo.path, line: null }, 'The name of this photo begins with no known machine; it is left out.', 'Name it <machine>-<point>-<n>.jpg.');
+      if (placed === null)
+        problems.add(
+          'warning',
+          'photo-of-nothing',
+          { file: photo.path, line: null },
+          'The name of this photo begins with no known machine; it is left out.',
+          'Name it <machine>-<point>-<n>.jpg.',
+        );
       return placed === null ? [] : [{ ...placed, caption: photo.caption }];
     }),
   }));

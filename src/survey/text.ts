@@ -19,14 +19,24 @@ export function textOf(file: string, bytes: Uint8Array, problems: Problems, stat
       return null;
     }
   }
-  problems.error('wrong-encoding', { file, line: null }, `The file is not ${encoding} text.`, 'State its encoding in the import section of plant.yaml, or save it as UTF-8.');
+  problems.error(
+    'wrong-encoding',
+    { file, line: null },
+    `The file is not ${encoding} text.`,
+    'State its encoding in the import section of plant.yaml, or save it as UTF-8.',
+  );
   return null;
 }
 
 function tellNotUtf8(file: string, bytes: Uint8Array, problems: Problems): void {
   const line = lineOfBadByte(bytes);
   const reading = new TextDecoder('windows-1252').decode(bytes).split('\n')[line - 1] ?? '';
-  problems.error('not-utf-8', { file, line }, 'The file is not UTF-8 text.', `In Windows-1252 this line reads: ${reading.trim().slice(0, 80)}. If that is right, state encoding: windows-1252 for the file in the import section of plant.yaml; else save it as UTF-8.`);
+  problems.error(
+    'not-utf-8',
+    { file, line },
+    'The file is not UTF-8 text.',
+    `In Windows-1252 this line reads: ${reading.trim().slice(0, 80)}. If that is right, state encoding: windows-1252 for the file in the import section of plant.yaml; else save it as UTF-8.`,
+  );
 }
 
 function utf16(bytes: Uint8Array): Encoding | null {

@@ -11,7 +11,10 @@ const SECONDS = 86_400;
 /** Built-in formats of dates and times; else a code of its own with a letter of day, month, year, hour or second outside quotes and brackets. */
 export function isDateFormat(id: number, code: string | undefined): boolean {
   if (code === undefined) return (id >= 14 && id <= 22) || (id >= 27 && id <= 36) || (id >= 45 && id <= 47) || (id >= 50 && id <= 58);
-  const bare = code.replace(/"[^"]*"/g, '').replace(/\\./g, '').replace(/\[[^\]]*\]/g, '');
+  const bare = code
+    .replace(/"[^"]*"/g, '')
+    .replace(/\\./g, '')
+    .replace(/\[[^\]]*\]/g, '');
   return /[dmyhs]/i.test(bare) && !/general/i.test(bare);
 }
 

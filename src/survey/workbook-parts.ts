@@ -32,7 +32,8 @@ export function unpacked(bytes: Uint8Array): Map<string, Uint8Array> {
     if (entries > MOST_ENTRIES) throw new WorkbookFault('workbook-too-large', `it holds more than ${MOST_ENTRIES} parts`, null);
     if (!WANTED.test(name)) return false;
     total += originalSize;
-    if (total > MOST_BYTES || (originalSize > SMALL && originalSize > MOST_RATIO * size)) throw new WorkbookFault('workbook-too-large', `its part ${name} would unpack to ${originalSize} bytes`, null);
+    if (total > MOST_BYTES || (originalSize > SMALL && originalSize > MOST_RATIO * size))
+      throw new WorkbookFault('workbook-too-large', `its part ${name} would unpack to ${originalSize} bytes`, null);
     return true;
   };
   try {
@@ -46,19 +47,29 @@ export function unpacked(bytes: Uint8Array): Map<string, Uint8Array> {
 export type Attributes = Readonly<Record<string, string>>;
 
 /** Walks the elements of a part in order, names without their namespace. Throws WorkbookFault where the part is missing or has a document type. */
-export function elementsOf(parts: ReadonlyMap<string, Uint8Array>, path: string, open: (name: string, attributes: Attributes) => void, close: (name: string) => void = () => {}, text: (piece: string) => void = () => {}): void {
+export function elementsOf(
+  parts: ReadonlyMap<string, Uint8Array>,
+  path: string,
+  open: (name: string, attributes: Attributes) => void,
+  close: (name: string) => void = () => {},
+  text: (piece: string) => void = () => {},
+): void {
   const bytes = parts.get(path);
   if (bytes === undefined) throw new WorkbookFault('workbook-broken', `its part ${path || 'of the sheet'} is missing`, null);
   const local = (name: string): string => name.slice(name.indexOf(':') + 1);
   const { Parser } = xml();
-  const parser = new Parser({
-    onopentag: (name, attributes) => open(local(name), attributes),
-    onclosetag: (name) => close(local(name)),
-    ontext: text,
-    onprocessinginstruction: (name) => {
-      if (name.startsWith('!')) throw new WorkbookFault('workbook-broken', `its part ${path} has a document type, which no workbook needs`, null);
+  const parser = new Parser(
+    {
+      onopentag: (name, attributes) => open(local(name), attributes),
+      onclosetag: (name) => close(local(name)),
+      ontext: text,
+      onprocessinginstruction: (name) => {
+        if (name.startsWith('!'))
+          throw new WorkbookFault('workbook-broken', `its part ${path} has a document type, which no workbook needs`, null);
+      },
     },
-  }, { xmlMode: true, decodeEntities: true });
+    { xmlMode: true, decodeEntities: true },
+  );
   try {
     parser.end(new TextDecoder('utf-8', { fatal: true }).decode(bytes));
   } catch (error) {

@@ -53,7 +53,8 @@ function bookOf(parts: Parts): Book {
   let from1904 = false;
   elementsOf(parts, 'xl/workbook.xml', (name, a) => {
     if (name === 'workbookPr') from1904 = a['date1904'] === '1' || a['date1904'] === 'true';
-    if (name === 'sheet') sheets.push({ name: a['name'] ?? '', path: targets.get(a['r:id'] ?? '') ?? '', visible: (a['state'] ?? 'visible') === 'visible' });
+    if (name === 'sheet')
+      sheets.push({ name: a['name'] ?? '', path: targets.get(a['r:id'] ?? '') ?? '', visible: (a['state'] ?? 'visible') === 'visible' });
   });
   return { sheets, from1904, strings: stringsOf(parts), dates: dateStyles(parts) };
 }
@@ -68,17 +69,23 @@ function stringsOf(parts: Parts): string[] {
   let text = '';
   let phonetic = 0;
   let inText = false;
-  elementsOf(parts, 'xl/sharedStrings.xml', (name) => {
-    if (name === 'si') text = '';
-    if (name === 'rPh') phonetic += 1;
-    inText = name === 't' && phonetic === 0;
-  }, (name) => {
-    if (name === 'rPh') phonetic -= 1;
-    if (name === 't') inText = false;
-    if (name === 'si') strings.push(text);
-  }, (piece) => {
-    if (inText) text += piece;
-  });
+  elementsOf(
+    parts,
+    'xl/sharedStrings.xml',
+    (name) => {
+      if (name === 'si') text = '';
+      if (name === 'rPh') phonetic += 1;
+      inText = name === 't' && phonetic === 0;
+    },
+    (name) => {
+      if (name === 'rPh') phonetic -= 1;
+      if (name === 't') inText = false;
+      if (name === 'si') strings.push(text);
+    },
+    (piece) => {
+      if (inText) text += piece;
+    },
+  );
   return strings;
 }
 
@@ -87,13 +94,18 @@ function dateStyles(parts: Parts): boolean[] {
   if (!parts.has('xl/styles.xml')) return dates;
   const codes = new Map<number, string>();
   let inCellFormats = false;
-  elementsOf(parts, 'xl/styles.xml', (name, a) => {
-    if (name === 'numFmt') codes.set(Number(a['numFmtId']), a['formatCode'] ?? '');
-    if (name === 'cellXfs') inCellFormats = true;
-    if (name === 'xf' && inCellFormats) dates.push(isDateFormat(Number(a['numFmtId'] ?? 0), codes.get(Number(a['numFmtId']))));
-  }, (name) => {
-    if (name === 'cellXfs') inCellFormats = false;
-  });
+  elementsOf(
+    parts,
+    'xl/styles.xml',
+    (name, a) => {
+      if (name === 'numFmt') codes.set(Number(a['numFmtId']), a['formatCode'] ?? '');
+      if (name === 'cellXfs') inCellFormats = true;
+      if (name === 'xf' && inCellFormats) dates.push(isDateFormat(Number(a['numFmtId'] ?? 0), codes.get(Number(a['numFmtId']))));
+    },
+    (name) => {
+      if (name === 'cellXfs') inCellFormats = false;
+    },
+  );
   return dates;
 }
 
@@ -101,8 +113,18 @@ function sheetNamed({ sheets }: Book, name: string | null): Sheet {
   const visible = sheets.filter((s) => s.visible);
   const names = visible.map((s) => `"${s.name}"`).join(', ');
   const found = name === null ? visible[0] : sheets.find((s) => s.name.trim() === name);
-  if (found === undefined) throw new WorkbookFault('workbook-no-sheet', name === null ? 'it has no visible sheet' : `it has no sheet "${name}"`, `Name one of its sheets in the import section: ${names}.`);
-  if (name === null && visible.length > 1) throw new WorkbookFault('workbook-which-sheet', `it has ${visible.length} sheets, ${names}`, 'Name the one with the readings in the import section of plant.yaml: sheet: …');
+  if (found === undefined)
+    throw new WorkbookFault(
+      'workbook-no-sheet',
+      name === null ? 'it has no visible sheet' : `it has no sheet "${name}"`,
+      `Name one of its sheets in the import section: ${names}.`,
+    );
+  if (name === null && visible.length > 1)
+    throw new WorkbookFault(
+      'workbook-which-sheet',
+      `it has ${visible.length} sheets, ${names}`,
+      'Name the one with the readings in the import section of plant.yaml: sheet: …',
+    );
   return found;
 }
 
@@ -129,27 +151,49 @@ function sheetGrid(file: string, parts: Parts, book: Book, sheet: Sheet, problem
   let [cells, total, line]: [string[], number, number] = [[], 0, 0];
   let cell: Cell | null = null;
   let inValue = false;
-  elementsOf(parts, sheet.path, (name, a) => {
-    if (name === 'row') [cells, line] = [[], rowOf(a['r'], line + 1)];
-    else if (name === 'c') cell = { column: a['r'] === undefined ? cells.length : columnOf(a['r']), type: a['t'] ?? 'n', style: Number(a['s'] ?? 0), value: '', isFormula: false, hasValue: false };
-    else if (name === 'f' && cell !== null) cell.isFormula = true;
-    else if (name === 'mergeCell') seen.merged += 1;
-    inValue = cell !== null && (name === 'v' || (name === 't' && cell.type === 'inlineStr'));
-    if (inValue && cell !== null) cell.hasValue = true;
-  }, (name) => {
-    if (name === 'v' || name === 't') inValue = false;
-    if (name === 'c' && cell !== null) {
-      total += Math.max(1, cell.column - cells.length + 1);
-      if (cell.column >= MOST_COLUMNS || total > MOST_CELLS) throw new WorkbookFault('workbook-too-large', `the sheet "${sheet.name}" has more than ${MOST_CELLS} cells or a column past ${MOST_COLUMNS}`, 'Leave only the readings in the sheet.');
-      while (cells.length < cell.column) cells.push('');
-      cells[cell.column] = cellText(cell, book);
-      if (cell.isFormula) noteFormula(cell, seen, line, (message, hint) => problems.error('formula-without-value', place(line, (cell?.column ?? 0) + 1), message, hint));
-      cell = null;
-    }
-    if (name === 'row' && cells.some((text) => text !== '')) rows.push({ line, cells });
-  }, (piece) => {
-    if (inValue && cell !== null) cell.value += piece;
-  });
+  elementsOf(
+    parts,
+    sheet.path,
+    (name, a) => {
+      if (name === 'row') [cells, line] = [[], rowOf(a['r'], line + 1)];
+      else if (name === 'c')
+        cell = {
+          column: a['r'] === undefined ? cells.length : columnOf(a['r']),
+          type: a['t'] ?? 'n',
+          style: Number(a['s'] ?? 0),
+          value: '',
+          isFormula: false,
+          hasValue: false,
+        };
+      else if (name === 'f' && cell !== null) cell.isFormula = true;
+      else if (name === 'mergeCell') seen.merged += 1;
+      inValue = cell !== null && (name === 'v' || (name === 't' && cell.type === 'inlineStr'));
+      if (inValue && cell !== null) cell.hasValue = true;
+    },
+    (name) => {
+      if (name === 'v' || name === 't') inValue = false;
+      if (name === 'c' && cell !== null) {
+        total += Math.max(1, cell.column - cells.length + 1);
+        if (cell.column >= MOST_COLUMNS || total > MOST_CELLS)
+          throw new WorkbookFault(
+            'workbook-too-large',
+            `the sheet "${sheet.name}" has more than ${MOST_CELLS} cells or a column past ${MOST_COLUMNS}`,
+            'Leave only the readings in the sheet.',
+          );
+        while (cells.length < cell.column) cells.push('');
+        cells[cell.column] = cellText(cell, book);
+        if (cell.isFormula)
+          noteFormula(cell, seen, line, (message, hint) =>
+            problems.error('formula-without-value', place(line, (cell?.column ?? 0) + 1), message, hint),
+          );
+        cell = null;
+      }
+      if (name === 'row' && cells.some((text) => text !== '')) rows.push({ line, cells });
+    },
+    (piece) => {
+      if (inValue && cell !== null) cell.value += piece;
+    },
+  );
   tellSeen(file, sheet, seen, problems);
   return { rows, plain: true };
 }
@@ -157,14 +201,31 @@ function sheetGrid(file: string, parts: Parts, book: Book, sheet: Sheet, problem
 function noteFormula(cell: Cell, seen: Seen, line: number, error: (message: string, hint: string) => void): void {
   seen.formulas += 1;
   if (seen.formulas === 1) seen.firstFormula = `row ${line}, column ${cell.column + 1}`;
-  if (!cell.hasValue) error('The cell is a formula whose value the file does not hold.', 'Open the workbook, let it compute, and save it; or put the value itself into the cell.');
+  if (!cell.hasValue)
+    error(
+      'The cell is a formula whose value the file does not hold.',
+      'Open the workbook, let it compute, and save it; or put the value itself into the cell.',
+    );
 }
 
 function tellSeen(file: string, sheet: Sheet, seen: Seen, problems: Problems): void {
   if (seen.formulas > 0) {
-    problems.add('warning', 'formula-cells', { file, line: null }, `${seen.formulas} cells of sheet "${sheet.name}" are formulas, the first at ${seen.firstFormula}: the values they had when it was saved are taken.`, 'Put the values themselves into the cells where they are readings.');
+    problems.add(
+      'warning',
+      'formula-cells',
+      { file, line: null },
+      `${seen.formulas} cells of sheet "${sheet.name}" are formulas, the first at ${seen.firstFormula}: the values they had when it was saved are taken.`,
+      'Put the values themselves into the cells where they are readings.',
+    );
   }
-  if (seen.merged > 0) problems.add('note', 'merged-cells', { file, line: null }, `${seen.merged} ranges of sheet "${sheet.name}" are merged: only the first cell of each has the text.`, null);
+  if (seen.merged > 0)
+    problems.add(
+      'note',
+      'merged-cells',
+      { file, line: null },
+      `${seen.merged} ranges of sheet "${sheet.name}" are merged: only the first cell of each has the text.`,
+      null,
+    );
 }
 
 /** A row's number as it states it; the one that follows where it states none. */

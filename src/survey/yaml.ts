@@ -42,13 +42,23 @@ export function readYaml(file: string, bytes: Uint8Array, problems: Problems): Y
   const lines = new LineCounter();
   const deep = deepLine(text);
   if (deep !== null) {
-    problems.error('broken-yaml', { file, line: deep }, `The file nests lists or maps more than ${MOST_NESTED} deep.`, 'A plant folder needs a handful of levels; remove the brackets or the spaces before the line.');
+    problems.error(
+      'broken-yaml',
+      { file, line: deep },
+      `The file nests lists or maps more than ${MOST_NESTED} deep.`,
+      'A plant folder needs a handful of levels; remove the brackets or the spaces before the line.',
+    );
     return null;
   }
   const document = parseDocument(text, { schema: 'failsafe', lineCounter: lines, prettyErrors: false, uniqueKeys: true });
   for (const error of document.errors) {
     const at = lines.linePos(error.pos[0]);
-    problems.error('broken-yaml', { file, line: at.line, column: at.col }, `The file is no YAML: ${error.message.split('\n')[0]}`, 'Check indentation, colons and quotes on this line and the one before.');
+    problems.error(
+      'broken-yaml',
+      { file, line: at.line, column: at.col },
+      `The file is no YAML: ${error.message.split('\n')[0]}`,
+      'Check indentation, colons and quotes on this line and the one before.',
+    );
   }
   if (document.errors.length > 0) return null;
   let value: unknown;
@@ -57,7 +67,12 @@ export function readYaml(file: string, bytes: Uint8Array, problems: Problems): Y
   } catch (error) {
     // The library's words for an alias that multiplies itself, or that names nothing.
     if (!(error instanceof ReferenceError)) throw error;
-    problems.error('broken-yaml', { file, line: null }, 'The file repeats parts by aliases (*name) that multiply or lead nowhere.', 'Write the values out instead of aliases.');
+    problems.error(
+      'broken-yaml',
+      { file, line: null },
+      'The file repeats parts by aliases (*name) that multiply or lead nowhere.',
+      'Write the values out instead of aliases.',
+    );
     return null;
   }
   return {

@@ -13,7 +13,12 @@ export interface Appended {
 const SEPARATORS = [',', ';', '\t', '|'] as const;
 
 /** `columns` is the head of a new file; `nameOf` tells what the columns of a file mean, in their order. Throws a TypeError for a file that is not UTF-8. */
-export function appendRows(existing: Uint8Array | null, columns: readonly string[], rows: readonly Readonly<Record<string, string>>[], nameOf: (head: readonly string[]) => readonly string[]): Appended {
+export function appendRows(
+  existing: Uint8Array | null,
+  columns: readonly string[],
+  rows: readonly Readonly<Record<string, string>>[],
+  nameOf: (head: readonly string[]) => readonly string[],
+): Appended {
   const text = existing === null ? '' : new TextDecoder('utf-8', { fatal: true, ignoreBOM: true }).decode(existing);
   const isBlank = text.replace(/^\ufeff/, '').trim() === '';
   const separator = isBlank ? ',' : separatorOf(text);
@@ -44,4 +49,5 @@ function headOf(text: string, delimiter: string): string[] {
   return head.map((name) => name.trim());
 }
 
-const cell = (text: string, separator: string): string => (text.includes(separator) || /["\r\n]/.test(text) ? `"${text.replaceAll('"', '""')}"` : text);
+const cell = (text: string, separator: string): string =>
+  text.includes(separator) || /["\r\n]/.test(text) ? `"${text.replaceAll('"', '""')}"` : text;

@@ -11,4 +11,5 @@ export function safeCell(text: string): string {
   return /[",\r\n]/.test(safe) ? `"${safe.replaceAll('"', '""')}"` : safe;
 }
 
-export const csvText = (rows: readonly (readonly string[])[]): string => `\ufeff${rows.map((row) => row.map(safeCell).join(',')).join('\r\n')}\r\n`;
+export const csvText = (rows: readonly (readonly string[])[]): string =>
+  `\ufeff${rows.map((row) => row.map(safeCell).join(',')).join('\r\n')}\r\n`;

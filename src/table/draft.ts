@@ -32,7 +32,11 @@ function draftRow(record: SwayfolioRecord, action: RecordAction): DraftRow {
     confidence: indications.some((i) => i.confidence === 'medium') ? 'medium' : isMeasured ? 'low' : '',
     recommendation: recommendation(language, action, needsStop),
     needs_stop: needsStop ? 'yes' : 'no',
-    check_first: checkFirst(language, action, indications.map((i) => i.confirm)),
+    check_first: checkFirst(
+      language,
+      action,
+      indications.map((i) => i.confirm),
+    ),
     consequence: say(language, `draft.consequence.${consequenceOf(record, action)}`),
     due: action.due ?? '',
     verify_point: target?.point ?? '',
@@ -70,7 +74,13 @@ function observation(record: SwayfolioRecord, action: RecordAction): string {
 function baselineSentence(language: Language, baseline: NonNullable<RecordMeasurement['baseline']>, unit: string): string {
   const { value, from, n, provisional } = baseline;
   if (n === 0) return say(language, 'draft.baseline.stated', { value: formatNumber(language, value), unit, from });
-  return say(language, 'draft.baseline', { value, unit, n, from, provisional: provisional ? say(language, 'draft.baseline.provisional') : '' });
+  return say(language, 'draft.baseline', {
+    value,
+    unit,
+    n,
+    from,
+    provisional: provisional ? say(language, 'draft.baseline.provisional') : '',
+  });
 }
 
 interface Told {
@@ -93,7 +103,8 @@ function indicationsAt(record: SwayfolioRecord, action: RecordAction): Told[] {
 /** What to do, running or stopped, by when. */
 function recommendation(language: Language, action: RecordAction, needsStop: boolean): string {
   const how = isHeld(action) ? [] : [say(language, needsStop ? 'draft.stop' : 'draft.running')];
-  const when = action.urgency === 'now' ? [say(language, 'draft.now')] : action.due === null ? [] : [say(language, 'draft.by', { due: action.due })];
+  const when =
+    action.urgency === 'now' ? [say(language, 'draft.now')] : action.due === null ? [] : [say(language, 'draft.by', { due: action.due })];
   return [action.recommendation ?? '', ...how, ...when].filter((t) => t !== '').join(' ');
 }
 

@@ -27,7 +27,13 @@ export function readableAccent(accent: string): string | null {
   const part = (at: number): number => Number.parseInt(given.slice(at, at + 2), 16);
   const channels = [part(1), part(3), part(5)];
   for (let step = STEPS - 1; step > 0; step -= 1) {
-    const darker = `#${channels.map((c) => Math.round((c * step) / STEPS).toString(16).padStart(2, '0')).join('')}`;
+    const darker = `#${channels
+      .map((c) =>
+        Math.round((c * step) / STEPS)
+          .toString(16)
+          .padStart(2, '0'),
+      )
+      .join('')}`;
     if (contrast(darker, WHITE) >= TEXT_CONTRAST) return darker;
   }
   return '#000000';

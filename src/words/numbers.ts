@@ -81,10 +81,12 @@ export function formatNumber(language: Language, value: number, options: NumberO
 }
 
 /** A number with the decimals it was given with, three at most: counts, ratings, speeds. */
-export const plainNumber = (language: Language, value: number): string => formatNumber(language, value, { decimals: Math.min(ownDecimals(value), SIGNIFICANT) });
+export const plainNumber = (language: Language, value: number): string =>
+  formatNumber(language, value, { decimals: Math.min(ownDecimals(value), SIGNIFICANT) });
 
 /** A boundary as it was set, in three significant digits at most: 4.5 stays 4.5, a computed 3.075 is 3.08 as in the tables. */
-export const limitNumber = (language: Language, value: number): string => formatNumber(language, value, { decimals: Math.min(ownDecimals(value), significantDecimals(value)) });
+export const limitNumber = (language: Language, value: number): string =>
+  formatNumber(language, value, { decimals: Math.min(ownDecimals(value), significantDecimals(value)) });
 
 /** A number with its unit, glued by a no-break blank. */
 export const formatQuantity = (language: Language, value: number, unit: string, options: NumberOptions = {}): string =>

@@ -20,7 +20,19 @@ interface Placeholder {
 const parsed = new Map<string, readonly Part[]>();
 
 /** Facts whose value is a word of a closed list. */
-const TERM_FACTS: ReadonlySet<string> = new Set(['quantity', 'kind', 'support', 'place', 'basis', 'status', 'detection', 'limit_detection', 'closing', 'scope', 'condition']);
+const TERM_FACTS: ReadonlySet<string> = new Set([
+  'quantity',
+  'kind',
+  'support',
+  'place',
+  'basis',
+  'status',
+  'detection',
+  'limit_detection',
+  'closing',
+  'scope',
+  'condition',
+]);
 
 /** `{name}`, `{name:plain}` or `{name|one|many}`, where the forms may hold placeholders of their own. */
 function parse(sentence: string): readonly Part[] {
@@ -76,7 +88,12 @@ function fill(language: Language, key: string, parts: readonly Part[], facts: Fa
     else {
       const value = facts[part.name];
       if (value === undefined) throw new Error(`The sentence "${key}" names the fact "${part.name}", which was not given.`);
-      text += part.one === null || part.many === null ? (part.plain && typeof value === 'number' ? plainNumber(language, value) : factText(language, value, part.name)) : fill(language, key, value === 1 ? part.one : part.many, facts);
+      text +=
+        part.one === null || part.many === null
+          ? part.plain && typeof value === 'number'
+            ? plainNumber(language, value)
+            : factText(language, value, part.name)
+          : fill(language, key, value === 1 ? part.one : part.many, facts);
     }
   }
   return text;
@@ -87,7 +104,10 @@ function factText(language: Language, value: Facts[string], name: string): strin
   if (typeof value === 'number') return formatNumber(language, value);
   if (typeof value === 'string') return wordText(language, value, name);
   if (typeof value === 'boolean') return sentenceOf(language, value ? 'common.yes' : 'common.no');
-  return listText(language, value.map((item) => factText(language, item, name)));
+  return listText(
+    language,
+    value.map((item) => factText(language, item, name)),
+  );
 }
 
 function wordText(language: Language, value: string, name: string): string {

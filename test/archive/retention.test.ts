@@ -3,10 +3,31 @@ import { dueFor, retentionYears } from '../../src/archive/retention.ts';
 import type { Issued } from '../../src/archive/chain.ts';
 
 const issued = (name: string, day: string): Issued => ({
-  name, manifestHash: '', file: { number: name, revision: 0, tool: { name: 'swayfolio', version: '1' }, survey: day, issued_on: day, replaces: null, reason: null, previous_manifest: null, signed_by: null },
+  name,
+  manifestHash: '',
+  file: {
+    number: name,
+    revision: 0,
+    tool: { name: 'swayfolio', version: '1' },
+    survey: day,
+    issued_on: day,
+    replaces: null,
+    reason: null,
+    previous_manifest: null,
+    signed_by: null,
+  },
 });
 
-test.each([['ten years', 10], ['10 years after issue', 10], ['zehn Jahre', 10], ['5 ans', 5], ['veinte años', 20], ['for ever', null], ['toString years', null], ['10', null]])('%s', (text, years) => {
+test.each([
+  ['ten years', 10],
+  ['10 years after issue', 10],
+  ['zehn Jahre', 10],
+  ['5 ans', 5],
+  ['veinte años', 20],
+  ['for ever', null],
+  ['toString years', null],
+  ['10', null],
+])('%s', (text, years) => {
   expect(retentionYears(text)).toBe(years);
 });
 

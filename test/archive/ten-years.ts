@@ -4,10 +4,20 @@
  */
 import type { Files } from '../assess/folder.ts';
 
-export const DATES: readonly string[] = Array.from({ length: 40 }, (_, i) => `${2016 + Math.floor(i / 4)}-${['01', '04', '07', '10'][i % 4]}-12`);
+export const DATES: readonly string[] = Array.from(
+  { length: 40 },
+  (_, i) => `${2016 + Math.floor(i / 4)}-${['01', '04', '07', '10'][i % 4]}-12`,
+);
 
 export const PLANTED = {
-  limits: [15, 30], restated: { survey: 20, since: 26, before: '1.02', after: '1.52' }, renamed: 12, analyst: 24, lapsed: 34, recalibrated: 35, unmeasured: 17, repaired: 10,
+  limits: [15, 30],
+  restated: { survey: 20, since: 26, before: '1.02', after: '1.52' },
+  renamed: 12,
+  analyst: 24,
+  lapsed: 34,
+  recalibrated: 35,
+  unmeasured: 17,
+  repaired: 10,
 } as const;
 
 /** Numbers that look random and come again: mulberry32. */
@@ -26,7 +36,9 @@ const LEVELS: Readonly<Record<string, number>> = { 'P-1 1H': 3.1, 'P-1 2H': 3.0,
 /** Three figures, 3 % of scatter. */
 const VALUES: readonly Readonly<Record<string, string>>[] = (() => {
   const random = seeded(20160112);
-  return DATES.map(() => Object.fromEntries(Object.entries(LEVELS).map(([key, level]) => [key, (level * (0.97 + 0.06 * random())).toFixed(2)])));
+  return DATES.map(() =>
+    Object.fromEntries(Object.entries(LEVELS).map(([key, level]) => [key, (level * (0.97 + 0.06 * random())).toFixed(2)])),
+  );
 })();
 
 function readings(i: number, at: number): string {
@@ -47,11 +59,20 @@ function surveyYaml(i: number): string {
   return `people:\n  - name: ${person}\n    category: ISO 18436-2 category II\n    expires: 2030-01-01\ninstruments:\n  - id: VM-1\n    serial: S-1\n    calibrated_on: ${on}\n    calibration_due: ${due}\napproved_by: C. Chief\n`;
 }
 
-const SETS = ['works,Works limits,owner,works rule,1,velocity,mm/s,rms,4.5,7.1,11,P-1,,O. Owner,2015-12-01', 'works,Works limits,owner,works rule,2,velocity,mm/s,rms,3.5,7.1,11,P-1,2019-10-01,O. Owner,2019-09-20', 'works,Works limits,owner,works rule,3,velocity,mm/s,rms,2.5,7.1,11,P-1,2023-07-01,O. Owner,2023-06-20'];
+const SETS = [
+  'works,Works limits,owner,works rule,1,velocity,mm/s,rms,4.5,7.1,11,P-1,,O. Owner,2015-12-01',
+  'works,Works limits,owner,works rule,2,velocity,mm/s,rms,3.5,7.1,11,P-1,2019-10-01,O. Owner,2019-09-20',
+  'works,Works limits,owner,works rule,3,velocity,mm/s,rms,2.5,7.1,11,P-1,2023-07-01,O. Owner,2023-06-20',
+];
 
 function actions(at: number): string {
   const rows: string[] = [];
-  if (at >= 8) rows.push(at >= PLANTED.repaired ? 'A-1,P-1,2018-01-12,Tighten the foot,done,2018-06-20,M. Fitter,loose foot bolt,1H,3.6' : 'A-1,P-1,2018-01-12,Tighten the foot,open,,,,1H,3.6');
+  if (at >= 8)
+    rows.push(
+      at >= PLANTED.repaired
+        ? 'A-1,P-1,2018-01-12,Tighten the foot,done,2018-06-20,M. Fitter,loose foot bolt,1H,3.6'
+        : 'A-1,P-1,2018-01-12,Tighten the foot,open,,,,1H,3.6',
+    );
   if (at >= 28) rows.push('A-2,P-1,2023-01-12,Tighten the foot again,ordered,,,,1H,3.6');
   return ['action,machine,raised,recommendation,status,closed,closed_by,as_found,verify_point,verify_below', ...rows, ''].join('\n');
 }
@@ -62,12 +83,18 @@ export function folderAt(at: number): Files {
   const point = (machine: string, id: string): string => `${machine},pump,${id},${id},horizontal,bearing housing,velocity,mm/s,rms,10,1000`;
   return {
     'plant.yaml': 'plant: Ten Year Works\n',
-    'machines.csv': 'machine,name,area,criticality,interval_days\nP-1,Feed pump,North,critical,91\nP-2,Drain pump,North,general,91\nP-3,Sump pump,North,critical,91\n',
+    'machines.csv':
+      'machine,name,area,criticality,interval_days\nP-1,Feed pump,North,critical,91\nP-2,Drain pump,North,general,91\nP-3,Sump pump,North,critical,91\n',
     'components.csv': `machine,component,kind,power_kw,speed_rpm,drive,support,bearings,pump_category\n${['P-1', 'P-2', 'P-3'].map((m) => `${m},pump,pump,75,1480,fixed,rigid,rolling,II\n`).join('')}`,
     'points.csv': `machine,component,point,location,direction,measured_on,quantity,unit,detection,low_hz,high_hz\n${[point('P-1', '1H'), point('P-1', '2H'), point('P-2', '1H'), point('P-2', second), point('P-3', '1H')].join('\n')}\n`,
     'limits.csv': `limit_set,title,basis,source,edition,quantity,unit,detection,ab,bc,cd,applies_machine,valid_from,approved_by,approved_on\n${SETS.slice(0, 1 + PLANTED.limits.filter((i) => at >= i).length).join('\n')}\n`,
     'actions.csv': actions(at),
     ...(at >= PLANTED.renamed ? { 'renames.csv': 'kind,machine,old,new,since\npoint,P-2,2V,2R,2019-01-01\n' } : {}),
-    ...Object.fromEntries(DATES.slice(0, at + 1).flatMap((date, i) => [[`surveys/${date}/survey.yaml`, surveyYaml(i)], [`surveys/${date}/readings.csv`, readings(i, at)]])),
+    ...Object.fromEntries(
+      DATES.slice(0, at + 1).flatMap((date, i) => [
+        [`surveys/${date}/survey.yaml`, surveyYaml(i)],
+        [`surveys/${date}/readings.csv`, readings(i, at)],
+      ]),
+    ),
   };
 }

@@ -13,7 +13,11 @@ import { SMALL_PLANT } from '../commands/program.ts';
 import { issueInMemory, type Memory, memoryShell, putPlant } from './memory.ts';
 
 const PEOPLE = 'people:\n  - name: A. Analyst\n    category: ISO 18436-2 category II\n';
-const PLANT: Readonly<Record<string, string>> = { ...SMALL_PLANT, 'surveys/2025-11-10/survey.yaml': PEOPLE, 'surveys/2026-01-14/survey.yaml': PEOPLE };
+const PLANT: Readonly<Record<string, string>> = {
+  ...SMALL_PLANT,
+  'surveys/2025-11-10/survey.yaml': PEOPLE,
+  'surveys/2026-01-14/survey.yaml': PEOPLE,
+};
 
 function newKey(): SigningKey {
   const { privateKey, publicKey } = generateKeyPairSync('ed25519');
@@ -34,7 +38,9 @@ function archive(): Memory {
 }
 
 /** For tests of the files alone: whatever record stands there comes out again, so that the hashes must find what was altered. */
-const asFrozen = (files: Memory): Question['assessAgain'] => (inputs) => ({ text: new TextDecoder().decode(files.get(inputs.replace(/inputs$/, 'record.json'))) });
+const asFrozen =
+  (files: Memory): Question['assessAgain'] =>
+  (inputs) => ({ text: new TextDecoder().decode(files.get(inputs.replace(/inputs$/, 'record.json'))) });
 
 function verifyAll(files: Memory, assessAgain: Question['assessAgain'] | null = null, keys: Question['keys'] = null): Verdict[] {
   const shell = memoryShell(files);
@@ -44,7 +50,18 @@ function verifyAll(files: Memory, assessAgain: Question['assessAgain'] | null = 
     const file = issue === undefined ? null : readIssue(Buffer.from(issue).toString());
     return manifest === undefined || file === null ? [] : [{ manifestHash: sha256(manifest), previous: file.previous_manifest }];
   };
-  return folders.map((folder) => verifyIssue({ folder, inArchive: true, keys, assessAgain: assessAgain ?? asFrozen(files), neighbours: folders.filter((other) => other !== folder).flatMap(neighbour) }, shell));
+  return folders.map((folder) =>
+    verifyIssue(
+      {
+        folder,
+        inArchive: true,
+        keys,
+        assessAgain: assessAgain ?? asFrozen(files),
+        neighbours: folders.filter((other) => other !== folder).flatMap(neighbour),
+      },
+      shell,
+    ),
+  );
 }
 
 /** Numbers that look random and come again: mulberry32. */
@@ -59,7 +76,12 @@ function seeded(seed: number): (below: number) => number {
 }
 
 /** Changes one thing; returns the paths that must be named, relative to their issue. */
-function alter(files: Memory, issued: readonly string[], random: (below: number) => number, turn: number): readonly [string, readonly string[]] {
+function alter(
+  files: Memory,
+  issued: readonly string[],
+  random: (below: number) => number,
+  turn: number,
+): readonly [string, readonly string[]] {
   const path = issued[random(issued.length)] as string;
   const [, folder, name] = /^(\/p\/issued\/[^/]+)\/(.+)$/.exec(path) as unknown as [string, string, string];
   const bytes = files.get(path) as Uint8Array;
@@ -87,7 +109,11 @@ function alter(files: Memory, issued: readonly string[], random: (below: number)
 describe('altered folders', () => {
   test('as issued, the whole archive is sound', () => {
     const verdicts = verifyAll(archive());
-    expect(verdicts.map((verdict) => [verdict.isSound, verdict.chain, verdict.signature.state])).toEqual([[true, 'first', 'none'], [true, 'linked', 'good'], [true, 'linked', 'good']]);
+    expect(verdicts.map((verdict) => [verdict.isSound, verdict.chain, verdict.signature.state])).toEqual([
+      [true, 'first', 'none'],
+      [true, 'linked', 'good'],
+      [true, 'linked', 'good'],
+    ]);
   });
 
   test('ten thousand random single-byte changes, deletions, additions and renames: each is found and named, and nothing else is', () => {
@@ -104,9 +130,11 @@ describe('altered folders', () => {
       const all = paths.every((path) => named?.alterations.some((alteration) => alteration.path === path));
       const blamed = verdicts.some((verdict) => verdict.folder !== folder && verdict.alterations.length > 0);
       // A manifest that nobody vouches for is named beside the file: which of the two was touched cannot be told.
-      const besides = named?.alterations.filter((alteration) => !paths.includes(alteration.path) && !alteration.path.startsWith('manifest.sha256')) ?? [];
+      const besides =
+        named?.alterations.filter((alteration) => !paths.includes(alteration.path) && !alteration.path.startsWith('manifest.sha256')) ?? [];
       const explained = paths.some((path) => /^(?:manifest\.sha256|issue\.json|record\.json)/.test(path)) || besides.length === 0;
-      if (!unsound || !all || blamed || !explained) missed.push(`${turn} ${folder} ${paths.join(' ')}: ${JSON.stringify(named?.alterations)}`);
+      if (!unsound || !all || blamed || !explained)
+        missed.push(`${turn} ${folder} ${paths.join(' ')}: ${JSON.stringify(named?.alterations)}`);
     }
     expect(missed).toEqual([]);
   }, 300_000);
@@ -124,10 +152,17 @@ describe('altered folders', () => {
     expect(verifyAll(gone).map((verdict) => verdict.chain)).toEqual(['broken', 'linked']);
     const anew = new Map(gone);
     const other: Memory = new Map();
-    putPlant(other, '/p', { ...PLANT, 'surveys/2025-11-10/readings.csv': (PLANT['surveys/2025-11-10/readings.csv'] as string).replace('2.2', '1.2') });
+    putPlant(other, '/p', {
+      ...PLANT,
+      'surveys/2025-11-10/readings.csv': (PLANT['surveys/2025-11-10/readings.csv'] as string).replace('2.2', '1.2'),
+    });
     issueInMemory(other, '/p', '2025-11-10');
     for (const [path, bytes] of other) if (path.startsWith('/p/issued/')) anew.set(path, bytes);
-    expect(verifyAll(anew).map((verdict) => [verdict.alterations.length, verdict.chain, verdict.isSound])).toEqual([[0, 'first', true], [0, 'broken', false], [0, 'linked', true]]);
+    expect(verifyAll(anew).map((verdict) => [verdict.alterations.length, verdict.chain, verdict.isSound])).toEqual([
+      [0, 'first', true],
+      [0, 'broken', false],
+      [0, 'linked', true],
+    ]);
   });
 
   test("another's signature over the same manifest is told, and one that is not the key given", () => {
@@ -147,16 +182,25 @@ function removed(files: Memory, issue: string): Memory {
 }
 
 describe('the record again', () => {
-  const again = (files: Memory, version = '0.1.0'): Question['assessAgain'] => (inputs, frozen) => {
-    const { plant } = readPlant(memoryShell(files), inputs);
-    return plant === null ? { none: 'errors' } : { text: writeRecord({ ...assess(plant, { survey: frozen.survey, toolVersion: version }), issue: frozen.issue }) };
-  };
+  const again =
+    (files: Memory, version = '0.1.0'): Question['assessAgain'] =>
+    (inputs, frozen) => {
+      const { plant } = readPlant(memoryShell(files), inputs);
+      return plant === null
+        ? { none: 'errors' }
+        : { text: writeRecord({ ...assess(plant, { survey: frozen.survey, toolVersion: version }), issue: frozen.issue }) };
+    };
 
   test('comes out byte for byte; under another version that alone differs', () => {
     const files = archive();
-    expect(verifyAll(files, again(files)).map((verdict) => verdict.reproduction)).toEqual(Array(3).fill({ result: 'reproduced', wording: [], versions: [] }));
+    expect(verifyAll(files, again(files)).map((verdict) => verdict.reproduction)).toEqual(
+      Array(3).fill({ result: 'reproduced', wording: [], versions: [] }),
+    );
     const later = verifyAll(files, again(files, '0.2.0'))[2];
-    expect(later?.reproduction).toMatchObject({ result: 'reproduced', versions: [{ path: 'tool version', before: '"0.1.0"', after: '"0.2.0"' }] });
+    expect(later?.reproduction).toMatchObject({
+      result: 'reproduced',
+      versions: [{ path: 'tool version', before: '"0.1.0"', after: '"0.2.0"' }],
+    });
   });
 
   test('a policy that changed is named with the figures that follow from it, wording apart', () => {
@@ -165,17 +209,26 @@ describe('the record again', () => {
     const changed: Question['assessAgain'] = (inputs, frozen) => again(new Map(files).set(`${inputs}/plant.yaml`, yaml))(inputs, frozen);
     const { reproduction } = verifyAll(files, changed)[2] as Verdict;
     if (reproduction.result !== 'differs') throw new Error(reproduction.result);
-    expect(reproduction.differences.map((difference) => `${difference.kind} ${difference.path}`)).toEqual(expect.arrayContaining(['policy policy_hash', 'policy policy 4.baseline.count: value', 'input inputs plant.yaml: sha256']));
+    expect(reproduction.differences.map((difference) => `${difference.kind} ${difference.path}`)).toEqual(
+      expect.arrayContaining(['policy policy_hash', 'policy policy 4.baseline.count: value', 'input inputs plant.yaml: sha256']),
+    );
     expect(reproduction.differences.every((difference) => difference.kind !== 'wording')).toBe(true);
   });
 
   test('a figure forged with its whole manifest does not come out again', () => {
     const files = archive();
     const path = '/p/issued/2026-001-r1/record.json';
-    const forged = Buffer.from(files.get(path) as Uint8Array).toString().replaceAll('"value":8.9', '"value":2.9');
+    const forged = Buffer.from(files.get(path) as Uint8Array)
+      .toString()
+      .replaceAll('"value":8.9', '"value":2.9');
     files.set(path, Buffer.from(forged));
     const { reproduction } = verifyAll(files, again(files))[2] as Verdict;
     if (reproduction.result !== 'differs') throw new Error(reproduction.result);
-    expect(reproduction.differences).toContainEqual({ kind: 'figure', path: 'measurements P-1 DE-H velocity rms: value', before: '2.9', after: '8.9' });
+    expect(reproduction.differences).toContainEqual({
+      kind: 'figure',
+      path: 'measurements P-1 DE-H velocity rms: value',
+      before: '2.9',
+      after: '8.9',
+    });
   });
 });

@@ -32,7 +32,18 @@ export function recordOf(files: Files, survey: string | null = null): SwayfolioR
 }
 
 export const QUARTERS = [
-  '2023-01-10', '2023-04-11', '2023-07-11', '2023-10-10', '2024-01-09', '2024-04-09', '2024-07-09', '2024-10-08', '2025-01-07', '2025-04-08', '2025-07-08', '2025-10-07',
+  '2023-01-10',
+  '2023-04-11',
+  '2023-07-11',
+  '2023-10-10',
+  '2024-01-09',
+  '2024-04-09',
+  '2024-07-09',
+  '2024-10-08',
+  '2025-01-07',
+  '2025-04-08',
+  '2025-07-08',
+  '2025-10-07',
 ] as const;
 
 /** A machine of one component with the limit groups of ISO 20816-3 that the rules' cases name. */
@@ -70,8 +81,18 @@ const csv = (rows: readonly Readonly<Record<string, string>>[]): string => {
 export function folder(machines: readonly MachineInput[], more: Files = {}, dates: readonly string[] = QUARTERS): Files {
   const points = machines.flatMap((m) =>
     m.series.map((s) => ({
-      machine: m.machine, component: m.machine, point: s.point, location: s.location ?? s.point, direction: 'horizontal', measured_on: 'bearing housing',
-      quantity: s.quantity ?? 'velocity', unit: s.unit ?? 'mm/s', detection: s.detection ?? 'rms', low_hz: '10', high_hz: '1000', ...s.pointColumns,
+      machine: m.machine,
+      component: m.machine,
+      point: s.point,
+      location: s.location ?? s.point,
+      direction: 'horizontal',
+      measured_on: 'bearing housing',
+      quantity: s.quantity ?? 'velocity',
+      unit: s.unit ?? 'mm/s',
+      detection: s.detection ?? 'rms',
+      low_hz: '10',
+      high_hz: '1000',
+      ...s.pointColumns,
     })),
   );
   const readings = machines.flatMap((m) =>
@@ -81,8 +102,15 @@ export function folder(machines: readonly MachineInput[], more: Files = {}, date
         const status = typeof value === 'string' && !/^[<>\d]/.test(value) ? value : 'measured';
         return [
           {
-            survey_date: dates[i] ?? '', machine: m.machine, point: s.point, quantity: s.quantity ?? 'velocity', detection: s.detection ?? 'rms',
-            value: status === 'measured' ? String(value) : '', unit: s.unit ?? 'mm/s', status, ...s.columns,
+            survey_date: dates[i] ?? '',
+            machine: m.machine,
+            point: s.point,
+            quantity: s.quantity ?? 'velocity',
+            detection: s.detection ?? 'rms',
+            value: status === 'measured' ? String(value) : '',
+            unit: s.unit ?? 'mm/s',
+            status,
+            ...s.columns,
           },
         ];
       }),

@@ -3,7 +3,20 @@ import { describe, expect, it } from 'vitest';
 import { folder, GROUPS, machineOf, measurementOf, QUARTERS, recordOf } from './folder.ts';
 
 const MORE = ['2026-01-06', '2026-04-07', '2026-07-07', '2026-10-06'];
-const record = (values: readonly (number | string)[], columns = {}) => recordOf(folder([{ machine: 'M', columns: { ...GROUPS.G2R, criticality: 'critical', interval_days: '91', ...columns }, series: [{ point: 'P', values }] }], {}, [...QUARTERS, ...MORE]));
+const record = (values: readonly (number | string)[], columns = {}) =>
+  recordOf(
+    folder(
+      [
+        {
+          machine: 'M',
+          columns: { ...GROUPS.G2R, criticality: 'critical', interval_days: '91', ...columns },
+          series: [{ point: 'P', values }],
+        },
+      ],
+      {},
+      [...QUARTERS, ...MORE],
+    ),
+  );
 
 describe('a step to a level', () => {
   const values = [1.0, 1.05, 0.98, 1.02, 1.0, 1.7, 1.72, 1.68, 1.71, 1.7];
@@ -55,10 +68,19 @@ describe('a spike that went', () => {
 describe('classes of speed', () => {
   const slow = [1.0, '', 1.02, '', 0.99, '', 1.01, ''];
   const fast = ['', 2.0, '', 2.05, '', 1.98, '', 2.02];
-  const rows = (values: readonly (number | string)[], rpm: number): string[] => values.flatMap((v, i) => (v === '' ? [] : [`${QUARTERS[i]},M,P,velocity,rms,${v},mm/s,${rpm}`]));
-  const plant = folder([{ machine: 'M', columns: { ...GROUPS.G1F, drive: 'variable', interval_days: '91' }, series: [{ point: 'P', values: [] }] }], {
-    'surveys/history.csv': ['survey_date,machine,point,quantity,detection,value,unit,speed_rpm', ...rows(slow, 900), ...rows(fast, 1480), ''].join('\n'),
-  });
+  const rows = (values: readonly (number | string)[], rpm: number): string[] =>
+    values.flatMap((v, i) => (v === '' ? [] : [`${QUARTERS[i]},M,P,velocity,rms,${v},mm/s,${rpm}`]));
+  const plant = folder(
+    [{ machine: 'M', columns: { ...GROUPS.G1F, drive: 'variable', interval_days: '91' }, series: [{ point: 'P', values: [] }] }],
+    {
+      'surveys/history.csv': [
+        'survey_date,machine,point,quantity,detection,value,unit,speed_rpm',
+        ...rows(slow, 900),
+        ...rows(fast, 1480),
+        '',
+      ].join('\n'),
+    },
+  );
 
   it('each has its own history, baseline and comparison, and print names it', () => {
     const m = measurementOf(recordOf(plant), 'M', 'P');
@@ -80,9 +102,18 @@ it('an older survey of the same level changes no verdict', () => {
 });
 
 it('the plant over time: open, repeated and closed actions, and how long the closing took', () => {
-  const actions = 'action,machine,raised,recommendation,status,closed\nM/1,M,2023-01-10,balance,done,2023-06-01\nM/2,M,2023-01-10,align,done,2023-04-20\nM/3,M,2023-04-11,look,open,\n';
-  const plant = folder([{ machine: 'M', columns: { ...GROUPS.G2R, interval_days: '91' }, series: [{ point: 'P', values: [1, 1, 1, 1] }] }], { 'actions.csv': actions });
+  const actions =
+    'action,machine,raised,recommendation,status,closed\nM/1,M,2023-01-10,balance,done,2023-06-01\nM/2,M,2023-01-10,align,done,2023-04-20\nM/3,M,2023-04-11,look,open,\n';
+  const plant = folder(
+    [{ machine: 'M', columns: { ...GROUPS.G2R, interval_days: '91' }, series: [{ point: 'P', values: [1, 1, 1, 1] }] }],
+    { 'actions.csv': actions },
+  );
   const lines = recordOf(plant).plant_over_time.map((l) => [l.open_actions, l.repeats, l.closed_actions, l.closure_days]);
   // Raised to closed: 142 and 100 days, both between the second survey and the third.
-  expect(lines).toEqual([[2, 0, 0, null], [3, 2, 0, null], [1, 1, 2, 121], [1, 1, 2, null]]);
+  expect(lines).toEqual([
+    [2, 0, 0, null],
+    [3, 2, 0, null],
+    [1, 1, 2, 121],
+    [1, 1, 2, null],
+  ]);
 });

@@ -5,7 +5,8 @@ import { URGENCIES } from '../../src/plant/types.ts';
 import type { SwayfolioRecord } from '../../src/record/types.ts';
 import { type Files, folder, GROUPS, type MachineInput, machineOf, measurementOf, QUARTERS, recordOf, type SeriesInput } from './folder.ts';
 
-const weight = (urgency: string | null): number => (urgency === null ? 0 : URGENCIES.length - (URGENCIES as readonly string[]).indexOf(urgency));
+const weight = (urgency: string | null): number =>
+  urgency === null ? 0 : URGENCIES.length - (URGENCIES as readonly string[]).indexOf(urgency);
 
 const value = fc.integer({ min: 20, max: 900 }).map((n) => n / 100);
 const history = fc.array(value, { minLength: 1, maxLength: 9 });
@@ -15,7 +16,9 @@ const criticality = fc.constantFrom('critical', 'essential', 'general');
 /** Record of one machine with histories at points of its own. */
 function judged(g: keyof typeof GROUPS, c: string, histories: readonly (readonly number[])[], acceleration: boolean): SwayfolioRecord {
   const series: SeriesInput[] = histories.map((values, i) => ({
-    point: `P${i}`, values, ...(acceleration && i === 0 ? { quantity: 'acceleration', unit: 'm/s²' } : {}),
+    point: `P${i}`,
+    values,
+    ...(acceleration && i === 0 ? { quantity: 'acceleration', unit: 'm/s²' } : {}),
   }));
   return recordOf(folder([{ machine: 'M', columns: { ...GROUPS[g], criticality: c, interval_days: '91' }, series }]));
 }
@@ -38,13 +41,20 @@ describe('monotone', () => {
 
   it('raising all last readings never lowers the level', () => {
     fc.assert(
-      fc.property(group, criticality, fc.integer({ min: 1, max: 7 }), fc.array(fc.array(value, { minLength: 8, maxLength: 8 }), { minLength: 2, maxLength: 3 }), fc.integer({ min: 1, max: 300 }), (g, c, length, all, percent) => {
-        const histories = all.map((values) => values.slice(0, length));
-        const raised = histories.map((values) => [...values.slice(0, -1), (values[values.length - 1] as number) * (1 + percent / 100)]);
-        const [low, high] = [judged(g, c, histories, false), judged(g, c, raised, false)];
-        if (isDoubtedLow(low) || isDoubtedLow(high)) return;
-        expect(weight(machineOf(high, 'M').urgency)).toBeGreaterThanOrEqual(weight(machineOf(low, 'M').urgency));
-      }),
+      fc.property(
+        group,
+        criticality,
+        fc.integer({ min: 1, max: 7 }),
+        fc.array(fc.array(value, { minLength: 8, maxLength: 8 }), { minLength: 2, maxLength: 3 }),
+        fc.integer({ min: 1, max: 300 }),
+        (g, c, length, all, percent) => {
+          const histories = all.map((values) => values.slice(0, length));
+          const raised = histories.map((values) => [...values.slice(0, -1), (values[values.length - 1] as number) * (1 + percent / 100)]);
+          const [low, high] = [judged(g, c, histories, false), judged(g, c, raised, false)];
+          if (isDoubtedLow(low) || isDoubtedLow(high)) return;
+          expect(weight(machineOf(high, 'M').urgency)).toBeGreaterThanOrEqual(weight(machineOf(low, 'M').urgency));
+        },
+      ),
       { numRuns: 300, seed: 11 },
     );
   });
@@ -53,7 +63,12 @@ describe('monotone', () => {
 describe('monotone with held points, long trends and forecasts', () => {
   const long = fc.array(value, { minLength: 8, maxLength: 8 });
   /** A rise with scatter, so that trends, plateaus and forecasts come about often. */
-  const ramp = fc.tuple(fc.integer({ min: 30, max: 250 }), fc.integer({ min: 0, max: 30 }), fc.array(fc.integer({ min: -8, max: 8 }), { minLength: 9, maxLength: 9 }))
+  const ramp = fc
+    .tuple(
+      fc.integer({ min: 30, max: 250 }),
+      fc.integer({ min: 0, max: 30 }),
+      fc.array(fc.integer({ min: -8, max: 8 }), { minLength: 9, maxLength: 9 }),
+    )
     .map(([level, growth, noise]) => noise.map((e, i) => (level / 100) * (1 + growth / 100) ** i * (1 + e / 100)));
 
   function expectNoLower(low: SwayfolioRecord, high: SwayfolioRecord): void {
@@ -62,25 +77,40 @@ describe('monotone with held points, long trends and forecasts', () => {
   }
 
   /** Each point read at all surveys but the last, where some could not be reached; `factor` raises the last reading of each. */
-  const withHeld = (g: keyof typeof GROUPS, c: string, histories: readonly (readonly number[])[], held: readonly boolean[], factor: number): Files =>
-    folder([{
-      machine: 'M', columns: { ...GROUPS[g], criticality: c, interval_days: '91' },
-      series: histories.map((values, i) => {
-        const raised = [...values.slice(0, -1), (values[values.length - 1] as number) * factor];
-        return { point: `P${i}`, values: held[i] === true ? [...raised, 'no access'] : [values[0] as number, ...raised] };
-      }),
-    }]);
+  const withHeld = (
+    g: keyof typeof GROUPS,
+    c: string,
+    histories: readonly (readonly number[])[],
+    held: readonly boolean[],
+    factor: number,
+  ): Files =>
+    folder([
+      {
+        machine: 'M',
+        columns: { ...GROUPS[g], criticality: c, interval_days: '91' },
+        series: histories.map((values, i) => {
+          const raised = [...values.slice(0, -1), (values[values.length - 1] as number) * factor];
+          return { point: `P${i}`, values: held[i] === true ? [...raised, 'no access'] : [values[0] as number, ...raised] };
+        }),
+      },
+    ]);
   /** A held point counts as its last reading: one that was doubted low in its own time is left out, as a measured one is. */
   const wasDoubtedLow = (files: Files): boolean => isDoubtedLow(recordOf(files, QUARTERS[7]));
 
   it('raising the last reading of held points and of measured ones', () => {
     fc.assert(
-      fc.property(group, criticality, fc.array(fc.tuple(fc.oneof(long, ramp), fc.boolean()), { minLength: 1, maxLength: 3 }), fc.integer({ min: 101, max: 400 }), (g, c, points, percent) => {
-        const [histories, held] = [points.map(([values]) => values.slice(0, 8)), points.map(([, h]) => h)];
-        const [low, high] = [1, percent / 100].map((factor) => withHeld(g, c, histories, held, factor)) as [Files, Files];
-        if (wasDoubtedLow(low) || wasDoubtedLow(high)) return;
-        expectNoLower(recordOf(low), recordOf(high));
-      }),
+      fc.property(
+        group,
+        criticality,
+        fc.array(fc.tuple(fc.oneof(long, ramp), fc.boolean()), { minLength: 1, maxLength: 3 }),
+        fc.integer({ min: 101, max: 400 }),
+        (g, c, points, percent) => {
+          const [histories, held] = [points.map(([values]) => values.slice(0, 8)), points.map(([, h]) => h)];
+          const [low, high] = [1, percent / 100].map((factor) => withHeld(g, c, histories, held, factor)) as [Files, Files];
+          if (wasDoubtedLow(low) || wasDoubtedLow(high)) return;
+          expectNoLower(recordOf(low), recordOf(high));
+        },
+      ),
       { numRuns: 400, seed: 17 },
     );
   });
@@ -114,9 +144,23 @@ describe('monotone with held points, long trends and forecasts', () => {
 
 /** A plant of three machines with a little of everything. */
 const plant: readonly MachineInput[] = [
-  { machine: 'FAN-2', columns: { ...GROUPS.G2R, criticality: 'critical', interval_days: '91' }, series: [{ point: '1H', values: [1.2, 1.3, 1.2, 2.4] }, { point: '2H', values: [1, 'stopped', 1.1, 1.2] }] },
+  {
+    machine: 'FAN-2',
+    columns: { ...GROUPS.G2R, criticality: 'critical', interval_days: '91' },
+    series: [
+      { point: '1H', values: [1.2, 1.3, 1.2, 2.4] },
+      { point: '2H', values: [1, 'stopped', 1.1, 1.2] },
+    ],
+  },
   { machine: 'FAN-10', columns: { ...GROUPS.G1F, interval_days: '91' }, series: [{ point: '1H', values: [7.5, 7.4, 7.6, 7.5] }] },
-  { machine: 'PUMP', columns: { ...GROUPS.G2F, criticality: 'general', interval_days: '91' }, series: [{ point: '1H', values: [2, 2.1, 2, 5.1] }, { point: '1H', quantity: 'acceleration', unit: 'm/s²', values: [4, 4, 4, 12] }] },
+  {
+    machine: 'PUMP',
+    columns: { ...GROUPS.G2F, criticality: 'general', interval_days: '91' },
+    series: [
+      { point: '1H', values: [2, 2.1, 2, 5.1] },
+      { point: '1H', quantity: 'acceleration', unit: 'm/s²', values: [4, 4, 4, 12] },
+    ],
+  },
 ];
 
 function shuffled(files: Files, name: string, seed: number): Files {
@@ -127,7 +171,12 @@ function shuffled(files: Files, name: string, seed: number): Files {
 
 /** A record without what names lines and hashes of its files. */
 function verdicts(record: SwayfolioRecord): object {
-  return { machines: record.machines, actions: record.actions, coverage: record.coverage, measurements: record.measurements.map((m) => ({ ...m, source: null, history: { ...m.history, line: null } })) };
+  return {
+    machines: record.machines,
+    actions: record.actions,
+    coverage: record.coverage,
+    measurements: record.measurements.map((m) => ({ ...m, source: null, history: { ...m.history, line: null } })),
+  };
 }
 
 describe('order and names', () => {
@@ -155,15 +204,19 @@ describe('order and names', () => {
 
 describe('looks', () => {
   it('judges the past by the limits of its day: a dated limit row changes nothing before it', () => {
-    const limits = 'limit_set,basis,quantity,unit,detection,ab,bc,cd,applies_machine,valid_from\nown,owner,velocity,mm/s,rms,1,2,3,M,\nown,owner,velocity,mm/s,rms,4,5,6,M,2023-12-01\n';
-    const files = folder([{ machine: 'M', columns: GROUPS.G2R, series: [{ point: 'P', values: [2.5, 2.5, 2.5, 2.5, 2.5] }] }], { 'limits.csv': limits });
+    const limits =
+      'limit_set,basis,quantity,unit,detection,ab,bc,cd,applies_machine,valid_from\nown,owner,velocity,mm/s,rms,1,2,3,M,\nown,owner,velocity,mm/s,rms,4,5,6,M,2023-12-01\n';
+    const files = folder([{ machine: 'M', columns: GROUPS.G2R, series: [{ point: 'P', values: [2.5, 2.5, 2.5, 2.5, 2.5] }] }], {
+      'limits.csv': limits,
+    });
     expect(measurementOf(recordOf(files, QUARTERS[3]), 'M', 'P').zone).toBe('C');
     expect(measurementOf(recordOf(files, QUARTERS[4]), 'M', 'P').zone).toBe('A');
     expect(recordOf(files).surveys.map((s) => s.conditions['M'])).toEqual(['C', 'C', 'C', 'C', 'A']);
   });
 
   it('a bound has a zone only where it settles it, and takes no part in a trend', () => {
-    const at = (typed: string) => measurementOf(recordOf(folder([{ machine: 'M', columns: GROUPS.G2R, series: [{ point: 'P', values: [1, 1, typed] }] }])), 'M', 'P');
+    const at = (typed: string) =>
+      measurementOf(recordOf(folder([{ machine: 'M', columns: GROUPS.G2R, series: [{ point: 'P', values: [1, 1, typed] }] }])), 'M', 'P');
     expect(at('<0.2')).toMatchObject({ value: null, bound: '<', zone: 'A' });
     expect(at('<2.0')).toMatchObject({ value: null, bound: '<', zone: null });
     expect(at('>50')).toMatchObject({ value: 50, bound: '>', zone: 'D' });
@@ -171,7 +224,12 @@ describe('looks', () => {
   });
 
   it('a calculated peak is judged with the limit times √2, a true peak is not judged at all', () => {
-    const at = (detection: string, reading: number) => measurementOf(recordOf(folder([{ machine: 'M', columns: GROUPS.G2R, series: [{ point: 'P', detection, values: [reading] }] }])), 'M', 'P');
+    const at = (detection: string, reading: number) =>
+      measurementOf(
+        recordOf(folder([{ machine: 'M', columns: GROUPS.G2R, series: [{ point: 'P', detection, values: [reading] }] }])),
+        'M',
+        'P',
+      );
     expect(at('calculated peak', 2.8 * Math.SQRT2 + 0.01)).toMatchObject({ zone: 'C', limits: { by: 'sine' } });
     expect(at('calculated peak', 2.8 * Math.SQRT2 - 0.01).zone).toBe('B');
     expect(at('true peak', 9)).toMatchObject({ zone: null, ratio_class: null, limits: null });
@@ -179,7 +237,12 @@ describe('looks', () => {
 
   it('a narrow band gives no A or B, but C or D stands', () => {
     const slow = { ...GROUPS.G1R, speed_rpm: '300' };
-    const at = (reading: number, low: string) => measurementOf(recordOf(folder([{ machine: 'M', columns: slow, series: [{ point: 'P', values: [reading], pointColumns: { low_hz: low } }] }])), 'M', 'P');
+    const at = (reading: number, low: string) =>
+      measurementOf(
+        recordOf(folder([{ machine: 'M', columns: slow, series: [{ point: 'P', values: [reading], pointColumns: { low_hz: low } }] }])),
+        'M',
+        'P',
+      );
     expect(at(1, '10').zone).toBeNull();
     expect(at(1, '10').no_zone_because).toContain('cannot see 300 r/min');
     expect(at(1, '2').zone).toBe('A');

@@ -19,7 +19,9 @@ describe.skipIf(!there)('one rig with four bearings, run until one failed', () =
   it('bearing 1 stands first at the end, by level, ratio and slope', () => {
     const record = recordOf(files);
     expect(record.machines[0]?.urgency_by?.point).toBe('Bearing 1');
-    const ratios = record.measurements.filter((m) => m.detection === 'rms').map((m) => ({ point: m.point, ratio: (m.value ?? 0) / (m.baseline?.value ?? 1), slope: m.trend?.db_per_year ?? 0 }));
+    const ratios = record.measurements
+      .filter((m) => m.detection === 'rms')
+      .map((m) => ({ point: m.point, ratio: (m.value ?? 0) / (m.baseline?.value ?? 1), slope: m.trend?.db_per_year ?? 0 }));
     const [first, ...others] = ratios.sort((a, b) => b.ratio - a.ratio);
     expect(first?.point).toBe('Bearing 1');
     for (const other of others) {
@@ -41,7 +43,10 @@ describe.skipIf(!there)('one rig with four bearings, run until one failed', () =
       alarmed ||= raised.length > 0;
       if (alarmed) expect(raised[0]?.points, survey).toEqual(['Bearing 1']);
       if (number >= 31 && number <= 33) expect(record.machines[0]?.urgency, survey).not.toBeNull();
-      expect(record.measurements.some((m) => m.travel === 'falling'), survey).toBe(false);
+      expect(
+        record.measurements.some((m) => m.travel === 'falling'),
+        survey,
+      ).toBe(false);
       expect(JSON.stringify([record.machines, record.actions, record.measurements]), survey).not.toMatch(/improved|"verified"/);
     });
     expect(alarmed).toBe(true);
@@ -54,7 +59,9 @@ describe.skipIf(!there)('one rig with four bearings, run until one failed', () =
     expect(after.survey.id).toBe('2024-08-06');
     expect(after.machines[0]?.urgency).toBe(before.machines[0]?.urgency);
     expect(after.actions[0]?.points).toEqual(['Bearing 1']);
-    expect(after.measurements.every((m) => m.travel === 'held' && m.doubts.some((d) => d.kind === 'all-down' || d.kind === 'near-zero'))).toBe(true);
+    expect(
+      after.measurements.every((m) => m.travel === 'held' && m.doubts.some((d) => d.kind === 'all-down' || d.kind === 'near-zero')),
+    ).toBe(true);
     expect(after.machines[0]?.doubts.map((d) => d.message).join(' ')).toContain('stopped?');
   });
 });

@@ -7,14 +7,24 @@ import { type Files, folder, GROUPS, type MachineInput, machineOf, measurementOf
 
 type Group = keyof typeof GROUPS;
 
-const machine = (id: string, criticality: string, group: Group, series: readonly SeriesInput[], more: Readonly<Record<string, string>> = {}): MachineInput => ({
+const machine = (
+  id: string,
+  criticality: string,
+  group: Group,
+  series: readonly SeriesInput[],
+  more: Readonly<Record<string, string>> = {},
+): MachineInput => ({
   machine: id,
   columns: { criticality, ...GROUPS[group], interval_days: '91', ...more },
   series,
 });
 
-const one = (criticality: string, group: Group, values: readonly (number | string)[], more: Readonly<Record<string, string>> = {}): MachineInput =>
-  machine('M', criticality, group, [{ point: 'P1', values }], more);
+const one = (
+  criticality: string,
+  group: Group,
+  values: readonly (number | string)[],
+  more: Readonly<Record<string, string>> = {},
+): MachineInput => machine('M', criticality, group, [{ point: 'P1', values }], more);
 
 /** Urgency and rule of machine M. */
 function level(machines: readonly MachineInput[], more: Files = {}) {
@@ -22,7 +32,8 @@ function level(machines: readonly MachineInput[], more: Files = {}) {
   return { urgency, rule };
 }
 
-const spare = (values: readonly (number | string)[]): MachineInput => machine('S', 'essential', 'G2R', [{ point: 'P1', values }], { spare_group: 'pair' });
+const spare = (values: readonly (number | string)[]): MachineInput =>
+  machine('S', 'essential', 'G2R', [{ point: 'P1', values }], { spare_group: 'pair' });
 const closed = (date: string): Files => ({
   'actions.csv': `action,machine,raised,recommendation,status,closed,closed_by\nM/2023-07-11/1,M,2023-07-11,balance,done,${date},fitter\n`,
 });
@@ -52,7 +63,10 @@ describe('urgency cases of the rules', () => {
   it('5: rising into C', () => {
     const values = [1.9, 2.4, 2.6, 3.4];
     expect(level([one('essential', 'G2R', values)])).toEqual({ urgency: 'within a month', rule: 'C2' });
-    expect(level([one('essential', 'G2R', values, { spare_group: 'pair' }), spare([1, 1, 1, 1])])).toEqual({ urgency: 'next planned stop', rule: 'C2' });
+    expect(level([one('essential', 'G2R', values, { spare_group: 'pair' }), spare([1, 1, 1, 1])])).toEqual({
+      urgency: 'next planned stop',
+      rule: 'C2',
+    });
   });
 
   it('6: small changes in A are none', () => {
@@ -77,7 +91,13 @@ describe('urgency cases of the rules', () => {
   });
 
   it('11: one quantity alone at a bearing is repeated first; a second one supports it', () => {
-    const acceleration: SeriesInput = { point: 'P1', quantity: 'acceleration', unit: 'm/s²', values: [5.0, 5.2, 5.1, 34], pointColumns: { high_hz: '10000' } };
+    const acceleration: SeriesInput = {
+      point: 'P1',
+      quantity: 'acceleration',
+      unit: 'm/s²',
+      values: [5.0, 5.2, 5.1, 34],
+      pointColumns: { high_hz: '10000' },
+    };
     const flat: SeriesInput = { point: 'P1', values: [1.0, 1.0, 1.0, 1.0] };
     const up: SeriesInput = { point: 'P1', values: [0.8, 0.8, 0.8, 1.36] };
     expect(level([machine('M', 'essential', 'G2R', [acceleration, flat])])).toEqual({ urgency: 'within a week', rule: 'R1' });
@@ -90,26 +110,41 @@ describe('urgency cases of the rules', () => {
     expect(still.actions[0]).toMatchObject({ action: 'M/2023-07-11/1', status: 'open', verification: { result: 'not verified' } });
     const done = recordOf(folder([one('essential', 'G2R', [5.0, 5.1, 5.0, 1.6])], closed('2023-09-01')));
     expect(machineOf(done, 'M')).toMatchObject({ urgency: null, rule: null });
-    expect(done.actions[0]).toMatchObject({ rank: 0, status: 'done', verification: { result: 'verified', target: { value: 2.52 }, after: { value: 1.6 } } });
+    expect(done.actions[0]).toMatchObject({
+      rank: 0,
+      status: 'done',
+      verification: { result: 'verified', target: { value: 2.52 }, after: { value: 1.6 } },
+    });
   });
 
   it('13: no access once holds the level; three times in a row raises it', () => {
     const c4 = [3.2, 3.1, 3.3, 3.2];
     expect(level([one('critical', 'G2R', [...c4, 'no access'])])).toMatchObject({ urgency: 'within a month' });
-    expect(level([one('critical', 'G2R', [...c4, 'no access', 'no access', 'no access'])])).toEqual({ urgency: 'within a week', rule: 'M2' });
+    expect(level([one('critical', 'G2R', [...c4, 'no access', 'no access', 'no access'])])).toEqual({
+      urgency: 'within a week',
+      rule: 'M2',
+    });
   });
 
   it('14: an unexplained fall holds the level until it is seen again', () => {
     const first = recordOf(folder([one('essential', 'G2R', [3.4, 3.5, 3.6, 1.2])]));
     expect(machineOf(first, 'M').urgency).toBe('next planned stop');
-    expect(measurementOf(first, 'M', 'P1')).toMatchObject({ zone: 'A', travel: 'held', doubts: [{ kind: 'unexplained-fall', effect: 'held' }] });
+    expect(measurementOf(first, 'M', 'P1')).toMatchObject({
+      zone: 'A',
+      travel: 'held',
+      doubts: [{ kind: 'unexplained-fall', effect: 'held' }],
+    });
     expect(level([one('essential', 'G2R', [3.4, 3.5, 3.6, 1.2, 1.3])])).toEqual({ urgency: null, rule: null });
   });
 
   it('15: a factor between units is doubted, never corrected', () => {
     const high = recordOf(folder([one('essential', 'G2R', [2.0, 2.0, 2.1, 53.3])]));
     expect(machineOf(high, 'M')).toMatchObject({ urgency: 'now', rule: 'D1' });
-    expect(measurementOf(high, 'M', 'P1')).toMatchObject({ value: 53.3, zone: 'D', doubts: [{ kind: 'unit-factor', effect: 're-measure' }] });
+    expect(measurementOf(high, 'M', 'P1')).toMatchObject({
+      value: 53.3,
+      zone: 'D',
+      doubts: [{ kind: 'unit-factor', effect: 're-measure' }],
+    });
     const points = ['P1', 'P2', 'P3'].map((point) => ({ point, values: [2.0, 2.0, 2.1, 0.083] }));
     const low = recordOf(folder([machine('M', 'essential', 'G2R', points)]));
     expect(machineOf(low, 'M').urgency).toBeNull();
@@ -129,5 +164,4 @@ describe('urgency cases of the rules', () => {
       expect(measurement.doubts.find((d) => d.kind === 'all-down')?.message).toContain('stopped?');
     }
   });
-
 });

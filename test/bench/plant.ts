@@ -25,15 +25,31 @@ const componentOf = (point: number): 'motor' | 'pump' => (point % 4 < 2 ? 'motor
 export function benchPlant(size: PlantSize): OutputFile[] {
   const numbers = Array.from({ length: size.machines }, (_, machine) => machine);
   const points = Array.from({ length: size.points }, (_, point) => point);
-  const name = (point: number): string => `${PLACES[point % 4]?.replace(/[a-z ]+(N?DE)/, (word, end: string) => `${word[0]?.toUpperCase()}${end}`)}-${DIRECTIONS[Math.floor(point / 4) % 3]?.[0]?.toUpperCase()}${point >= 12 ? point : ''}`;
-  const machineRow = (m: number): string => `${id(m)},Transfer pump ${m + 1},Area ${1 + (m % 9)},${['critical', 'essential', 'general'][m % 3]},60`;
-  const componentRows = (m: number): string => `${id(m)},motor,motor,75,1480,fixed,rigid,280,rolling,\n${id(m)},pump,pump,75,1480,fixed,rigid,,rolling,II`;
-  const pointRow = (m: number, p: number): string => `${id(m)},${componentOf(p)},${name(p)},${PLACES[p % 4]},${DIRECTIONS[Math.floor(p / 4) % 3]},bearing housing,velocity,mm/s,rms,10,1000`;
+  const name = (point: number): string =>
+    `${PLACES[point % 4]?.replace(/[a-z ]+(N?DE)/, (word, end: string) => `${word[0]?.toUpperCase()}${end}`)}-${DIRECTIONS[Math.floor(point / 4) % 3]?.[0]?.toUpperCase()}${point >= 12 ? point : ''}`;
+  const machineRow = (m: number): string =>
+    `${id(m)},Transfer pump ${m + 1},Area ${1 + (m % 9)},${['critical', 'essential', 'general'][m % 3]},60`;
+  const componentRows = (m: number): string =>
+    `${id(m)},motor,motor,75,1480,fixed,rigid,280,rolling,\n${id(m)},pump,pump,75,1480,fixed,rigid,,rolling,II`;
+  const pointRow = (m: number, p: number): string =>
+    `${id(m)},${componentOf(p)},${name(p)},${PLACES[p % 4]},${DIRECTIONS[Math.floor(p / 4) % 3]},bearing housing,velocity,mm/s,rms,10,1000`;
   return [
     { path: 'plant.yaml', bytes: 'plant: Bench Works\nclient: Bench Works\n' },
     { path: 'machines.csv', bytes: table('machine,name,area,criticality,interval_days', numbers.map(machineRow)) },
-    { path: 'components.csv', bytes: table('machine,component,kind,power_kw,speed_rpm,drive,support,shaft_height_mm,bearings,pump_category', numbers.map(componentRows)) },
-    { path: 'points.csv', bytes: table('machine,component,point,location,direction,measured_on,quantity,unit,detection,low_hz,high_hz', numbers.flatMap((m) => points.map((p) => pointRow(m, p)))) },
+    {
+      path: 'components.csv',
+      bytes: table(
+        'machine,component,kind,power_kw,speed_rpm,drive,support,shaft_height_mm,bearings,pump_category',
+        numbers.map(componentRows),
+      ),
+    },
+    {
+      path: 'points.csv',
+      bytes: table(
+        'machine,component,point,location,direction,measured_on,quantity,unit,detection,low_hz,high_hz',
+        numbers.flatMap((m) => points.map((p) => pointRow(m, p))),
+      ),
+    },
     ...surveys(size, numbers, points, name),
   ];
 }
@@ -44,13 +60,18 @@ function surveys(size: PlantSize, numbers: readonly number[], points: readonly n
   const start = numbers.map(() => points.map(() => 1.2 + 1.4 * random()));
   const first = dayOf(2024, 1, 15) ?? 0;
   return Array.from({ length: size.surveys }, (_, survey) => {
-    const rows = numbers.flatMap((m) => points.map((p) => {
-      const growth = m % 12 === 5 ? 1 + 0.12 * survey : m % 20 === 7 && survey >= size.surveys - 2 ? 1.5 : 1;
-      const value = (start[m]?.[p] ?? 1) * growth * (0.93 + 0.14 * random());
-      return `${id(m)},${name(p)},velocity,rms,${value.toFixed(2)},mm/s,1480,full load,measured,A1`;
-    }));
+    const rows = numbers.flatMap((m) =>
+      points.map((p) => {
+        const growth = m % 12 === 5 ? 1 + 0.12 * survey : m % 20 === 7 && survey >= size.surveys - 2 ? 1.5 : 1;
+        const value = (start[m]?.[p] ?? 1) * growth * (0.93 + 0.14 * random());
+        return `${id(m)},${name(p)},velocity,rms,${value.toFixed(2)},mm/s,1480,full load,measured,A1`;
+      }),
+    );
     const date = dayText(first + 60 * survey);
-    return { path: `surveys/${date}/readings.csv`, bytes: table('machine,point,quantity,detection,value,unit,speed_rpm,state,status,instrument', rows) };
+    return {
+      path: `surveys/${date}/readings.csv`,
+      bytes: table('machine,point,quantity,detection,value,unit,speed_rpm,state,status,instrument', rows),
+    };
   });
 }
 

@@ -17,7 +17,11 @@ import { workList } from '../../src/table/work-list.ts';
 
 const [, , stage = '', plantFolder = '', scratch = ''] = process.argv;
 const recordFile = join(scratch, 'record.json');
-const csvTexts = (): string[] => realShell.list(plantFolder).files.filter((path) => path.endsWith('.csv')).map((path) => readFileSync(join(plantFolder, path), 'utf8'));
+const csvTexts = (): string[] =>
+  realShell
+    .list(plantFolder)
+    .files.filter((path) => path.endsWith('.csv'))
+    .map((path) => readFileSync(join(plantFolder, path), 'utf8'));
 const plant = () => {
   const read = readPlant(realShell, plantFolder);
   if (read.plant === null) throw new Error(`The bench plant has errors: ${JSON.stringify(read.problems.slice(0, 3))}`);

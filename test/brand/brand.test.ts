@@ -44,11 +44,13 @@ describe.each(MODES)('the palette, %s', (mode) => {
 
   it('property: any accent is used only where it can be read; what is no colour never is', () => {
     const hex = fc.nat(0xffffff).map((n) => `#${n.toString(16).padStart(6, '0')}`);
-    fc.assert(fc.property(hex, (accent) => {
-      const { teal, paper } = inks(mode, accent);
-      expect(contrast(teal, paper)).toBeGreaterThanOrEqual(4.5);
-      expect(teal).toBe(contrast(accent, paper) >= 4.5 ? accent : palette.teal);
-    }));
+    fc.assert(
+      fc.property(hex, (accent) => {
+        const { teal, paper } = inks(mode, accent);
+        expect(contrast(teal, paper)).toBeGreaterThanOrEqual(4.5);
+        expect(teal).toBe(contrast(accent, paper) >= 4.5 ? accent : palette.teal);
+      }),
+    );
     for (const bad of ['', 'red', '#123', '#12345g', 'url(x)', '#0b6a6a;}']) expect(inks(mode, bad).teal).toBe(palette.teal);
   });
 });
@@ -60,17 +62,27 @@ describe('an accent that is asked for', () => {
     expect(readableAccent('#777777')).toBe('#767676');
     expect(readableAccent('teal')).toBeNull();
     const hex = fc.nat(0xffffff).map((n) => `#${n.toString(16).padStart(6, '0')}`);
-    fc.assert(fc.property(hex, (accent) => {
-      const found = readableAccent(accent) ?? '';
-      expect(contrast(found, '#ffffff')).toBeGreaterThanOrEqual(4.5);
-      if (contrast(accent, '#ffffff') >= 4.5) expect(found).toBe(accent);
-    }));
+    fc.assert(
+      fc.property(hex, (accent) => {
+        const found = readableAccent(accent) ?? '';
+        expect(contrast(found, '#ffffff')).toBeGreaterThanOrEqual(4.5);
+        if (contrast(accent, '#ffffff') >= 4.5) expect(found).toBe(accent);
+      }),
+    );
   });
 
   it('and fails is a problem at its line, with the colour that passes', () => {
     const yaml = 'plant: Mill\ncontractor:\n  name: Surveys\n  accent: "#ffee00"\n';
-    const { plant, problems } = readPlant(memoryShell({ ...folder([{ machine: 'P-1', columns: GROUPS.G2R, series: [{ point: '1H', values: [1, 1.1] }] }]), 'plant.yaml': yaml }), 'plant');
+    const { plant, problems } = readPlant(
+      memoryShell({
+        ...folder([{ machine: 'P-1', columns: GROUPS.G2R, series: [{ point: '1H', values: [1, 1.1] }] }]),
+        'plant.yaml': yaml,
+      }),
+      'plant',
+    );
     expect(plant).toBeNull();
-    expect(problems.filter((p) => p.severity === 'error')).toMatchObject([{ code: 'faint-colour', file: 'plant.yaml', line: 4, hint: expect.stringMatching(/#[0-9a-f]{6}/) as string }]);
+    expect(problems.filter((p) => p.severity === 'error')).toMatchObject([
+      { code: 'faint-colour', file: 'plant.yaml', line: 4, hint: expect.stringMatching(/#[0-9a-f]{6}/) as string },
+    ]);
   });
 });

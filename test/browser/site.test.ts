@@ -38,7 +38,15 @@ beforeAll(async () => {
 afterAll(async () => browser?.close());
 
 const machinePage = (): string => `machines/${readdirSync(join(home, 'machines')).find((f) => f.startsWith('tg-01')) ?? ''}`;
-const kinds = (): string[] => ['index.html', 'actions.html', 'machines.html', 'coverage.html', 'method.html', 'downloads.html', machinePage()];
+const kinds = (): string[] => [
+  'index.html',
+  'actions.html',
+  'machines.html',
+  'coverage.html',
+  'method.html',
+  'downloads.html',
+  machinePage(),
+];
 
 /** A page with every word of the console and every request off the disk kept. */
 async function visit(path: string, options: BrowserContextOptions = {}): Promise<{ page: Page; said: string[]; asked: string[] }> {
@@ -57,7 +65,10 @@ async function visit(path: string, options: BrowserContextOptions = {}): Promise
 
 describe('each kind of page', () => {
   for (const [name, options] of [
-    ['wide, light', {}], ['narrow, light', { viewport: { width: 390, height: 844 } }], ['wide, dark', { colorScheme: 'dark' }], ['narrow, dark', { viewport: { width: 390, height: 844 }, colorScheme: 'dark' }],
+    ['wide, light', {}],
+    ['narrow, light', { viewport: { width: 390, height: 844 } }],
+    ['wide, dark', { colorScheme: 'dark' }],
+    ['narrow, dark', { viewport: { width: 390, height: 844 }, colorScheme: 'dark' }],
   ] as const) {
     it(`is quiet and clean by axe: ${name}`, async () => {
       for (const path of kinds()) {
@@ -66,8 +77,12 @@ describe('each kind of page', () => {
         expect(asked, path).toEqual([]);
         await page.evaluate(readFileSync(axeSource, 'utf8'));
         const found = await page.evaluate(async () => {
-          const { axe } = globalThis as unknown as { axe: { run(options: object): Promise<{ violations: { id: string; nodes: { html: string }[] }[] }> } };
-          return (await axe.run({ runOnly: ['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa'] })).violations.map((v) => `${v.id}: ${v.nodes[0]?.html}`);
+          const { axe } = globalThis as unknown as {
+            axe: { run(options: object): Promise<{ violations: { id: string; nodes: { html: string }[] }[] }> };
+          };
+          return (await axe.run({ runOnly: ['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa'] })).violations.map(
+            (v) => `${v.id}: ${v.nodes[0]?.html}`,
+          );
         });
         expect(found, path).toEqual([]);
         await page.context().close();
@@ -95,7 +110,8 @@ describe('each kind of page', () => {
 });
 
 describe('the list of machines', () => {
-  const idsWhere = (fits: (m: SwayfolioRecord['machines'][number]) => boolean): string[] => record.machines.filter(fits).map((m) => m.machine);
+  const idsWhere = (fits: (m: SwayfolioRecord['machines'][number]) => boolean): string[] =>
+    record.machines.filter(fits).map((m) => m.machine);
   const firstIds = (page: Page): Promise<string[]> => page.locator('#machines tbody tr:visible th a').allInnerTexts();
 
   it('sorts by condition, worst first, and back', async () => {
@@ -129,7 +145,8 @@ describe('the list of machines', () => {
     const { page } = await visit('machines.html');
     await page.keyboard.press('Tab');
     expect(await page.evaluate('document.activeElement.className')).toBe('skip');
-    for (let i = 0; i < 40 && (await page.evaluate('document.activeElement.tagName')) !== 'BUTTON'; i += 1) await page.keyboard.press('Tab');
+    for (let i = 0; i < 40 && (await page.evaluate('document.activeElement.tagName')) !== 'BUTTON'; i += 1)
+      await page.keyboard.press('Tab');
     await page.keyboard.press('Enter');
     expect(await page.locator('#machines th[aria-sort]').count()).toBe(1);
     await page.context().close();

@@ -19,7 +19,9 @@ describe('check', () => {
     expect(run.code).toBe(1);
     expect(run.stdout).toMatch(/^surveys\/2026-01-14\/readings\.csv:2:5: \S+ .*eight/m);
     expect(run.stdout).toMatch(/^surveys\/2026-01-14\/readings\.csv:3:1: \S+ .*P-9/m);
-    expect(run.stdout).toMatch(/2 errors\nNext: mend surveys\/2026-01-14\/readings\.csv:2:5 and the 1 after it, then run again: swayfolio check plant\n$/);
+    expect(run.stdout).toMatch(
+      /2 errors\nNext: mend surveys\/2026-01-14\/readings\.csv:2:5 and the 1 after it, then run again: swayfolio check plant\n$/,
+    );
   });
 
   test('shows the first five of a kind and counts the rest; --json has them all', () => {
@@ -59,7 +61,11 @@ const BAD: readonly (readonly [string, Readonly<Record<string, string | null>>, 
   ['a missing column', { [LAST]: 'machine,quantity,detection,value,unit\nP-1,velocity,rms,1,mm/s\n' }, /readings\.csv:1.*point/],
   ['an unknown machine', { [LAST]: readings(['P-3,DE-H,velocity,rms,1,mm/s,1480']) }, /readings\.csv:2:1: .*P-3/],
   ['an unknown point', { [LAST]: readings(['P-1,DE-V,velocity,rms,1,mm/s,1480']) }, /readings\.csv:2:2: .*DE-V/],
-  ['a reading given twice', { [LAST]: readings(['P-1,DE-H,velocity,rms,1,mm/s,1480', 'P-1,DE-H,velocity,rms,2,mm/s,1480']) }, /readings\.csv:3.*2/],
+  [
+    'a reading given twice',
+    { [LAST]: readings(['P-1,DE-H,velocity,rms,1,mm/s,1480', 'P-1,DE-H,velocity,rms,2,mm/s,1480']) },
+    /readings\.csv:3.*2/,
+  ],
   ['a value that is no number', { [LAST]: readings(['P-1,DE-H,velocity,rms,eight,mm/s,1480']) }, /readings\.csv:2:5: .*eight/],
   ['an infinite value', { [LAST]: readings(['P-1,DE-H,velocity,rms,Infinity,mm/s,1480']) }, /readings\.csv:2:5: .*Infinity/],
   ['a value that overflows', { [LAST]: readings(['P-1,DE-H,velocity,rms,1e999,mm/s,1480']) }, /readings\.csv:2:5: .*1e999/],
@@ -71,7 +77,11 @@ const BAD: readonly (readonly [string, Readonly<Record<string, string | null>>, 
   ['an empty file', { 'machines.csv': '' }, /machines\.csv/],
   ['broken YAML', { 'plant.yaml': 'plant: [unclosed\n' }, /plant\.yaml:\d/],
   ['a NUL byte', { 'machines.csv': 'machine\nP-\u0000\n' }, /machines\.csv/],
-  ['control characters, which must not reach the terminal', { [LAST]: readings(['P-\u001b[31m,DE-H,velocity,rms,1,mm/s,1480']) }, /readings\.csv:2:1: /],
+  [
+    'control characters, which must not reach the terminal',
+    { [LAST]: readings(['P-\u001b[31m,DE-H,velocity,rms,1,mm/s,1480']) },
+    /readings\.csv:2:1: /,
+  ],
 ];
 
 describe('bad input', () => {

@@ -8,7 +8,11 @@ import { contents, plantFolder, readings, STACK, swayfolio } from './program.ts'
 function twoRecords(restated: boolean): string {
   const home = plantFolder();
   expect(swayfolio(home, ['report', 'plant', '--survey', '2025-11-10', '--out', 'first', '--quiet']).code).toBe(0);
-  if (restated) writeFileSync(join(home, 'plant/surveys/2025-11-10/readings.csv'), readings(['P-1,DE-H,velocity,rms,2.7,mm/s,1480', 'P-2,DE-H,velocity,rms,1.9,mm/s,1480']));
+  if (restated)
+    writeFileSync(
+      join(home, 'plant/surveys/2025-11-10/readings.csv'),
+      readings(['P-1,DE-H,velocity,rms,2.7,mm/s,1480', 'P-2,DE-H,velocity,rms,1.9,mm/s,1480']),
+    );
   expect(swayfolio(home, ['report', 'plant', '--out', 'second', '--quiet']).code).toBe(0);
   return home;
 }
@@ -23,9 +27,14 @@ test('an altered reading: exit 1, told in the site and beside it; the same bytes
   expect(swayfolio(home, ['compare', ...[...RECORDS].reverse(), '--out', 'again', '--csv']).code).toBe(1);
   const written = contents(join(home, 'years'));
   expect(contents(join(home, 'again'))).toEqual(written);
-  expect(Object.keys(written)).toEqual(expect.arrayContaining(['comparison.csv', 'comparison.json', 'comparison.pdf', 'site/index.html', 'site/restated.html']));
-  expect(written['site/restated.html']).toMatch(/2\.2 mm\/s.*first\/record\.json.*surveys\/2025-11-10\/readings\.csv:2.*2\.7 mm\/s.*second\/record\.json/s);
-  for (const [path, text] of Object.entries(written)) if (path.endsWith('.html')) expect(text, path).toContain('screening by overall values');
+  expect(Object.keys(written)).toEqual(
+    expect.arrayContaining(['comparison.csv', 'comparison.json', 'comparison.pdf', 'site/index.html', 'site/restated.html']),
+  );
+  expect(written['site/restated.html']).toMatch(
+    /2\.2 mm\/s.*first\/record\.json.*surveys\/2025-11-10\/readings\.csv:2.*2\.7 mm\/s.*second\/record\.json/s,
+  );
+  for (const [path, text] of Object.entries(written))
+    if (path.endsWith('.html')) expect(text, path).toContain('screening by overall values');
 });
 
 test('nothing altered: exit 0; CSV alone goes to stdout, and the schema of the package knows the JSON', () => {
@@ -41,7 +50,10 @@ test('nothing altered: exit 0; CSV alone goes to stdout, and the schema of the p
 test('wrong use: no folder to write to, no record, a plant without issues', () => {
   const home = twoRecords(false);
   for (const [args, code, text] of [
-    [RECORDS, 2, 'no folder to write to'], [['plant'], 1, 'has no issued report'], [['plant/surveys', '--csv'], 1, 'plant/surveys'], [['absent.json', '--csv'], 1, 'absent.json'],
+    [RECORDS, 2, 'no folder to write to'],
+    [['plant'], 1, 'has no issued report'],
+    [['plant/surveys', '--csv'], 1, 'plant/surveys'],
+    [['absent.json', '--csv'], 1, 'absent.json'],
   ] as const) {
     const run = swayfolio(home, ['compare', ...args]);
     expect([run.code, run.stdout]).toEqual([code, '']);

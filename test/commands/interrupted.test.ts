@@ -41,7 +41,11 @@ test('killed at nine moments between start and end, and twice while writing: eac
   const fresh = contents(join(home, 'fresh'));
   expect(fresh['record.json']).not.toBe(old['record.json']);
 
-  const moments = [...Array.from({ length: 9 }, (_, index) => () => sleep((duration * (index + 1)) / 10)), () => writingBegan(home), () => writingBegan(home).then(() => sleep(5))];
+  const moments = [
+    ...Array.from({ length: 9 }, (_, index) => () => sleep((duration * (index + 1)) / 10)),
+    () => writingBegan(home),
+    () => writingBegan(home).then(() => sleep(5)),
+  ];
   for (const moment of moments) {
     await killed(home, moment);
     // Between two renames the folder itself may be away: then the old one stands beside, whole, and the next start brings it back.

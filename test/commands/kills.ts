@@ -17,10 +17,22 @@ export const ISSUABLE = { 'surveys/2025-11-10/survey.yaml': PEOPLE, 'surveys/202
 /** Faults of an issued folder against its own manifest, without the program. */
 export function faultsOf(folder: string): string[] {
   if (!existsSync(join(folder, 'manifest.sha256'))) return ['no manifest'];
-  const stated = new Map(readFileSync(join(folder, 'manifest.sha256'), 'utf8').trimEnd().split('\n').map((line) => [line.slice(66), line.slice(0, 64)]));
+  const stated = new Map(
+    readFileSync(join(folder, 'manifest.sha256'), 'utf8')
+      .trimEnd()
+      .split('\n')
+      .map((line) => [line.slice(66), line.slice(0, 64)]),
+  );
   const there = contents(folder);
   const names = new Set([...stated.keys(), ...Object.keys(there)]);
-  return [...names].filter((name) => !name.startsWith('manifest.sha256') && stated.get(name) !== createHash('sha256').update(there[name] ?? '', 'latin1').digest('hex'));
+  return [...names].filter(
+    (name) =>
+      !name.startsWith('manifest.sha256') &&
+      stated.get(name) !==
+        createHash('sha256')
+          .update(there[name] ?? '', 'latin1')
+          .digest('hex'),
+  );
 }
 
 export async function killAtRandom(kills: number): Promise<{ faults: string[]; issues: number; during: number }> {
@@ -45,7 +57,8 @@ export async function killAtRandom(kills: number): Promise<{ faults: string[]; i
     await ended;
     if (holds(archive, dead)) during += 1;
     for (const name of readdirSync(archive).filter((entry) => !entry.startsWith('.'))) {
-      for (const fault of /^2026-001(-r\d+)?$/.test(name) ? faultsOf(join(archive, name)) : ['a strange folder']) faults.push(`turn ${turn}, ${name}: ${fault}`);
+      for (const fault of /^2026-001(-r\d+)?$/.test(name) ? faultsOf(join(archive, name)) : ['a strange folder'])
+        faults.push(`turn ${turn}, ${name}: ${fault}`);
     }
   }
   if (JSON.stringify(contents(join(archive, '2026-001'))) !== JSON.stringify(first)) faults.push('the first issue is not as it was');
@@ -53,14 +66,20 @@ export async function killAtRandom(kills: number): Promise<{ faults: string[]; i
   if (last.code !== 0) faults.push(`the next run: ${last.stderr}`);
   const verified = swayfolio(home, ['verify', 'plant']);
   if (verified.code !== 0) faults.push(verified.stdout);
-  faults.push(...readdirSync(archive).filter((name) => name.startsWith('.')).map((name) => `left over: ${name}`));
+  faults.push(
+    ...readdirSync(archive)
+      .filter((name) => name.startsWith('.'))
+      .map((name) => `left over: ${name}`),
+  );
   return { faults, issues: readdirSync(archive).length, during };
 }
 
 /** Whether the claim, or the end of a row of claims, is this process's. */
 function holds(archive: string, pid: number): boolean {
   try {
-    return readdirSync(archive, { recursive: true, encoding: 'utf8' }).some((path) => /^\.claim\/(?:.*\/)?owner$/.test(path) && readFileSync(join(archive, path), 'utf8').startsWith(`${pid}-`));
+    return readdirSync(archive, { recursive: true, encoding: 'utf8' }).some(
+      (path) => /^\.claim\/(?:.*\/)?owner$/.test(path) && readFileSync(join(archive, path), 'utf8').startsWith(`${pid}-`),
+    );
   } catch {
     return false;
   }

@@ -24,7 +24,9 @@ describe('limits', () => {
     // A set stands once for each of its quantities: velocity and displacement of one group share the id.
     expect(JSON.parse(swayfolio(home, ['limits', id, '--json']).stdout)).toEqual(all.filter((set: { id: string }) => set.id === id));
     expect(swayfolio(home, ['limits', id]).stdout.split('\n')[0]).toBe(id);
-    const heads = swayfolio(home, ['limits']).stdout.split('\n').filter((line) => line !== '' && !line.startsWith(' '));
+    const heads = swayfolio(home, ['limits'])
+      .stdout.split('\n')
+      .filter((line) => line !== '' && !line.startsWith(' '));
     expect(heads).toEqual([...new Set(all.map((set: { id: string }) => set.id))]);
   });
 

@@ -39,7 +39,12 @@ describe('new', () => {
     const lines = readFileSync(sheet, 'utf8').trim().split('\n');
     expect(lines).toHaveLength(3);
     const header = (lines[0] ?? '').split(',');
-    const filled = lines.slice(1).map((line) => line.split(',').map((cell, index) => (header[index] === 'value' ? '2.0' : cell)).join(','));
+    const filled = lines.slice(1).map((line) =>
+      line
+        .split(',')
+        .map((cell, index) => (header[index] === 'value' ? '2.0' : cell))
+        .join(','),
+    );
     writeFileSync(sheet, `${[lines[0], ...filled].join('\n')}\n`);
     const reported = swayfolio(home, ['report', 'plant', '--json']);
     expect(reported.stderr).not.toMatch(STACK);

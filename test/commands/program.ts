@@ -23,7 +23,12 @@ export interface Circumstances {
 }
 
 export function swayfolio(cwd: string, args: readonly string[], { env = {}, node = [] }: Circumstances = {}): Run {
-  const done: SpawnSyncReturns<string> = spawnSync(process.execPath, [...node, MAIN, ...args], { cwd, encoding: 'utf8', env: { ...process.env, ...env }, maxBuffer: 1 << 28 });
+  const done: SpawnSyncReturns<string> = spawnSync(process.execPath, [...node, MAIN, ...args], {
+    cwd,
+    encoding: 'utf8',
+    env: { ...process.env, ...env },
+    maxBuffer: 1 << 28,
+  });
   return { code: done.status, stdout: done.stdout, stderr: done.stderr };
 }
 
@@ -50,8 +55,10 @@ export function contents(folder: string): Readonly<Record<string, string>> {
 export const SMALL_PLANT: Files = {
   'plant.yaml': 'plant: Test Works\n',
   'machines.csv': 'machine,name,area,criticality,interval_days\nP-1,Feed pump,North,critical,60\nP-2,Drain pump,North,general,60\n',
-  'components.csv': 'machine,component,kind,power_kw,speed_rpm,drive,support,bearings,pump_category\nP-1,pump,pump,75,1480,fixed,rigid,rolling,II\nP-2,pump,pump,75,1480,fixed,rigid,rolling,II\n',
-  'points.csv': 'machine,component,point,location,direction,measured_on,quantity,unit,detection,low_hz,high_hz\n' +
+  'components.csv':
+    'machine,component,kind,power_kw,speed_rpm,drive,support,bearings,pump_category\nP-1,pump,pump,75,1480,fixed,rigid,rolling,II\nP-2,pump,pump,75,1480,fixed,rigid,rolling,II\n',
+  'points.csv':
+    'machine,component,point,location,direction,measured_on,quantity,unit,detection,low_hz,high_hz\n' +
     'P-1,pump,DE-H,pump DE,horizontal,bearing housing,velocity,mm/s,rms,10,1000\nP-2,pump,DE-H,pump DE,horizontal,bearing housing,velocity,mm/s,rms,10,1000\n',
   'surveys/2025-09-10/readings.csv': readings(['P-1,DE-H,velocity,rms,2.1,mm/s,1480', 'P-2,DE-H,velocity,rms,1.8,mm/s,1480']),
   'surveys/2025-11-10/readings.csv': readings(['P-1,DE-H,velocity,rms,2.2,mm/s,1480', 'P-2,DE-H,velocity,rms,1.9,mm/s,1480']),

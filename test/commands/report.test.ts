@@ -44,7 +44,10 @@ describe('report', () => {
   });
 
   test('warnings go to stderr and leave the exit code 0', () => {
-    const home = plantFolder({ 'machines.csv': 'machine,name,area,criticality,interval_days,colour\nP-1,Feed pump,North,critical,60,red\nP-2,Drain pump,North,general,60,blue\n' });
+    const home = plantFolder({
+      'machines.csv':
+        'machine,name,area,criticality,interval_days,colour\nP-1,Feed pump,North,critical,60,red\nP-2,Drain pump,North,general,60,blue\n',
+    });
     const run = swayfolio(home, ['report', 'plant', '--json']);
     expect(run.code).toBe(0);
     const summary = JSON.parse(run.stdout);
@@ -105,7 +108,10 @@ describe('report', () => {
 
   test('an unknown survey or machine is wrong usage and writes nothing', () => {
     const home = plantFolder();
-    for (const options of [['--survey', '2026-01-15'], ['--machine', 'P-3']]) {
+    for (const options of [
+      ['--survey', '2026-01-15'],
+      ['--machine', 'P-3'],
+    ]) {
       const run = swayfolio(home, ['report', 'plant', '--out', 'out', ...options]);
       expect(run.code).toBe(2);
       expect(run.stderr).toMatch(/hint: /);
@@ -115,7 +121,11 @@ describe('report', () => {
 
   test('the same bytes in another time zone and language, in another folder, and from files written in another order', () => {
     const home = plantFolder();
-    expect(swayfolio(home, ['report', 'plant', '--out', 'one'], { env: { TZ: 'Pacific/Kiritimati', LANG: 'tr_TR.UTF-8', LC_ALL: 'tr_TR.UTF-8' } }).code).toBe(0);
+    expect(
+      swayfolio(home, ['report', 'plant', '--out', 'one'], {
+        env: { TZ: 'Pacific/Kiritimati', LANG: 'tr_TR.UTF-8', LC_ALL: 'tr_TR.UTF-8' },
+      }).code,
+    ).toBe(0);
     expect(swayfolio(home, ['report', 'plant', '--out', 'two'], { env: { TZ: 'America/Adak', LANG: 'C', LC_ALL: 'C' } }).code).toBe(0);
     const other = plantFolder({ 'plant.yaml': null });
     writeFileSync(join(other, 'plant/plant.yaml'), 'plant: Test Works\n');

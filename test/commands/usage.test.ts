@@ -6,8 +6,18 @@ import { MAIN, plantFolder, STACK, swayfolio } from './program.ts';
 
 describe('wrong usage', () => {
   test.each([
-    [[]], [['reprot', 'plant']], [['report']], [['report', 'plant', '--colour', 'red']], [['report', 'plant', 'more']], [['report', 'plant', '--out']], [['report', 'plant', '--out=']],
-    [['report', 'plant', '--out', 'a', '--out', 'b']], [['render', 'record.json']], [['check', 'plant', '--survey', '2026-01-14']], [['limits', 'a', 'b']], [['check', '']],
+    [[]],
+    [['reprot', 'plant']],
+    [['report']],
+    [['report', 'plant', '--colour', 'red']],
+    [['report', 'plant', 'more']],
+    [['report', 'plant', '--out']],
+    [['report', 'plant', '--out=']],
+    [['report', 'plant', '--out', 'a', '--out', 'b']],
+    [['render', 'record.json']],
+    [['check', 'plant', '--survey', '2026-01-14']],
+    [['limits', 'a', 'b']],
+    [['check', '']],
   ])('%j: exit 2, a line and a hint, no stack trace, nothing on stdout', (args) => {
     const run = swayfolio(plantFolder(), args);
     expect(run.code).toBe(2);
@@ -19,7 +29,9 @@ describe('wrong usage', () => {
   test('the terminal speaks English whatever the system speaks', () => {
     const home = plantFolder();
     const english = swayfolio(home, ['report', '--colour'], { env: { LANG: 'C', LC_ALL: 'C' } });
-    expect(swayfolio(home, ['report', '--colour'], { env: { LANG: 'de_DE.UTF-8', LC_ALL: 'de_DE.UTF-8', LANGUAGE: 'de' } })).toEqual(english);
+    expect(swayfolio(home, ['report', '--colour'], { env: { LANG: 'de_DE.UTF-8', LC_ALL: 'de_DE.UTF-8', LANGUAGE: 'de' } })).toEqual(
+      english,
+    );
   });
 });
 
@@ -28,7 +40,8 @@ describe('help and version', () => {
     const home = plantFolder();
     const help = swayfolio(home, ['--help']);
     expect(help.code).toBe(0);
-    for (const command of ['new <folder>', 'check <plant>', 'report <plant>', 'render <record>', 'limits [id]']) expect(help.stdout).toContain(command);
+    for (const command of ['new <folder>', 'check <plant>', 'report <plant>', 'render <record>', 'limits [id]'])
+      expect(help.stdout).toContain(command);
     const options = swayfolio(home, ['report', '--help']).stdout;
     for (const option of ['--survey', '--out', '--brief', '--machine', '--tags', '--json', '--quiet']) expect(options).toContain(option);
     expect(swayfolio(home, ['--version']).stdout).toMatch(/^\d+\.\d+\.\d+\n$/);
@@ -39,7 +52,9 @@ describe('a bug', () => {
   test('is exit 3 and told as one, with its trace', () => {
     const home = plantFolder();
     // The nearest to a bug that can be had without building one in: a runtime that breaks under the program.
-    const run = swayfolio(home, ['limits', '--json'], { node: ['--import', 'data:text/javascript,JSON.stringify = () => { throw new TypeError("sabotage"); };'] });
+    const run = swayfolio(home, ['limits', '--json'], {
+      node: ['--import', 'data:text/javascript,JSON.stringify = () => { throw new TypeError("sabotage"); };'],
+    });
     expect(run.code).toBe(3);
     expect(run.stderr).toMatch(/bug of the program/);
     expect(run.stderr).toMatch(/sabotage/);
@@ -49,7 +64,11 @@ describe('a bug', () => {
 describe('the terminal', () => {
   test('a reader that closes early is no error', () => {
     const home = plantFolder();
-    const run = spawnSync('sh', ['-c', `"${process.execPath}" "${MAIN}" limits | head -n 1; "${process.execPath}" "${MAIN}" limits --json | true`], { cwd: home, encoding: 'utf8' });
+    const run = spawnSync(
+      'sh',
+      ['-c', `"${process.execPath}" "${MAIN}" limits | head -n 1; "${process.execPath}" "${MAIN}" limits --json | true`],
+      { cwd: home, encoding: 'utf8' },
+    );
     expect(run.stderr).toBe('');
   });
 

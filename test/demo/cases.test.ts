@@ -14,13 +14,24 @@ const table = (path: string): Line[] => parse(readFileSync(join(folder, path)), 
 
 /** Every reading with its survey. */
 const readings: Line[] = [
-  ...readdirSync(join(folder, 'surveys')).filter((f) => f.endsWith('.csv')).flatMap((f) => table(`surveys/${f}`)),
-  ...readdirSync(join(folder, 'surveys')).filter((f) => !f.endsWith('.csv')).flatMap((s) => table(`surveys/${s}/readings.csv`).map((row) => ({ survey_date: s, ...row }))),
+  ...readdirSync(join(folder, 'surveys'))
+    .filter((f) => f.endsWith('.csv'))
+    .flatMap((f) => table(`surveys/${f}`)),
+  ...readdirSync(join(folder, 'surveys'))
+    .filter((f) => !f.endsWith('.csv'))
+    .flatMap((s) => table(`surveys/${s}/readings.csv`).map((row) => ({ survey_date: s, ...row }))),
 ];
 const NOW = '2026-01-14';
 
 function lineOf(machine: string, point: string, quantity = 'velocity', survey = NOW, detection = 'rms'): Line {
-  const found = readings.find((r) => r['machine'] === machine && r['point'] === point && r['quantity'] === quantity && r['survey_date'] === survey && r['detection'] === detection);
+  const found = readings.find(
+    (r) =>
+      r['machine'] === machine &&
+      r['point'] === point &&
+      r['quantity'] === quantity &&
+      r['survey_date'] === survey &&
+      r['detection'] === detection,
+  );
   if (found === undefined) throw new Error(`${machine} ${point} ${quantity} ${survey} is not in the data`);
   return found;
 }
@@ -30,13 +41,19 @@ const w = 2 * Math.PI;
 
 /** Apparent frequencies, Hz, of a point: from velocity and displacement, from acceleration and velocity. */
 function apparent(machine: string, point: string, survey = NOW): [number, number] {
-  const [d, v, a] = [read(machine, point, 'displacement', survey), read(machine, point, 'velocity', survey), read(machine, point, 'acceleration', survey)];
+  const [d, v, a] = [
+    read(machine, point, 'displacement', survey),
+    read(machine, point, 'velocity', survey),
+    read(machine, point, 'acceleration', survey),
+  ];
   return [(1000 * v) / (w * d), (1000 * a) / (w * v)];
 }
 
 describe('one frequency', () => {
   it.each([
-    ['I1', 'LK-01', '3H', 1480, 0.8, 1.2], ['I2', 'CW-1', '2H', 985, 1.7, 2.3], ['I3', 'AF-03', '1H', 1470, 0, 0.8],
+    ['I1', 'LK-01', '3H', 1480, 0.8, 1.2],
+    ['I2', 'CW-1', '2H', 985, 1.7, 2.3],
+    ['I3', 'AF-03', '1H', 1470, 0, 0.8],
   ] as const)('%s: %s %s', (_, machine, point, rpm, low, high) => {
     const [fromD, fromA] = apparent(machine, point);
     expect(fromA / fromD).toBeLessThanOrEqual(1.25);
@@ -99,7 +116,8 @@ describe('other indications', () => {
   });
 
   it('I11: true peak over r.m.s. at GP-01 from at most 4 to over 6', () => {
-    const crest = (survey: string): number => read('GP-01', '3H', 'acceleration', survey, 'true peak') / read('GP-01', '3H', 'acceleration', survey);
+    const crest = (survey: string): number =>
+      read('GP-01', '3H', 'acceleration', survey, 'true peak') / read('GP-01', '3H', 'acceleration', survey);
     expect(crest('2023-10-18')).toBeLessThanOrEqual(4);
     expect(crest(NOW)).toBeGreaterThanOrEqual(6);
   });
@@ -108,7 +126,9 @@ describe('other indications', () => {
 describe('slips', () => {
   it('the annex file of 2025-11-19 is low by √2 as a whole', () => {
     const slipped = table('surveys/packing-annex-2025-11-19.csv').filter((r) => r['unit'] === 'in/s');
-    const ratios = slipped.map((r) => Number(r['value']) / read(String(r['machine']), String(r['point']), 'velocity', '2025-10-15', 'calculated peak')).sort((x, y) => x - y);
+    const ratios = slipped
+      .map((r) => Number(r['value']) / read(String(r['machine']), String(r['point']), 'velocity', '2025-10-15', 'calculated peak'))
+      .sort((x, y) => x - y);
     expect(ratios.length).toBeGreaterThanOrEqual(8);
     expect(Math.abs((ratios[Math.floor(ratios.length / 2)] ?? 0) * Math.SQRT2 - 1)).toBeLessThan(0.05);
   });
@@ -121,13 +141,15 @@ describe('slips', () => {
   });
 
   it('FD-01 in October 2024 is January copied', () => {
-    const sheet = (survey: string): string[] => readings.filter((r) => r['machine'] === 'FD-01' && r['survey_date'] === survey).map((r) => String(r['value']));
+    const sheet = (survey: string): string[] =>
+      readings.filter((r) => r['machine'] === 'FD-01' && r['survey_date'] === survey).map((r) => String(r['value']));
     expect(sheet('2024-10-16')).toEqual(sheet('2024-01-17'));
     expect(sheet('2024-10-16')).not.toEqual(sheet('2024-11-20'));
   });
 
   it('all of KB-01 was down by more than 95 %, and SF-01 2H at a fiftieth or less', () => {
-    for (const point of ['1H', '2H', '3H', '3V']) expect(read('KB-01', point, 'velocity', '2024-11-20') / read('KB-01', point, 'velocity', '2024-10-16')).toBeLessThan(0.05);
+    for (const point of ['1H', '2H', '3H', '3V'])
+      expect(read('KB-01', point, 'velocity', '2024-11-20') / read('KB-01', point, 'velocity', '2024-10-16')).toBeLessThan(0.05);
     expect(read('SF-01', '2H', 'velocity', '2025-01-15') / read('SF-01', '2H', 'velocity', '2024-11-20')).toBeLessThan(0.02);
   });
 

@@ -26,41 +26,146 @@ function csv(columns: readonly string[], rows: readonly Row[]): string {
 const shown = (value: number): string => (value >= 10 ? value.toFixed(1) : value >= 1 ? value.toFixed(2) : value.toFixed(3));
 
 const READINGS = [
-  'machine', 'point', 'quantity', 'detection', 'value', 'unit', 'low_hz', 'high_hz', 'speed_rpm', 'state', 'status', 'phase_deg', 'amplitude_1x', 'phase_ref', 'phase_convention', 'taken_at', 'instrument',
-  'measured_by', 'retake', 'remark',
+  'machine',
+  'point',
+  'quantity',
+  'detection',
+  'value',
+  'unit',
+  'low_hz',
+  'high_hz',
+  'speed_rpm',
+  'state',
+  'status',
+  'phase_deg',
+  'amplitude_1x',
+  'phase_ref',
+  'phase_convention',
+  'taken_at',
+  'instrument',
+  'measured_by',
+  'retake',
+  'remark',
 ] as const;
 
 function readingRow(machine: DemoMachine, series: DemoSeries, survey: number, date: string): Row | null {
   const value = notedValue(machine, series, survey, MACHINES);
   if (value === null) return null;
   const row = {
-    machine: machine.machine, point: pointName(machine, series, survey), quantity: series.quantity ?? 'velocity', detection: series.detection ?? 'rms', unit: series.unit ?? 'mm/s',
-    instrument: 'VM-1', measured_by: 'Signe Brødholt', taken_at: takenAt(machine.machine, series.point, survey, date),
+    machine: machine.machine,
+    point: pointName(machine, series, survey),
+    quantity: series.quantity ?? 'velocity',
+    detection: series.detection ?? 'rms',
+    unit: series.unit ?? 'mm/s',
+    instrument: 'VM-1',
+    measured_by: 'Signe Brødholt',
+    taken_at: takenAt(machine.machine, series.point, survey, date),
   };
   if (typeof value === 'string') return { ...row, status: value, taken_at: '' };
   return { ...row, value: shown(value), ...series.taken?.(survey) };
 }
 
 /** The point was called DE until it was renamed. */
-const pointName = (machine: DemoMachine, series: DemoSeries, survey: number): string => (machine.machine === 'KB-01' && series.point === '4H' && survey < 5 ? 'DE' : series.point);
+const pointName = (machine: DemoMachine, series: DemoSeries, survey: number): string =>
+  machine.machine === 'KB-01' && series.point === '4H' && survey < 5 ? 'DE' : series.point;
 
 function readingsOf(survey: number, machines: readonly DemoMachine[]): Row[] {
   const date = SURVEYS[survey] as string;
-  return machines.flatMap((machine) => machine.series.map((series) => readingRow(machine, series, survey, date))).filter((row): row is Row => row !== null);
+  return machines
+    .flatMap((machine) => machine.series.map((series) => readingRow(machine, series, survey, date)))
+    .filter((row): row is Row => row !== null);
 }
 
 /** Long form: rows that name their survey. */
 const long = (surveys: readonly number[], machines: readonly DemoMachine[]): string =>
-  csv(['survey_date', ...READINGS], surveys.flatMap((s) => readingsOf(s, machines).map((row) => ({ survey_date: SURVEYS[s] as string, ...row }))));
+  csv(
+    ['survey_date', ...READINGS],
+    surveys.flatMap((s) => readingsOf(s, machines).map((row) => ({ survey_date: SURVEYS[s] as string, ...row }))),
+  );
 
 function machineTables(): DemoFile[] {
-  const machineColumns = ['machine', 'name', 'area', 'route', 'criticality', 'spare_group', 'interval_days', 'in_service_from', 'removed_on', 'family', 'kind', 'power_kw', 'speed_rpm', 'drive', 'support', 'shaft_height_mm', 'bearings', 'pump_category', 'limit_set'];
-  const componentColumns = ['machine', 'component', 'kind', 'power_kw', 'speed_rpm', 'speed_ratio', 'speed_min', 'speed_max', 'drive', 'support', 'shaft_height_mm', 'bearings', 'orientation', 'rotor', 'pump_category', 'fan_category', 'gear_rating', 'limit_set', 'serial'];
-  const pointColumns = ['machine', 'component', 'point', 'location', 'direction', 'measured_on', 'quantity', 'unit', 'detection', 'low_hz', 'high_hz', 'limit_set'];
-  const points = MACHINES.flatMap((m) => m.series.map((s) => ({ machine: m.machine, component: s.component ?? '', point: s.point, quantity: s.quantity ?? 'velocity', unit: s.unit ?? 'mm/s', detection: s.detection ?? 'rms', ...s.columns })));
+  const machineColumns = [
+    'machine',
+    'name',
+    'area',
+    'route',
+    'criticality',
+    'spare_group',
+    'interval_days',
+    'in_service_from',
+    'removed_on',
+    'family',
+    'kind',
+    'power_kw',
+    'speed_rpm',
+    'drive',
+    'support',
+    'shaft_height_mm',
+    'bearings',
+    'pump_category',
+    'limit_set',
+  ];
+  const componentColumns = [
+    'machine',
+    'component',
+    'kind',
+    'power_kw',
+    'speed_rpm',
+    'speed_ratio',
+    'speed_min',
+    'speed_max',
+    'drive',
+    'support',
+    'shaft_height_mm',
+    'bearings',
+    'orientation',
+    'rotor',
+    'pump_category',
+    'fan_category',
+    'gear_rating',
+    'limit_set',
+    'serial',
+  ];
+  const pointColumns = [
+    'machine',
+    'component',
+    'point',
+    'location',
+    'direction',
+    'measured_on',
+    'quantity',
+    'unit',
+    'detection',
+    'low_hz',
+    'high_hz',
+    'limit_set',
+  ];
+  const points = MACHINES.flatMap((m) =>
+    m.series.map((s) => ({
+      machine: m.machine,
+      component: s.component ?? '',
+      point: s.point,
+      quantity: s.quantity ?? 'velocity',
+      unit: s.unit ?? 'mm/s',
+      detection: s.detection ?? 'rms',
+      ...s.columns,
+    })),
+  );
   return [
-    { path: 'machines.csv', bytes: csv(machineColumns, MACHINES.map((m) => ({ machine: m.machine, ...m.columns }))) },
-    { path: 'components.csv', bytes: csv(componentColumns, MACHINES.flatMap((m) => (m.components ?? []).map((c) => ({ machine: m.machine, ...c })))) },
+    {
+      path: 'machines.csv',
+      bytes: csv(
+        machineColumns,
+        MACHINES.map((m) => ({ machine: m.machine, ...m.columns })),
+      ),
+    },
+    {
+      path: 'components.csv',
+      bytes: csv(
+        componentColumns,
+        MACHINES.flatMap((m) => (m.components ?? []).map((c) => ({ machine: m.machine, ...c }))),
+      ),
+    },
     { path: 'points.csv', bytes: csv(pointColumns, points) },
   ];
 }
@@ -83,13 +188,32 @@ function surveyFiles(): DemoFile[] {
   const folders = SURVEYS.map((date, s) => ({ date, s })).slice(HISTORY);
   const repeat = MACHINES.filter((m) => m.machine === 'ID-01');
   return [
-    { path: 'surveys/history.csv', bytes: long(Array.from({ length: HISTORY }, (_, s) => s), ROUND) },
+    {
+      path: 'surveys/history.csv',
+      bytes: long(
+        Array.from({ length: HISTORY }, (_, s) => s),
+        ROUND,
+      ),
+    },
     ...folders.flatMap(({ date, s }) => [
       { path: `surveys/${date}/survey.yaml`, bytes: surveyYaml(date, s === LAST) },
       { path: `surveys/${date}/readings.csv`, bytes: csv(READINGS, [...readingsOf(s, ROUND), ...retakes(s, date)]) },
     ]),
     { path: `surveys/${REPEAT}/survey.yaml`, bytes: surveyYaml(REPEAT, false, 'kind: re-measurement\nscope: { machines: [ID-01] }') },
-    { path: `surveys/${REPEAT}/readings.csv`, bytes: csv(READINGS, readingsOf(8, repeat).map((row) => ({ ...row, taken_at: REPEAT, value: row['point'] === '3H' && row['quantity'] === 'velocity' ? '7.80' : shown(readAgain(Number(row['value']), `${row['point']} ${row['quantity']}`)) }))) },
+    {
+      path: `surveys/${REPEAT}/readings.csv`,
+      bytes: csv(
+        READINGS,
+        readingsOf(8, repeat).map((row) => ({
+          ...row,
+          taken_at: REPEAT,
+          value:
+            row['point'] === '3H' && row['quantity'] === 'velocity'
+              ? '7.80'
+              : shown(readAgain(Number(row['value']), `${row['point']} ${row['quantity']}`)),
+        })),
+      ),
+    },
     ...Object.entries(FINDINGS).map(([date, rows]) => ({ path: `surveys/${date}/findings.csv`, bytes: findingsCsv(rows) })),
   ];
 }
@@ -108,7 +232,16 @@ export function demoFiles(): DemoFile[] {
     ...annexFiles(),
     { path: `${photos}/CR-01-2A-1.png`, bytes: couplingPicture() },
     { path: `${photos}/ID-01-1.png`, bytes: wheelPicture() },
-    { path: `${photos}/captions.csv`, bytes: csv(['photo', 'caption'], [{ photo: 'CR-01-2A-1.png', caption: 'Coupling, seen from the walkway (drawn)' }, { photo: 'ID-01-1.png', caption: 'Wheel before cleaning (drawn)' }]) },
+    {
+      path: `${photos}/captions.csv`,
+      bytes: csv(
+        ['photo', 'caption'],
+        [
+          { photo: 'CR-01-2A-1.png', caption: 'Coupling, seen from the walkway (drawn)' },
+          { photo: 'ID-01-1.png', caption: 'Wheel before cleaning (drawn)' },
+        ],
+      ),
+    },
   ];
 }
 

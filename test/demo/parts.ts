@@ -20,7 +20,10 @@ export const v = (component: string, point: string, level: Level, more: Partial<
 
 /** Acceleration, r.m.s. up to 10 kHz, at a bearing. */
 export const a = (component: string, point: string, level: Level, unit = 'm/s²', detection = 'rms'): DemoSeries => ({
-  ...v(component, point, level, { columns: { high_hz: 10000 } }), quantity: 'acceleration', unit, detection,
+  ...v(component, point, level, { columns: { high_hz: 10000 } }),
+  quantity: 'acceleration',
+  unit,
+  detection,
 });
 
 /** Horizontal and vertical at bearing `n`, and axial where asked. Quiet bearings: vertical 0.8, axial 0.42 of the horizontal. */
@@ -30,7 +33,10 @@ export function bearing(component: string, n: number, level: number, axial = fal
 }
 
 /** Two bearings of a component, the second with an axial point. */
-export const pair = (component: string, first: number, low: number, high: number): DemoSeries[] => [...bearing(component, first, low), ...bearing(component, first + 1, high, true)];
+export const pair = (component: string, first: number, low: number, high: number): DemoSeries[] => [
+  ...bearing(component, first, low),
+  ...bearing(component, first + 1, high, true),
+];
 
 /** The same series but for those given, found by point and quantity. */
 export const withSeries = (series: readonly DemoSeries[], ...others: readonly DemoSeries[]): DemoSeries[] => {
@@ -39,24 +45,74 @@ export const withSeries = (series: readonly DemoSeries[], ...others: readonly De
   return [...series.map((s) => others.find((o) => key(o) === key(s)) ?? s), ...others.filter((o) => !known.has(key(o)))];
 };
 
-export const takenWith = (series: readonly DemoSeries[], taken: (survey: number) => Row): DemoSeries[] => series.map((s) => ({ ...s, taken: (n: number) => ({ ...taken(n), ...s.taken?.(n) }) }));
+export const takenWith = (series: readonly DemoSeries[], taken: (survey: number) => Row): DemoSeries[] =>
+  series.map((s) => ({ ...s, taken: (n: number) => ({ ...taken(n), ...s.taken?.(n) }) }));
 
 /** Velocity with the displacement (µm r.m.s.) and acceleration (m/s² r.m.s.) that one sinusoid of `hz` has: d = v/2πf, a = 2πf v, one band. */
-export function oneFrequency(component: string, point: string, velocity: readonly number[], hz: number, more: Partial<DemoSeries> = {}): DemoSeries[] {
+export function oneFrequency(
+  component: string,
+  point: string,
+  velocity: readonly number[],
+  hz: number,
+  more: Partial<DemoSeries> = {},
+): DemoSeries[] {
   const w = 2 * Math.PI * hz;
   const base = v(component, point, velocity, more);
   return [
     base,
-    { ...v(component, point, velocity.map((x) => (1000 * x) / w)), quantity: 'displacement', unit: 'µm' },
-    { ...v(component, point, velocity.map((x) => (x * w) / 1000)), quantity: 'acceleration', unit: 'm/s²' },
+    {
+      ...v(
+        component,
+        point,
+        velocity.map((x) => (1000 * x) / w),
+      ),
+      quantity: 'displacement',
+      unit: 'µm',
+    },
+    {
+      ...v(
+        component,
+        point,
+        velocity.map((x) => (x * w) / 1000),
+      ),
+      quantity: 'acceleration',
+      unit: 'm/s²',
+    },
   ];
 }
 
 type Component = Row & { readonly component: string };
-const base = (component: string, kind: string, kw: number, rpm: number): Component => ({ component, kind, power_kw: kw, speed_rpm: rpm, drive: 'fixed', support: 'rigid', bearings: 'rolling', orientation: 'horizontal' });
-export const motor = (kw: number, shaftHeight: number, rpm: number, more: Row = {}): Component => ({ ...base('motor', 'motor', kw, rpm), shaft_height_mm: shaftHeight, ...more });
-export const pump = (kw: number, rpm: number, category: string, more: Row = {}): Component => ({ ...base('pump', 'pump', kw, rpm), pump_category: category, ...more });
+const base = (component: string, kind: string, kw: number, rpm: number): Component => ({
+  component,
+  kind,
+  power_kw: kw,
+  speed_rpm: rpm,
+  drive: 'fixed',
+  support: 'rigid',
+  bearings: 'rolling',
+  orientation: 'horizontal',
+});
+export const motor = (kw: number, shaftHeight: number, rpm: number, more: Row = {}): Component => ({
+  ...base('motor', 'motor', kw, rpm),
+  shaft_height_mm: shaftHeight,
+  ...more,
+});
+export const pump = (kw: number, rpm: number, category: string, more: Row = {}): Component => ({
+  ...base('pump', 'pump', kw, rpm),
+  pump_category: category,
+  ...more,
+});
 export const fan = (kw: number, rpm: number, more: Row = {}): Component => ({ ...base('fan', 'fan', kw, rpm), ...more });
-export const part = (component: string, kind: string, kw: number, rpm: number, more: Row = {}): Component => ({ ...base(component, kind, kw, rpm), ...more });
+export const part = (component: string, kind: string, kw: number, rpm: number, more: Row = {}): Component => ({
+  ...base(component, kind, kw, rpm),
+  ...more,
+});
 
-export const about = (name: string, area: string, route: string, criticality: string, more: Row = {}): Row => ({ name, area, route, criticality, interval_days: 60, ...more });
+export const about = (name: string, area: string, route: string, criticality: string, more: Row = {}): Row => ({
+  name,
+  area,
+  route,
+  criticality,
+  interval_days: 60,
+  ...more,
+});

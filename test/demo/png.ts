@@ -28,7 +28,12 @@ export function greyPng(width: number, height: number, at: (x: number, y: number
   view.setUint32(0, width);
   view.setUint32(4, height);
   head[8] = 8;
-  const parts = [new Uint8Array([137, 80, 78, 71, 13, 10, 26, 10]), chunk('IHDR', head), chunk('IDAT', zlibSync(rows, { level: 9 })), chunk('IEND', new Uint8Array())];
+  const parts = [
+    new Uint8Array([137, 80, 78, 71, 13, 10, 26, 10]),
+    chunk('IHDR', head),
+    chunk('IDAT', zlibSync(rows, { level: 9 })),
+    chunk('IEND', new Uint8Array()),
+  ];
   const all = new Uint8Array(parts.reduce((sum, p) => sum + p.length, 0));
   let to = 0;
   for (const part of parts) {

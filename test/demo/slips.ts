@@ -19,10 +19,17 @@ function trueValue(machine: DemoMachine, series: DemoSeries, survey: number): To
 }
 
 /** Where the value noted under this point came from: points and machines that changed places, a sheet copied from last time. */
-function source(machine: DemoMachine, series: DemoSeries, survey: number, all: readonly DemoMachine[]): readonly [DemoMachine, DemoSeries, number] {
-  const same = (m: DemoMachine, point: string): DemoSeries => m.series.find((s) => s.point === point && quantityOf(s) === quantityOf(series)) ?? series;
+function source(
+  machine: DemoMachine,
+  series: DemoSeries,
+  survey: number,
+  all: readonly DemoMachine[],
+): readonly [DemoMachine, DemoSeries, number] {
+  const same = (m: DemoMachine, point: string): DemoSeries =>
+    m.series.find((s) => s.point === point && quantityOf(s) === quantityOf(series)) ?? series;
   if (machine.machine === 'FD-01' && survey === at('2024-10-16')) return [machine, series, survey - 1]; // the sheet of January, copied
-  if (machine.machine === 'JP-1B' && survey === at('2025-01-15') && quantityOf(series) === 'velocity' && /^3[HA]$/.test(series.point)) return [machine, same(machine, series.point === '3H' ? '3A' : '3H'), survey];
+  if (machine.machine === 'JP-1B' && survey === at('2025-01-15') && quantityOf(series) === 'velocity' && /^3[HA]$/.test(series.point))
+    return [machine, same(machine, series.point === '3H' ? '3A' : '3H'), survey];
   const other = machine.machine === 'CF-2' ? 'CF-4' : machine.machine === 'CF-4' ? 'CF-2' : null;
   const twin = other === null || survey !== at('2024-11-20') ? undefined : all.find((m) => m.machine === other);
   return twin === undefined ? [machine, series, survey] : [twin, same(twin, series.point), survey];
@@ -50,10 +57,25 @@ export function notedValue(machine: DemoMachine, series: DemoSeries, survey: num
 export const readAgain = (value: number, point: string): number => value * (1 + 0.03 * noise(`again ${point}`));
 
 /** A reading dated two days before its survey. */
-export const takenAt = (machine: string, point: string, survey: number, date: string): string => (machine === 'CR-01' && point === '1V' && survey === LAST ? '2026-01-12' : date);
+export const takenAt = (machine: string, point: string, survey: number, date: string): string =>
+  machine === 'CR-01' && point === '1V' && survey === LAST ? '2026-01-12' : date;
 
 /** A second take that differs from the first by a third. */
 export function retakes(survey: number, date: string): Row[] {
   if (survey !== LAST) return [];
-  return [{ machine: 'GP-01', point: '2H', quantity: 'velocity', detection: 'rms', value: '2.60', unit: 'mm/s', instrument: 'VM-1', measured_by: 'Signe Brødholt', taken_at: date, retake: 'yes', remark: 'magnet slipped at the first take' }];
+  return [
+    {
+      machine: 'GP-01',
+      point: '2H',
+      quantity: 'velocity',
+      detection: 'rms',
+      value: '2.60',
+      unit: 'mm/s',
+      instrument: 'VM-1',
+      measured_by: 'Signe Brødholt',
+      taken_at: date,
+      retake: 'yes',
+      remark: 'magnet slipped at the first take',
+    },
+  ];
 }

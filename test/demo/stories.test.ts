@@ -24,7 +24,13 @@ function recordOf(survey: string | undefined): SwayfolioRecord {
 function readingOf(record: SwayfolioRecord, story: Story): RecordMeasurement | null {
   const { at } = story;
   if (at === undefined) return null;
-  const found = record.measurements.find((m) => m.machine === story.machine && m.point === at.point && m.quantity === (at.quantity ?? 'velocity') && (at.detection === undefined || m.detection === at.detection));
+  const found = record.measurements.find(
+    (m) =>
+      m.machine === story.machine &&
+      m.point === at.point &&
+      m.quantity === (at.quantity ?? 'velocity') &&
+      (at.detection === undefined || m.detection === at.detection),
+  );
   if (found === undefined) throw new Error(`${story.machine} ${at.point} is not in the record`);
   return found;
 }
@@ -36,7 +42,8 @@ const committed = (below: string): string[] =>
     return statSync(join(folder, path)).isDirectory() ? committed(path) : [path];
   });
 
-const bears = (doubts: readonly Doubt[], kind: string, effect: string | undefined): boolean => doubts.some((d) => d.kind === kind && (effect === undefined || d.effect === effect));
+const bears = (doubts: readonly Doubt[], kind: string, effect: string | undefined): boolean =>
+  doubts.some((d) => d.kind === kind && (effect === undefined || d.effect === effect));
 
 describe('the folder', () => {
   it('is byte for byte what its maker makes', () => {
@@ -63,7 +70,11 @@ describe('the folder', () => {
 
 describe('the manager', () => {
   it('finds three things to do this week, six within a month', () => {
-    const urgent = (urgency: string): string[] => recordOf(undefined).machines.filter((m) => m.urgency === urgency).map((m) => m.machine).sort();
+    const urgent = (urgency: string): string[] =>
+      recordOf(undefined)
+        .machines.filter((m) => m.urgency === urgency)
+        .map((m) => m.machine)
+        .sort();
     expect(urgent('now')).toEqual(['JP-1C']);
     expect(urgent('within a week')).toEqual(['BFP-A', 'SB-02']);
     expect(urgent('within a month')).toEqual(['BFP-B', 'DR-01', 'EV-02', 'LK-01', 'PW-02', 'SN-03']);
@@ -72,7 +83,9 @@ describe('the manager', () => {
   });
 
   it('sees the overdue action first in its level', () => {
-    const stop = recordOf(undefined).actions.filter((a) => a.urgency === 'next planned stop').map((a) => a.machine);
+    const stop = recordOf(undefined)
+      .actions.filter((a) => a.urgency === 'next planned stop')
+      .map((a) => a.machine);
     expect(stop[0]).toBe('CR-01');
   });
 });
@@ -85,9 +98,11 @@ describe('each story', () => {
       if (story.says !== undefined) expect(machine).toMatchObject(story.says);
       const reading = readingOf(record, story);
       if (story.reading !== undefined) expect(reading).toMatchObject(story.reading);
-      for (const [name, value] of Object.entries(story.boundaries ?? {})) expect(reading?.limits?.[name as 'bc'], name).toBeCloseTo(value, 2);
+      for (const [name, value] of Object.entries(story.boundaries ?? {}))
+        expect(reading?.limits?.[name as 'bc'], name).toBeCloseTo(value, 2);
       const said = reading?.doubts ?? record.measurements.filter((m) => m.machine === story.machine).flatMap((m) => m.doubts);
-      for (const [kind, effect] of story.doubts ?? []) expect(bears(said, kind, effect), `${kind} among ${said.map((d) => d.kind).join(', ')}`).toBe(true);
+      for (const [kind, effect] of story.doubts ?? [])
+        expect(bears(said, kind, effect), `${kind} among ${said.map((d) => d.kind).join(', ')}`).toBe(true);
       for (const [survey, word] of Object.entries(story.hollow ?? {})) {
         expect(reading?.history.why[String(record.surveys.findIndex((s) => s.id === survey))], survey).toContain(word);
       }

@@ -8,13 +8,33 @@ export interface Story {
   readonly survey?: string;
   /** Why it must come out so. */
   readonly because: string;
-  readonly says?: { readonly condition?: string; readonly previous_condition?: string; readonly urgency?: string | null; readonly computed_urgency?: string; readonly rule?: string | null; readonly measured_of?: readonly [number, number] };
+  readonly says?: {
+    readonly condition?: string;
+    readonly previous_condition?: string;
+    readonly urgency?: string | null;
+    readonly computed_urgency?: string;
+    readonly rule?: string | null;
+    readonly measured_of?: readonly [number, number];
+  };
   readonly at?: { readonly point: string; readonly quantity?: string; readonly detection?: string };
-  readonly reading?: { readonly zone?: string | null; readonly ratio_class?: string | null; readonly travel?: string | null; readonly limit_set?: string | null; readonly status?: string };
+  readonly reading?: {
+    readonly zone?: string | null;
+    readonly ratio_class?: string | null;
+    readonly travel?: string | null;
+    readonly limit_set?: string | null;
+    readonly status?: string;
+  };
   readonly boundaries?: { readonly ab?: number; readonly bc?: number; readonly cd?: number };
   /** Effect blank where the rules leave it open. */
   readonly doubts?: readonly (readonly [kind: string, effect?: string])[];
   /** Surveys whose reading takes no part, with a word of the reason. */
   readonly hollow?: { readonly [survey: string]: string };
-  readonly action?: { readonly status?: string; readonly overdue_days?: number; readonly times_reported?: number; readonly result?: string; readonly origin?: string; readonly due?: string };
+  readonly action?: {
+    readonly status?: string;
+    readonly overdue_days?: number;
+    readonly times_reported?: number;
+    readonly result?: string;
+    readonly origin?: string;
+    readonly due?: string;
+  };
 }

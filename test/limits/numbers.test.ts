@@ -8,7 +8,16 @@ import { publishedById, publishedIds, publishedSets } from '../../src/limits/pub
 import { SHAFT_SET_ID, shaftSet } from '../../src/limits/iso20816-3.ts';
 import { RATING_LADDER } from '../../src/limits/iso20816-9.ts';
 
-type Row = readonly [id: string, quantity: string, unit: string, detection: string, ab: number | null, bc: number | null, cd: number | null, confidence: string];
+type Row = readonly [
+  id: string,
+  quantity: string,
+  unit: string,
+  detection: string,
+  ab: number | null,
+  bc: number | null,
+  cd: number | null,
+  confidence: string,
+];
 
 const V = ['velocity', 'mm/s', 'rms'] as const;
 const D = ['displacement', 'µm', 'rms'] as const;
@@ -46,7 +55,16 @@ const PAGE: readonly Row[] = [
   ['iso14694-bv5-rigid', ...V, 1.8, 4.0, 5.6, 'recalled'],
   ['iso14694-bv5-flexible', ...V, 2.8, 5.6, 7.1, 'recalled'],
   // Acceptance: NEMA MG 1 Part 7, API 610 / ISO 13709, IEC 60034-14:2003
-  ...([[3600, 0.15], [1800, 0.15], [1200, 0.15], [900, 0.12], [720, 0.09], [600, 0.08]] as const).map(([rpm, peak]): Row => [`nema-mg1-${rpm}`, 'velocity', 'in/s', 'true peak', null, peak, null, 'confirmed']),
+  ...(
+    [
+      [3600, 0.15],
+      [1800, 0.15],
+      [1200, 0.15],
+      [900, 0.12],
+      [720, 0.09],
+      [600, 0.08],
+    ] as const
+  ).map(([rpm, peak]): Row => [`nema-mg1-${rpm}`, 'velocity', 'in/s', 'true peak', null, peak, null, 'confirmed']),
   ['api610-preferred', ...V, null, 3.0, null, 'confirmed'],
   ['api610-allowable', ...V, null, 3.9, null, 'confirmed'],
   ['iec60034-14-a-h56-132', ...V, null, 1.6, null, 'one source'],
@@ -57,7 +75,9 @@ const PAGE: readonly Row[] = [
 describe('each row of the page', () => {
   for (const [id, quantity, unit, detection, ab, bc, cd, confidence] of PAGE) {
     it(`${id}, ${quantity}`, () => {
-      expect(publishedById(id).filter((s) => s.quantity === quantity)).toMatchObject([{ unit, detection, ab, bc, cd, confidence, published: true, basis: 'standard' }]);
+      expect(publishedById(id).filter((s) => s.quantity === quantity)).toMatchObject([
+        { unit, detection, ab, bc, cd, confidence, published: true, basis: 'standard' },
+      ]);
     });
   }
 
@@ -71,7 +91,11 @@ describe('each row of the page', () => {
   it('ISO 20816-9:2020: one rung below, at and above each rating of the ladder; VR 8 is 5, 8, 12.5', () => {
     const ladder = [2, 3.15, 5, 8, 12.5, 20, 31.5, 50, 80, 125, 200, 315];
     expect(RATING_LADDER).toEqual(ladder);
-    for (const [letters, quantity, unit, detection] of [['vr', 'velocity', 'mm/s', 'rms'], ['ar', 'acceleration', 'm/s²', 'true peak'], ['dr', 'displacement', 'µm', 'true peak-to-peak']] as const) {
+    for (const [letters, quantity, unit, detection] of [
+      ['vr', 'velocity', 'mm/s', 'rms'],
+      ['ar', 'acceleration', 'm/s²', 'true peak'],
+      ['dr', 'displacement', 'µm', 'true peak-to-peak'],
+    ] as const) {
       ladder.forEach((rating, i) => {
         const rows = publishedById(`iso20816-9-${letters}${rating}`);
         const [ab, cd] = [ladder[i - 1], ladder[i + 1]];
@@ -83,12 +107,21 @@ describe('each row of the page', () => {
   });
 
   it('ISO 7919-3 formulas: n = 3600 gives 80, 150, 220 and n = 10 000 gives 48, 90, 132 µm pk-pk', () => {
-    for (const [rpm, ab, bc, cd] of [[3600, 80, 150, 220], [10_000, 48, 90, 132]] as const) {
+    for (const [rpm, ab, bc, cd] of [
+      [3600, 80, 150, 220],
+      [10_000, 48, 90, 132],
+    ] as const) {
       const set = shaftSet(rpm);
       expect(set.ab).toBeCloseTo(ab, 9);
       expect(set.bc).toBeCloseTo(bc, 9);
       expect(set.cd).toBeCloseTo(cd, 9);
-      expect(set).toMatchObject({ id: SHAFT_SET_ID, unit: 'µm', detection: 'true peak-to-peak', measuredOn: 'shaft relative', confidence: 'one source' });
+      expect(set).toMatchObject({
+        id: SHAFT_SET_ID,
+        unit: 'µm',
+        detection: 'true peak-to-peak',
+        measuredOn: 'shaft relative',
+        confidence: 'one source',
+      });
     }
   });
 
@@ -106,7 +139,12 @@ describe('each row of the page', () => {
   });
 
   it('ISO 10816-7 ALARM and TRIP at most: 1.25 × B/C and C/D, as the page prints them (arithmetic)', () => {
-    for (const [id, alarm, trip] of [['category1-to', 5.0, 8.3], ['category1-above', 6.3, 9.5], ['category2-to', 6.4, 10.6], ['category2-above', 7.6, 11.9]] as const) {
+    for (const [id, alarm, trip] of [
+      ['category1-to', 5.0, 8.3],
+      ['category1-above', 6.3, 9.5],
+      ['category2-to', 6.4, 10.6],
+      ['category2-above', 7.6, 11.9],
+    ] as const) {
       const set = publishedById(`iso10816-7-${id}-200kW`)[0];
       expect(Math.abs(1.25 * (set?.bc ?? 0) - alarm)).toBeLessThanOrEqual(0.05 + 1e-9);
       expect(Math.abs(1.25 * (set?.cd ?? 0) - trip)).toBeLessThanOrEqual(0.05 + 1e-9);
@@ -117,7 +155,9 @@ describe('each row of the page', () => {
 describe('the list as a whole', () => {
   it('holds nothing that the page has not', () => {
     const known = new Set([...PAGE.map(([id]) => id), SHAFT_SET_ID]);
-    const other = publishedSets().map((s) => s.id).filter((id) => !known.has(id) && !/^iso20816-9-(vr|ar|dr)[\d.]+$/.test(id) && !/^nema-mg1-\d+-rigid$/.test(id));
+    const other = publishedSets()
+      .map((s) => s.id)
+      .filter((id) => !known.has(id) && !/^iso20816-9-(vr|ar|dr)[\d.]+$/.test(id) && !/^nema-mg1-\d+-rigid$/.test(id));
     expect(other).toEqual([]);
   });
 

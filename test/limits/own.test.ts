@@ -19,8 +19,14 @@ describe('order', () => {
     expect(idOf({ component: { ...motor, limitSet: 'of-component' }, point: { limitSet: 'of-point' }, limits })).toBe('of-point');
     expect(idOf({ component: { ...motor, limitSet: 'of-component' }, limits })).toBe('of-component');
     expect(chosen({ component: motor, limits })).toMatchObject({ set: { id: 'by-point' }, rule: 'limits.own.point' });
-    expect(chosen({ component: motor, limits: limits.slice(0, 3) })).toMatchObject({ set: { id: 'by-component' }, rule: 'limits.own.component' });
-    expect(chosen({ component: motor, limits: limits.slice(0, 2) })).toMatchObject({ set: { id: 'by-machine' }, rule: 'limits.own.machine' });
+    expect(chosen({ component: motor, limits: limits.slice(0, 3) })).toMatchObject({
+      set: { id: 'by-component' },
+      rule: 'limits.own.component',
+    });
+    expect(chosen({ component: motor, limits: limits.slice(0, 2) })).toMatchObject({
+      set: { id: 'by-machine' },
+      rule: 'limits.own.machine',
+    });
     expect(chosen({ component: motor, limits: limits.slice(0, 1) })).toMatchObject({ set: { id: 'by-kind' }, rule: 'limits.own.kind' });
     expect(idOf({ component: motor })).toBe('iso20816-3-group2-rigid');
   });
@@ -30,7 +36,13 @@ describe('order', () => {
   });
 
   it('a row for another machine, component, point or kind does not speak', () => {
-    for (const other of [{ appliesMachine: 'N' }, { appliesMachine: 'M', appliesComponent: 'D' }, { appliesMachine: 'M', appliesPoint: 'Q' }, { appliesKind: 'pump' as const }, { appliesMachine: 'N', appliesKind: 'motor' as const }]) {
+    for (const other of [
+      { appliesMachine: 'N' },
+      { appliesMachine: 'M', appliesComponent: 'D' },
+      { appliesMachine: 'M', appliesPoint: 'Q' },
+      { appliesKind: 'pump' as const },
+      { appliesMachine: 'N', appliesKind: 'motor' as const },
+    ]) {
       expect(idOf({ component: motor, limits: [row('other', other)] })).toBe('iso20816-3-group2-rigid');
     }
   });
@@ -47,8 +59,20 @@ describe('order', () => {
   });
 
   it('own limits serve what no standard does, and keep basis and approval', () => {
-    const own = chosen({ component: { kind: 'screw compressor' }, limits: [row('maker', { appliesKind: 'screw compressor', basis: 'maker', ab: null, approvedBy: 'R. Example', approvedOn: 19_000 })] });
-    expect(own.set).toMatchObject({ id: 'maker', basis: 'maker', ab: null, bc: 2, published: false, confidence: null, approvedBy: 'R. Example', approvedOn: 19_000 });
+    const own = chosen({
+      component: { kind: 'screw compressor' },
+      limits: [row('maker', { appliesKind: 'screw compressor', basis: 'maker', ab: null, approvedBy: 'R. Example', approvedOn: 19_000 })],
+    });
+    expect(own.set).toMatchObject({
+      id: 'maker',
+      basis: 'maker',
+      ab: null,
+      bc: 2,
+      published: false,
+      confidence: null,
+      approvedBy: 'R. Example',
+      approvedOn: 19_000,
+    });
   });
 });
 
@@ -92,17 +116,29 @@ describe('conflicts', () => {
 describe('published sets by name', () => {
   it('classes and acceptance limits, in a survey of any kind; the plant’s own set of that name comes first', () => {
     expect(idOf({ component: { ...motor, limitSet: 'iso10816-1-class2' } })).toBe('iso10816-1-class2');
-    for (const surveyKind of ['routine', 'acceptance'] as const) expect(idOf({ component: { ...motor, limitSet: 'api610-preferred' }, surveyKind })).toBe('api610-preferred');
-    expect(chosen({ component: { ...motor, limitSet: 'iso10816-1-class2' }, limits: [row('iso10816-1-class2', { bc: 9 })] }).set?.bc).toBe(9);
+    for (const surveyKind of ['routine', 'acceptance'] as const)
+      expect(idOf({ component: { ...motor, limitSet: 'api610-preferred' }, surveyKind })).toBe('api610-preferred');
+    expect(chosen({ component: { ...motor, limitSet: 'iso10816-1-class2' }, limits: [row('iso10816-1-class2', { bc: 9 })] }).set?.bc).toBe(
+      9,
+    );
   });
 
   it('a set without a row for the quantity gives none, with the name', () => {
-    expect(chosen({ component: { ...motor, limitSet: 'iso10816-1-class2' }, series: { quantity: 'displacement', unit: 'µm' } })).toMatchObject({ set: null, rule: 'limits.none.named', facts: { limit_set: 'iso10816-1-class2' } });
+    expect(
+      chosen({ component: { ...motor, limitSet: 'iso10816-1-class2' }, series: { quantity: 'displacement', unit: 'µm' } }),
+    ).toMatchObject({ set: null, rule: 'limits.none.named', facts: { limit_set: 'iso10816-1-class2' } });
   });
 
   it('the shaft formulas at the rated speed; where that is unknown, the reason, and no talk of an unknown name', () => {
-    const shaft = { point: { measuredOn: 'shaft relative', limitSet: 'iso20816-3-shaft' }, series: { quantity: 'displacement', unit: 'µm', detection: 'true peak-to-peak' } } as const;
+    const shaft = {
+      point: { measuredOn: 'shaft relative', limitSet: 'iso20816-3-shaft' },
+      series: { quantity: 'displacement', unit: 'µm', detection: 'true peak-to-peak' },
+    } as const;
     expect(chosen({ component: { kind: 'other', speedRpm: 3600 }, ...shaft }).set?.ab).toBeCloseTo(80, 9);
-    expect(chosen({ component: { kind: 'other' }, ...shaft })).toMatchObject({ set: null, rule: 'limits.none.shaft_speed', conflict: null });
+    expect(chosen({ component: { kind: 'other' }, ...shaft })).toMatchObject({
+      set: null,
+      rule: 'limits.none.shaft_speed',
+      conflict: null,
+    });
   });
 });

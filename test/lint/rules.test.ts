@@ -19,10 +19,28 @@ interface Case {
 }
 
 const importing = (path: string): string => `import { f } from '${path}';\nexport const g = f;\n`;
-const direction = (at: string, bad: string, good: string): Case => ({ rule: 'direction', at: `src/${at}/snippet.ts`, bad: importing(bad), good: importing(good), says: 'Imports run downwards only' });
+const direction = (at: string, bad: string, good: string): Case => ({
+  rule: 'direction',
+  at: `src/${at}/snippet.ts`,
+  bad: importing(bad),
+  good: importing(good),
+  says: 'Imports run downwards only',
+});
 const line = (code: string): string => `export const f = () => ${code};\n`;
-const impure = (bad: string, good: string, says: string): Case => ({ rule: 'impure', at: 'src/assess/snippet.ts', bad: line(bad), good: line(good), says });
-const boundary = (bad: string, good: string): Case => ({ rule: 'boundary', at: 'src/assess/snippet.ts', bad: line(bad), good: line(good), says: 'compared by exceeds() alone' });
+const impure = (bad: string, good: string, says: string): Case => ({
+  rule: 'impure',
+  at: 'src/assess/snippet.ts',
+  bad: line(bad),
+  good: line(good),
+  says,
+});
+const boundary = (bad: string, good: string): Case => ({
+  rule: 'boundary',
+  at: 'src/assess/snippet.ts',
+  bad: line(bad),
+  good: line(good),
+  says: 'compared by exceeds() alone',
+});
 
 const CASES: readonly Case[] = [
   direction('measure', '../plant/day.ts', './units.ts'),
@@ -47,7 +65,13 @@ const CASES: readonly Case[] = [
   direction('commands', '../main.ts', '../assess/assess.ts'),
   direction('shell', '../survey/read.ts', '../page/assets.ts'),
   direction('measure', '../shell/shell.ts', '../shell/types.ts'),
-  { rule: 'disk', at: 'src/survey/snippet.ts', bad: importing('node:fs'), good: importing('node:crypto'), says: 'Only shell/ touches disk' },
+  {
+    rule: 'disk',
+    at: 'src/survey/snippet.ts',
+    bad: importing('node:fs'),
+    good: importing('node:crypto'),
+    says: 'Only shell/ touches disk',
+  },
   impure('Date.now() + x + y', 'x + y', 'No clock and no time zone'),
   impure('Intl.NumberFormat', 'x + y', 'No locale of the runtime'),
   impure('process.env.TZ', 'x + y', 'Only shell/ and main.ts see the process'),
@@ -66,10 +90,22 @@ const CASES: readonly Case[] = [
   boundary('value > limits.alarm', 'limits.alarm === null'),
   boundary('value > limits.trip', 'limits.tripped > value'),
   { rule: 'file length', at: 'src/page/snippet.ts', bad: lines(301, 'f();'), good: lines(300, 'f();'), says: 'too many lines' },
-  { rule: 'function length', at: 'src/page/snippet.ts', bad: `export function f(): void {\n${lines(61, '  f();')}}\n`, good: `export function f(): void {\n${lines(60, '  f();')}}\n`, says: 'too many lines' },
+  {
+    rule: 'function length',
+    at: 'src/page/snippet.ts',
+    bad: `export function f(): void {\n${lines(61, '  f();')}}\n`,
+    good: `export function f(): void {\n${lines(60, '  f();')}}\n`,
+    says: 'too many lines',
+  },
   { rule: 'any', at: 'src/page/snippet.ts', bad: 'export const a: any = 1;\n', good: 'export const a: unknown = 1;\n', says: 'any' },
   { rule: 'default export', at: 'src/page/snippet.ts', bad: 'export default 1;\n', good: 'export const a = 1;\n', says: 'default export' },
-  { rule: 'non-null', at: 'src/page/snippet.ts', bad: 'export const f = (a: string | null) => a!;\n', good: 'export const f = (a: string | null) => a;\n', says: 'non-null' },
+  {
+    rule: 'non-null',
+    at: 'src/page/snippet.ts',
+    bad: 'export const f = (a: string | null) => a!;\n',
+    good: 'export const f = (a: string | null) => a;\n',
+    says: 'non-null',
+  },
 ];
 
 /** A folder with our biome.json and rules, and one file. */
@@ -81,7 +117,10 @@ function complaints(files: Readonly<Record<string, string>>): string {
     mkdirSync(dirname(join(home, path)), { recursive: true });
     writeFileSync(join(home, path), text);
   }
-  const run = spawnSync(biome, ['lint', '--error-on-warnings', '--max-diagnostics=none', '--colors=off', 'src'], { cwd: home, encoding: 'utf8' });
+  const run = spawnSync(biome, ['lint', '--error-on-warnings', '--max-diagnostics=none', '--colors=off', 'src'], {
+    cwd: home,
+    encoding: 'utf8',
+  });
   return run.status === 0 ? '' : `${run.stdout}${run.stderr}`;
 }
 
@@ -106,14 +145,19 @@ describe('the lint rules', () => {
   });
 
   test('a cycle of imports', () => {
-    const cycle = { 'src/page/a.ts': "import { b } from './b.ts';\nexport const a = (): unknown => b;\n", 'src/page/b.ts': "import { a } from './a.ts';\nexport const b = (): unknown => a;\n" };
+    const cycle = {
+      'src/page/a.ts': "import { b } from './b.ts';\nexport const a = (): unknown => b;\n",
+      'src/page/b.ts': "import { a } from './a.ts';\nexport const b = (): unknown => a;\n",
+    };
     expect(complaints(cycle)).toContain('noImportCycles');
     expect(complaints({ ...cycle, 'src/page/b.ts': 'export const b = 1;\n' })).toBe('');
   });
 
   test('exceeds.ts alone may compare a boundary, shell/ alone may ask the clock', () => {
     const comparing = 'export const exceeds = (value: number, bc: number): boolean => value > bc;\n';
-    expect(complaints({ 'src/assess/exceeds.ts': comparing, 'src/shell/clock.ts': 'export const now = (): number => Date.now();\n' })).toBe('');
+    expect(complaints({ 'src/assess/exceeds.ts': comparing, 'src/shell/clock.ts': 'export const now = (): number => Date.now();\n' })).toBe(
+      '',
+    );
     expect(complaints({ 'src/assess/other.ts': comparing })).toContain('exceeds() alone');
   });
 });

@@ -3,7 +3,11 @@ import Qty from 'js-quantities';
 import { describe, expect, it } from 'vitest';
 import { graduationOf, graduationText, shownAs, shownFacts } from '../../src/measure/display.ts';
 
-const INCH = { velocity: { unit: 'in/s', detection: 'calculated peak' }, displacement: { unit: 'mil', detection: null }, acceleration: { unit: 'g', detection: null } } as const;
+const INCH = {
+  velocity: { unit: 'in/s', detection: 'calculated peak' },
+  displacement: { unit: 'mil', detection: null },
+  acceleration: { unit: 'g', detection: null },
+} as const;
 
 describe('display units', () => {
   it('a velocity in mm/s r.m.s. is shown in in/s, by the sine as a calculated peak', () => {

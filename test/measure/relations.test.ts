@@ -6,16 +6,31 @@ import { bladePassHz, gearMeshHz, twiceLineHz } from '../../src/measure/forcing.
 import { limitFactor } from '../../src/measure/limit-factor.ts';
 import { nearestWord } from '../../src/measure/nearest.ts';
 import { vectorChange } from '../../src/measure/phasor.ts';
-import { accelerationOfVelocity, apparentFrequencyHz, displacementOfVelocity, velocityOfAcceleration, velocityOfDisplacement } from '../../src/measure/sinusoid.ts';
+import {
+  accelerationOfVelocity,
+  apparentFrequencyHz,
+  displacementOfVelocity,
+  velocityOfAcceleration,
+  velocityOfDisplacement,
+} from '../../src/measure/sinusoid.ts';
 import { unitsOf } from '../../src/measure/units.ts';
 
 describe('detection', () => {
   it('each word of the contract is read as itself, whatever peak means', () => {
-    for (const detection of DETECTIONS) for (const means of [null, 'calculated', 'true'] as const) expect(parseDetection(detection, means)).toEqual({ detection });
+    for (const detection of DETECTIONS)
+      for (const means of [null, 'calculated', 'true'] as const) expect(parseDetection(detection, means)).toEqual({ detection });
   });
 
   it('a bare peak asks back unless the plant says what it means', () => {
-    for (const [typed, shape] of [['peak', 'peak'], ['pk', 'peak'], ['0-p', 'peak'], ['zero to peak', 'peak'], ['peak-to-peak', 'peak-to-peak'], ['pk-pk', 'peak-to-peak'], ['P-P', 'peak-to-peak']] as const) {
+    for (const [typed, shape] of [
+      ['peak', 'peak'],
+      ['pk', 'peak'],
+      ['0-p', 'peak'],
+      ['zero to peak', 'peak'],
+      ['peak-to-peak', 'peak-to-peak'],
+      ['pk-pk', 'peak-to-peak'],
+      ['P-P', 'peak-to-peak'],
+    ] as const) {
       expect([typed, parseDetection(typed, null)]).toEqual([typed, { ambiguous: shape }]);
       expect(parseDetection(typed, 'calculated')).toEqual({ detection: `calculated ${shape}` });
       expect(parseDetection(typed, 'true')).toEqual({ detection: `true ${shape}` });
@@ -32,7 +47,9 @@ describe('detection', () => {
 
 describe('limits carried to another unit and detection', () => {
   const detection = fc.constantFrom(...DETECTIONS);
-  const graduation = fc.constantFrom(...KNOWN_QUANTITIES).chain((q) => fc.tuple(...[0, 1, 2].map(() => fc.record({ unit: fc.constantFrom(...unitsOf(q)), detection }))));
+  const graduation = fc
+    .constantFrom(...KNOWN_QUANTITIES)
+    .chain((q) => fc.tuple(...[0, 1, 2].map(() => fc.record({ unit: fc.constantFrom(...unitsOf(q)), detection }))));
 
   it('r.m.s. to calculated peak is √2, to calculated peak-to-peak 2√2 (pure sine)', () => {
     const rms = { unit: 'mm/s', detection: 'rms' } as const;
@@ -74,7 +91,10 @@ describe('limits carried to another unit and detection', () => {
 });
 
 describe('phasors', () => {
-  const phasor = fc.record({ amplitude: fc.double({ min: 0, max: 100, noNaN: true }), lagDeg: fc.double({ min: 0, max: 360, noNaN: true }) });
+  const phasor = fc.record({
+    amplitude: fc.double({ min: 0, max: 100, noNaN: true }),
+    lagDeg: fc.double({ min: 0, max: 360, noNaN: true }),
+  });
 
   it('ISO 20816-1:2016 Annex D, second-hand: 3 mm/s at 40° to 2.5 mm/s at 180° is 5.1711 at 201.90°', () => {
     const change = vectorChange({ amplitude: 3, lagDeg: 40 }, { amplitude: 2.5, lagDeg: 180 });

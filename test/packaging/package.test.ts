@@ -27,14 +27,24 @@ describe('package.json', () => {
   const manifest = json('package.json') as { dependencies: Record<string, string>; devDependencies: Record<string, string> };
 
   test('pins exact versions, and the seven named packages are in use', () => {
-    for (const version of Object.values({ ...manifest.dependencies, ...manifest.devDependencies })) expect(version).toMatch(/^\d+\.\d+\.\d+$/);
-    const sources = readdirSync('src', { recursive: true, encoding: 'utf8' }).filter((path) => path.endsWith('.ts')).map((path) => readFileSync(join('src', path), 'utf8')).join('\n');
-    for (const name of ['handlebars', 'pdfkit', 'csv-parse', 'd3-scale', 'd3-shape', 'yargs']) expect(sources).toMatch(new RegExp(`(from|import\\() ?'${name}[/']`));
+    for (const version of Object.values({ ...manifest.dependencies, ...manifest.devDependencies }))
+      expect(version).toMatch(/^\d+\.\d+\.\d+$/);
+    const sources = readdirSync('src', { recursive: true, encoding: 'utf8' })
+      .filter((path) => path.endsWith('.ts'))
+      .map((path) => readFileSync(join('src', path), 'utf8'))
+      .join('\n');
+    for (const name of ['handlebars', 'pdfkit', 'csv-parse', 'd3-scale', 'd3-shape', 'yargs'])
+      expect(sources).toMatch(new RegExp(`(from|import\\() ?'${name}[/']`));
   });
 
   test('every package that the program loads is a dependency', () => {
-    const built = readdirSync('dist', { recursive: true, encoding: 'utf8' }).filter((path) => path.endsWith('.js')).map((path) => readFileSync(join('dist', path), 'utf8')).join('\n');
-    const loaded = [...built.matchAll(/(?:from ?|import ?\(? ?)"((?:@[\w.-]+\/)?[\w.-]+)[^"]*"/g)].map((match) => match[1] ?? '').filter((name) => !name.startsWith('.') && !name.startsWith('node'));
+    const built = readdirSync('dist', { recursive: true, encoding: 'utf8' })
+      .filter((path) => path.endsWith('.js'))
+      .map((path) => readFileSync(join('dist', path), 'utf8'))
+      .join('\n');
+    const loaded = [...built.matchAll(/(?:from ?|import ?\(? ?)"((?:@[\w.-]+\/)?[\w.-]+)[^"]*"/g)]
+      .map((match) => match[1] ?? '')
+      .filter((name) => !name.startsWith('.') && !name.startsWith('node'));
     expect(loaded).toContain('pdfkit');
     for (const name of new Set(loaded)) expect(Object.keys(manifest.dependencies)).toContain(name);
   });
@@ -44,7 +54,9 @@ describe('the packed program', () => {
   const elsewhere = freshFolder();
   beforeAll(() => {
     // The files that npm would pack, in a folder that has the dependencies and nothing else of ours: .ci/run installs the real tarball.
-    const packed = JSON.parse(spawnSync('npm', ['pack', '--dry-run', '--json', '--ignore-scripts'], { encoding: 'utf8' }).stdout) as readonly { files: readonly { path: string }[] }[];
+    const packed = JSON.parse(
+      spawnSync('npm', ['pack', '--dry-run', '--json', '--ignore-scripts'], { encoding: 'utf8' }).stdout,
+    ) as readonly { files: readonly { path: string }[] }[];
     for (const { path } of packed[0]?.files ?? []) {
       const target = join(elsewhere, 'swayfolio', path);
       mkdirSync(join(target, '..'), { recursive: true });
@@ -56,12 +68,19 @@ describe('the packed program', () => {
   test('holds the program, the templates, the schemas, README and LICENSE, and nothing of ours besides', () => {
     const top = readdirSync(join(elsewhere, 'swayfolio')).sort();
     expect(top).toEqual(['LICENSE', 'README.md', 'dist', 'node_modules', 'package.json', 'templates']);
-    for (const path of ['dist/main.js', 'dist/schemas/plant.schema.json', 'dist/schemas/record.schema.json', 'templates/words/en/assess.json']) expect(existsSync(join(elsewhere, 'swayfolio', path))).toBe(true);
+    for (const path of [
+      'dist/main.js',
+      'dist/schemas/plant.schema.json',
+      'dist/schemas/record.schema.json',
+      'templates/words/en/assess.json',
+    ])
+      expect(existsSync(join(elsewhere, 'swayfolio', path))).toBe(true);
     expect(statSync(join(elsewhere, 'swayfolio/dist/main.js')).mode & 0o111).not.toBe(0);
   });
 
   test('runs from another folder', () => {
-    const run = (...args: string[]) => spawnSync(process.execPath, [join(elsewhere, 'swayfolio/dist/main.js'), ...args], { cwd: elsewhere, encoding: 'utf8' });
+    const run = (...args: string[]) =>
+      spawnSync(process.execPath, [join(elsewhere, 'swayfolio/dist/main.js'), ...args], { cwd: elsewhere, encoding: 'utf8' });
     expect(run('new', 'works').status).toBe(0);
     const reported = run('report', 'works', '--out', 'report');
     expect(reported.stderr).not.toMatch(/\bat /);

@@ -29,7 +29,9 @@ beforeAll(async () => {
   record = readRecord(recordText);
   bytes = (await reportPdf(record, assets, { tags: true, profile: 'PDF/A-3b', recordText })).bytes;
   pages = await read(bytes);
-  site_ = new Map([...site(record, assets, { pdf: true, recordText })].flatMap((f) => (typeof f.bytes === 'string' ? [[f.path, f.bytes] as const] : [])));
+  site_ = new Map(
+    [...site(record, assets, { pdf: true, recordText })].flatMap((f) => (typeof f.bytes === 'string' ? [[f.path, f.bytes] as const] : [])),
+  );
 }, 120_000);
 
 /** Text without blanks of any kind: lines and cells part words in the PDF. */
@@ -68,9 +70,15 @@ describe('the PDF', () => {
 
   it('prints every rule with its mark, and every default of the policy', () => {
     const from = pages.findIndex((p) => p.text.includes('Method, limits and policy') && p.text.includes('Limit sets in force'));
-    const method = squeezed(pages.slice(from).map((p) => p.text).join(' '));
+    const method = squeezed(
+      pages
+        .slice(from)
+        .map((p) => p.text)
+        .join(' '),
+    );
     expect(record.rules?.length).toBe(16 + 11 + 12 + 11);
-    for (const rule of record.rules ?? []) expect(method, rule.id).toContain(squeezed(`${rule.id} ${rule.levels.length > 0 ? rule.about : `${rule.mark} ${rule.about}`}`));
+    for (const rule of record.rules ?? [])
+      expect(method, rule.id).toContain(squeezed(`${rule.id} ${rule.levels.length > 0 ? rule.about : `${rule.mark} ${rule.about}`}`));
     for (const line of record.policy) expect(method, line.id).toContain(squeezed(line.id));
   });
 
@@ -78,7 +86,8 @@ describe('the PDF', () => {
     const document = await open(bytes);
     expect(Object.keys((await document.getAttachments()) ?? {}).length).toBe(1 + record.inputs.length);
     const titles = (await document.getOutline())?.map((o) => o.title) ?? [];
-    for (const title of ['What to do first', 'Ranked actions', 'All machines', 'Method, limits and policy', 'Cautions']) expect(titles).toContain(title);
+    for (const title of ['What to do first', 'Ranked actions', 'All machines', 'Method, limits and policy', 'Cautions'])
+      expect(titles).toContain(title);
   });
 });
 
@@ -87,14 +96,19 @@ describe('the PDF, held from outside where the means are here', () => {
     expect(qpdfCheck(bytes)).toContain('No syntax or stream encoding errors');
   });
 
-  it.skipIf(!hasA1bValidator)('the PDF/A-1b validator takes the same report in that profile, tagged', async () => {
-    const inProfile = await reportPdf(record, assets, { tags: true, profile: 'PDF/A-1b', recordText });
-    expect(a1bCheck(inProfile.bytes)).toContain('is a valid PDF/A-1b file');
-  }, 120_000);
+  it.skipIf(!hasA1bValidator)(
+    'the PDF/A-1b validator takes the same report in that profile, tagged',
+    async () => {
+      const inProfile = await reportPdf(record, assets, { tags: true, profile: 'PDF/A-1b', recordText });
+      expect(a1bCheck(inProfile.bytes)).toContain('is a valid PDF/A-1b file');
+    },
+    120_000,
+  );
 
   it('is at most twice the packed untagged one, what is attached left out of both', async () => {
     const bare = { ...record, inputs: [] };
-    const size = async (tags: boolean): Promise<number> => (await reportPdf(bare, assets, { tags, profile: 'PDF/A-3b', recordText: '{}' })).bytes.length;
+    const size = async (tags: boolean): Promise<number> =>
+      (await reportPdf(bare, assets, { tags, profile: 'PDF/A-3b', recordText: '{}' })).bytes.length;
     expect((await size(true)) / (await size(false))).toBeLessThanOrEqual(2);
   }, 60_000);
 });

@@ -9,7 +9,8 @@ import { renderPdf } from '../../src/pdf/render.ts';
 import type { PdfInput, PdfOutput } from '../../src/pdf/types.ts';
 
 const require = createRequire(import.meta.url);
-const file = (name: string, path: string): Uint8Array => new Uint8Array(readFileSync(join(dirname(require.resolve(`${name}/package.json`)), path)));
+const file = (name: string, path: string): Uint8Array =>
+  new Uint8Array(readFileSync(join(dirname(require.resolve(`${name}/package.json`)), path)));
 
 export const FONTS: FontFiles = {
   regular: file('source-sans', 'TTF/SourceSans3-Regular.ttf'),
@@ -20,13 +21,37 @@ export const FONTS: FontFiles = {
   fallbackBold: file('dejavu-fonts-ttf', 'ttf/DejaVuSans-Bold.ttf'),
 };
 
-const CHART: Drawing = { width: 60, height: 14, alt: 'a trend', shapes: [{ kind: 'path', d: 'M0 10L20 4L40 8L60 2', fill: null, stroke: 'ink', strokeWidth: 0.8, dash: [] }] };
+const CHART: Drawing = {
+  width: 60,
+  height: 14,
+  alt: 'a trend',
+  shapes: [{ kind: 'path', d: 'M0 10L20 4L40 8L60 2', fill: null, stroke: 'ink', strokeWidth: 0.8, dash: [] }],
+};
 
 export function pdf(html: string, more: Partial<PdfInput> = {}): Promise<PdfOutput> {
   return renderPdf({
-    sections: [{ template: 'test', html }], chart: () => CHART, picture: () => { throw new Error('no picture'); }, title: 'A & B <test>', author: 'Nobody', subject: 'Test', language: 'en', date: '2026-01-14', paper: 'A4',
-    runningLeft: 'Left', runningRight: 'Right', footerLeft: 'Foot', pageOf: (page, pages) => `Page ${page} of ${pages}`, mark: 'DRAFT', inks: inks('light', null), fonts: FONTS, tags: true, profile: 'PDF/A-3b',
-    attachments: [{ name: 'record.json', mime: 'application/json', description: 'the record', bytes: new TextEncoder().encode('{}') }], ...more,
+    sections: [{ template: 'test', html }],
+    chart: () => CHART,
+    picture: () => {
+      throw new Error('no picture');
+    },
+    title: 'A & B <test>',
+    author: 'Nobody',
+    subject: 'Test',
+    language: 'en',
+    date: '2026-01-14',
+    paper: 'A4',
+    runningLeft: 'Left',
+    runningRight: 'Right',
+    footerLeft: 'Foot',
+    pageOf: (page, pages) => `Page ${page} of ${pages}`,
+    mark: 'DRAFT',
+    inks: inks('light', null),
+    fonts: FONTS,
+    tags: true,
+    profile: 'PDF/A-3b',
+    attachments: [{ name: 'record.json', mime: 'application/json', description: 'the record', bytes: new TextEncoder().encode('{}') }],
+    ...more,
   });
 }
 
@@ -57,11 +82,26 @@ export async function read(bytes: Uint8Array): Promise<ReadPage[]> {
     const page = await document.getPage(n);
     const content = await page.getTextContent();
     const [, , width = 0, height = 0] = page.view;
-    const items = content.items.flatMap((item) => ('str' in item ? [{ str: item.str, x: item.transform[4] as number, y: item.transform[5] as number, width: item.width }] : []));
-    pages.push({ text: items.map((i) => i.str).join(' ').replace(/\s+/g, ' '), items, width, height });
+    const items = content.items.flatMap((item) =>
+      'str' in item ? [{ str: item.str, x: item.transform[4] as number, y: item.transform[5] as number, width: item.width }] : [],
+    );
+    pages.push({
+      text: items
+        .map((i) => i.str)
+        .join(' ')
+        .replace(/\s+/g, ' '),
+      items,
+      width,
+      height,
+    });
   }
   return pages;
 }
 
 /** Text of all pages without running header, footer and draft mark. */
-export const body = (pages: readonly ReadPage[]): string => pages.map((p) => p.text.replace(/\bLeft\b|\bRight\b|\bFoot\b|\bDRAFT\b|Page \d+ of \d+/g, ' ')).join(' ').replace(/\s+/g, ' ').trim();
+export const body = (pages: readonly ReadPage[]): string =>
+  pages
+    .map((p) => p.text.replace(/\bLeft\b|\bRight\b|\bFoot\b|\bDRAFT\b|Page \d+ of \d+/g, ' '))
+    .join(' ')
+    .replace(/\s+/g, ' ')
+    .trim();

@@ -17,13 +17,29 @@ const chunk = (kind: string, data: Uint8Array): Buffer => {
   return out;
 };
 
-function png(width: number, height: number, depth: number, colour: number, rows: readonly (readonly number[])[], more: readonly Buffer[] = [], interlace = 0): Uint8Array {
+function png(
+  width: number,
+  height: number,
+  depth: number,
+  colour: number,
+  rows: readonly (readonly number[])[],
+  more: readonly Buffer[] = [],
+  interlace = 0,
+): Uint8Array {
   const head = Buffer.alloc(13);
   head.writeUInt32BE(width, 0);
   head.writeUInt32BE(height, 4);
   head.set([depth, colour, 0, 0, interlace], 8);
   const raw = Buffer.from(rows.flatMap((row) => [0, ...row]));
-  return new Uint8Array(Buffer.concat([Buffer.from([0x89, 0x50, 0x4e, 0x47, 0x0d, 0x0a, 0x1a, 0x0a]), chunk('IHDR', head), ...more, chunk('IDAT', deflateSync(raw)), chunk('IEND', Buffer.alloc(0))]));
+  return new Uint8Array(
+    Buffer.concat([
+      Buffer.from([0x89, 0x50, 0x4e, 0x47, 0x0d, 0x0a, 0x1a, 0x0a]),
+      chunk('IHDR', head),
+      ...more,
+      chunk('IDAT', deflateSync(raw)),
+      chunk('IEND', Buffer.alloc(0)),
+    ]),
+  );
 }
 
 const SECTION = '<section><figure data-photo="a.png" data-alt="a picture"><figcaption>Picture</figcaption></figure></section>';
@@ -53,12 +69,56 @@ function near(colour: readonly number[], wanted: readonly number[]): void {
 
 describe('PNG', () => {
   const cases: [string, Uint8Array, number[], number[]][] = [
-    ['true colour', png(2, 2, 8, 2, [[255, 0, 0, 0, 0, 255], [255, 0, 0, 0, 0, 255]]), [255, 0, 0], [0, 0, 255]],
-    ['true colour of 16 bits', png(2, 2, 16, 2, [[255, 1, 0, 0, 0, 0, 0, 0, 0, 0, 255, 1], [255, 1, 0, 0, 0, 0, 0, 0, 0, 0, 255, 1]]), [255, 0, 0], [0, 0, 255]],
+    [
+      'true colour',
+      png(2, 2, 8, 2, [
+        [255, 0, 0, 0, 0, 255],
+        [255, 0, 0, 0, 0, 255],
+      ]),
+      [255, 0, 0],
+      [0, 0, 255],
+    ],
+    [
+      'true colour of 16 bits',
+      png(2, 2, 16, 2, [
+        [255, 1, 0, 0, 0, 0, 0, 0, 0, 0, 255, 1],
+        [255, 1, 0, 0, 0, 0, 0, 0, 0, 0, 255, 1],
+      ]),
+      [255, 0, 0],
+      [0, 0, 255],
+    ],
     ['grey of one bit', png(2, 2, 1, 0, [[0b01000000], [0b01000000]]), [0, 0, 0], [255, 255, 255]],
-    ['a palette of four bits with a clear entry', png(2, 2, 4, 3, [[0x01], [0x01]], [chunk('PLTE', Buffer.from([0, 128, 0, 9, 9, 9])), chunk('tRNS', Buffer.from([255, 0]))]), [0, 128, 0], [255, 255, 255]],
-    ['half clear on white', png(2, 2, 8, 6, [[0, 0, 0, 128, 0, 0, 0, 255], [0, 0, 0, 128, 0, 0, 0, 255]]), [127, 127, 127], [0, 0, 0]],
-    ['a clear colour', png(2, 2, 8, 2, [[1, 2, 3, 200, 0, 0], [1, 2, 3, 200, 0, 0]], [chunk('tRNS', Buffer.from([0, 1, 0, 2, 0, 3]))]), [255, 255, 255], [200, 0, 0]],
+    [
+      'a palette of four bits with a clear entry',
+      png(2, 2, 4, 3, [[0x01], [0x01]], [chunk('PLTE', Buffer.from([0, 128, 0, 9, 9, 9])), chunk('tRNS', Buffer.from([255, 0]))]),
+      [0, 128, 0],
+      [255, 255, 255],
+    ],
+    [
+      'half clear on white',
+      png(2, 2, 8, 6, [
+        [0, 0, 0, 128, 0, 0, 0, 255],
+        [0, 0, 0, 128, 0, 0, 0, 255],
+      ]),
+      [127, 127, 127],
+      [0, 0, 0],
+    ],
+    [
+      'a clear colour',
+      png(
+        2,
+        2,
+        8,
+        2,
+        [
+          [1, 2, 3, 200, 0, 0],
+          [1, 2, 3, 200, 0, 0],
+        ],
+        [chunk('tRNS', Buffer.from([0, 1, 0, 2, 0, 3]))],
+      ),
+      [255, 255, 255],
+      [200, 0, 0],
+    ],
   ];
   for (const [what, bytes, left, right] of cases) {
     it.skipIf(!canSee)(what, async () => {
@@ -71,11 +131,28 @@ describe('PNG', () => {
   it('gives the same bytes twice', async () => {
     const bytes = cases[4]?.[1] as Uint8Array;
     const twice = [await pdf(SECTION, { picture: () => bytes }), await pdf(SECTION, { picture: () => bytes })];
-    expect(Buffer.compare(Buffer.from((twice[0] as { bytes: Uint8Array }).bytes), Buffer.from((twice[1] as { bytes: Uint8Array }).bytes))).toBe(0);
+    expect(
+      Buffer.compare(Buffer.from((twice[0] as { bytes: Uint8Array }).bytes), Buffer.from((twice[1] as { bytes: Uint8Array }).bytes)),
+    ).toBe(0);
   });
 
   for (const [what, bytes, told] of [
-    ['interlaced', png(2, 2, 8, 2, [[255, 0, 0, 0, 0, 255], [255, 0, 0, 0, 0, 255]], [], 1), /a\.png.*interlaced/],
+    [
+      'interlaced',
+      png(
+        2,
+        2,
+        8,
+        2,
+        [
+          [255, 0, 0, 0, 0, 255],
+          [255, 0, 0, 0, 0, 255],
+        ],
+        [],
+        1,
+      ),
+      /a\.png.*interlaced/,
+    ],
     ['cut short', png(2, 9, 8, 2, [[255, 0, 0, 0, 0, 255]]), /a\.png.*cut short/],
     ['no picture at all', new TextEncoder().encode('GIF89a and more of it, and more of it, and more'), /a\.png.*neither JPEG nor PNG/],
   ] as const) {
@@ -103,7 +180,16 @@ function jpeg(orientation: number): Uint8Array {
 
 describe('JPEG', () => {
   // Exif 2.32, 4.6.4 A, from memory: where the first row and the first column of the stored picture are seen.
-  const sides: [number, string, string][] = [[1, 'top', 'left'], [2, 'top', 'right'], [3, 'bottom', 'right'], [4, 'bottom', 'left'], [5, 'left', 'top'], [6, 'right', 'top'], [7, 'right', 'bottom'], [8, 'left', 'bottom']];
+  const sides: [number, string, string][] = [
+    [1, 'top', 'left'],
+    [2, 'top', 'right'],
+    [3, 'bottom', 'right'],
+    [4, 'bottom', 'left'],
+    [5, 'left', 'top'],
+    [6, 'right', 'top'],
+    [7, 'right', 'bottom'],
+    [8, 'left', 'bottom'],
+  ];
   const share = (side: string): number => (side === 'left' || side === 'top' ? 0.25 : 0.75);
   for (const [orientation, row, column] of sides) {
     it.skipIf(!canMake || !canSee)(`orientation ${orientation}: first row ${row}, first column ${column}`, async () => {

@@ -36,19 +36,20 @@ describe('a document of several pages', () => {
 
   it('aligns numerals on the decimal point', () => {
     const numbers = pages[1]?.items.filter((i) => /^\d+\.\d+$/.test(i.str)) ?? [];
-    const whole = (i: { str: string; width: number }): number => (i.width * (i.str.indexOf('.') / i.str.length));
+    const whole = (i: { str: string; width: number }): number => i.width * (i.str.indexOf('.') / i.str.length);
     const points = numbers.filter((n) => n.str.length === 4).map((n) => n.x + whole(n));
     expect(numbers.length).toBeGreaterThan(10);
     for (const p of points) expect(Math.abs(p - (points[0] as number))).toBeLessThan(1.5);
   });
 
   it('keeps everything on the page', () => {
-    for (const page of pages) for (const item of page.items) {
-      expect(item.x).toBeGreaterThan(0);
-      expect(item.x + item.width).toBeLessThan(page.width);
-      expect(item.y).toBeGreaterThan(0);
-      expect(item.y).toBeLessThan(page.height);
-    }
+    for (const page of pages)
+      for (const item of page.items) {
+        expect(item.x).toBeGreaterThan(0);
+        expect(item.x + item.width).toBeLessThan(page.width);
+        expect(item.y).toBeGreaterThan(0);
+        expect(item.y).toBeLessThan(page.height);
+      }
   });
 
   it('has bookmarks, page labels, an attachment, a title and a language', async () => {
@@ -95,14 +96,18 @@ describe('a document of several pages', () => {
 describe('nothing is lost', () => {
   it('a row taller than a page is split, and all of its 900 words are there', async () => {
     const words = Array.from({ length: 900 }, (_, i) => `word${i}`);
-    const { bytes } = await pdf(`<section><table><col class="text"><col class="text"><tbody><tr><td>left</td><td>${words.join(' ')}</td></tr></tbody></table></section>`);
+    const { bytes } = await pdf(
+      `<section><table><col class="text"><col class="text"><tbody><tr><td>left</td><td>${words.join(' ')}</td></tr></tbody></table></section>`,
+    );
     const text = body(await read(bytes)).split(' ');
     expect(text.filter((w) => w.startsWith('word'))).toEqual(words);
   });
 
   it('a word wider than its column is broken, not cut', async () => {
     const long = `${'A'.repeat(60)}-${'B'.repeat(60)}`;
-    const { bytes } = await pdf(`<section><table><col class="text"><col class="text"><col class="text"><tbody><tr><td>${long}</td><td>${long}</td><td>x</td></tr></tbody></table></section>`);
+    const { bytes } = await pdf(
+      `<section><table><col class="text"><col class="text"><col class="text"><tbody><tr><td>${long}</td><td>${long}</td><td>x</td></tr></tbody></table></section>`,
+    );
     expect(letters(body(await read(bytes)))).toContain('B'.repeat(20));
     expect([...body(await read(bytes))].filter((c) => c === 'B').length).toBe(120);
   });
@@ -111,14 +116,21 @@ describe('nothing is lost', () => {
     const word = fc.stringMatching(/^[a-z]{1,12}$/);
     const text = fc.array(word, { minLength: 1, maxLength: 60 });
     await fc.assert(
-      fc.asyncProperty(fc.array(fc.tuple(fc.constantFrom('p', 'h2', 'li', 'td'), text), { minLength: 1, maxLength: 12 }), async (blocks) => {
-        const html = blocks.map(([tag, words]) => {
-          const inner = words.join(' ');
-          return tag === 'li' ? `<ul><li>${inner}</li></ul>` : tag === 'td' ? `<table><col class="text"><tbody><tr><td>${inner}</td></tr></tbody></table>` : `<${tag}>${inner}</${tag}>`;
-        });
-        const { bytes } = await pdf(`<section>${html.join('')}</section>`, { tags: false });
-        expect(letters(body(await read(bytes)))).toBe(letters(blocks.map(([, words]) => words.join('')).join('')));
-      }),
+      fc.asyncProperty(
+        fc.array(fc.tuple(fc.constantFrom('p', 'h2', 'li', 'td'), text), { minLength: 1, maxLength: 12 }),
+        async (blocks) => {
+          const html = blocks.map(([tag, words]) => {
+            const inner = words.join(' ');
+            return tag === 'li'
+              ? `<ul><li>${inner}</li></ul>`
+              : tag === 'td'
+                ? `<table><col class="text"><tbody><tr><td>${inner}</td></tr></tbody></table>`
+                : `<${tag}>${inner}</${tag}>`;
+          });
+          const { bytes } = await pdf(`<section>${html.join('')}</section>`, { tags: false });
+          expect(letters(body(await read(bytes)))).toBe(letters(blocks.map(([, words]) => words.join('')).join('')));
+        },
+      ),
       { numRuns: 25, seed: 3 },
     );
   }, 60_000);
@@ -141,8 +153,12 @@ describe('nothing is lost', () => {
 
 describe('refusals name the template', () => {
   for (const [what, html] of [
-    ['an unknown tag', '<section><div>x</div></section>'], ['an unclosed tag', '<section><p>x</section>'], ['text outside a block', '<section>loose</section>'], ['a link out', '<section><p><a href="https://x.example">x</a></p></section>'],
-    ['an unknown class', '<section><p class="loud">x</p></section>'], ['an attribute', '<section><p style="x">x</p></section>'],
+    ['an unknown tag', '<section><div>x</div></section>'],
+    ['an unclosed tag', '<section><p>x</section>'],
+    ['text outside a block', '<section>loose</section>'],
+    ['a link out', '<section><p><a href="https://x.example">x</a></p></section>'],
+    ['an unknown class', '<section><p class="loud">x</p></section>'],
+    ['an attribute', '<section><p style="x">x</p></section>'],
   ] as const) {
     it(what, async () => {
       await expect(pdf(html)).rejects.toThrow(/Template test/);
@@ -155,19 +171,33 @@ describe('refusals name the template', () => {
 });
 
 it('rests on members of pdfkit that are there', () => {
-  const document = new PackedDocument({ paper: 'A4', profile: 'PDF/A-3b', title: 't', author: 'a', subject: 's', language: 'en', date: '2026-01-14' });
-  for (const member of ['ref', '_write', '_refEnd', '_finalize', 'endMetadata'] as const) expect(typeof (document as unknown as Record<string, unknown>)[member]).toBe('function');
+  const document = new PackedDocument({
+    paper: 'A4',
+    profile: 'PDF/A-3b',
+    title: 't',
+    author: 'a',
+    subject: 's',
+    language: 'en',
+    date: '2026-01-14',
+  });
+  for (const member of ['ref', '_write', '_refEnd', '_finalize', 'endMetadata'] as const)
+    expect(typeof (document as unknown as Record<string, unknown>)[member]).toBe('function');
   expect((document as unknown as { _offsets: unknown[] })._offsets).toBeInstanceOf(Array);
 });
 
 describe('validators, where they are', () => {
-  const html = '<section id="a"><h1>Title</h1><p>Text with <strong>weight</strong> and <a href="#a">a link</a>.</p><table><col class="text"><col class="number"><thead><tr><th scope="col">A</th><th scope="col">B</th></tr></thead><tbody><tr><td>ø Ω Ж</td><td>1.5</td></tr></tbody></table></section>';
+  const html =
+    '<section id="a"><h1>Title</h1><p>Text with <strong>weight</strong> and <a href="#a">a link</a>.</p><table><col class="text"><col class="number"><thead><tr><th scope="col">A</th><th scope="col">B</th></tr></thead><tbody><tr><td>ø Ω Ж</td><td>1.5</td></tr></tbody></table></section>';
 
   it.skipIf(!hasQpdf)('qpdf --check finds no fault', async () => {
     expect(qpdfCheck((await pdf(html)).bytes)).toContain('No syntax or stream encoding errors');
   });
 
-  it.skipIf(!hasA1bValidator)('the PDF/A-1b validator of pdfbox takes the same report in that profile', async () => {
-    expect(a1bCheck((await pdf(html, { profile: 'PDF/A-1b' })).bytes)).toContain('is a valid PDF/A-1b file');
-  }, 60_000);
+  it.skipIf(!hasA1bValidator)(
+    'the PDF/A-1b validator of pdfbox takes the same report in that profile',
+    async () => {
+      expect(a1bCheck((await pdf(html, { profile: 'PDF/A-1b' })).bytes)).toContain('is a valid PDF/A-1b file');
+    },
+    60_000,
+  );
 });

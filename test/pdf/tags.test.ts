@@ -38,7 +38,11 @@ describe('a tagged file', () => {
     expect(below('LI')).toEqual(['Lbl', 'LBody']);
     expect(below('Table')).toEqual(['THead', 'TBody']);
     expect(below('TR')).toEqual(['TH', 'TH']);
-    for (const role of ['H1', 'H2', 'P', 'Figure', 'Caption', 'Link', 'TD']) expect(branches.some((b) => b.role === role), role).toBe(true);
+    for (const role of ['H1', 'H2', 'P', 'Figure', 'Caption', 'Link', 'TD'])
+      expect(
+        branches.some((b) => b.role === role),
+        role,
+      ).toBe(true);
   });
 
   it('tells a figure in words', () => {
@@ -67,10 +71,34 @@ describe('a tagged file', () => {
 
   it.skipIf(!hasQpdf)('has scopes, spans, boxes, the language, and the record as its source', async () => {
     const path = join(mkdtempSync(join(tmpdir(), 'swayfolio-tags-')), 'a.pdf');
-    writeFileSync(path, (await pdf(HTML, { attachments: [{ name: 'record.json', mime: 'application/json', description: 'record', bytes: new Uint8Array([123, 125]) }, { name: 'a.csv', mime: 'text/csv', description: 'input', bytes: new Uint8Array([97]) }] })).bytes);
+    writeFileSync(
+      path,
+      (
+        await pdf(HTML, {
+          attachments: [
+            { name: 'record.json', mime: 'application/json', description: 'record', bytes: new Uint8Array([123, 125]) },
+            { name: 'a.csv', mime: 'text/csv', description: 'input', bytes: new Uint8Array([97]) },
+          ],
+        })
+      ).bytes,
+    );
     const text = execFileSync('qpdf', ['--qdf', '--object-streams=disable', path, '-'], { maxBuffer: 1 << 26 }).toString('latin1');
     const flattened = text.replace(/\s+/g, ' ');
-    for (const wanted of ['/Scope /Column', '/Scope /Row', '/ColSpan 2', '/O /Layout', '/BBox [', '/Lang (en)', '/DisplayDocTitle true', '/Marked true', '/AFRelationship /Source', '/AFRelationship /Data', '/Type /OBJR', '/GTS_PDFA1', '/ParentTree']) {
+    for (const wanted of [
+      '/Scope /Column',
+      '/Scope /Row',
+      '/ColSpan 2',
+      '/O /Layout',
+      '/BBox [',
+      '/Lang (en)',
+      '/DisplayDocTitle true',
+      '/Marked true',
+      '/AFRelationship /Source',
+      '/AFRelationship /Data',
+      '/Type /OBJR',
+      '/GTS_PDFA1',
+      '/ParentTree',
+    ]) {
       expect(flattened, wanted).toContain(wanted);
     }
     expect([...flattened.matchAll(/\/AFRelationship \/Source/g)].length).toBe(1);

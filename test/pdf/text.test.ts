@@ -21,8 +21,12 @@ describe('names from right to left', () => {
 });
 
 it('a repeated head is an artifact: each head cell is in the structure once', async () => {
-  const rows = words(150).map((w) => row(w)).join('');
-  const { bytes } = await pdf(`<section><table><col class="text"><thead><tr><th scope="col">Head</th></tr></thead><tbody>${rows}</tbody></table></section>`);
+  const rows = words(150)
+    .map((w) => row(w))
+    .join('');
+  const { bytes } = await pdf(
+    `<section><table><col class="text"><thead><tr><th scope="col">Head</th></tr></thead><tbody>${rows}</tbody></table></section>`,
+  );
   const document = await open(bytes);
   let heads = 0;
   const visit = (node: { role?: string; children?: object[] }): void => {
@@ -39,9 +43,17 @@ it('a repeated head is an artifact: each head cell is in the structure once', as
 
 describe('markup that a parser would mend in silence is refused', () => {
   for (const [what, html] of [
-    ['a stray closing tag', '<section><p>x</strong></p></section>'], ['a document type', '<!doctype html><section><p>x</p></section>'], ['text beside a figure in a cell', '<section><table><tbody><tr><td>lost<figure data-chart="c" data-key="1"></figure></td></tr></tbody></table></section>'],
-    ['a span of no number', '<section><table><tbody><tr><td colspan="wide">x</td></tr></tbody></table></section>'], ['an unknown mark', '<section><p><span data-mark="E"></span> E</p></section>'], ['a figure of nothing', '<section><figure data-alt="x"></figure></section>'],
-    ['a page of nowhere', '<section><p><span data-page="gone"></span></p></section>'], ['a link to nowhere', '<section><p><a href="#gone">x</a></p></section>'],
+    ['a stray closing tag', '<section><p>x</strong></p></section>'],
+    ['a document type', '<!doctype html><section><p>x</p></section>'],
+    [
+      'text beside a figure in a cell',
+      '<section><table><tbody><tr><td>lost<figure data-chart="c" data-key="1"></figure></td></tr></tbody></table></section>',
+    ],
+    ['a span of no number', '<section><table><tbody><tr><td colspan="wide">x</td></tr></tbody></table></section>'],
+    ['an unknown mark', '<section><p><span data-mark="E"></span> E</p></section>'],
+    ['a figure of nothing', '<section><figure data-alt="x"></figure></section>'],
+    ['a page of nowhere', '<section><p><span data-page="gone"></span></p></section>'],
+    ['a link to nowhere', '<section><p><a href="#gone">x</a></p></section>'],
   ] as const) {
     it(what, async () => {
       await expect(pdf(html)).rejects.toThrow(/^Template test: /);

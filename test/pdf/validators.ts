@@ -6,7 +6,9 @@ import { join } from 'node:path';
 
 const JARS = '/usr/share/java';
 const jars = existsSync(`${JARS}/preflight.jar`)
-  ? readdirSync(JARS).filter((f) => /^(preflight|pdfbox2|fontbox2|xmpbox|commons-logging|javax\.activation|jaxb-api|commons-io)\.jar$/.test(f)).map((f) => `${JARS}/${f}`)
+  ? readdirSync(JARS)
+      .filter((f) => /^(preflight|pdfbox2|fontbox2|xmpbox|commons-logging|javax\.activation|jaxb-api|commons-io)\.jar$/.test(f))
+      .map((f) => `${JARS}/${f}`)
   : [];
 
 export const hasQpdf = spawnSync('qpdf', ['--version']).status === 0;
@@ -25,6 +27,9 @@ export const qpdfCheck = (bytes: Uint8Array): string => execFileSync('qpdf', ['-
 
 /** What the PDF/A-1b validator prints. */
 export function a1bCheck(bytes: Uint8Array): string {
-  const run = spawnSync('java', ['-cp', jars.join(':'), 'org.apache.pdfbox.preflight.Validator_A1b', kept(bytes)], { encoding: 'utf8', maxBuffer: 1 << 26 });
+  const run = spawnSync('java', ['-cp', jars.join(':'), 'org.apache.pdfbox.preflight.Validator_A1b', kept(bytes)], {
+    encoding: 'utf8',
+    maxBuffer: 1 << 26,
+  });
   return `${run.stdout}${run.stderr}`;
 }

@@ -52,8 +52,11 @@ beforeAll(async () => {
   lens = await browser.newPage();
   const build = dirname(require.resolve('pdfjs-dist/package.json'));
   // The worker's module beside the library: pdfjs then works in the page itself, without a worker of its own.
-  for (const file of ['pdf.worker.min.mjs', 'pdf.min.mjs']) await lens.addScriptTag({ type: 'module', content: readFileSync(join(build, 'legacy/build', file), 'utf8') });
-  await lens.evaluate(`globalThis.opened = globalThis.pdfjsLib.getDocument({ data: Uint8Array.from(atob('${Buffer.from(pdf).toString('base64')}'), (c) => c.charCodeAt(0)) }).promise; null`);
+  for (const file of ['pdf.worker.min.mjs', 'pdf.min.mjs'])
+    await lens.addScriptTag({ type: 'module', content: readFileSync(join(build, 'legacy/build', file), 'utf8') });
+  await lens.evaluate(
+    `globalThis.opened = globalThis.pdfjsLib.getDocument({ data: Uint8Array.from(atob('${Buffer.from(pdf).toString('base64')}'), (c) => c.charCodeAt(0)) }).promise; null`,
+  );
 }, 180_000);
 
 afterAll(async () => browser?.close());
@@ -102,8 +105,17 @@ async function compare(png: string, name: string): Promise<number> {
 
 describe('pages of the PDF', () => {
   for (const [name, marks] of [
-    ['control', 'Vibration survey report'], ['manager', 'things to do this week'], ['ranked', 'Ranked actions Rank'], ['coverage', 'Not measured Machine State'], ['machines', 'All machines'], ['exception', 'Machines with findings JP-1C'],
-    ['polar', '1× vector, angles as lag'], ['method', 'Method, limits and policy Each reading'], ['people', 'People and instruments People'], ['data', 'The data of this survey Every'], ['cautions', 'End of the report'],
+    ['control', 'Vibration survey report'],
+    ['manager', 'things to do this week'],
+    ['ranked', 'Ranked actions Rank'],
+    ['coverage', 'Not measured Machine State'],
+    ['machines', 'All machines'],
+    ['exception', 'Machines with findings JP-1C'],
+    ['polar', '1× vector, angles as lag'],
+    ['method', 'Method, limits and policy Each reading'],
+    ['people', 'People and instruments People'],
+    ['data', 'The data of this survey Every'],
+    ['cautions', 'End of the report'],
   ] as const) {
     it(name, async () => {
       const squeezed = marks.replace(/\s/g, '');
@@ -119,8 +131,16 @@ describe('pages of the site', () => {
   const wide = { viewport: { width: 1200, height: 900 } };
   const narrow = { viewport: { width: 390, height: 844 } };
   for (const [name, path, options] of [
-    ['index', () => 'index.html', wide], ['actions', () => 'actions.html', wide], ['machines', () => 'machines.html', wide], ['machine', machine, wide], ['coverage', () => 'coverage.html', wide], ['method', () => 'method.html', wide],
-    ['downloads', () => 'downloads.html', wide], ['index-narrow', () => 'index.html', narrow], ['machine-narrow', machine, narrow], ['machines-dark', () => 'machines.html', { ...wide, colorScheme: 'dark' as const }],
+    ['index', () => 'index.html', wide],
+    ['actions', () => 'actions.html', wide],
+    ['machines', () => 'machines.html', wide],
+    ['machine', machine, wide],
+    ['coverage', () => 'coverage.html', wide],
+    ['method', () => 'method.html', wide],
+    ['downloads', () => 'downloads.html', wide],
+    ['index-narrow', () => 'index.html', narrow],
+    ['machine-narrow', machine, narrow],
+    ['machines-dark', () => 'machines.html', { ...wide, colorScheme: 'dark' as const }],
     ['machine-dark', machine, { ...wide, colorScheme: 'dark' as const }],
   ] as const) {
     it(name, async () => {

@@ -9,7 +9,14 @@ import { folder, GROUPS, measurementOf, recordOf, type SeriesInput } from '../as
 type Columns = Readonly<Record<string, string>>;
 
 /** Zones of values read at points of one machine. */
-function zones(columns: Columns, values: readonly number[], pointColumns: Columns = {}, quantity = 'velocity', unit = 'mm/s', detection = 'rms'): (Zone | null)[] {
+function zones(
+  columns: Columns,
+  values: readonly number[],
+  pointColumns: Columns = {},
+  quantity = 'velocity',
+  unit = 'mm/s',
+  detection = 'rms',
+): (Zone | null)[] {
   const series: SeriesInput[] = values.map((value, i) => ({ point: `P${i}`, quantity, unit, detection, values: [value], pointColumns }));
   const record = recordOf(folder([{ machine: 'M', columns, series }]));
   return values.map((_, i) => measurementOf(record, 'M', `P${i}`, quantity).zone);
@@ -42,8 +49,16 @@ describe('zones', () => {
   });
 
   it('check value 10: displacement rows are v/(2πf0), f0 12.5 Hz for group 1 and 10 Hz for group 2, within 1 µm', () => {
-    for (const [group, f0] of [['G1R', 12.5], ['G1F', 12.5], ['G2R', 10], ['G2F', 10]] as const) {
-      const series = [{ point: 'P', values: [1] }, { point: 'P', quantity: 'displacement', unit: 'µm', values: [20] }];
+    for (const [group, f0] of [
+      ['G1R', 12.5],
+      ['G1F', 12.5],
+      ['G2R', 10],
+      ['G2F', 10],
+    ] as const) {
+      const series = [
+        { point: 'P', values: [1] },
+        { point: 'P', quantity: 'displacement', unit: 'µm', values: [20] },
+      ];
       const record = recordOf(folder([{ machine: 'M', columns: GROUPS[group], series }]));
       const velocity = measurementOf(record, 'M', 'P').limits;
       const displacement = measurementOf(record, 'M', 'P', 'displacement').limits;
@@ -66,9 +81,21 @@ describe('zones', () => {
   });
 
   it('check value 13: shaft relative, ISO 7919-3 formulas at 3600 and 10 000 r/min', () => {
-    for (const [rpm, ab, bc, cd] of [['3600', 80, 150, 220], ['10000', 48, 90, 132]] as const) {
+    for (const [rpm, ab, bc, cd] of [
+      ['3600', 80, 150, 220],
+      ['10000', 48, 90, 132],
+    ] as const) {
       const columns = { kind: 'steam turbine', power_kw: '6000', speed_rpm: rpm, support: 'rigid' };
-      const series = [{ point: 'X', quantity: 'displacement', unit: 'µm', detection: 'true peak-to-peak', values: [40], pointColumns: { measured_on: 'shaft relative' } }];
+      const series = [
+        {
+          point: 'X',
+          quantity: 'displacement',
+          unit: 'µm',
+          detection: 'true peak-to-peak',
+          values: [40],
+          pointColumns: { measured_on: 'shaft relative' },
+        },
+      ];
       const limits = measurementOf(recordOf(folder([{ machine: 'M', columns, series }])), 'M', 'X', 'displacement').limits;
       expect(limits?.ab).toBeCloseTo(ab, 9);
       expect(limits?.bc).toBeCloseTo(bc, 9);
@@ -109,7 +136,9 @@ describe('ALARM, TRIP and change', () => {
   it('check value 17: vector change, ISO 20816-1:2016 Annex D', () => {
     const files = folder([{ machine: 'M', columns: GROUPS.G1R, series: [{ point: 'P', values: [3, 2.5] }] }]);
     const rows = (files['surveys/history.csv'] ?? '').trim().split('\n');
-    const phased = rows.map((row, i) => (i === 0 ? `${row},phase_deg,amplitude_1x,phase_ref` : `${row},${i === 1 ? 40 : 180},${i === 1 ? 3 : 2.5},key`)).join('\n');
+    const phased = rows
+      .map((row, i) => (i === 0 ? `${row},phase_deg,amplitude_1x,phase_ref` : `${row},${i === 1 ? 40 : 180},${i === 1 ? 3 : 2.5},key`))
+      .join('\n');
     const vector = measurementOf(recordOf({ ...files, 'surveys/history.csv': `${phased}\n` }), 'M', 'P').change?.vector;
     expect(vector?.amplitude).toBeCloseTo(5.1711, 4);
     expect(vector?.lag_deg).toBeCloseTo(201.9, 2);
@@ -125,10 +154,39 @@ it('the numbers of the reference page are in the program', async () => {
   const { publishedSets } = await import('../../src/limits/published.ts');
   const rows = publishedSets().map((s) => [s.quantity, s.ab, s.bc, s.cd].join(' '));
   const page = [
-    'velocity 2.3 4.5 7.1', 'velocity 3.5 7.1 11', 'velocity 1.4 2.8 4.5', 'displacement 29 57 90', 'displacement 45 90 140', 'displacement 22 45 71', 'displacement 37 71 113',
-    'velocity 2.5 4 6.6', 'velocity 3.5 5 7.6', 'velocity 3.2 5.1 8.5', 'velocity 4.2 6.1 9.5', 'velocity 0.71 1.8 4.5', 'velocity 1.12 2.8 7.1', 'velocity 1.8 4.5 11.2', 'velocity 2.8 7.1 18',
-    'velocity 3.8 7.5 11.8', 'velocity 2.8 5.3 8.5', 'velocity 5 8 12.5', 'velocity 5.6 9 ', 'velocity 9 14 ', 'velocity 4.5 7.1 9', 'velocity 6.3 11.8 12.5', 'velocity 2.8 4.5 7.1', 'velocity 4.5 7.1 11.2',
-    'velocity 1.8 4 5.6', 'velocity 2.8 5.6 7.1', 'velocity  0.15 ', 'velocity  0.12 ', 'velocity  3 ', 'velocity  3.9 ', 'velocity  1.6 ', 'velocity  2.2 ', 'velocity  2.8 ',
+    'velocity 2.3 4.5 7.1',
+    'velocity 3.5 7.1 11',
+    'velocity 1.4 2.8 4.5',
+    'displacement 29 57 90',
+    'displacement 45 90 140',
+    'displacement 22 45 71',
+    'displacement 37 71 113',
+    'velocity 2.5 4 6.6',
+    'velocity 3.5 5 7.6',
+    'velocity 3.2 5.1 8.5',
+    'velocity 4.2 6.1 9.5',
+    'velocity 0.71 1.8 4.5',
+    'velocity 1.12 2.8 7.1',
+    'velocity 1.8 4.5 11.2',
+    'velocity 2.8 7.1 18',
+    'velocity 3.8 7.5 11.8',
+    'velocity 2.8 5.3 8.5',
+    'velocity 5 8 12.5',
+    'velocity 5.6 9 ',
+    'velocity 9 14 ',
+    'velocity 4.5 7.1 9',
+    'velocity 6.3 11.8 12.5',
+    'velocity 2.8 4.5 7.1',
+    'velocity 4.5 7.1 11.2',
+    'velocity 1.8 4 5.6',
+    'velocity 2.8 5.6 7.1',
+    'velocity  0.15 ',
+    'velocity  0.12 ',
+    'velocity  3 ',
+    'velocity  3.9 ',
+    'velocity  1.6 ',
+    'velocity  2.2 ',
+    'velocity  2.8 ',
   ];
   for (const row of page) expect(rows).toContain(row);
 });

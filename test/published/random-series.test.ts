@@ -19,57 +19,82 @@ import { theilSenSlope } from '../../src/assess/statistics/theil-sen.ts';
 const RUNS = { numRuns: 1000, seed: 20 };
 
 /** Irregular days, ascending, with gaps of up to two years; readings rounded so that many are tied. */
-const series = fc.array(fc.record({ gap: fc.oneof(fc.integer({ min: 20, max: 130 }), fc.integer({ min: 300, max: 730 })), value: fc.integer({ min: 5, max: 40 }) }), { minLength: 5, maxLength: 24 })
+const series = fc
+  .array(
+    fc.record({
+      gap: fc.oneof(fc.integer({ min: 20, max: 130 }), fc.integer({ min: 300, max: 730 })),
+      value: fc.integer({ min: 5, max: 40 }),
+    }),
+    { minLength: 5, maxLength: 24 },
+  )
   .map((steps) => {
     let day = 0;
-    return { days: steps.map(({ gap }) => { day += gap; return day; }), values: steps.map(({ value }) => value / 10) };
+    return {
+      days: steps.map(({ gap }) => {
+        day += gap;
+        return day;
+      }),
+      values: steps.map(({ value }) => value / 10),
+    };
   });
 
 describe('a thousand random series', () => {
   it('Theil–Sen slope', () => {
     // Of an even number of slopes the library takes the lower middle one, Hollander and Wolfe (and we) the mean of the two.
     const odd = series.filter(({ days }) => (days.length * (days.length - 1)) % 4 === 2);
-    fc.assert(fc.property(odd, ({ days, values }) => {
-      expect(theilSenSlope(days, values)).toBeCloseTo(new TheilSenRegression(days, values).slope, 12);
-    }), RUNS);
+    fc.assert(
+      fc.property(odd, ({ days, values }) => {
+        expect(theilSenSlope(days, values)).toBeCloseTo(new TheilSenRegression(days, values).slope, 12);
+      }),
+      RUNS,
+    );
   });
 
   it('Mann–Kendall: S, variance, Z and the two-sided probability', () => {
-    fc.assert(fc.property(series, ({ values }) => {
-      const n = values.length;
-      const found = mannKendall(values);
-      const s = statistic(values);
-      const variance = (n * (n - 1) * (2 * n + 5) - ties(values).reduce((sum, t) => sum + t * (t - 1) * (2 * t + 5), 0)) / 18;
-      expect(found.s).toBe(s);
-      expect(found.variance).toBeCloseTo(variance, 9);
-      const z = s === 0 ? 0 : (s - Math.sign(s)) / Math.sqrt(variance);
-      expect(found.z).toBeCloseTo(variance === 0 ? 0 : z, 12);
-      const p = n < 10 ? exact(values, Math.abs(s)) : Math.min(1, 2 * (1 - normalCdf(Math.abs(z), 0, 1)));
-      expect(found.twoSidedP).toBeCloseTo(p, 9);
-    }), RUNS);
+    fc.assert(
+      fc.property(series, ({ values }) => {
+        const n = values.length;
+        const found = mannKendall(values);
+        const s = statistic(values);
+        const variance = (n * (n - 1) * (2 * n + 5) - ties(values).reduce((sum, t) => sum + t * (t - 1) * (2 * t + 5), 0)) / 18;
+        expect(found.s).toBe(s);
+        expect(found.variance).toBeCloseTo(variance, 9);
+        const z = s === 0 ? 0 : (s - Math.sign(s)) / Math.sqrt(variance);
+        expect(found.z).toBeCloseTo(variance === 0 ? 0 : z, 12);
+        const p = n < 10 ? exact(values, Math.abs(s)) : Math.min(1, 2 * (1 - normalCdf(Math.abs(z), 0, 1)));
+        expect(found.twoSidedP).toBeCloseTo(p, 9);
+      }),
+      RUNS,
+    );
   });
 
   it('t quantile', () => {
-    fc.assert(fc.property(fc.integer({ min: 1, max: 200 }), fc.double({ min: 0.501, max: 0.9995, noNaN: true }), (df, p) => {
-      expect(Math.abs(studentQuantile(p, df) / quantile(p, df) - 1)).toBeLessThan(1e-8);
-    }), RUNS);
+    fc.assert(
+      fc.property(fc.integer({ min: 1, max: 200 }), fc.double({ min: 0.501, max: 0.9995, noNaN: true }), (df, p) => {
+        expect(Math.abs(studentQuantile(p, df) / quantile(p, df) - 1)).toBeLessThan(1e-8);
+      }),
+      RUNS,
+    );
   });
 
   it('prediction interval', () => {
-    fc.assert(fc.property(series, fc.integer({ min: 0, max: 9000 }), ({ days, values }, at) => {
-      const line = leastSquares(days, values);
-      if (line === null || standardDeviation(values) === 0) return;
-      const n = days.length;
-      const r: number = correlation(days, values).pcorr;
-      const slope = (r * standardDeviation(values)) / standardDeviation(days);
-      const sd = standardDeviation(values) * Math.sqrt(Math.max(0, 1 - r * r) * ((n - 1) / (n - 2)));
-      const sumXX = standardDeviation(days) ** 2 * (n - 1);
-      const half = quantile(0.9, n - 2) * sd * Math.sqrt(1 + 1 / n + (at - mean(days)) ** 2 / sumXX);
-      const centre = mean(values) + slope * (at - mean(days));
-      const [low, high] = predictionInterval(line, at, 0.8);
-      expect(low).toBeCloseTo(centre - half, 7);
-      expect(high).toBeCloseTo(centre + half, 7);
-    }), RUNS);
+    fc.assert(
+      fc.property(series, fc.integer({ min: 0, max: 9000 }), ({ days, values }, at) => {
+        const line = leastSquares(days, values);
+        if (line === null || standardDeviation(values) === 0) return;
+        const n = days.length;
+        const r: number = correlation(days, values).pcorr;
+        const slope = (r * standardDeviation(values)) / standardDeviation(days);
+        const sd = standardDeviation(values) * Math.sqrt(Math.max(0, 1 - r * r) * ((n - 1) / (n - 2)));
+        const sumXX = standardDeviation(days) ** 2 * (n - 1);
+        const half = quantile(0.9, n - 2) * sd * Math.sqrt(1 + 1 / n + (at - mean(days)) ** 2 / sumXX);
+        const centre = mean(values) + slope * (at - mean(days));
+        const [low, high] = predictionInterval(line, at, 0.8);
+        expect(low).toBeCloseTo(centre - half, 7);
+        expect(high).toBeCloseTo(centre + half, 7);
+      }),
+      RUNS,
+    );
   });
 });
 

@@ -23,13 +23,21 @@ describe('Mann–Kendall', () => {
   });
 
   it('exact probabilities with ties equal a plain enumeration of all orders', () => {
-    for (const values of [[1, 1, 2, 3, 3], [2, 2, 2, 5, 4, 4], [1, 2, 3, 4, 5, 5, 5], [3, 1, 2, 2]]) {
+    for (const values of [
+      [1, 1, 2, 3, 3],
+      [2, 2, 2, 5, 4, 4],
+      [1, 2, 3, 4, 5, 5, 5],
+      [3, 1, 2, 2],
+    ]) {
       expect(mannKendall(values).twoSidedP).toBeCloseTo(enumerated(values), 12);
     }
   });
 
   it('check value 32: sulfate series of EPA 530/R-09-007 (2009), Example 17-6, US government work', () => {
-    const years = [89.6, 89.8, 90.1, 90.3, 90.6, 90.8, 91.1, 91.3, 91.6, 91.8, 92.1, 92.6, 93.1, 93.6, 94.1, 94.6, 95.1, 95.6, 95.8, 96.1, 96.3, 96.6, 96.8];
+    const years = [
+      89.6, 89.8, 90.1, 90.3, 90.6, 90.8, 91.1, 91.3, 91.6, 91.8, 92.1, 92.6, 93.1, 93.6, 94.1, 94.6, 95.1, 95.6, 95.8, 96.1, 96.3, 96.6,
+      96.8,
+    ];
     const ppm = [480, 450, 490, 520, 485, 510, 510, 530, 510, 560, 560, 540, 590, 550, 600, 700, 570, 610, 650, 620, 830, 720, 590];
     const { s, z } = mannKendall(ppm);
     expect(s).toBe(194);

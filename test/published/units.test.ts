@@ -5,7 +5,13 @@ import { publishedById } from '../../src/limits/published.ts';
 import { decibels, DB_REFERENCES } from '../../src/measure/decibel.ts';
 import { bearingOrders } from '../../src/measure/forcing.ts';
 import { limitFactor } from '../../src/measure/limit-factor.ts';
-import { accelerationOfVelocity, apparentFrequencyHz, displacementOfVelocity, velocityOfAcceleration, velocityOfDisplacement } from '../../src/measure/sinusoid.ts';
+import {
+  accelerationOfVelocity,
+  apparentFrequencyHz,
+  displacementOfVelocity,
+  velocityOfAcceleration,
+  velocityOfDisplacement,
+} from '../../src/measure/sinusoid.ts';
 import { fromHz, parseFrequencyUnit, STANDARD_GRAVITY, toHz, toOrders, unitFactor } from '../../src/measure/units.ts';
 
 const factor = (from: string, to: string): number => {
@@ -30,7 +36,12 @@ it('check value 2: 1 g by CGPM 1901 standard gravity', () => {
 it('check value 3: in/s peak of a sine as mm/s r.m.s. (derived)', () => {
   const back = limitFactor({ unit: 'in/s', detection: 'calculated peak' }, { unit: 'mm/s', detection: 'rms' });
   expect(back?.by).toBe('sine');
-  for (const [peak, rms] of [[1, 17.9605], [0.15, 2.6941], [0.3, 5.3882]] as const) expect(peak * (back?.factor ?? 0)).toBeCloseTo(rms, 4);
+  for (const [peak, rms] of [
+    [1, 17.9605],
+    [0.15, 2.6941],
+    [0.3, 5.3882],
+  ] as const)
+    expect(peak * (back?.factor ?? 0)).toBeCloseTo(rms, 4);
 });
 
 it('check value 4: 1 mil pk-pk at 3600 CPM (V = πfD, derived)', () => {
@@ -52,7 +63,12 @@ it('check value 6: the handbook constants, rounded (common practice) and exact (
     vOfG: velocityOfAcceleration(STANDARD_GRAVITY, 1) / inch,
     dOfV: (2 * displacementOfVelocity(inch, 1)) / inch,
   };
-  for (const [value, printed, known] of [[exact.gOfD, 0.0511, 0.0511261], [exact.gOfV, 0.0162, 0.016274], [exact.vOfG, 61.4, 61.4479], [exact.dOfV, 0.318, 0.3183099]] as const) {
+  for (const [value, printed, known] of [
+    [exact.gOfD, 0.0511, 0.0511261],
+    [exact.gOfV, 0.0162, 0.016274],
+    [exact.vOfG, 61.4, 61.4479],
+    [exact.dOfV, 0.318, 0.3183099],
+  ] as const) {
     expect(Math.abs(value / printed - 1)).toBeLessThan(0.005);
     expect(Math.abs(value - known)).toBeLessThan(1e-6 * Math.max(1, known));
   }
@@ -60,7 +76,11 @@ it('check value 6: the handbook constants, rounded (common practice) and exact (
 });
 
 it('check value 18: NEMA MG 1 Part 7 rows below 1200 r/min are a constant 2.5 mil pk-pk', () => {
-  for (const [rpm, exact, printed] of [[900, 0.118, 0.12], [720, 0.094, 0.09], [600, 0.079, 0.08]] as const) {
+  for (const [rpm, exact, printed] of [
+    [900, 0.118, 0.12],
+    [720, 0.094, 0.09],
+    [600, 0.079, 0.08],
+  ] as const) {
     const peak = velocityOfDisplacement((2.5 * MIL) / 2, toHz(rpm, 'r/min')) / 0.0254;
     expect(peak).toBeCloseTo(exact, 3);
     expect(publishedById(`nema-mg1-${rpm}`)[0]).toMatchObject({ bc: printed, unit: 'in/s', detection: 'true peak' });
@@ -78,7 +98,18 @@ it('check value 19: 6205 geometry, Case Western Reserve University bearing data 
 
 describe('check value 26: every unit conversion against js-quantities', () => {
   const theirs: Readonly<Record<string, string>> = {
-    'mm/s': 'mm/s', 'in/s': 'in/s', 'm/s': 'm/s', µm: 'um', mm: 'mm', mil: 'mil', in: 'in', m: 'm', g: 'gee', 'm/s²': 'm/s2', 'mm/s²': 'mm/s2', 'in/s²': 'in/s2',
+    'mm/s': 'mm/s',
+    'in/s': 'in/s',
+    'm/s': 'm/s',
+    µm: 'um',
+    mm: 'mm',
+    mil: 'mil',
+    in: 'in',
+    m: 'm',
+    g: 'gee',
+    'm/s²': 'm/s2',
+    'mm/s²': 'mm/s2',
+    'in/s²': 'in/s2',
   };
   for (const [from, a] of Object.entries(theirs)) {
     for (const [to, b] of Object.entries(theirs)) {

@@ -50,19 +50,31 @@ describe('reading a record', () => {
     expect(error.hint).toMatch(/later/);
   });
 
-  it.each(['', 'null', '[]', '{}', '{"format": "1"}', '{"format": 1.5}', '{"format": 0}', '{"format": 1}', 'machine,point\n', '<html>'])('%j is no record', (text) => {
-    expect(fault(text).hint).not.toBeNull();
-  });
+  it.each(['', 'null', '[]', '{}', '{"format": "1"}', '{"format": 1.5}', '{"format": 0}', '{"format": 1}', 'machine,point\n', '<html>'])(
+    '%j is no record',
+    (text) => {
+      expect(fault(text).hint).not.toBeNull();
+    },
+  );
 
   it.each<[string, (r: Json) => void]>([
-    ['machines[1].condition is "E"; expected A, B, C, D, r-A, r-B, r-C, r-D, not assessed', (r) => Object.assign(r['machines']?.[1] ?? {}, { condition: 'E' })],
+    [
+      'machines[1].condition is "E"; expected A, B, C, D, r-A, r-B, r-C, r-D, not assessed',
+      (r) => Object.assign(r['machines']?.[1] ?? {}, { condition: 'E' }),
+    ],
     ['measurements[0].value is "2.1"; expected a number or null', (r) => Object.assign(r['measurements']?.[0] ?? {}, { value: '2.1' })],
-    ['measurements[2].history.line is not there; expected a list of numbers', (r) => Object.assign(r['measurements']?.[2]?.['history'] ?? {}, { line: undefined })],
+    [
+      'measurements[2].history.line is not there; expected a list of numbers',
+      (r) => Object.assign(r['measurements']?.[2]?.['history'] ?? {}, { line: undefined }),
+    ],
     ['surveys[0].date is "14.01.2026"; expected a date YYYY-MM-DD', (r) => Object.assign(r['surveys']?.[0] ?? {}, { date: '14.01.2026' })],
     ['actions is null; expected a list', (r) => Object.assign(r, { actions: null })],
     ['components[0] is 7; expected an object', (r) => Object.assign(r['components'] ?? [], { 0: 7 })],
     ['plant.contractor is not there; expected an object', (r) => Object.assign(r['plant'] ?? {}, { contractor: undefined })],
-    ['plant.units[velocity].detection is "loud"', (r) => Object.assign(r['plant'] ?? {}, { units: { velocity: { unit: 'mm/s', detection: 'loud' } } })],
+    [
+      'plant.units[velocity].detection is "loud"',
+      (r) => Object.assign(r['plant'] ?? {}, { units: { velocity: { unit: 'mm/s', detection: 'loud' } } }),
+    ],
   ])('tells the place: %s', (message, change) => {
     expect(fault(changed(change)).message).toContain(message);
   });
@@ -77,6 +89,9 @@ describe('reading a record', () => {
 
   it('cut anywhere, or with any field gone, it is a UserError, never another', () => {
     const text = sampleText(1);
-    fc.assert(fc.property(fc.integer({ min: 0, max: text.length - 3 }), (at) => fault(text.slice(0, at)) instanceof UserError), { numRuns: 40 });
+    fc.assert(
+      fc.property(fc.integer({ min: 0, max: text.length - 3 }), (at) => fault(text.slice(0, at)) instanceof UserError),
+      { numRuns: 40 },
+    );
   });
 });

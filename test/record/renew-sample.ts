@@ -15,7 +15,8 @@ const KEPT = ['AF-03', 'BFP-B', 'ID-01', 'JP-1C', 'PK-F1', 'TG-01', 'VP-01'];
 
 /** The measurements that govern a machine, and its first three. */
 function someOf(record: SwayfolioRecord, machine: RecordMachine): RecordMeasurement[] {
-  const governs = (m: RecordMeasurement): boolean => [machine.governed_by, machine.urgency_by].some((key) => key?.point === m.point && key.quantity === m.quantity);
+  const governs = (m: RecordMeasurement): boolean =>
+    [machine.governed_by, machine.urgency_by].some((key) => key?.point === m.point && key.quantity === m.quantity);
   return record.measurements.filter((m) => m.machine === machine.machine).filter((m, i) => i < 3 || governs(m));
 }
 
@@ -23,10 +24,15 @@ function cut(record: SwayfolioRecord): SwayfolioRecord {
   const isKept = (item: { readonly machine: string }): boolean => KEPT.includes(item.machine);
   return {
     ...record,
-    machines: record.machines.filter(isKept), components: record.components.filter(isKept),
+    machines: record.machines.filter(isKept),
+    components: record.components.filter(isKept),
     measurements: record.machines.filter(isKept).flatMap((machine) => someOf(record, machine)),
-    actions: record.actions.filter(isKept), coverage: record.coverage.filter(isKept),
-    surveys: record.surveys.map((s) => ({ ...s, conditions: Object.fromEntries(Object.entries(s.conditions).filter(([machine]) => KEPT.includes(machine))) })),
+    actions: record.actions.filter(isKept),
+    coverage: record.coverage.filter(isKept),
+    surveys: record.surveys.map((s) => ({
+      ...s,
+      conditions: Object.fromEntries(Object.entries(s.conditions).filter(([machine]) => KEPT.includes(machine))),
+    })),
     survey: { ...record.survey, photos: record.survey.photos.slice(0, 1) },
   };
 }

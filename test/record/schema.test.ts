@@ -50,7 +50,11 @@ describe('the schema of a record', () => {
     expect(validate(record)).toBe(false);
   });
 
-  it.each([{ boundary: 'C/D', earliest: '2026-05-01', likely: '2026-09-01', latest: null, range: 0.8 }, { none: 'too few readings' }, null])('takes the forecast %j', (forecast) => {
+  it.each([
+    { boundary: 'C/D', earliest: '2026-05-01', likely: '2026-09-01', latest: null, range: 0.8 },
+    { none: 'too few readings' },
+    null,
+  ])('takes the forecast %j', (forecast) => {
     const record = sample();
     Object.assign((record['measurements'] as Part[])[0] ?? {}, { forecast });
     validate(record);
@@ -75,7 +79,24 @@ describe('the schema of a record', () => {
   });
 
   it('every list of words and every object that a field names is there; no object is idle', () => {
-    const named = new Set(['tool', 'issue', 'plant', 'survey', 'surveys', 'policy', 'rules', 'limit_sets', 'machines', 'components', 'measurements', 'actions', 'coverage', 'plant_over_time', 'problems', 'inputs']);
+    const named = new Set([
+      'tool',
+      'issue',
+      'plant',
+      'survey',
+      'surveys',
+      'policy',
+      'rules',
+      'limit_sets',
+      'machines',
+      'components',
+      'measurements',
+      'actions',
+      'coverage',
+      'plant_over_time',
+      'problems',
+      'inputs',
+    ]);
     for (const fields of Object.values(OBJECTS)) {
       for (const field of fields) {
         if (field.kind === 'w') expect(Object.keys(WORDS)).toContain(field.of);

@@ -10,13 +10,20 @@ const first = (r: SwayfolioRecord) => {
   if (m === undefined) throw new Error('the sample has no measurement');
   return m;
 };
-const withFirst = (change: object): SwayfolioRecord => ({ ...record, measurements: [{ ...first(record), ...change }, ...record.measurements.slice(1)] });
+const withFirst = (change: object): SwayfolioRecord => ({
+  ...record,
+  measurements: [{ ...first(record), ...change }, ...record.measurements.slice(1)],
+});
 
 /** The same value with the keys of every object turned round. */
 function turned(value: unknown): unknown {
   if (Array.isArray(value)) return value.map(turned);
   if (value === null || typeof value !== 'object') return value;
-  return Object.fromEntries(Object.entries(value).reverse().map(([k, v]) => [k, turned(v)]));
+  return Object.fromEntries(
+    Object.entries(value)
+      .reverse()
+      .map(([k, v]) => [k, turned(v)]),
+  );
 }
 
 describe('writing a record', () => {
@@ -31,7 +38,15 @@ describe('writing a record', () => {
     expect(text.endsWith('}\n')).toBe(true);
     expect(text).not.toContain('\r');
     const lines = text.split('\n');
-    for (const m of record.measurements) expect(lines.filter((l) => l.startsWith(`{"machine":${JSON.stringify(m.machine)},"component":${JSON.stringify(m.component)},"point":${JSON.stringify(m.point)},"location"`) && l.includes(`"quantity":${JSON.stringify(m.quantity)},"unit"`)).length).toBeGreaterThan(0);
+    for (const m of record.measurements)
+      expect(
+        lines.filter(
+          (l) =>
+            l.startsWith(
+              `{"machine":${JSON.stringify(m.machine)},"component":${JSON.stringify(m.component)},"point":${JSON.stringify(m.point)},"location"`,
+            ) && l.includes(`"quantity":${JSON.stringify(m.quantity)},"unit"`),
+        ).length,
+      ).toBeGreaterThan(0);
     expect(lines.length).toBeGreaterThan(record.measurements.length + record.machines.length);
   });
 
@@ -52,7 +67,10 @@ describe('writing a record', () => {
 
   it.each([
     [{ value: Number.NaN }, /measurements\[0\] value is NaN/],
-    [{ change: { absolute: 1, percent: Number.POSITIVE_INFINITY, db: null, of_bc: null, significant: null, vector: null } }, /measurements\[0\]\.change percent is Infinity/],
+    [
+      { change: { absolute: 1, percent: Number.POSITIVE_INFINITY, db: null, of_bc: null, significant: null, vector: null } },
+      /measurements\[0\]\.change percent is Infinity/,
+    ],
     [{ history: { value: [1, Number.NEGATIVE_INFINITY], why: {}, line: [1, 2] } }, /measurements\[0\]\.history.*value is -Infinity/],
     [{ surprise: 1 }, /measurements\[0\]\.surprise is not in the order/],
   ])('%j is a bug that is named', (change, message) => {
@@ -64,7 +82,9 @@ describe('writing a record', () => {
   });
 
   it('maps are written by code unit, whatever order they were made in', () => {
-    const text = writeRecord(withFirst({ doubts: [{ kind: 'date', message: 'm', effect: 'note', facts: { b: 1, a: [1, 2], B: 'x', 10: null, 9: true } }] }));
+    const text = writeRecord(
+      withFirst({ doubts: [{ kind: 'date', message: 'm', effect: 'note', facts: { b: 1, a: [1, 2], B: 'x', 10: null, 9: true } }] }),
+    );
     expect(text).toContain('"facts":{"10":null,"9":true,"B":"x","a":[1,2],"b":1}');
   });
 });

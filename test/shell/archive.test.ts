@@ -1,13 +1,29 @@
 /** The archive on the disk: whole or not at all, one process at a time. */
 import { spawnSync } from 'node:child_process';
-import { chmodSync, existsSync, mkdirSync, mkdtempSync, readdirSync, readFileSync, realpathSync, renameSync, statSync, utimesSync, writeFileSync } from 'node:fs';
+import {
+  chmodSync,
+  existsSync,
+  mkdirSync,
+  mkdtempSync,
+  readdirSync,
+  readFileSync,
+  realpathSync,
+  renameSync,
+  statSync,
+  utimesSync,
+  writeFileSync,
+} from 'node:fs';
 import { hostname, tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { expect, test } from 'vitest';
 import { claimArchive } from '../../src/shell/archive.ts';
 import { listEverything } from '../../src/shell/list.ts';
 
-const FILES = [{ path: 'issue.json', bytes: '{}' }, { path: 'site/machines/a.html', bytes: 'a' }, { path: 'manifest.sha256', bytes: 'm' }];
+const FILES = [
+  { path: 'issue.json', bytes: '{}' },
+  { path: 'site/machines/a.html', bytes: 'a' },
+  { path: 'manifest.sha256', bytes: 'm' },
+];
 const fresh = (): string => join(realpathSync(mkdtempSync(join(tmpdir(), 'swayfolio-archive-'))), 'issued');
 
 /** The number of a process that has ended. */
@@ -29,7 +45,8 @@ test('a folder is published whole and read-only, and nothing of the claim stays'
   claim.release();
   expect(readdirSync(folder)).toEqual(['2026-001']);
   expect(listEverything(join(folder, '2026-001'))).toEqual({ files: FILES.map((file) => file.path).sort(), others: [] });
-  for (const path of ['.', 'site', 'site/machines', ...FILES.map((file) => file.path)]) expect(statSync(join(folder, '2026-001', path)).mode & 0o222, path).toBe(0);
+  for (const path of ['.', 'site', 'site/machines', ...FILES.map((file) => file.path)])
+    expect(statSync(join(folder, '2026-001', path)).mode & 0o222, path).toBe(0);
 });
 
 test('a second claim is refused by the name of the process that has the first', () => {
@@ -89,7 +106,13 @@ test.each([0, 1, 2])('a disk that is full at file %i: told in a line, nothing st
     written += 1;
     writeFileSync(path, bytes);
   });
-  expect(() => claim.publish('2026-002', FILES)).toThrow(expect.objectContaining({ message: `Cannot write ${folder}: the disk is full.`, hint: 'Nothing was issued, and what was issued before stands as it was.', exitCode: 1 }));
+  expect(() => claim.publish('2026-002', FILES)).toThrow(
+    expect.objectContaining({
+      message: `Cannot write ${folder}: the disk is full.`,
+      hint: 'Nothing was issued, and what was issued before stands as it was.',
+      exitCode: 1,
+    }),
+  );
   claim.release();
   expect(readdirSync(folder)).toEqual(['2026-001']);
   expect(readFileSync(join(folder, '2026-001/manifest.sha256'), 'utf8')).toBe('m');
@@ -107,7 +130,10 @@ test('an issue is never written over, an empty folder of its name neither', () =
 
 test('an issue that a killed run left open is made read-only at the next claim; what is not ours is let be', () => {
   const folder = fresh();
-  for (const [name, file] of [['2026-001', 'manifest.sha256'], ['letters', 'to-client.txt']] as const) {
+  for (const [name, file] of [
+    ['2026-001', 'manifest.sha256'],
+    ['letters', 'to-client.txt'],
+  ] as const) {
     mkdirSync(join(folder, name), { recursive: true });
     writeFileSync(join(folder, name, file), '');
   }

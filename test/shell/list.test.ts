@@ -17,7 +17,21 @@ function put(path: string): void {
 }
 
 test('lists by code unit, without hidden files, drafts, issued reports and folders that swayfolio made', () => {
-  for (const path of ['b.csv', 'B.csv', 'ä.csv', 'surveys/2/x', 'surveys/10/x', '.hidden', '.git/x', 'out/2026/record.json', 'issued/1/record.json', 'elsewhere/.swayfolio', 'elsewhere/work-list.csv', 'surveys/out/x']) put(path);
+  for (const path of [
+    'b.csv',
+    'B.csv',
+    'ä.csv',
+    'surveys/2/x',
+    'surveys/10/x',
+    '.hidden',
+    '.git/x',
+    'out/2026/record.json',
+    'issued/1/record.json',
+    'elsewhere/.swayfolio',
+    'elsewhere/work-list.csv',
+    'surveys/out/x',
+  ])
+    put(path);
   expect(realShell.list(home)).toEqual({ files: ['B.csv', 'b.csv', 'surveys/10/x', 'surveys/2/x', 'surveys/out/x', 'ä.csv'], refused: [] });
 });
 
@@ -33,7 +47,11 @@ test('follows a link to a file of the folder, and refuses one that leaves it, on
   expect(realShell.list(home)).toEqual({ files: ['inside.csv', 'machines.csv'], refused: ['dead', 'leaves.csv', 'loop', 'pipe'] });
 });
 
-test.each([['nowhere', /does not exist/], ['.', /no file/], ['plant.yaml/x', /not a folder|not exist/]])('reading %s is an error with a hint', (path, why) => {
+test.each([
+  ['nowhere', /does not exist/],
+  ['.', /no file/],
+  ['plant.yaml/x', /not a folder|not exist/],
+])('reading %s is an error with a hint', (path, why) => {
   put('plant.yaml');
   try {
     realShell.read(join(home, path));

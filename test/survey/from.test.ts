@@ -8,18 +8,42 @@ const bytesOf = (file: string | Uint8Array): Uint8Array => (typeof file === 'str
 function made(text: string | Uint8Array, name = 'export.csv') {
   const { files, questions } = plantFrom([{ name, bytes: bytesOf(text) }], 'Works');
   const byPath = new Map(files.map((file) => [file.path, bytesOf(file.bytes)]));
-  const shell: ReadingShell = { list: () => ({ files: [...byPath.keys()].sort(), refused: [] }), read: (path) => byPath.get(path.slice(2)) as Uint8Array, exists: () => true };
+  const shell: ReadingShell = {
+    list: () => ({ files: [...byPath.keys()].sort(), refused: [] }),
+    read: (path) => byPath.get(path.slice(2)) as Uint8Array,
+    exists: () => true,
+  };
   const { plant, problems } = readPlant(shell, 'p');
-  const readings = plant?.machines.flatMap((m) => m.series.flatMap((s) => s.readings.map((r) => [m.id, s.point, s.quantity, s.detection, plant.surveys[r.survey]?.id, r.status, r.value, s.unit].join(' ')))) ?? null;
+  const readings =
+    plant?.machines.flatMap((m) =>
+      m.series.flatMap((s) =>
+        s.readings.map((r) => [m.id, s.point, s.quantity, s.detection, plant.surveys[r.survey]?.id, r.status, r.value, s.unit].join(' ')),
+      ),
+    ) ?? null;
   return { questions, readings, problems };
 }
 
 const SURE: Readonly<Record<string, readonly [string | Uint8Array, string]>> = {
   English: ['Route 7\n\nAsset,Point,Date,Vel (mm/s RMS)\nFAN-1,1H,14/01/2026 09:30,1.8\nFAN-1,2H,14/01/2026 09:31,STBY\n', 'export.csv'],
-  German: ['Maschine;Messpunkt;Datum;Messwert;Einheit\nFAN-1;1H;14.01.2026 09:30;1,8;mm/s eff\nFAN-1;2H;14.01.2026 09:31;steht;mm/s eff\n', 'export.csv'],
-  Spanish: [Buffer.from('\ufeffMáquina\tPunto\tFecha\tValor (mm/s rms)\r\nFAN-1\t1H\t14/01/2026\t1,8\r\nFAN-1\t2H\t14/01/2026\tparado\r\n', 'utf16le'), 'export.txt'],
-  'French, a column a direction, units below': ['Équipement|Palier|Date|Horizontal\n|||mm/s rms\nFAN-1|1|14/01/2026|1,8\nFAN-1|2|14/01/2026|hors service\nFin de liste|||\n', 'export.txt'],
-  'a day in the name of the file': ['machine,point,value,unit,detection\nFAN-1,1H,1.8,mm/s,rms\nFAN-1,2H,OFF,mm/s,rms\n', 'route 2026-01-14.csv'],
+  German: [
+    'Maschine;Messpunkt;Datum;Messwert;Einheit\nFAN-1;1H;14.01.2026 09:30;1,8;mm/s eff\nFAN-1;2H;14.01.2026 09:31;steht;mm/s eff\n',
+    'export.csv',
+  ],
+  Spanish: [
+    Buffer.from(
+      '\ufeffMáquina\tPunto\tFecha\tValor (mm/s rms)\r\nFAN-1\t1H\t14/01/2026\t1,8\r\nFAN-1\t2H\t14/01/2026\tparado\r\n',
+      'utf16le',
+    ),
+    'export.txt',
+  ],
+  'French, a column a direction, units below': [
+    'Équipement|Palier|Date|Horizontal\n|||mm/s rms\nFAN-1|1|14/01/2026|1,8\nFAN-1|2|14/01/2026|hors service\nFin de liste|||\n',
+    'export.txt',
+  ],
+  'a day in the name of the file': [
+    'machine,point,value,unit,detection\nFAN-1,1H,1.8,mm/s,rms\nFAN-1,2H,OFF,mm/s,rms\n',
+    'route 2026-01-14.csv',
+  ],
 };
 
 describe('new --from', () => {
@@ -41,12 +65,17 @@ describe('new --from', () => {
   it('asks which peak, which day, and for columns it does not know', () => {
     expect(made('Asset,Point,Vel (mm/s pk)\nFAN-1,1H,1.8\n').questions.join('\n')).toMatch(/calculated from r\.m\.s\.[\s\S]*On which day/);
     expect(made('Foo,Point,Value (g rms),Date\nFAN-1,1H,1.8,2026-01-14\n').questions.join('\n')).toMatch(/Which column names the machine/);
-    expect(made('Machine,1H,2H\nFAN-1,1.2,1.4\n').questions[0]).toMatch(/Are the columns 1H, 2H points[\s\S]*wide: \{ 1H: \{ point: 1H \}, 2H: \{ point: 2H \} \}/);
+    expect(made('Machine,1H,2H\nFAN-1,1.2,1.4\n').questions[0]).toMatch(
+      /Are the columns 1H, 2H points[\s\S]*wide: \{ 1H: \{ point: 1H \}, 2H: \{ point: 2H \} \}/,
+    );
     expect(made(Buffer.from('Gerät,Wert\nx,1\n', 'latin1')).questions.join('\n')).toMatch(/Windows-1252 this line reads: Gerät,Wert/);
   });
 
   it('writes a plant.yaml whose texts stay texts, whatever the columns are called', () => {
-    const { questions, readings } = made('"Asset: {x} # ""1""",Machine,Point,"Value (mm/s RMS)",Date\na,FAN-1,1H,1.8,2026-01-14\n', 'a #1: x.csv');
+    const { questions, readings } = made(
+      '"Asset: {x} # ""1""",Machine,Point,"Value (mm/s RMS)",Date\na,FAN-1,1H,1.8,2026-01-14\n',
+      'a #1: x.csv',
+    );
     expect(questions).toEqual([]);
     expect(readings).toHaveLength(1);
   });

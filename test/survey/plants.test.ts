@@ -38,16 +38,32 @@ describe('problems', () => {
     it(name.slice('problem-'.length), () => {
       const { problems } = readPlant(realShell, join(home, name));
       const told = problems.filter((p) => p.file !== 'expected.txt');
-      golden(name, `${told.map((p) => `${p.severity} ${p.file}:${p.line ?? ''}:${p.column ?? ''} ${p.code}: ${p.message}${p.hint === null ? '' : ` | ${p.hint}`}`).join('\n')}\n`);
+      golden(
+        name,
+        `${told.map((p) => `${p.severity} ${p.file}:${p.line ?? ''}:${p.column ?? ''} ${p.code}: ${p.message}${p.hint === null ? '' : ` | ${p.hint}`}`).join('\n')}\n`,
+      );
     });
   }
 });
 
 /** The verdicts of a record in a few lines. */
 function summary(record: SwayfolioRecord): string {
-  const machines = record.machines.map((m) => `${m.machine}: ${m.condition} (${m.measured_of.join(' of ')}) ${m.urgency ?? 'none'} ${m.rule ?? ''} | ${m.reason}`);
+  const machines = record.machines.map(
+    (m) => `${m.machine}: ${m.condition} (${m.measured_of.join(' of ')}) ${m.urgency ?? 'none'} ${m.rule ?? ''} | ${m.reason}`,
+  );
   const readings = record.measurements.map((m) =>
-    [`  ${m.machine} ${m.component} ${m.point} ${m.quantity}`, m.status, `${m.value} ${m.unit} ${m.detection}`, m.zone ?? m.ratio_class ?? `no zone: ${m.no_zone_because}`, m.travel, m.limit_set, `previous ${m.previous?.value ?? ''}`, `baseline ${m.baseline?.value ?? ''}`, m.history.value.join(' ')].join(' | '));
+    [
+      `  ${m.machine} ${m.component} ${m.point} ${m.quantity}`,
+      m.status,
+      `${m.value} ${m.unit} ${m.detection}`,
+      m.zone ?? m.ratio_class ?? `no zone: ${m.no_zone_because}`,
+      m.travel,
+      m.limit_set,
+      `previous ${m.previous?.value ?? ''}`,
+      `baseline ${m.baseline?.value ?? ''}`,
+      m.history.value.join(' '),
+    ].join(' | '),
+  );
   const actions = record.actions.map((a) => `${a.rank}. ${a.action} ${a.urgency} ${a.status} ${a.origin} due ${a.due}`);
   return `${[...machines, ...readings, ...actions].join('\n')}\n`;
 }

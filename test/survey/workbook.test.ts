@@ -11,7 +11,8 @@ import { measurementOf, recordOf } from '../assess/folder.ts';
 import { readPlant } from '../../src/survey/read.ts';
 import { assess } from '../../src/assess/assess.ts';
 
-const MAIN = 'xmlns="http://schemas.openxmlformats.org/spreadsheetml/2006/main" xmlns:r="http://schemas.openxmlformats.org/officeDocument/2006/relationships"';
+const MAIN =
+  'xmlns="http://schemas.openxmlformats.org/spreadsheetml/2006/main" xmlns:r="http://schemas.openxmlformats.org/officeDocument/2006/relationships"';
 
 interface Made {
   readonly sheets?: readonly { readonly name: string; readonly rows: string; readonly state?: string; readonly after?: string }[];
@@ -22,13 +23,24 @@ interface Made {
 }
 
 /** A workbook of these sheets; `rows` is the inside of sheetData. */
-function workbook({ sheets = [], strings = '', styles = '<cellXfs><xf numFmtId="0"/><xf numFmtId="14"/><xf numFmtId="22"/></cellXfs>', date1904 = false, more = {} }: Made): Uint8Array {
+function workbook({
+  sheets = [],
+  strings = '',
+  styles = '<cellXfs><xf numFmtId="0"/><xf numFmtId="14"/><xf numFmtId="22"/></cellXfs>',
+  date1904 = false,
+  more = {},
+}: Made): Uint8Array {
   const parts: Record<string, string> = {
     'xl/workbook.xml': `<?xml version="1.0"?><workbook ${MAIN}><workbookPr${date1904 ? ' date1904="1"' : ''}/><sheets>${sheets.map((s, i) => `<sheet name="${s.name}" sheetId="${i + 1}"${s.state === undefined ? '' : ` state="${s.state}"`} r:id="rId${i + 1}"/>`).join('')}</sheets></workbook>`,
     'xl/_rels/workbook.xml.rels': `<Relationships>${sheets.map((_, i) => `<Relationship Id="rId${i + 1}" Target="worksheets/sheet${i + 1}.xml"/>`).join('')}</Relationships>`,
     'xl/sharedStrings.xml': `<sst ${MAIN}>${strings}</sst>`,
     'xl/styles.xml': `<styleSheet ${MAIN}>${styles}</styleSheet>`,
-    ...Object.fromEntries(sheets.map((s, i) => [`xl/worksheets/sheet${i + 1}.xml`, `<worksheet ${MAIN}><sheetData>${s.rows}</sheetData>${s.after ?? ''}</worksheet>`])),
+    ...Object.fromEntries(
+      sheets.map((s, i) => [
+        `xl/worksheets/sheet${i + 1}.xml`,
+        `<worksheet ${MAIN}><sheetData>${s.rows}</sheetData>${s.after ?? ''}</worksheet>`,
+      ]),
+    ),
     ...more,
   };
   return zipSync(Object.fromEntries(Object.entries(parts).map(([path, text]) => [path, strToU8(text)])));
@@ -43,22 +55,37 @@ function read(made: Made | Uint8Array, sheet: string | null = null) {
 describe('cells', () => {
   it('shared, rich and inline text, numbers in their shortest form, dates, booleans, blanks between', () => {
     const strings = '<si><t>plain</t></si><si><r><t>rich </t></r><r><t>&amp; text</t></r><rPh><t>no</t></rPh></si>';
-    const rows = '<row r="2"><c r="A2" t="s"><v>0</v></c><c r="B2" t="s"><v>1</v></c><c r="D2" t="inlineStr"><is><t>in line</t></is></c></row>'
-      + '<row r="5"><c r="A5"><v>2.3500000000000001</v></c><c r="B5" s="1"><v>43831</v></c><c r="C5" s="2"><v>43831.5</v></c><c r="D5" t="b"><v>1</v></c><c r="E5" t="e"><v>#N/A</v></c></row>';
+    const rows =
+      '<row r="2"><c r="A2" t="s"><v>0</v></c><c r="B2" t="s"><v>1</v></c><c r="D2" t="inlineStr"><is><t>in line</t></is></c></row>' +
+      '<row r="5"><c r="A5"><v>2.3500000000000001</v></c><c r="B5" s="1"><v>43831</v></c><c r="C5" s="2"><v>43831.5</v></c><c r="D5" t="b"><v>1</v></c><c r="E5" t="e"><v>#N/A</v></c></row>';
     const { grid, told } = read({ sheets: [{ name: 'Readings', rows }], strings });
-    expect(grid).toEqual({ plain: true, rows: [{ line: 2, cells: ['plain', 'rich & text', '', 'in line'] }, { line: 5, cells: ['2.35', '2020-01-01', '2020-01-01T12:00', 'TRUE', '#N/A'] }] });
+    expect(grid).toEqual({
+      plain: true,
+      rows: [
+        { line: 2, cells: ['plain', 'rich & text', '', 'in line'] },
+        { line: 5, cells: ['2.35', '2020-01-01', '2020-01-01T12:00', 'TRUE', '#N/A'] },
+      ],
+    });
     expect(told).toEqual([]);
   });
 
   it('a formula gives its last value, and is told; one without a value is an error at its cell', () => {
-    const { grid, told, problems } = read({ sheets: [{ name: 'S', rows: '<row r="1"><c r="A1"><f>1+1</f><v>2</v></c><c r="B1"><f>X</f></c></row>' }] });
+    const { grid, told, problems } = read({
+      sheets: [{ name: 'S', rows: '<row r="1"><c r="A1"><f>1+1</f><v>2</v></c><c r="B1"><f>X</f></c></row>' }],
+    });
     expect(grid?.rows[0]?.cells[0]).toBe('2');
     expect(told).toEqual(['warning formula-cells', 'error formula-without-value']);
     expect(problems.find((p) => p.severity === 'error')).toMatchObject({ line: 1, column: 2 });
   });
 
   it('merged ranges are told', () => {
-    expect(read({ sheets: [{ name: 'S', rows: '<row r="1"><c r="A1"><v>1</v></c></row>', after: '<mergeCells><mergeCell ref="A1:B1"/></mergeCells>' }] }).told).toEqual(['note merged-cells']);
+    expect(
+      read({
+        sheets: [
+          { name: 'S', rows: '<row r="1"><c r="A1"><v>1</v></c></row>', after: '<mergeCells><mergeCell ref="A1:B1"/></mergeCells>' },
+        ],
+      }).told,
+    ).toEqual(['note merged-cells']);
   });
 });
 
@@ -84,7 +111,13 @@ describe('dates', () => {
 });
 
 describe('sheets', () => {
-  const two = { sheets: [{ name: 'Cover', rows: '' }, { name: 'Data', rows: '<row r="1"><c r="A1"><v>7</v></c></row>' }, { name: 'Old', rows: '', state: 'hidden' }] };
+  const two = {
+    sheets: [
+      { name: 'Cover', rows: '' },
+      { name: 'Data', rows: '<row r="1"><c r="A1"><v>7</v></c></row>' },
+      { name: 'Old', rows: '', state: 'hidden' },
+    ],
+  };
 
   it('several visible ones are not guessed among; named, one is read, a hidden one too', () => {
     expect(read(two).told).toEqual(['error workbook-which-sheet']);
@@ -99,7 +132,13 @@ describe('hostile', () => {
 
   it('what is no zip, no workbook, or damaged', () => {
     const sound = workbook({ sheets: [sheet] });
-    for (const bytes of [new Uint8Array(), strToU8('a,b\n1,2\n'), sound.slice(0, sound.length >> 1), zipSync({ 'other.txt': strToU8('x') })]) expect(read(bytes).told).toEqual(['error workbook-broken']);
+    for (const bytes of [
+      new Uint8Array(),
+      strToU8('a,b\n1,2\n'),
+      sound.slice(0, sound.length >> 1),
+      zipSync({ 'other.txt': strToU8('x') }),
+    ])
+      expect(read(bytes).told).toEqual(['error workbook-broken']);
   });
 
   it('a document type, with or without entities, is refused', () => {
@@ -115,21 +154,44 @@ describe('hostile', () => {
   });
 
   it('thousands of parts, cells far out, references that are none', () => {
-    expect(read({ sheets: [sheet], more: Object.fromEntries(Array.from({ length: 2100 }, (_, i) => [`x/${i}`, ''])) }).told).toEqual(['error workbook-too-large']);
+    expect(read({ sheets: [sheet], more: Object.fromEntries(Array.from({ length: 2100 }, (_, i) => [`x/${i}`, ''])) }).told).toEqual([
+      'error workbook-too-large',
+    ]);
     const far = Array.from({ length: 600 }, (_, i) => `<row r="${i + 1}"><c r="XFD${i + 1}"><v>1</v></c></row>`).join('');
     expect(read({ sheets: [{ name: 'S', rows: far }] }).told).toEqual(['error workbook-too-large']);
-    expect(read({ sheets: [{ name: 'S', rows: '<row r="1"><c r="ZZZZ1"><v>1</v></c></row>' }] }).told).toEqual(['error workbook-too-large']);
+    expect(read({ sheets: [{ name: 'S', rows: '<row r="1"><c r="ZZZZ1"><v>1</v></c></row>' }] }).told).toEqual([
+      'error workbook-too-large',
+    ]);
     expect(read({ sheets: [{ name: 'S', rows: '<row r="1"><c r="11"><v>1</v></c></row>' }] }).told).toEqual(['error workbook-broken']);
   });
 });
 
 it('a workbook gives the record of the same readings as CSV', () => {
-  const yaml = (file: string, more: string): string => `plant: Test works\nimport:\n  files:\n    - file: ${file}\n${more}      columns:\n        machine: Machine\n        point: Point\n        value: Value\n        survey_date: Date\n      constants:\n        quantity: velocity\n        unit: mm/s\n        detection: rms\n`;
-  const csv = recordOf({ 'plant.yaml': yaml('surveys/export.csv', '      dates: ymd\n'), 'surveys/export.csv': 'Machine,Point,Value,Date\nM,1H,2.35,2020-01-01\n' });
+  const yaml = (file: string, more: string): string =>
+    `plant: Test works\nimport:\n  files:\n    - file: ${file}\n${more}      columns:\n        machine: Machine\n        point: Point\n        value: Value\n        survey_date: Date\n      constants:\n        quantity: velocity\n        unit: mm/s\n        detection: rms\n`;
+  const csv = recordOf({
+    'plant.yaml': yaml('surveys/export.csv', '      dates: ymd\n'),
+    'surveys/export.csv': 'Machine,Point,Value,Date\nM,1H,2.35,2020-01-01\n',
+  });
   const head = ['Machine', 'Point', 'Value', 'Date'].map((t, i) => `<c r="${'ABCD'[i]}1" t="inlineStr"><is><t>${t}</t></is></c>`).join('');
   const rows = `<row r="1">${head}</row><row r="2"><c r="A2" t="inlineStr"><is><t>M</t></is></c><c r="B2" t="inlineStr"><is><t>1H</t></is></c><c r="C2"><v>2.3500000000000001</v></c><c r="D2" s="1"><v>43831</v></c></row>`;
-  const files = new Map<string, Uint8Array>([['plant.yaml', strToU8(yaml('surveys/export.xlsx', '      sheet: Data\n'))], ['surveys/export.xlsx', workbook({ sheets: [{ name: 'Cover', rows: '' }, { name: 'Data', rows }] })]]);
-  const shell = { list: () => ({ files: [...files.keys()], refused: [] }), read: (path: string) => files.get(path.replace('plant/', '')) as Uint8Array, exists: () => true };
+  const files = new Map<string, Uint8Array>([
+    ['plant.yaml', strToU8(yaml('surveys/export.xlsx', '      sheet: Data\n'))],
+    [
+      'surveys/export.xlsx',
+      workbook({
+        sheets: [
+          { name: 'Cover', rows: '' },
+          { name: 'Data', rows },
+        ],
+      }),
+    ],
+  ]);
+  const shell = {
+    list: () => ({ files: [...files.keys()], refused: [] }),
+    read: (path: string) => files.get(path.replace('plant/', '')) as Uint8Array,
+    exists: () => true,
+  };
   const { plant, problems } = readPlant(shell, 'plant');
   expect(problems.filter((p) => p.severity === 'error')).toEqual([]);
   if (plant === null) throw new Error('no plant');

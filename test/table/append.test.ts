@@ -18,11 +18,18 @@ describe('rows are appended', () => {
     ['under a head of their own where there is no file', null, 'a,b\n"x,y",z\n'],
     ['under a head of their own where the file is empty', '', 'a,b\n"x,y",z\n'],
   ] as const) {
-    it(what, () => expect(text(appendRows(before === null ? null : bytes(before), ['a', 'b'], [{ a: 'x,y', b: 'z' }], plain).bytes)).toBe(after));
+    it(what, () =>
+      expect(text(appendRows(before === null ? null : bytes(before), ['a', 'b'], [{ a: 'x,y', b: 'z' }], plain).bytes)).toBe(after),
+    );
   }
 
   it('the second column "finding" is the text, the first the id', () => {
-    const { bytes: out } = appendRows(bytes('finding,machine,finding\nF1,M,old\n'), [], [{ finding: 'F2', machine: 'M', finding_text: 'new' }], findingsHeader);
+    const { bytes: out } = appendRows(
+      bytes('finding,machine,finding\nF1,M,old\n'),
+      [],
+      [{ finding: 'F2', machine: 'M', finding_text: 'new' }],
+      findingsHeader,
+    );
     expect(text(out)).toBe('finding,machine,finding\nF1,M,old\nF2,M,new\n');
   });
 
@@ -36,12 +43,14 @@ describe('rows are appended', () => {
 
   it('property: any cells come back by csv-parse, and what stood before is untouched', () => {
     const cell = fc.string({ unit: 'grapheme' }).filter((t) => !t.includes('\ufeff'));
-    fc.assert(fc.property(fc.array(fc.record({ a: cell, b: cell }), { minLength: 1, maxLength: 4 }), fc.constantFrom('\n', '\r\n'), (rows, end) => {
-      const before = bytes(`a,b${end}"q""q",2${end}`);
-      const { bytes: out } = appendRows(before, [], rows, plain);
-      expect(out.subarray(0, before.length)).toEqual(before);
-      const read = parse(text(out), { columns: true, skip_empty_lines: false }) as unknown[];
-      expect(read.slice(1)).toEqual(rows);
-    }));
+    fc.assert(
+      fc.property(fc.array(fc.record({ a: cell, b: cell }), { minLength: 1, maxLength: 4 }), fc.constantFrom('\n', '\r\n'), (rows, end) => {
+        const before = bytes(`a,b${end}"q""q",2${end}`);
+        const { bytes: out } = appendRows(before, [], rows, plain);
+        expect(out.subarray(0, before.length)).toEqual(before);
+        const read = parse(text(out), { columns: true, skip_empty_lines: false }) as unknown[];
+        expect(read.slice(1)).toEqual(rows);
+      }),
+    );
   });
 });

@@ -48,12 +48,23 @@ describe('cells', () => {
   });
 
   it('property: any rows come back', () => {
-    const cell = fc.string({ unit: fc.constantFrom('a', ',', '"', '\n', '\r', '=', '-', '1', ' ', '\u2212', ';'), maxLength: 6 }).filter((t) => !RISKY.test(t));
-    fc.assert(fc.property(fc.array(fc.tuple(cell, cell, cell), { minLength: 1, maxLength: 5 }), (rows) => { expect(parsed(csvText([['x', 'y', 'z'], ...rows]))).toEqual([['x', 'y', 'z'], ...rows]); }));
+    const cell = fc
+      .string({ unit: fc.constantFrom('a', ',', '"', '\n', '\r', '=', '-', '1', ' ', '\u2212', ';'), maxLength: 6 })
+      .filter((t) => !RISKY.test(t));
+    fc.assert(
+      fc.property(fc.array(fc.tuple(cell, cell, cell), { minLength: 1, maxLength: 5 }), (rows) => {
+        expect(parsed(csvText([['x', 'y', 'z'], ...rows]))).toEqual([['x', 'y', 'z'], ...rows]);
+      }),
+    );
   });
 
   it('a byte order mark, CRLF, and an end of line at the end', () => {
-    expect(csvText([['a', 'b'], ['1', '2']])).toBe('\ufeffa,b\r\n1,2\r\n');
+    expect(
+      csvText([
+        ['a', 'b'],
+        ['1', '2'],
+      ]),
+    ).toBe('\ufeffa,b\r\n1,2\r\n');
   });
 });
 
@@ -63,7 +74,8 @@ describe('the work list', () => {
 
   /** plant-folder.md (actions.csv) and record.md, decision 11, word for word. */
   it('has the columns of actions.csv, then those of the assessment, the caution last', () => {
-    const ledger = 'action finding machine raised recommendation due owner work_order status closed closed_by as_found verify_point verify_below notes';
+    const ledger =
+      'action finding machine raised recommendation due owner work_order status closed closed_by as_found verify_point verify_below notes';
     expect(rows[0]).toEqual(`${ledger} urgency rule reason check_first points value unit limit survey caution`.split(' '));
     expect(rows[0]).toEqual(WORK_LIST_COLUMNS);
   });
@@ -88,7 +100,10 @@ describe('the work list', () => {
   it('hostile text from the plant stays text', () => {
     const [first, ...rest] = record.actions;
     if (first === undefined) throw new Error('no action');
-    const text = workList({ ...record, actions: [{ ...first, recommendation: '=HYPERLINK("http://x","y")', owner: '@me', notes: 'a\r\n=b,"c"' }, ...rest] });
+    const text = workList({
+      ...record,
+      actions: [{ ...first, recommendation: '=HYPERLINK("http://x","y")', owner: '@me', notes: 'a\r\n=b,"c"' }, ...rest],
+    });
     const row = parsed(text)[1] ?? [];
     expect(row[4]).toBe('\'=HYPERLINK("http://x","y")');
     expect(row[6]).toBe("'@me");

@@ -11,17 +11,32 @@ import { type Files, folder, GROUPS, recordOf } from '../assess/folder.ts';
 import { NEVER } from '../page/never.ts';
 
 const DATES = ['2024-10-08', '2025-01-07', '2025-04-08', '2025-07-08'];
-const machine = (id: string, values: readonly (number | string)[], more = {}) => ({ machine: id, columns: { ...GROUPS.G2R, criticality: 'essential', interval_days: '91', bearings: 'rolling' }, series: [{ point: '1H', values, ...more }] });
-const analyst = (category: string): Files => ({ 'surveys/2025-07-08/survey.yaml': `people:\n  - name: Ada Winterbourne\n    category: ${category}\n` });
+const machine = (id: string, values: readonly (number | string)[], more = {}) => ({
+  machine: id,
+  columns: { ...GROUPS.G2R, criticality: 'essential', interval_days: '91', bearings: 'rolling' },
+  series: [{ point: '1H', values, ...more }],
+});
+const analyst = (category: string): Files => ({
+  'surveys/2025-07-08/survey.yaml': `people:\n  - name: Ada Winterbourne\n    category: ${category}\n`,
+});
 const CATEGORY_II = analyst('ISO 18436-2 category II');
 
-const rowsOf = (values: readonly (number | string)[], more: Files = CATEGORY_II) => draftRows(recordOf(folder([machine('M', values)], more, DATES)));
+const rowsOf = (values: readonly (number | string)[], more: Files = CATEGORY_II) =>
+  draftRows(recordOf(folder([machine('M', values)], more, DATES)));
 
 describe('a drafted finding', () => {
   it('in D: observation with numbers, place, comparison and dates; a repair by a day, stopped; the target of 0.9 × B/C', () => {
     const [row] = rowsOf([2.0, 2.1, 2.2, 5.0]);
     expect(row?.finding).toBe('M/2025-07-08/1');
-    for (const part of ['1H velocity 5.00 mm/s rms', 'zone D', '4.50 mm/s', '2.20 mm/s rms on 2025-04-08', 'baseline is 2.10 mm/s rms', 'since 2024-10-08']) expect(row?.['finding_text']).toContain(part);
+    for (const part of [
+      '1H velocity 5.00 mm/s rms',
+      'zone D',
+      '4.50 mm/s',
+      '2.20 mm/s rms on 2025-04-08',
+      'baseline is 2.10 mm/s rms',
+      'since 2024-10-08',
+    ])
+      expect(row?.['finding_text']).toContain(part);
     expect(row?.['recommendation']).toMatch(/responsible person.*needs a stop.*Today\./);
     expect(row?.['needs_stop']).toBe('yes');
     expect(row?.['check_first']).toMatch(/spectrum.*Isolate by site rules/);
@@ -52,7 +67,20 @@ describe('a drafted finding', () => {
 });
 
 describe('a cause', () => {
-  const files = (more: Files): Files => folder([{ ...machine('M', [1, 1, 1, 1]), series: [{ point: '1H', values: [1, 1, 1, 1.02] }, { point: '1H', quantity: 'acceleration', unit: 'm/s²', values: [5, 5.2, 5.1, 34] }] }], more, DATES);
+  const files = (more: Files): Files =>
+    folder(
+      [
+        {
+          ...machine('M', [1, 1, 1, 1]),
+          series: [
+            { point: '1H', values: [1, 1, 1, 1.02] },
+            { point: '1H', quantity: 'acceleration', unit: 'm/s²', values: [5, 5.2, 5.1, 34] },
+          ],
+        },
+      ],
+      more,
+      DATES,
+    );
 
   it('is said as consistent with, and what confirms it, where someone of category II signs', () => {
     const [row] = draftRows(recordOf(files(CATEGORY_II)));
@@ -73,14 +101,19 @@ describe('drafting again', () => {
   const drafted = (files: Files): Files => {
     const at = 'surveys/2025-07-08/findings.csv';
     const before = files[at] === undefined ? null : new TextEncoder().encode(files[at]);
-    return { ...files, [at]: new TextDecoder().decode(appendRows(before, FINDINGS_HEAD, draftRows(recordOf(files)), findingsHeader).bytes) };
+    return {
+      ...files,
+      [at]: new TextDecoder().decode(appendRows(before, FINDINGS_HEAD, draftRows(recordOf(files)), findingsHeader).bytes),
+    };
   };
 
   it('adds nothing, keeps the actions’ ids and order, and is read as the analyst’s words', () => {
     const once = drafted(plant);
     const [before, after] = [recordOf(plant), recordOf(once)];
     expect(draftRows(after)).toEqual([]);
-    expect(after.actions.map((a) => [a.action, a.rank, a.urgency, a.due])).toEqual(before.actions.map((a) => [a.action, a.rank, a.urgency, a.due]));
+    expect(after.actions.map((a) => [a.action, a.rank, a.urgency, a.due])).toEqual(
+      before.actions.map((a) => [a.action, a.rank, a.urgency, a.due]),
+    );
     expect(after.actions.map((a) => a.origin)).toEqual(['analyst', 'analyst']);
   });
 

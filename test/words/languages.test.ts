@@ -12,11 +12,15 @@ const words = join(root, 'templates/words');
 const LANGUAGES = readdirSync(words).sort();
 const sentences = (language: string, file: string): Record<string, string> => JSON.parse(readFileSync(join(words, language, file), 'utf8'));
 const FILES = readdirSync(join(words, 'en'));
-const factsOf = (sentence: string): string[] => [...new Set([...sentence.matchAll(/\{([A-Za-z_]\w*)(?=[}|:])/g)].map((m) => m[1] as string))].sort();
+const factsOf = (sentence: string): string[] =>
+  [...new Set([...sentence.matchAll(/\{([A-Za-z_]\w*)(?=[}|:])/g)].map((m) => m[1] as string))].sort();
 
 /** Sources of the program and its templates, as one text. */
 function sources(): string {
-  const below = (folder: string): string[] => readdirSync(join(root, folder), { recursive: true, encoding: 'utf8' }).filter((f) => /\.(ts|hbs)$/.test(f)).map((f) => readFileSync(join(root, folder, f), 'utf8'));
+  const below = (folder: string): string[] =>
+    readdirSync(join(root, folder), { recursive: true, encoding: 'utf8' })
+      .filter((f) => /\.(ts|hbs)$/.test(f))
+      .map((f) => readFileSync(join(root, folder, f), 'utf8'));
   return [...below('src'), ...below('templates')].join('\n');
 }
 
@@ -30,7 +34,8 @@ describe('languages', () => {
 
   it('the words of templates and terms are all said somewhere', () => {
     const text = sources();
-    for (const key of Object.keys(sentences('en', 'page.json'))) expect(text.includes(`[[${key.slice(5)}]]`) || text.includes(`'${key}'`), key).toBe(true);
+    for (const key of Object.keys(sentences('en', 'page.json')))
+      expect(text.includes(`[[${key.slice(5)}]]`) || text.includes(`'${key}'`), key).toBe(true);
     for (const key of Object.keys(sentences('en', 'view.json'))) {
       // Keys that end in a code are said as view.urgency.${…}: their head must stand there.
       const head = key.slice(0, key.lastIndexOf('.') + 1);
@@ -41,12 +46,16 @@ describe('languages', () => {
   it('most sentences differ from the English ones: nothing was left untranslated by mistake', () => {
     for (const [language, file] of others) {
       const [english, other] = [sentences('en', file), sentences(language, file)];
-      for (const [key, sentence] of Object.entries(english)) if (/[a-z]{3}.* .*[a-z]{3}/.test(sentence.replace(/\{\w+(:plain)?\}/g, ''))) expect(other[key], `${language} ${key}`).not.toBe(sentence);
+      for (const [key, sentence] of Object.entries(english))
+        if (/[a-z]{3}.* .*[a-z]{3}/.test(sentence.replace(/\{\w+(:plain)?\}/g, '')))
+          expect(other[key], `${language} ${key}`).not.toBe(sentence);
     }
   });
 
   it('what each policy default does stands in English as the policy itself has it, and in every other language', () => {
-    expect(sentences('en', 'policy.json')).toEqual(Object.fromEntries(Object.entries(POLICY_DEFAULTS).map(([id, line]) => [`policy.${id}`, line.about])));
+    expect(sentences('en', 'policy.json')).toEqual(
+      Object.fromEntries(Object.entries(POLICY_DEFAULTS).map(([id, line]) => [`policy.${id}`, line.about])),
+    );
   });
 
   it('numbers, dates and terms of facts follow the language', () => {
@@ -58,6 +67,8 @@ describe('languages', () => {
     expect(unitTerm('de', 'mm/s calculated peak')).toBe('mm/s berechneter Spitzenwert');
     const facts = { point: '1H', quantity: 'velocity', value: 5.25, unit: 'mm/s rms', condition: 'D', limit_words: 'x', travel_words: 'y' };
     expect(say('de', 'assess.reason.zone', facts)).toBe('1H Schwinggeschwindigkeit 5,25 mm/s Effektivwert: Zone D, x; y.');
-    expect(say('de', 'assess.doubt.date.future', { date: '2026-02-01', from: '2026-01-12', to: '2026-01-14' })).toContain('12.01.2026 bis 14.01.2026');
+    expect(say('de', 'assess.doubt.date.future', { date: '2026-02-01', from: '2026-01-12', to: '2026-01-14' })).toContain(
+      '12.01.2026 bis 14.01.2026',
+    );
   });
 });

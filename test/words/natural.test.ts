@@ -13,14 +13,21 @@ describe('natural order', () => {
     [['1H', '1V', '2H', '10H']],
     [['x9007199254740993', 'x9007199254740994', 'x90071992547409930']],
   ])('%j', (sorted) => {
-    for (const start of [[...sorted].reverse(), [...sorted.slice(1), sorted[0] as string]]) expect(start.sort(naturalOrder)).toEqual(sorted);
+    for (const start of [[...sorted].reverse(), [...sorted.slice(1), sorted[0] as string]])
+      expect(start.sort(naturalOrder)).toEqual(sorted);
   });
 
   /** Intl.Collator with `numeric` (ICU) is the outside check, for plain lower-case ids without leading zeros. */
   it('agrees with ICU on plain ids', () => {
     const icu = new Intl.Collator('en', { numeric: true });
-    const plain = fc.tuple(fc.constantFrom('fan', 'pump', 'mill'), fc.nat(300), fc.constantFrom('', 'a', 'b')).map(([a, n, b]) => `${a}${n}${b}`);
-    fc.assert(fc.property(plain, plain, (a, b) => { expect(Math.sign(naturalOrder(a, b))).toBe(Math.sign(icu.compare(a, b))); }));
+    const plain = fc
+      .tuple(fc.constantFrom('fan', 'pump', 'mill'), fc.nat(300), fc.constantFrom('', 'a', 'b'))
+      .map(([a, n, b]) => `${a}${n}${b}`);
+    fc.assert(
+      fc.property(plain, plain, (a, b) => {
+        expect(Math.sign(naturalOrder(a, b))).toBe(Math.sign(icu.compare(a, b)));
+      }),
+    );
   });
 
   it('property: a total order', () => {

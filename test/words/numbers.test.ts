@@ -50,7 +50,14 @@ describe('numbers in print', () => {
   });
 
   it('boundaries print as they were set, three digits at most', () => {
-    expect([4.5, 90, 3.075, 0.17716535, 6.3750001, 8].map((v) => limitNumber('en', v))).toEqual(['4.5', '90', '3.08', '0.177', '6.38', '8']);
+    expect([4.5, 90, 3.075, 0.17716535, 6.3750001, 8].map((v) => limitNumber('en', v))).toEqual([
+      '4.5',
+      '90',
+      '3.08',
+      '0.177',
+      '6.38',
+      '8',
+    ]);
   });
 
   /** `Number.prototype.toPrecision` of the language is the outside check of three significant digits. */
@@ -69,6 +76,10 @@ describe('numbers in print', () => {
   });
 
   it('property: nothing but digits, one decimal sign, narrow blanks and a sign', () => {
-    fc.assert(fc.property(fc.double({ noNaN: true, noDefaultInfinity: true, min: -1e15, max: 1e15 }), (v) => { expect(formatNumber('en', v)).toMatch(/^\u2212?\d{1,4}(?:\u202f?\d{3})*(?:\.\d+)?$/); }));
+    fc.assert(
+      fc.property(fc.double({ noNaN: true, noDefaultInfinity: true, min: -1e15, max: 1e15 }), (v) => {
+        expect(formatNumber('en', v)).toMatch(/^\u2212?\d{1,4}(?:\u202f?\d{3})*(?:\.\d+)?$/);
+      }),
+    );
   });
 });

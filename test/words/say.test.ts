@@ -6,7 +6,10 @@ import { listText, say } from '../../src/words/say.ts';
 import { hasSentence } from '../../src/words/sentences.ts';
 
 const home = fileURLToPath(new URL('../../templates/words/en', import.meta.url));
-const files = readdirSync(home).map((name) => ({ name, sentences: JSON.parse(readFileSync(join(home, name), 'utf8')) as Record<string, string> }));
+const files = readdirSync(home).map((name) => ({
+  name,
+  sentences: JSON.parse(readFileSync(join(home, name), 'utf8')) as Record<string, string>,
+}));
 
 /** Names of the facts of a sentence, those of the plural forms too. */
 const factsOf = (sentence: string): string[] => [...sentence.matchAll(/\{([A-Za-z_][\w]*)(?:[}|:])/g)].map((m) => m[1] as string);
@@ -35,11 +38,14 @@ describe('sentences', () => {
     expect(new Set(keys).size).toBe(keys.length);
   });
 
-  it.each(files.flatMap((f) => Object.entries(f.sentences).map(([key, sentence]) => [f.name, key, sentence] as const)))('%s %s: filled with its facts it leaves no brace and no double blank', (_, key, sentence) => {
-    for (const value of [1, 2.5, null, 'P-101', '2026-01-14', ['1H', '1V']] as const) {
-      const text = say('en', key, Object.fromEntries(factsOf(sentence).map((name) => [name, value])));
-      expect(text).not.toMatch(/[{}|]|undefined|NaN| {2}/);
-      expect(text.trim()).toBe(text);
-    }
-  });
+  it.each(files.flatMap((f) => Object.entries(f.sentences).map(([key, sentence]) => [f.name, key, sentence] as const)))(
+    '%s %s: filled with its facts it leaves no brace and no double blank',
+    (_, key, sentence) => {
+      for (const value of [1, 2.5, null, 'P-101', '2026-01-14', ['1H', '1V']] as const) {
+        const text = say('en', key, Object.fromEntries(factsOf(sentence).map((name) => [name, value])));
+        expect(text).not.toMatch(/[{}|]|undefined|NaN| {2}/);
+        expect(text.trim()).toBe(text);
+      }
+    },
+  );
 });

@@ -18,7 +18,10 @@ export function formalDoubts(context: Context): void {
 }
 
 function retakes(context: Context, look: Look, track: Track): void {
-  const values = [...(look.reading.retakes ?? []).filter((r): r is Reading & { value: number } => isMeasured(r)).map((r) => r.value), look.value];
+  const values = [
+    ...(look.reading.retakes ?? []).filter((r): r is Reading & { value: number } => isMeasured(r)).map((r) => r.value),
+    look.value,
+  ];
   const [least, most] = [Math.min(...values), Math.max(...values)];
   if (!exceeds(most - least, context.policy['7.retake'] * least)) return;
   look.doubts.push(doubt(context.plant.settings, 'retake-differs', 'note', { least, most, unit: track.series.unit, takes: values.length }));

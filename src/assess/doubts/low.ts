@@ -16,7 +16,12 @@ export function nearZeroDoubts(context: Context, survey: number): void {
     if (look.reading.speedRpm === 0) {
       look.doubts.push(doubt(settings, 'near-zero', 'held', { value: look.value, unit: track.series.unit }, '.standing'));
     } else if (look.baseline !== null && exceeds(share * look.baseline.value, look.value)) {
-      const facts = { value: look.value, unit: track.series.unit, baseline: look.baseline.value, percent: (100 * look.value) / look.baseline.value };
+      const facts = {
+        value: look.value,
+        unit: track.series.unit,
+        baseline: look.baseline.value,
+        percent: (100 * look.value) / look.baseline.value,
+      };
       look.doubts.push(doubt(settings, 'near-zero', 'held', facts));
     }
   }
@@ -38,7 +43,8 @@ export function allDownDoubts(context: Context, survey: number): void {
       points = (points ?? new Set()).add(track.series.point);
     }
     if (down === null || points === null || points.size < policy['7.all_down.points']) continue;
-    for (const look of down) look.doubts.push(doubt(plant.settings, 'all-down', 'held', { points: points.size, percent: 100 * policy['7.all_down.share'] }));
+    for (const look of down)
+      look.doubts.push(doubt(plant.settings, 'all-down', 'held', { points: points.size, percent: 100 * policy['7.all_down.share'] }));
   }
 }
 
@@ -71,7 +77,8 @@ function judgeFall(context: Context, track: Track, look: Look, before: number): 
     const earlier = track.readings[s] ?? null;
     if (!isMeasured(earlier) || !isLow(earlier.value) || !standsDoubted(context, track, earlier, look.reading)) continue;
     const options = { speedShare: context.policy['3.speed.overall'], acrossNewBaseline: false };
-    if (whyNotComparable(context, track, earlier, look.reading, options) !== 'doubted low' || !isOnlyUnexplained(track.looks[s] as Look)) continue;
+    if (whyNotComparable(context, track, earlier, look.reading, options) !== 'doubted low' || !isOnlyUnexplained(track.looks[s] as Look))
+      continue;
     second = true;
     track.lifted[s] = look.survey + 1;
   }

@@ -29,19 +29,29 @@ export function impossiblePairs(context: Context, survey: number): void {
     const seen = seenOn(tracks, survey);
     for (const a of seen) {
       const oneTimes = a.look.reading.phase?.amplitude ?? null;
-      if (oneTimes !== null && exceeds(oneTimes, a.look.value * (1 + ROUNDING))) mark(a, { value: oneTimes, other: a.look.value, unit: a.track.series.unit }, '.one_times');
+      if (oneTimes !== null && exceeds(oneTimes, a.look.value * (1 + ROUNDING)))
+        mark(a, { value: oneTimes, other: a.look.value, unit: a.track.series.unit }, '.one_times');
       for (const b of seen) if (a.track.series.point === b.track.series.point) pair(a, b);
     }
     impossibleFrequencies(context, seen);
   }
   function mark(s: Seen, facts: Readonly<Record<string, string | number>>, variant: string): void {
-    if (!s.look.doubts.some((d) => d.kind === 'impossible')) s.look.doubts.push(doubt(settings, 'impossible', 're-measure', facts, variant));
+    if (!s.look.doubts.some((d) => d.kind === 'impossible'))
+      s.look.doubts.push(doubt(settings, 'impossible', 're-measure', facts, variant));
   }
   /** r.m.s. against the peak, or half the peak-to-peak, of the same quantity. */
   function pair(rms: Seen, other: Seen): void {
     const [a, b] = [rms.track.series, other.track.series];
     const units = unitFactor(b.unit, a.unit);
-    if (a.detection !== 'rms' || b.detection === null || b.detection === 'rms' || b.detection === 'mean' || a.quantity !== b.quantity || units === null) return;
+    if (
+      a.detection !== 'rms' ||
+      b.detection === null ||
+      b.detection === 'rms' ||
+      b.detection === 'mean' ||
+      a.quantity !== b.quantity ||
+      units === null
+    )
+      return;
     const half = b.detection.endsWith('peak-to-peak') ? 0.5 : 1;
     const peak = other.look.value * units * half;
     const facts = { value: rms.look.value, other: other.look.value * units, unit: a.unit, detection: b.detection };
@@ -50,7 +60,8 @@ export function impossiblePairs(context: Context, survey: number): void {
       mark(other, facts, '.above_peak');
     } else if (b.detection.startsWith('calculated')) {
       const exact = limitFactor({ unit: a.unit, detection: 'rms' }, { unit: b.unit, detection: b.detection });
-      if (exact !== null && exceeds(Math.abs(other.look.value / (rms.look.value * exact.factor) - 1), ROUNDING)) mark(other, facts, '.not_calculated');
+      if (exact !== null && exceeds(Math.abs(other.look.value / (rms.look.value * exact.factor) - 1), ROUNDING))
+        mark(other, facts, '.not_calculated');
     }
   }
 }
@@ -86,7 +97,11 @@ export function threeOf(seen: readonly Seen[], point: string): Three | null {
   const si = (s: Seen, unit: string): number => s.look.value * (unitFactor(s.track.series.unit, unit) ?? Number.NaN);
   const [metres, metresPerSecond, metresPerSecond2] = [si(d, 'm'), si(v, 'm/s'), si(a, 'm/s²')];
   if (!(metres > 0 && metresPerSecond > 0)) return null;
-  return { members: [d, v, a], fromDisplacementHz: metresPerSecond / (2 * Math.PI * metres), fromAccelerationHz: metresPerSecond2 / (2 * Math.PI * metresPerSecond) };
+  return {
+    members: [d, v, a],
+    fromDisplacementHz: metresPerSecond / (2 * Math.PI * metres),
+    fromAccelerationHz: metresPerSecond2 / (2 * Math.PI * metresPerSecond),
+  };
 }
 
 /** identical: four readings of a machine equal to the last to three figures, or eight to two. */
@@ -100,7 +115,8 @@ export function identicalReadings(context: Context, survey: number): void {
     const equal = (digits: number) => pairs.filter((p) => p.look.value.toPrecision(digits) === p.before.toPrecision(digits));
     const [three, two] = [equal(3), equal(2)];
     const same = three.length >= policy['7.identical.points'] ? three : two.length >= policy['7.identical.two'] ? two : [];
-    for (const s of same) s.look.doubts.push(doubt(plant.settings, 'identical', 're-measure', { readings: same.length, digits: same === three ? 3 : 2 }));
+    for (const s of same)
+      s.look.doubts.push(doubt(plant.settings, 'identical', 're-measure', { readings: same.length, digits: same === three ? 3 : 2 }));
   }
 }
 
@@ -120,7 +136,9 @@ interface Away extends Seen {
 function awayOf(seen: readonly Seen[]): Away[] {
   return seen.flatMap((s) => {
     const before = lastTime(s.look);
-    return before === null || before <= 0 || s.look.value <= 0 || pointRow(s.track, s.look.reading.day).scale !== 'linear' ? [] : [{ ...s, before }];
+    return before === null || before <= 0 || s.look.value <= 0 || pointRow(s.track, s.look.reading.day).scale !== 'linear'
+      ? []
+      : [{ ...s, before }];
   });
 }
 
@@ -135,10 +153,15 @@ export function swappedPoints(context: Context, survey: number): void {
       for (const b of all.slice(i + 1)) {
         const [x, y] = [a.track.series, b.track.series];
         if (x.quantity !== y.quantity || x.unit !== y.unit || x.detection !== y.detection) continue;
-        const [now, then] = [[away(a.look.value, a.before), away(b.look.value, b.before)] as const, [away(b.look.value, a.before), away(a.look.value, b.before)] as const];
+        const [now, then] = [
+          [away(a.look.value, a.before), away(b.look.value, b.before)] as const,
+          [away(b.look.value, a.before), away(a.look.value, b.before)] as const,
+        ];
         const gain = policy['7.swapped.gain'];
-        if (!reaches(now[0] - then[0], gain) || !reaches(now[1] - then[1], gain) || exceeds(2 * (then[0] + then[1]), now[0] + now[1])) continue;
-        for (const s of [a, b]) s.look.doubts.push(doubt(plant.settings, 'swapped-points', 're-measure', { point: x.point, other: y.point }));
+        if (!reaches(now[0] - then[0], gain) || !reaches(now[1] - then[1], gain) || exceeds(2 * (then[0] + then[1]), now[0] + now[1]))
+          continue;
+        for (const s of [a, b])
+          s.look.doubts.push(doubt(plant.settings, 'swapped-points', 're-measure', { point: x.point, other: y.point }));
       }
     });
   }
@@ -157,7 +180,13 @@ export function swappedMachines(context: Context, survey: number): void {
   machines.forEach((first, i) => {
     for (const second of machines.slice(i + 1)) {
       const pairs = first.flatMap((a) => {
-        const b = second.find((s) => s.track.series.point === a.track.series.point && s.track.series.quantity === a.track.series.quantity && s.track.series.detection === a.track.series.detection && s.track.series.unit === a.track.series.unit);
+        const b = second.find(
+          (s) =>
+            s.track.series.point === a.track.series.point &&
+            s.track.series.quantity === a.track.series.quantity &&
+            s.track.series.detection === a.track.series.detection &&
+            s.track.series.unit === a.track.series.unit,
+        );
         return b === undefined ? [] : [[a, b] as const];
       });
       if (pairs.length < 2) continue;

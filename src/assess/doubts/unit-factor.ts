@@ -21,7 +21,8 @@ export function unitFactorDoubts(context: Context, survey: number): void {
   const suspects = suspectsAt(context, survey);
   const far = suspects.filter((s) => s.ratio > FAR || s.ratio < 1 / FAR);
   if (far.length === 0) return;
-  if (far.length * 2 >= context.policy['7.unit.points']) for (const group of groupsOf(suspects, far)) judgeGroup(context, group.scope, group.name, group.members);
+  if (far.length * 2 >= context.policy['7.unit.points'])
+    for (const group of groupsOf(suspects, far)) judgeGroup(context, group.scope, group.name, group.members);
   for (const suspect of far) judgeAlone(context, suspect);
 }
 
@@ -36,13 +37,19 @@ interface Group {
 
 const unitTyped = ({ look, track }: Suspect): string => look.reading.typedUnit ?? track.series.unit;
 
-const scopesOf = ({ track, look }: Suspect): (readonly [Scope, string | null])[] => [['machine', track.machine.id], ['instrument', look.reading.instrument], ['file', look.reading.place.file]];
+const scopesOf = ({ track, look }: Suspect): (readonly [Scope, string | null])[] => [
+  ['machine', track.machine.id],
+  ['instrument', look.reading.instrument],
+  ['file', look.reading.place.file],
+];
 
 /** Readings of one unit on one machine, by one instrument, in one file; only where at least half of them are far from last time. */
 function groupsOf(suspects: readonly Suspect[], far: readonly Suspect[]): Group[] {
   const tally = (list: readonly Suspect[]): Map<string, number> => {
     const counts = new Map<string, number>();
-    for (const suspect of list) for (const [scope, name] of scopesOf(suspect)) if (name !== null) counts.set(`${scope} ${name}`, (counts.get(`${scope} ${name}`) ?? 0) + 1);
+    for (const suspect of list)
+      for (const [scope, name] of scopesOf(suspect))
+        if (name !== null) counts.set(`${scope} ${name}`, (counts.get(`${scope} ${name}`) ?? 0) + 1);
     return counts;
   };
   const farIn = tally(far);
@@ -85,7 +92,12 @@ function judgeGroup(context: Context, scope: Scope, name: string, members: reado
   const close = members.filter((m) => !exceeds(Math.abs(m.ratio / middle - 1), policy['7.unit.spread']));
   if (close.length < policy['7.unit.points'] || close.length * 2 < members.length) return;
   let factor = factorNear(middle, UNIT_FACTORS, policy['7.unit.match']);
-  if (factor === null && scope !== 'machine' && close.length >= policy['7.unit.sine.points'] && new Set(close.map((m) => m.track.machine.id)).size >= 2) {
+  if (
+    factor === null &&
+    scope !== 'machine' &&
+    close.length >= policy['7.unit.sine.points'] &&
+    new Set(close.map((m) => m.track.machine.id)).size >= 2
+  ) {
     factor = factorNear(middle, DETECTION_FACTORS, policy['7.unit.match']);
   }
   if (factor === null) return;

@@ -26,7 +26,10 @@ function raised(seed: number, count: number, points: number, shape: (survey: num
     columns: { ...GROUPS.G2R, criticality: 'critical', interval_days: '91' },
     series: Array.from({ length: points }, (__, p) => {
       const level = BC * (0.3 + (0.3 * ((i * 7 + p * 13) % 100)) / 100);
-      return { point: `P${p}`, values: Array.from({ length: SURVEYS }, (___, s) => shown(level * (p === 0 ? shape(s) : 1) * Math.exp(SCATTER * normal()))) };
+      return {
+        point: `P${p}`,
+        values: Array.from({ length: SURVEYS }, (___, s) => shown(level * (p === 0 ? shape(s) : 1) * Math.exp(SCATTER * normal()))),
+      };
     }),
   }));
   const record = recordOf(folder(machines));
@@ -64,7 +67,12 @@ function covered(seed: number, surveys: number, count: number): { readonly held:
 function coverage(): Figure {
   const runs = [7, 8, 9, 10, 11, 12].map((surveys) => covered(40 + surveys, surveys, 800));
   const issued = runs.reduce((sum, r) => sum + r.issued, 0);
-  return { name: 'forecasts whose 80 % range holds the crossing', series: issued, share: runs.reduce((sum, r) => sum + r.held, 0) / issued, bounds: [0.75, 0.85] };
+  return {
+    name: 'forecasts whose 80 % range holds the crossing',
+    series: issued,
+    share: runs.reduce((sum, r) => sum + r.held, 0) / issued,
+    bounds: [0.75, 0.85],
+  };
 }
 
 export function figures(): Figure[] {
@@ -72,9 +80,16 @@ export function figures(): Figure[] {
   return [
     { name: 'quiet machines with an urgency', series: 16000, share: raised(1, 2000, 8, () => 1), bounds: [0, 0.02] },
     { name: 'ramps of 60 % found', series: 4000, share: raised(2, 4000, 1, (s) => 1 + (0.6 * s) / (SURVEYS - 1)), bounds: [0.95, 1] },
-    { name: 'steps of 60 %, three surveys old, found', series: 4000, share: raised(3, 4000, 1, (s) => (s >= SURVEYS - 3 ? 1.6 : 1)), bounds: [0.95, 1] },
+    {
+      name: 'steps of 60 %, three surveys old, found',
+      series: 4000,
+      share: raised(3, 4000, 1, (s) => (s >= SURVEYS - 3 ? 1.6 : 1)),
+      bounds: [0.95, 1],
+    },
     coverage(),
-    ...DOUBT_KINDS.map((kind, i): Figure => ({ name: `slips found: ${kind}`, series: PAIRS * 20, share: found(kind, 60 + i, PAIRS), bounds: [0.95, 1] })),
+    ...DOUBT_KINDS.map(
+      (kind, i): Figure => ({ name: `slips found: ${kind}`, series: PAIRS * 20, share: found(kind, 60 + i, PAIRS), bounds: [0.95, 1] }),
+    ),
     { name: 'clean machines with any doubt', series: 10000, share: doubtedClean(90, 500), bounds: [0, 0.01] },
   ];
 }

@@ -30,9 +30,11 @@ const atPoint = (rows: readonly Row[], point: number): Row => rows.find((r) => r
 const exchange = (a: Row, b: Row): void => {
   [a.value, b.value] = [b.value, a.value];
 };
-const scale = (factor: number) => (row: Row): void => {
-  row.value *= factor;
-};
+const scale =
+  (factor: number) =>
+  (row: Row): void => {
+    row.value *= factor;
+  };
 
 /** Each kind as it comes about in the field. */
 export const SLIPS: Readonly<Partial<Record<DoubtKind, Slip>>> = {
@@ -47,9 +49,19 @@ export const SLIPS: Readonly<Partial<Record<DoubtKind, Slip>>> = {
   'swapped-machines': (own, twin) => {
     for (const [i, row] of own.entries()) exchange(row, twin[i] as Row);
   },
-  identical: (own, _, rows) => own.forEach((row) => {
-    row.value = (rows.find((r) => r.survey === SURVEYS - 2 && r.machine === row.machine && r.point === row.point && r.quantity === row.quantity && r.detection === row.detection) as Row).value;
-  }),
+  identical: (own, _, rows) =>
+    own.forEach((row) => {
+      row.value = (
+        rows.find(
+          (r) =>
+            r.survey === SURVEYS - 2 &&
+            r.machine === row.machine &&
+            r.point === row.point &&
+            r.quantity === row.quantity &&
+            r.detection === row.detection,
+        ) as Row
+      ).value;
+    }),
   'near-zero': (own) => scale(0.02)(atPoint(own, 3)),
   'all-down': (own) => own.forEach(scale(0.02)),
   'unexplained-fall': (own) => scale(0.45)(atPoint(own, 3)),
@@ -70,7 +82,16 @@ function plantOf(seed: number, pairs: number, slip: Slip | null, people: Files):
     const g = 3 + 2 * uniform();
     for (let survey = 0; survey < SURVEYS; survey += 1) {
       const row = (point: number, quantity: Row['quantity'], detection: Row['detection'], level: number): void =>
-        void rows.push({ survey, machine, point, quantity, detection, value: level * Math.exp(SCATTER * normal()), takenAt: DATES[survey] as string, retake: '' });
+        void rows.push({
+          survey,
+          machine,
+          point,
+          quantity,
+          detection,
+          value: level * Math.exp(SCATTER * normal()),
+          takenAt: DATES[survey] as string,
+          retake: '',
+        });
       for (const [point, level] of levels.entries()) row(point, 'velocity', 'rms', level);
       row(0, 'acceleration', 'rms', g);
       row(0, 'acceleration', 'true peak', 3.5 * g);
@@ -86,15 +107,23 @@ function filesOf(rows: readonly Row[], machines: number): Files {
   const list = Array.from({ length: machines }, (_, m) => m);
   const points = list.flatMap((m) => [
     ...Array.from({ length: POINTS }, (_, p) => `M${m},P${p},bearing housing,velocity,mm/s,rms,10,1000`),
-    `M${m},P0,bearing housing,acceleration,m/s²,rms,10,1000`, `M${m},P0,bearing housing,acceleration,m/s²,true peak,10,1000`,
+    `M${m},P0,bearing housing,acceleration,m/s²,rms,10,1000`,
+    `M${m},P0,bearing housing,acceleration,m/s²,true peak,10,1000`,
   ]);
   return {
     'plant.yaml': 'plant: Simulated works\n',
-    'machines.csv': ['machine,kind,power_kw,shaft_height_mm,support,speed_rpm,drive,interval_days', ...list.map((m) => `M${m},motor,75,225,rigid,1480,fixed,91`), ''].join('\n'),
+    'machines.csv': [
+      'machine,kind,power_kw,shaft_height_mm,support,speed_rpm,drive,interval_days',
+      ...list.map((m) => `M${m},motor,75,225,rigid,1480,fixed,91`),
+      '',
+    ].join('\n'),
     'points.csv': ['machine,point,measured_on,quantity,unit,detection,low_hz,high_hz', ...points, ''].join('\n'),
     'surveys/history.csv': [
       'survey_date,machine,point,quantity,detection,value,unit,taken_at,retake,instrument,measured_by',
-      ...rows.map((r) => `${DATES[r.survey]},M${r.machine},P${r.point},${r.quantity},${r.detection},${shown(r.value)},${unit[r.quantity]},${r.takenAt},${r.retake},${r.survey === SURVEYS - 1 ? 'VM-1,Ada' : ','}`),
+      ...rows.map(
+        (r) =>
+          `${DATES[r.survey]},M${r.machine},P${r.point},${r.quantity},${r.detection},${shown(r.value)},${unit[r.quantity]},${r.takenAt},${r.retake},${r.survey === SURVEYS - 1 ? 'VM-1,Ada' : ','}`,
+      ),
       '',
     ].join('\n'),
   };
@@ -111,7 +140,8 @@ const bears = (record: SwayfolioRecord, machine: number, kind: DoubtKind | null)
 
 /** Share of slipped machines that bear the doubt. */
 export function found(kind: DoubtKind, seed: number, pairs: number): number {
-  const people = kind === 'calibration' ? papers('2024-01-01', '2030-01-01') : kind === 'qualification' ? papers('2030-01-01', '2024-01-01') : IN_ORDER;
+  const people =
+    kind === 'calibration' ? papers('2024-01-01', '2030-01-01') : kind === 'qualification' ? papers('2030-01-01', '2024-01-01') : IN_ORDER;
   const record = recordOf(plantOf(seed, pairs, SLIPS[kind] ?? null, people));
   return Array.from({ length: pairs }, (_, pair) => bears(record, 2 * pair, kind)).filter(Boolean).length / pairs;
 }
