@@ -48,10 +48,10 @@ export async function killAtRandom(kills: number): Promise<{ faults: string[]; i
     const child = spawn(process.execPath, [MAIN, 'issue', 'plant', '--reason', `turn ${turn}`], { cwd: home, stdio: 'ignore' });
     const ended = once(child, 'exit');
     const dead = child.pid as number;
-    if (turn % 2 === 0) await Promise.race([sleep(Math.random() * whole), ended]);
+    if (turn % 2 === 0) await Promise.race([sleep(Math.random() * whole * 1.1), ended]);
     else {
       while (child.exitCode === null && !holds(archive, dead)) await sleep(2);
-      await Promise.race([sleep(Math.random() * whole * 0.7), ended]);
+      await Promise.race([sleep(Math.random() * whole * 0.9), ended]);
     }
     child.kill('SIGKILL');
     await ended;
