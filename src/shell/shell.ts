@@ -17,6 +17,9 @@ const WHY: Readonly<Record<string, string>> = {
   EMFILE: 'too many files are open',
 };
 
+/** A million rows of readings are about 60 MB. */
+const MOST_BYTES = 256 * 1024 * 1024;
+
 /** Runs `access` and turns what the disk refuses into a UserError. */
 function orUserError<T>(path: string, access: () => T): T {
   try {
@@ -35,6 +38,12 @@ export const realShell: Shell = {
   read: (path) =>
     orUserError(path, () => {
       if (!statSync(path).isFile()) throw new UserError(`Cannot read ${path}: it is no file.`, 'Name a file.');
+      // Text is held whole and a string cannot be longer: said before any of it is read.
+      if (statSync(path).size > MOST_BYTES)
+        throw new UserError(
+          `Cannot read ${path}: it is larger than ${MOST_BYTES / 1024 / 1024} MB.`,
+          'Part it into several files, one a survey or a year.',
+        );
       return readFileSync(path);
     }),
   exists: (path) => existsSync(path),

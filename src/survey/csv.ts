@@ -111,6 +111,9 @@ export function linesOf(text: string, records: readonly (readonly string[])[]): 
   return lines;
 }
 
+/** As many as a sheet of a workbook can have; a table of readings has some twenty. */
+const MOST_COLUMNS = 16_384;
+
 function headerIsSound(
   file: string,
   header: readonly string[],
@@ -134,9 +137,20 @@ function headerIsSound(
     );
     return false;
   }
+  if (header.length > MOST_COLUMNS) {
+    problems.error(
+      'too-many-columns',
+      { ...place, column: MOST_COLUMNS + 1 },
+      `The first line has ${header.length} columns, more than ${MOST_COLUMNS}.`,
+      'Is the table on its side? A column is a kind of value, a row a reading.',
+    );
+    return false;
+  }
   let sound = true;
+  const first = new Map<string, number>();
   header.forEach((name, i) => {
-    if (header.indexOf(name) !== i && name !== '') {
+    if (!first.has(name)) first.set(name, i);
+    if (first.get(name) !== i && name !== '') {
       problems.error('column-twice', { ...place, column: i + 1 }, `The column "${name}" is there twice.`, 'Remove or rename one of them.');
       sound = false;
     }

@@ -1,5 +1,12 @@
 import type { Place, Problem } from '../plant/problem.ts';
 
+/** Letters of one sentence: what was typed is shown, a cell of megabytes only by its ends. */
+const MOST_LETTERS = 2_000;
+
+function shortened(text: string): string {
+  return text.length <= MOST_LETTERS ? text : `${text.slice(0, MOST_LETTERS / 2)} … ${text.slice(-MOST_LETTERS / 2)}`;
+}
+
 /** Collects every problem of one run; the same words at the same place are told once. */
 export class Problems {
   readonly #list: Problem[] = [];
@@ -13,6 +20,7 @@ export class Problems {
     hint: string | null = null,
   ): void {
     const { file, line, column = null } = place;
+    [message, hint] = [shortened(message), hint === null ? null : shortened(hint)];
     const key = `${code}\u0000${file}\u0000${line}\u0000${column}\u0000${message}`;
     if (this.#told.has(key)) return;
     this.#told.add(key);
